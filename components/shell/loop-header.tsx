@@ -1,0 +1,55 @@
+import Link from 'next/link';
+import type { ReactNode } from 'react';
+import type { LoopDetail, LoopState } from '@/lib/api/loops';
+import { may } from '@/lib/api/permissions';
+import { FlowStrip } from '../strip/flow-strip';
+import { AccountMenu } from './account-menu';
+import { Mark } from './mark';
+import { NavLink } from './nav-link';
+
+export const stateWords: Record<LoopState, string> = {
+  draft: 'Draft',
+  issued: 'Issued',
+  'in-commissioning': 'In commissioning',
+  submitted: 'Submitted',
+  reviewed: 'Reviewed',
+  accepted: 'Accepted',
+};
+
+/** Heads every page of a loop: where it stands, its pages, its flow strip, its state. */
+export function LoopHeader({ loop, person }: { loop: LoopDetail; person: { name: string; organizationName: string } }) {
+  const base = `/projects/${loop.project.id}/loops/${loop.id}`;
+  const pages: [string, ReactNode, boolean][] = [
+    ['drawing', 'Drawing', may(loop.roles, 'draft.see') || loop.revision !== null],
+    ['schedule', 'Schedule', may(loop.roles, 'draft.see') || loop.revision !== null],
+    ['commissioning', 'Commissioning', true],
+    ['report', 'Report', true],
+  ];
+  return (
+    <header className="sticky top-0 z-30 flex flex-wrap items-stretch gap-x-6 border-b bg-sheet px-4 print:hidden">
+      <div className="flex min-h-14 min-w-0 items-center gap-4">
+        <Mark />
+        <div className="min-w-0 truncate">
+          <Link href={`/projects/${loop.project.id}`} className="text-quiet no-underline hover:underline">
+            {loop.project.name}
+          </Link>
+          <span className="mx-1.5 text-quiet">/</span>
+          <span className="font-bold">{loop.name}</span>
+        </div>
+      </div>
+      <nav aria-label="Pages of the loop" className="order-3 flex w-full items-stretch gap-5 overflow-x-auto lg:order-none lg:w-auto">
+        {pages.map(([path, name, isShown]) => isShown && <NavLink key={path} href={`${base}/${path}`}>{name}</NavLink>)}
+      </nav>
+      <div className="ml-auto flex min-h-14 items-center gap-4">
+        <div className="hidden md:block">
+          <FlowStrip ticks={loop.strip} band={loop.band} />
+        </div>
+        <span className="hidden text-sm whitespace-nowrap text-quiet sm:inline">
+          {stateWords[loop.state]}
+          {loop.revision && `, revision ${loop.revision.number}`}
+        </span>
+        <AccountMenu {...person} />
+      </div>
+    </header>
+  );
+}

@@ -1,0 +1,15 @@
+import type { Knex } from 'knex';
+import { fileURLToPath } from 'node:url';
+
+const databaseUrl = process.env.DATABASE_URL;
+if (!databaseUrl) throw new Error('DATABASE_URL is not set. `npm start`, `npm run dev` and `npm test` set it; see README.md.');
+
+/** One configuration for every environment: where the database is, is the environment's business. */
+const config: Knex.Config = {
+  client: 'pg',
+  connection: { connectionString: databaseUrl, application_name: 'evenhead' },
+  pool: { min: 0, max: Number(process.env.DATABASE_POOL ?? 10) },
+  migrations: { directory: fileURLToPath(new URL('./db/migrations', import.meta.url)), extension: 'ts', loadExtensions: ['.ts'] },
+};
+
+export default config;

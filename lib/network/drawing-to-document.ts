@@ -1,0 +1,148 @@
+import type { NetworkDocument, NetworkLink, NetworkNode } from '@/lib/hydraulics/types';
+import type { Drawing, DrawingPipe, Equipment, PipeEnd, Place, TerminalUnit } from './drawing';
+import { faultsOf, type Fault } from './drawing-faults';
+
+export interface DrawnNetwork {
+  /** Null while a fault of severity `error` stands. */
+  document: NetworkDocument | null;
+  faults: Fault[];
+}
+
+/** Link ids of the pieces inside a terminal unit, in the order of flow. */
+export const unitLinks = ['strainer', 'control', 'coil', 'balancing'] as const;
+export type UnitLink = (typeof unitLinks)[number];
+
+export const unitLinkId = (equipmentId: string, part: UnitLink) => `${equipmentId}:${part}`;
+
+/** The piece on the drawing that a link of the network document came from. */
+export function placeOfLink(drawing: Drawing, linkId: string): Place {
+  const id = linkId.split(':')[0]!;
+  return { kind: drawing.pipes.some((pipe) => pipe.id === id) ? 'pipe' : 'equipment', id };
+}
+
+/** The point of the network at which a pipe end stands: all sides of a tee are one point. */
+export const nodeIdOf = (end: PipeEnd): string =>
+  end.port === 'in' || end.port === 'out' ? `${end.equipmentId}.${end.port}` : end.equipmentId;
+
+/**
+ * The network document (strict, solvable) of a drawing, and what keeps it from being one. Every length, bore and Kv is
+ * taken as drawn; nothing is guessed. Elevations are those of the storeys.
+ */
+export function drawingToDocument(drawing: Drawing, name: string): DrawnNetwork {
+  const faults = faultsOf(drawing);
+  if (faults.some((fault) => fault.severity === 'error')) return { document: null, faults };
+
+  const elevationOf = new Map(drawing.storeys.map((storey) => [storey.id, storey.elevationM]));
+  const nodes: NetworkNode[] = [];
+  const links: NetworkLink[] = [];
+  for (const piece of drawing.equipment) {
+    const elevationM = (piece.storeyId && elevationOf.get(piece.storeyId)) || 0;
+    const made = linksOf(piece);
+    const ids = new Set(made.flatMap((link) => [link.from, link.to]));
+    if (ids.size === 0) ids.add(nodeIdOf({ equipmentId: piece.id, port: piece.kind === 'expansionVessel' ? 'in' : 'n' }));
+    for (const id of ids) nodes.push({ id, elevationM });
+    links.push(...made);
+  }
+  for (const pipe of drawing.pipes) links.push(pipeLink(pipe));
+
+  const vessel = drawing.equipment.find((piece) => piece.kind === 'expansionVessel');
+  const { medium, massFraction, supplyC, returnC } = drawing.fluid;
+  return {
+    faults,
+    document: {
+      format: 'network/1',
+      name,
+      fluid: { medium, temperatureC: (supplyC + returnC) / 2, ...(medium === 'water' ? {} : { massFraction }) },
+      ...(vessel && { reference: { node: nodeIdOf({ equipmentId: vessel.id, port: 'in' }), gaugePressureKpa: vessel.gaugePressureKpa ?? 0 } }),
+      nodes,
+      links,
+      options: { pumpExcess: drawing.pumpExcess },
+    },
+  };
+}
+
+function pipeLink(pipe: DrawingPipe): NetworkLink {
+  return {
+    id: pipe.id,
+    kind: 'pipe',
+    from: nodeIdOf(pipe.from),
+    to: nodeIdOf(pipe.to),
+    lengthM: pipe.lengthM!,
+    boreMm: pipe.boreMm!,
+    roughnessMm: pipe.roughnessMm!,
+    minorK: pipe.minorK,
+  };
+}
+
+/** The links inside one piece. `faultsOf` has already made sure that what a law needs is there. */
+function linksOf(piece: Equipment): NetworkLink[] {
+  const ends = { id: piece.id, from: `${piece.id}.in`, to: `${piece.id}.out` };
+  switch (piece.kind) {
+    case 'pump':
+      return [
+        {
+          ...ends,
+          kind: 'pump',
+          curve: piece.curve,
+          speed: piece.speed,
+          nonReturn: piece.hasNonReturn,
+          ...(piece.efficiency.length ? { efficiency: piece.efficiency } : {}),
+        },
+      ];
+    case 'source':
+      return [{ ...ends, kind: 'resistance', designFlowLs: piece.designFlowLs!, designDropKpa: piece.designDropKpa! }];
+    case 'terminalUnit':
+      return linksOfUnit(piece);
+    case 'balancingValve':
+      return [{ ...ends, kind: 'balancingValve', ...balancing(piece.valve) }];
+    case 'controlValve':
+      return [{ ...ends, kind: 'controlValve', kvs: piece.kvs!, characteristic: piece.characteristic, opening: piece.opening }];
+    case 'checkValve':
+      return [{ ...ends, kind: 'checkValve', kv: piece.kv! }];
+    case 'isolatingValve':
+      return [{ ...ends, kind: 'resistance', kv: piece.kv!, closed: piece.isClosed }];
+    case 'strainer':
+      return [{ ...ends, kind: 'resistance', kv: piece.kv! }];
+    case 'tee':
+    case 'expansionVessel':
+      return [];
+  }
+}
+
+const balancing = (valve: { kvTable: { setting: number; kv: number }[]; settingTurns: number | null; isLocked: boolean }) => ({
+  kvTable: valve.kvTable,
+  ...(valve.settingTurns === null ? {} : { setting: valve.settingTurns }),
+  locked: valve.isLocked,
+});
+
+function linksOfUnit(unit: TerminalUnit): NetworkLink[] {
+  const parts: Partial<Record<UnitLink, (ends: { id: string; from: string; to: string }) => NetworkLink>> = {
+    coil: (ends) => ({
+      ...ends,
+      kind: 'terminal',
+      designFlowLs: unit.designFlowLs!,
+      designDropKpa: unit.coilDropKpa!,
+      ...(unit.loadKw === null ? {} : { loadKw: unit.loadKw }),
+    }),
+  };
+  const { strainerKv, controlValve, balancingValve } = unit;
+  if (strainerKv !== null) parts.strainer = (ends) => ({ ...ends, kind: 'resistance', kv: strainerKv });
+  if (controlValve)
+    parts.control = (ends) => ({
+      ...ends,
+      kind: 'controlValve',
+      kvs: controlValve.kvs!,
+      characteristic: controlValve.characteristic,
+      opening: controlValve.opening,
+    });
+  if (balancingValve) parts.balancing = (ends) => ({ ...ends, kind: 'balancingValve', ...balancing(balancingValve) });
+
+  const present = unitLinks.filter((part) => parts[part]);
+  return present.map((part, at) =>
+    parts[part]!({
+      id: unitLinkId(unit.id, part),
+      from: at === 0 ? `${unit.id}.in` : `${unit.id}.${present[at]}`,
+      to: at === present.length - 1 ? `${unit.id}.out` : `${unit.id}.${present[at + 1]}`,
+    }),
+  );
+}

@@ -1,0 +1,179 @@
+import { z } from 'zod';
+
+/**
+ * The drawing: what a designer edits. Lenient, because a draft may lack any figure (null = not known yet); the strict
+ * check is the network document that `drawing-to-document.ts` makes of it. Position, rotation and bends are
+ * layout and never change the calculation. Quantities are SI in the unit that the name ends with.
+ */
+
+const id = z.string().min(1).max(64);
+const text = z.string().max(200);
+const positive = z.number().positive().max(1e9).nullable();
+const notNegative = z.number().min(0).max(1e9).nullable();
+
+export const kvTableSchema = z.array(z.object({ setting: z.number(), kv: z.number().min(0) })).max(200);
+
+/** A balancing valve as chosen: its name, the largest-to-smallest Kv by handwheel setting, and where it stands (null = fully open). */
+export const valveSchema = z.object({
+  name: text,
+  kvTable: kvTableSchema,
+  settingTurns: z.number().nullable(),
+  isLocked: z.boolean(),
+});
+
+export const characteristics = ['linear', 'equalPercentage', 'quickOpening'] as const;
+
+const placed = {
+  id,
+  tag: z.string().max(40),
+  storeyId: id.nullable(),
+  x: z.number(),
+  y: z.number(),
+  rotation: z.union([z.literal(0), z.literal(90), z.literal(180), z.literal(270)]),
+  isMirrored: z.boolean().default(false),
+};
+
+export const pumpSchema = z.object({
+  ...placed,
+  kind: z.literal('pump'),
+  curve: z.array(z.object({ flowLs: z.number().min(0), headM: z.number().min(0) })).max(100),
+  efficiency: z.array(z.object({ flowLs: z.number().min(0), fraction: z.number().min(0).max(1) })).max(100),
+  speed: z.number().min(0).max(2),
+  hasNonReturn: z.boolean(),
+});
+
+export const sourceKinds = ['chiller', 'boiler', 'heat-exchanger'] as const;
+
+export const sourceSchema = z.object({
+  ...placed,
+  kind: z.literal('source'),
+  sourceKind: z.enum(sourceKinds),
+  designFlowLs: positive,
+  designDropKpa: positive,
+});
+
+/** One piece on the drawing that holds, in the order of flow, strainer, control valve, coil and balancing valve. */
+export const terminalUnitSchema = z.object({
+  ...placed,
+  kind: z.literal('terminalUnit'),
+  room: text,
+  loadKw: positive,
+  designFlowLs: positive,
+  coilDropKpa: positive,
+  strainerKv: positive,
+  controlValve: z
+    .object({ kvs: positive, characteristic: z.enum(characteristics), opening: z.number().min(0).max(1) })
+    .nullable(),
+  balancingValve: valveSchema.nullable(),
+});
+
+export const balancingValveSchema = z.object({ ...placed, kind: z.literal('balancingValve'), valve: valveSchema });
+
+export const controlValveSchema = z.object({
+  ...placed,
+  kind: z.literal('controlValve'),
+  kvs: positive,
+  characteristic: z.enum(characteristics),
+  opening: z.number().min(0).max(1),
+});
+
+/** Pieces that are one Kv: a check valve lets nothing back, an isolating valve may stand closed. */
+export const checkValveSchema = z.object({ ...placed, kind: z.literal('checkValve'), kv: positive });
+export const isolatingValveSchema = z.object({ ...placed, kind: z.literal('isolatingValve'), kv: positive, isClosed: z.boolean() });
+export const strainerSchema = z.object({ ...placed, kind: z.literal('strainer'), kv: positive });
+export const teeSchema = z.object({ ...placed, kind: z.literal('tee') });
+export const expansionVesselSchema = z.object({ ...placed, kind: z.literal('expansionVessel'), gaugePressureKpa: notNegative });
+
+export const equipmentSchema = z.discriminatedUnion('kind', [
+  pumpSchema,
+  sourceSchema,
+  terminalUnitSchema,
+  balancingValveSchema,
+  controlValveSchema,
+  checkValveSchema,
+  isolatingValveSchema,
+  strainerSchema,
+  teeSchema,
+  expansionVesselSchema,
+]);
+
+/** `in` and `out` of a piece with two ends; a tee's four sides are one point of the network; a vessel has `in` only. */
+export const ports = ['in', 'out', 'n', 'e', 's', 'w'] as const;
+const pipeEndSchema = z.object({ equipmentId: id, port: z.enum(ports) });
+
+export const pipeSchema = z.object({
+  id,
+  from: pipeEndSchema,
+  to: pipeEndSchema,
+  circuit: z.enum(['supply', 'return']),
+  lengthM: positive,
+  series: z.string().max(60).nullable(),
+  nominal: z.string().max(20).nullable(),
+  boreMm: positive,
+  roughnessMm: notNegative,
+  minorK: z.number().min(0).max(1e6),
+  bends: z.array(z.object({ x: z.number(), y: z.number() })).max(20).default([]),
+});
+
+export const storeySchema = z.object({
+  id,
+  name: z.string().max(60),
+  elevationM: z.number().min(-1000).max(2000),
+  top: z.number(),
+  height: z.number().positive(),
+});
+
+export const drawingFluidSchema = z.object({
+  medium: z.enum(['water', 'propylene-glycol', 'ethylene-glycol']),
+  massFraction: z.number().min(0).max(0.6),
+  supplyC: z.number().min(-40).max(200),
+  returnC: z.number().min(-40).max(200),
+});
+
+export const drawingSchema = z.object({
+  format: z.literal('drawing/1'),
+  fluid: drawingFluidSchema,
+  pumpExcess: z.enum(['speed', 'throttle']),
+  storeys: z.array(storeySchema).max(200),
+  equipment: z.array(equipmentSchema).max(20_000),
+  pipes: z.array(pipeSchema).max(40_000),
+});
+
+export type Drawing = z.infer<typeof drawingSchema>;
+export type DrawingFluid = z.infer<typeof drawingFluidSchema>;
+export type Equipment = z.infer<typeof equipmentSchema>;
+export type EquipmentKind = Equipment['kind'];
+export type EquipmentOf<K extends EquipmentKind> = Extract<Equipment, { kind: K }>;
+export type TerminalUnit = EquipmentOf<'terminalUnit'>;
+export type DrawingPipe = z.infer<typeof pipeSchema>;
+export type Port = (typeof ports)[number];
+export type PipeEnd = z.infer<typeof pipeEndSchema>;
+export type Storey = z.infer<typeof storeySchema>;
+export type ChosenValve = z.infer<typeof valveSchema>;
+export type KvPoint = z.infer<typeof kvTableSchema>[number];
+
+/** Where a fault, a result or a difference belongs: what the canvas selects when it is chosen. */
+export type Place = { kind: 'equipment' | 'pipe' | 'storey'; id: string };
+
+/** The ends by which pipes may join a piece. */
+export function portsOf(kind: EquipmentKind): readonly Port[] {
+  if (kind === 'tee') return ['n', 'e', 's', 'w'];
+  return kind === 'expansionVessel' ? ['in'] : ['in', 'out'];
+}
+
+export const emptyDrawing = (service: 'chilled' | 'hot'): Drawing => ({
+  format: 'drawing/1',
+  fluid: {
+    medium: 'water',
+    massFraction: 0,
+    ...(service === 'chilled' ? { supplyC: 6, returnC: 12 } : { supplyC: 80, returnC: 60 }),
+  },
+  pumpExcess: 'speed',
+  storeys: [
+    { id: 'storey-2', name: 'Level 2', elevationM: 4, top: 0, height: 320 },
+    { id: 'storey-1', name: 'Level 1', elevationM: 0, top: 320, height: 320 },
+    { id: 'storey-0', name: 'Plant room', elevationM: -4, top: 640, height: 320 },
+  ],
+  equipment: [],
+  pipes: [],
+});

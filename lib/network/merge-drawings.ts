@@ -1,0 +1,132 @@
+import type { Drawing, Place } from './drawing';
+import { kindNames } from './drawing-faults';
+
+export interface Difference {
+  message: string;
+  place: Place;
+  by: 'you' | 'them';
+}
+
+/** One piece that both changed, each in another way; `null` where that side removed it. */
+export interface Conflict {
+  place: Place;
+  name: string;
+  mine: unknown;
+  theirs: unknown;
+}
+
+export interface Merge {
+  /** Both sides' changes together; where they touch the same piece, mine. */
+  merged: Drawing;
+  conflicts: Conflict[];
+  differences: Difference[];
+}
+
+type Kind = Place['kind'];
+type Item = { id: string };
+type Choice = { item: Item | null; isConflict: boolean };
+
+/**
+ * Joins two drawings that were both changed from `base`, piece by piece: a piece that only one side changed takes that
+ * change, one that both changed differently is a conflict. Layout counts as a change too: nobody's work is lost.
+ */
+export function mergeDrawings(base: Drawing, mine: Drawing, theirs: Drawing): Merge {
+  const conflicts: Conflict[] = [];
+  const differences: Difference[] = [];
+  const name = namer([mine, theirs, base]);
+
+  const mergeList = <T extends Item>(kind: Kind, was: T[], ours: T[], others: T[]): T[] => {
+    const [wasById, oursById, othersById] = [byId(was), byId(ours), byId(others)];
+    const order = [...new Set([...others, ...ours].map((item) => item.id)), ...was.map((item) => item.id)];
+    const kept: T[] = [];
+    for (const id of new Set(order)) {
+      const place: Place = { kind, id };
+      const [before, my, their] = [wasById.get(id), oursById.get(id), othersById.get(id)];
+      if (!same(before, my)) differences.push({ place, by: 'you', message: told(name(place), before, my) });
+      if (!same(before, their)) differences.push({ place, by: 'them', message: told(name(place), before, their) });
+      const { item, isConflict } = choose(before, my, their);
+      if (isConflict) conflicts.push({ place, name: name(place), mine: my ?? null, theirs: their ?? null });
+      if (item) kept.push(item as T);
+    }
+    return kept;
+  };
+
+  const merged: Drawing = {
+    format: 'drawing/1',
+    fluid: same(base.fluid, mine.fluid) ? theirs.fluid : mine.fluid,
+    pumpExcess: base.pumpExcess === mine.pumpExcess ? theirs.pumpExcess : mine.pumpExcess,
+    storeys: mergeList('storey', base.storeys, mine.storeys, theirs.storeys),
+    equipment: mergeList('equipment', base.equipment, mine.equipment, theirs.equipment),
+    pipes: mergeList('pipe', base.pipes, mine.pipes, theirs.pipes),
+  };
+  return { merged, conflicts, differences };
+}
+
+/** The merged drawing with their side of one conflict taken instead of mine. */
+export function takeTheirs(merged: Drawing, conflict: Conflict): Drawing {
+  const list = { equipment: 'equipment', pipe: 'pipes', storey: 'storeys' } as const;
+  const key = list[conflict.place.kind];
+  const others = (merged[key] as Item[]).filter((item) => item.id !== conflict.place.id);
+  return { ...merged, [key]: conflict.theirs === null ? others : [...others, conflict.theirs as Item] };
+}
+
+/** What changed from one drawing to the next, in words; used for the list of changes of a new revision. */
+export function changesBetween(before: Drawing, after: Drawing): { message: string; place: Place }[] {
+  return mergeDrawings(before, after, before).differences.map(({ message, place }) => ({ message, place }));
+}
+
+function choose(before: Item | undefined, mine: Item | undefined, theirs: Item | undefined): Choice {
+  if (same(mine, theirs) || same(before, theirs)) return { item: mine ?? null, isConflict: false };
+  if (same(before, mine)) return { item: theirs ?? null, isConflict: false };
+  return { item: mine ?? theirs ?? null, isConflict: true };
+}
+
+function namer(drawings: Drawing[]) {
+  return ({ kind, id }: Place): string => {
+    for (const drawing of drawings) {
+      if (kind === 'storey') {
+        const storey = drawing.storeys.find((it) => it.id === id);
+        if (storey) return `Storey ${storey.name}`;
+      } else if (kind === 'equipment') {
+        const piece = drawing.equipment.find((it) => it.id === id);
+        if (piece) return piece.tag || kindNames[piece.kind];
+      } else {
+        const pipe = drawing.pipes.find((it) => it.id === id);
+        if (pipe) return `Pipe ${tagOf(drawing, pipe.from.equipmentId)} to ${tagOf(drawing, pipe.to.equipmentId)}`;
+      }
+    }
+    return id;
+  };
+}
+
+const tagOf = (drawing: Drawing, equipmentId: string) => {
+  const piece = drawing.equipment.find((it) => it.id === equipmentId);
+  return piece ? piece.tag || kindNames[piece.kind].toLowerCase() : '?';
+};
+
+function told(name: string, before: Item | undefined, after: Item | undefined): string {
+  if (!before) return `${name} added`;
+  if (!after) return `${name} removed`;
+  const fields = Object.keys({ ...before, ...after }).filter((key) => !same((before as never)[key], (after as never)[key]));
+  const isLayout = fields.every((field) => ['x', 'y', 'rotation', 'isMirrored', 'bends', 'top', 'height'].includes(field));
+  return isLayout ? `${name} moved` : `${name} changed: ${fields.map(fieldWords).join(', ')}`;
+}
+
+/** `coilDropKpa` reads as "coil drop". */
+const fieldWords = (field: string) =>
+  field
+    .replace(/(Ls|Kpa|Kw|Mm|M|C|Turns)$/, '')
+    .replace(/([A-Z])/g, ' $1')
+    .toLowerCase()
+    .trim();
+
+const byId = <T extends Item>(items: T[]) => new Map(items.map((item) => [item.id, item]));
+
+/** Deep equality of two JSON values, whatever the order of their keys: PostgreSQL's jsonb does not keep it. */
+export function same(a: unknown, b: unknown): boolean {
+  if (Object.is(a, b)) return true;
+  if (typeof a !== 'object' || typeof b !== 'object' || a === null || b === null) return false;
+  if (Array.isArray(a) !== Array.isArray(b)) return false;
+  const keys = Object.keys(a);
+  return keys.length === Object.keys(b).length && keys.every((key) => Object.hasOwn(b, key) && same((a as never)[key], (b as never)[key]));
+}

@@ -1,0 +1,25 @@
+import { readFileSync } from 'node:fs';
+
+/**
+ * A name for a process that its successor under the same number does not share: boot, number, time of start.
+ * Numbers are used again, at once in a restarted container, and we stop nothing that we did not start.
+ * @param {number} pid
+ * @returns {string | null} null where no such process lives
+ */
+export function identityOf(pid) {
+  try {
+    const stat = readFileSync(`/proc/${pid}/stat`, 'utf8');
+    const fields = stat.slice(stat.lastIndexOf(')') + 2).split(' ');
+    const [state, startedAtTick] = [fields[0], fields[19]];
+    if (state === 'Z' || state === 'X') return null;
+    return `${readFileSync('/proc/sys/kernel/random/boot_id', 'utf8').trim()}:${pid}:${startedAtTick}`;
+  } catch {
+    return null;
+  }
+}
+
+/** @param {string} identity from identityOf */
+export const pidOf = (identity) => Number(identity.split(':')[1]);
+
+/** @param {string} identity from identityOf */
+export const isAlive = (identity) => identityOf(pidOf(identity)) === identity;

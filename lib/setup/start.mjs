@@ -1,0 +1,31 @@
+import { buildIfStale } from './build.mjs';
+import { inOneLifetime } from './lifetime.mjs';
+import { startNext, waitUntilUp } from './next-server.mjs';
+import { prepare, say } from './prepare.mjs';
+import { readSettings } from './settings.mjs';
+import { printSignIns } from './sign-ins.mjs';
+
+/** @param {number} code */
+function sayEnded(code) {
+  console.error(`The server ended by itself (exit code ${code}); its own lines above say why. Start it again with npm start.`);
+  return 1;
+}
+
+const buildFolder = '.next';
+
+await inOneLifetime(async (lifetime) => {
+  const settings = readSettings({ command: 'npm start', defaultPort: 4300 });
+  const prepared = await prepare(settings, { database: 'evenhead', mode: 'production' }, lifetime);
+  await buildIfStale({ buildFolder, say });
+
+  const env = { ...prepared.env, NEXT_DIST_DIR: buildFolder };
+  const server = startNext({ mode: 'start', host: settings.host, port: settings.port, env });
+  lifetime.atEnd(server.stop);
+  prepared.addServer(server.pid);
+  await waitUntilUp({ url: `${settings.address}/api/health`, server });
+
+  say(`Evenhead is at ${settings.publicUrl}`);
+  if (prepared.demo) printSignIns();
+  say('stop it with Ctrl-C; what was entered is kept');
+  return Promise.race([server.stopped.then(sayEnded), lifetime.untilStopped()]);
+});

@@ -1,0 +1,24 @@
+/** @type {import('next').NextConfig} */
+const config = {
+  // The tests build beside the build that may be serving, and check types against their own.
+  distDir: process.env.NEXT_DIST_DIR || '.next',
+  typescript: { tsconfigPath: process.env.NEXT_DIST_DIR === '.next-test' ? 'tsconfig.test.json' : 'tsconfig.json' },
+  reactStrictMode: true,
+  poweredByHeader: false,
+  devIndicators: false,
+  allowedDevOrigins: ['127.0.0.1'],
+  serverExternalPackages: ['knex', 'pg', 'exceljs', 'pino', '@node-rs/argon2', 'nodemailer', 'piscina'],
+  headers: async () => [
+    {
+      source: '/:path*',
+      headers: [
+        { key: 'X-Content-Type-Options', value: 'nosniff' },
+        { key: 'X-Frame-Options', value: 'DENY' },
+        { key: 'Referrer-Policy', value: 'strict-origin-when-cross-origin' },
+        { key: 'Permissions-Policy', value: 'microphone=(), geolocation=()' },
+      ],
+    },
+  ],
+};
+
+export default config;
