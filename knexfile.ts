@@ -1,5 +1,5 @@
 import type { Knex } from 'knex';
-import { fileURLToPath } from 'node:url';
+import { migrationSource } from './db/migration-source';
 
 const databaseUrl = process.env.DATABASE_URL;
 if (!databaseUrl) throw new Error('DATABASE_URL is not set. `npm start`, `npm run dev` and `npm test` set it; see README.md.');
@@ -9,7 +9,7 @@ const config: Knex.Config = {
   client: 'pg',
   connection: { connectionString: databaseUrl, application_name: 'evenhead' },
   pool: { min: 0, max: Number(process.env.DATABASE_POOL ?? 10) },
-  migrations: { directory: fileURLToPath(new URL('./db/migrations', import.meta.url)), extension: 'ts', loadExtensions: ['.ts'] },
+  migrations: { migrationSource },
 };
 
 export default config;

@@ -47,12 +47,14 @@ export function drawingToDocument(drawing: Drawing, name: string): DrawnNetwork 
 
   const vessel = drawing.equipment.find((piece) => piece.kind === 'expansionVessel');
   const { medium, massFraction, supplyC, returnC } = drawing.fluid;
+  const temperatureC = (supplyC + returnC) / 2;
   return {
     faults,
     document: {
       format: 'network/1',
       name,
-      fluid: { medium, temperatureC: (supplyC + returnC) / 2, ...(medium === 'water' ? {} : { massFraction }) },
+      // Friction is that of the mean temperature: half of the pipes carry supply, half return.
+      fluid: medium === 'water' ? { medium, temperatureC } : { medium, temperatureC, massFraction },
       ...(vessel && { reference: { node: nodeIdOf({ equipmentId: vessel.id, port: 'in' }), gaugePressureKpa: vessel.gaugePressureKpa ?? 0 } }),
       nodes,
       links,

@@ -108,8 +108,8 @@ function told(name: string, before: Item | undefined, after: Item | undefined): 
   if (!before) return `${name} added`;
   if (!after) return `${name} removed`;
   const fields = Object.keys({ ...before, ...after }).filter((key) => !same((before as never)[key], (after as never)[key]));
-  const isLayout = fields.every((field) => ['x', 'y', 'rotation', 'isMirrored', 'bends', 'top', 'height'].includes(field));
-  return isLayout ? `${name} moved` : `${name} changed: ${fields.map(fieldWords).join(', ')}`;
+  const said = fields.filter((field) => !['x', 'y', 'rotation', 'isMirrored', 'bends', 'top', 'height'].includes(field));
+  return said.length === 0 ? `${name} moved` : `${name} changed: ${said.map(fieldWords).join(', ')}`;
 }
 
 /** `coilDropKpa` reads as "coil drop". */

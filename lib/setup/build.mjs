@@ -41,7 +41,10 @@ export function sourceHash(checkout) {
     hash.update('\0');
   }
   // Next.js writes these into the pages.
-  for (const name of Object.keys(process.env).filter((key) => key.startsWith('NEXT_PUBLIC_')).sort()) hash.update(`${name}=${process.env[name]}\0`);
+  for (const name of Object.keys(process.env)
+    .filter((key) => key.startsWith('NEXT_PUBLIC_'))
+    .sort())
+    hash.update(`${name}=${process.env[name]}\0`);
   return hash.digest('hex');
 }
 

@@ -1,4 +1,15 @@
-import { existsSync, mkdirSync, readdirSync, readFileSync, readlinkSync, renameSync, rmSync, writeFileSync, chownSync, appendFileSync } from 'node:fs';
+import {
+  existsSync,
+  mkdirSync,
+  readdirSync,
+  readFileSync,
+  readlinkSync,
+  renameSync,
+  rmSync,
+  writeFileSync,
+  chownSync,
+  appendFileSync,
+} from 'node:fs';
 import { basename, dirname, join } from 'node:path';
 import { setTimeout as pause } from 'node:timers/promises';
 import { SetupFailure } from './failure.mjs';
@@ -33,12 +44,25 @@ export async function makeCluster({ folder, programs, password, throwAway = fals
   const passwordFile = join(dirname(folder), 'initdb-password');
   writeFileSync(passwordFile, password, { mode: 0o600 });
   giveToClusterUser(unfinished, passwordFile);
-  const parameters = ['-D', unfinished, '-U', 'postgres', `--pwfile=${passwordFile}`, '--auth=scram-sha-256', '--encoding=UTF8', '--locale=C.UTF-8'];
+  const parameters = [
+    '-D',
+    unfinished,
+    '-U',
+    'postgres',
+    `--pwfile=${passwordFile}`,
+    '--auth=scram-sha-256',
+    '--encoding=UTF8',
+    '--locale=C.UTF-8',
+  ];
   try {
-    const made = await run(join(programs.folder, 'initdb'), throwAway ? [...parameters, '--no-sync'] : [...parameters, '--data-checksums'], {
-      cwd: '/',
-      user: clusterUser(),
-    });
+    const made = await run(
+      join(programs.folder, 'initdb'),
+      throwAway ? [...parameters, '--no-sync'] : [...parameters, '--data-checksums'],
+      {
+        cwd: '/',
+        user: clusterUser(),
+      },
+    );
     if (made.code !== 0) throw new Error(`initdb failed: ${made.output}`);
   } finally {
     rmSync(passwordFile, { force: true });

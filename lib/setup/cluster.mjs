@@ -66,7 +66,11 @@ async function startServer(folder, clusterFolder, programs, say) {
 function startFailure(clusterFolder, output, log) {
   if (/could not (open|access|read).*Permission denied|has wrong ownership/.test(output + log.slice(-2000)))
     return new SetupFailure(`${clusterFolder} belongs to another user. Start Evenhead as the user who started it first.`);
-  const last = log.trimEnd().split('\n').findLast((line) => /FATAL|PANIC|ERROR/.test(line)) ?? output.trim();
+  const last =
+    log
+      .trimEnd()
+      .split('\n')
+      .findLast((line) => /FATAL|PANIC|ERROR/.test(line)) ?? output.trim();
   if (/No space left on device/.test(last)) return new Error(last);
   return new SetupFailure(`PostgreSQL does not start: ${last} (more in ${join(clusterFolder, 'server.log')})`);
 }

@@ -16,7 +16,8 @@ export async function installFromDebian(packages, why, say) {
   const updated = await run('apt-get', ['update', '-q'], { env });
   const installed = await run('apt-get', ['install', '-y', '-q', '--no-install-recommends', ...packages], { env });
   if (installed.code === 0) return;
-  if (/No space left on device/.test(installed.output)) throw new SetupFailure('The disk is full. Free 1 GB and start again; nothing was lost.');
+  if (/No space left on device/.test(installed.output))
+    throw new SetupFailure('The disk is full. Free 1 GB and start again; nothing was lost.');
   const reason = [installed, updated].flatMap((step) => step.output.split('\n')).find((line) => line.startsWith('E:')) ?? 'apt-get failed';
   throw new SetupFailure(`${advice} (tried it: ${reason})`);
 }

@@ -12,7 +12,9 @@ const minimumNode = [20, 11];
 export function requireNode(version = process.versions.node) {
   const [major, minor] = version.split('.').map(Number);
   if (major > minimumNode[0] || (major === minimumNode[0] && minor >= minimumNode[1])) return;
-  throw new SetupFailure(`Evenhead needs Node.js ${minimumNode.join('.')} or newer; this is ${version}. Install it from nodejs.org or Debian.`);
+  throw new SetupFailure(
+    `Evenhead needs Node.js ${minimumNode.join('.')} or newer; this is ${version}. Install it from nodejs.org or Debian.`,
+  );
 }
 
 /**
@@ -25,7 +27,11 @@ export async function installPackages(say) {
   const installed = await run('npm', ['ci', '--include=dev', '--no-audit', '--no-fund'], { cwd: root });
   if (installed.code === 0) return;
   if (/ENOSPC|No space left/.test(installed.output)) throw new SetupFailure('The disk is full. Free 2 GB and start again.');
-  const reason = installed.output.split('\n').filter((line) => /^npm (error|ERR!)/.test(line)).slice(0, 3).join(' ');
+  const reason = installed.output
+    .split('\n')
+    .filter((line) => /^npm (error|ERR!)/.test(line))
+    .slice(0, 3)
+    .join(' ');
   throw new SetupFailure(`npm ci failed: ${reason || installed.output.trim()}. Check the network and start again.`);
 }
 

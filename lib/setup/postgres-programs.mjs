@@ -20,7 +20,8 @@ export async function findPostgres(clusterFolder, say) {
     await installFromDebian(['postgresql'], 'There is no PostgreSQL on this machine', say);
     found = await installedVersions();
   }
-  if (found.length === 0) throw new SetupFailure('PostgreSQL was installed but its programs were not found. Put initdb and pg_ctl on the PATH.');
+  if (found.length === 0)
+    throw new SetupFailure('PostgreSQL was installed but its programs were not found. Put initdb and pg_ctl on the PATH.');
   if (isRoot() && !hasPostgresUser())
     throw new SetupFailure('PostgreSQL refuses to run as root and there is no user "postgres". Start Evenhead as an ordinary user.');
   return programsFor(clusterFolder, found);

@@ -58,7 +58,10 @@ function readRecord(file) {
 }
 
 /** @param {string} folder */
-export const liveRuns = (folder) => knownRuns(folder).filter(({ record }) => isAlive(record.owner)).map(({ record }) => record);
+export const liveRuns = (folder) =>
+  knownRuns(folder)
+    .filter(({ record }) => isAlive(record.owner))
+    .map(({ record }) => record);
 
 /**
  * A run that was killed could not stop its servers: they are stopped now, if they are still the same processes.

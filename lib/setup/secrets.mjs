@@ -23,7 +23,9 @@ export function readSecrets(folder) {
     return parseSecrets(file);
   }
   if (existsSync(join(folder, 'cluster')))
-    throw new SetupFailure(`${file} is missing, and the database beside it opens only with it. Put it back, or move ${folder} away to begin anew.`);
+    throw new SetupFailure(
+      `${file} is missing, and the database beside it opens only with it. Put it back, or move ${folder} away to begin anew.`,
+    );
   const secrets = newSecrets();
   const unfinished = `${file}.unfinished`;
   writeFileSync(unfinished, `${JSON.stringify(secrets, null, 2)}\n`, { mode: 0o600 });

@@ -1,4 +1,4 @@
-import { existsSync, mkdirSync, readFileSync, rmSync } from 'node:fs';
+import { existsSync, readFileSync, rmSync } from 'node:fs';
 import { join } from 'node:path';
 import { nextProgram } from './next-server.mjs';
 import { root } from './places.mjs';
@@ -8,11 +8,12 @@ import { run } from './processes.mjs';
 
 /** The tests' own build, beside the one that `npm start` may be serving. */
 export const testBuildFolder = '.next-test';
-const reports = join(root, 'reports');
+/** Where the runners' reports and the server's log go. */
+export const reports = join(root, 'reports');
 
 /**
  * @param {string[]} parameters program of node_modules and its parameters
- * @param {NodeJS.ProcessEnv} [env]
+ * @param {Record<string, string>} [env]
  */
 async function passes(parameters, env) {
   const { code } = await run(process.execPath, parameters, { cwd: root, env: { ...process.env, ...env }, output: 'show' });
@@ -24,8 +25,8 @@ const asOne = (good) => (good ? { passed: 1, failed: 0 } : { passed: 0, failed: 
 
 /** The type check: the routes' generated types and everything else; counts as one. */
 export async function checkTypes() {
-  const env = { NEXT_DIST_DIR: testBuildFolder, NEXT_TELEMETRY_DISABLED: '1' };
-  return asOne((await passes([nextProgram, 'typegen'], env)) && (await passes([join(root, 'node_modules/typescript/bin/tsc'), '-p', 'tsconfig.test.json'])));
+  const generated = await passes([nextProgram, 'typegen'], { NEXT_DIST_DIR: testBuildFolder, NEXT_TELEMETRY_DISABLED: '1' });
+  return asOne(generated && (await passes([join(root, 'node_modules/typescript/bin/tsc'), '-p', 'tsconfig.test.json'])));
 }
 
 /** The lint rules, a warning being an error; counts as one. */
@@ -36,13 +37,16 @@ export async function lint() {
 /**
  * One project of vitest.
  * @param {'unit' | 'reference' | 'integration'} project
- * @param {NodeJS.ProcessEnv} [env]
+ * @param {Record<string, string>} [env]
  * @returns {Promise<Tally>}
  */
 export async function runVitest(project, env) {
   const file = freshReport(`${project}.json`);
   const program = join(root, 'node_modules/vitest/vitest.mjs');
-  const good = await passes([program, 'run', '--project', project, '--reporter=default', '--reporter=json', `--outputFile.json=${file}`], env);
+  const good = await passes(
+    [program, 'run', '--project', project, '--reporter=default', '--reporter=json', `--outputFile.json=${file}`],
+    env,
+  );
   return atLeastOneFailureUnless(good, readVitestReport(file));
 }
 
@@ -60,7 +64,7 @@ export function readVitestReport(file) {
 }
 
 /**
- * @param {NodeJS.ProcessEnv} env
+ * @param {Record<string, string>} env
  * @returns {Promise<Tally>}
  */
 export async function runPlaywright(env) {
@@ -90,7 +94,6 @@ const atLeastOneFailureUnless = (good, tally) => (good || tally.failed > 0 ? tal
 
 /** @param {string} name */
 function freshReport(name) {
-  mkdirSync(reports, { recursive: true });
   const file = join(reports, name);
   rmSync(file, { force: true });
   return file;

@@ -5,11 +5,14 @@ import { setTimeout as pause } from 'node:timers/promises';
 import { runningServer } from './cluster-folder.mjs';
 import { openCluster } from './cluster.mjs';
 import { everyoneMayEnter } from './places.mjs';
+import { migrate } from './migrate.mjs';
 import { identityOf, isAlive } from './process-identity.mjs';
 import { isRoot } from './processes.mjs';
 import { newSecrets } from './secrets.mjs';
 
 const prefix = 'evenhead-test-';
+
+/** @typedef {Awaited<ReturnType<typeof openThrowAwayCluster>>} ThrowAway */
 
 /**
  * A folder and a cluster for one test run alone, gone when it ends.
@@ -27,7 +30,19 @@ export async function openThrowAwayCluster(say, lifetime) {
   const cluster = await openCluster({ folder, secrets: newSecrets(), say: () => {}, throwAway: true });
   lifetime.atEnd(cluster.stop);
   say(`throw-away database on 127.0.0.1:${cluster.port}`);
-  return { folder, cluster };
+  return {
+    folder,
+    /**
+     * @param {string} name
+     * @param {{ demo: boolean }} options
+     * @returns {Promise<string>} the URL of a database that has every migration
+     */
+    async migratedDatabase(name, options) {
+      const url = await cluster.database(name);
+      await migrate(url, options);
+      return url;
+    },
+  };
 }
 
 /**

@@ -1,9 +1,8 @@
 import { randomBytes } from 'node:crypto';
 import knex, { type Knex } from 'knex';
-import { fileURLToPath } from 'node:url';
 import { afterAll, beforeAll } from 'vitest';
+import { migrationSource } from '@/db/migration-source';
 
-const migrations = { directory: fileURLToPath(new URL('../../db/migrations', import.meta.url)), extension: 'ts', loadExtensions: ['.ts'] };
 const template = 'evenhead_test_template';
 
 /** Where the tests' PostgreSQL is; never anything but this machine's. */
@@ -16,7 +15,7 @@ function serverUrl(): URL {
 }
 
 const urlOf = (name: string) => Object.assign(serverUrl(), { pathname: `/${name}` }).toString();
-const connect = (name: string) => knex({ client: 'pg', connection: { connectionString: urlOf(name) }, pool: { min: 0, max: 4 }, migrations });
+const connect = (name: string) => knex({ client: 'pg', connection: { connectionString: urlOf(name) }, pool: { min: 0, max: 4 }, migrations: { migrationSource } });
 
 /** Migrates the template once; suites that start together wait for the first. */
 async function makeTemplate(admin: Knex): Promise<void> {
@@ -55,7 +54,7 @@ export function withDatabase(): { readonly db: Knex } {
   });
 
   afterAll(async () => {
-    await suite.db.destroy();
+    await suite.db?.destroy();
     delete holder.evenheadDb;
     const admin = connect(serverUrl().pathname.slice(1));
     await admin.raw('drop database if exists ?? with (force)', [name]);

@@ -1,0 +1,67 @@
+import coreWebVitals from 'eslint-config-next/core-web-vitals';
+import nextTypescript from 'eslint-config-next/typescript';
+
+/**
+ * The arrows of the architecture: each folder and what it must not import. What is not named is allowed.
+ * tests/architecture/layers.test.ts breaks each of them and expects the error.
+ */
+const forbiddenImports = {
+  'lib/hydraulics': everythingBut('lib/hydraulics'),
+  'lib/units': everythingBut('lib/units'),
+  'lib/balancing': everythingBut('lib/balancing', 'lib/hydraulics'),
+  'lib/commissioning': everythingBut('lib/commissioning', 'lib/hydraulics'),
+  'lib/network': everythingBut('lib/network', 'lib/hydraulics'),
+  'lib/api': ['app', 'components', 'db', 'lib/server', 'lib/client', 'lib/setup'],
+  'lib/client': ['app', 'components', 'db', 'lib/server', 'lib/setup'],
+  'lib/server': ['app', 'components', 'lib/client', 'lib/setup'],
+  'lib/setup': ['app', 'components', 'lib/server', 'lib/client', 'lib/api'],
+  components: ['app', 'db', 'lib/server', 'lib/setup'],
+  db: ['app', 'components', 'lib/client', 'lib/setup'],
+  app: ['lib/setup', 'tests', 'e2e'],
+};
+
+/** @param {string[]} allowed */
+function everythingBut(...allowed) {
+  const folders = ['api', 'balancing', 'client', 'commissioning', 'hydraulics', 'network', 'server', 'setup', 'units'];
+  return ['app', 'components', 'db', ...folders.map((folder) => `lib/${folder}`)].filter((folder) => !allowed.includes(folder));
+}
+
+const config = [
+  { ignores: ['.next/**', '.next-test/**', '.data/**', 'node_modules/**', 'reports/**', 'coverage/**', 'public/**', 'next-env.d.ts'] },
+  // Broken on purpose, for the test of the rule against cycles.
+  { ignores: ['tests/architecture/cycle/**'] },
+  ...coreWebVitals,
+  ...nextTypescript,
+  {
+    files: ['**/*.{ts,tsx,mjs}'],
+    settings: { 'import/resolver': { typescript: { alwaysTryTypes: true, project: 'tsconfig.json' } } },
+    rules: {
+      '@typescript-eslint/no-unused-vars': ['error', { argsIgnorePattern: '^_', varsIgnorePattern: '^_' }],
+      'import/no-cycle': 'error',
+      'import/no-restricted-paths': [
+        'error',
+        { zones: Object.entries(forbiddenImports).flatMap(([target, from]) => from.map((folder) => zone(target, folder))) },
+      ],
+    },
+  },
+  {
+    files: ['**/*.{ts,tsx}'],
+    rules: {
+      '@typescript-eslint/no-explicit-any': 'error',
+    },
+  },
+];
+
+/**
+ * @param {string} target
+ * @param {string} from
+ */
+function zone(target, from) {
+  return {
+    target: `./${target}`,
+    from: `./${from}`,
+    message: `${target} must not import from ${from} (the arrows are in eslint.config.mjs)`,
+  };
+}
+
+export default config;

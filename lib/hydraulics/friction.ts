@@ -1,0 +1,69 @@
+/** Below this Reynolds number flow is laminar, f = 64 / Re. */
+export const LAMINAR_RE = 2000;
+/** Above this Reynolds number the Colebrook-White law holds. */
+export const TURBULENT_RE = 4000;
+
+const HALF_LN10 = Math.LN10 / 2;
+const LAMINAR_F = 64 / LAMINAR_RE;
+/** ln(10) / 5.02, from the 2.51 of the Colebrook-White law written with natural logarithms. */
+const RE_SCALE = Math.LN10 / 5.02;
+
+/**
+ * Solves Colebrook-White, 1/sqrt(f) = -2 log10(e/3.7 + 2.51/(Re sqrt(f))) (C. F. Colebrook 1939), to rounding and without a
+ * first guess: with F = ln(10)/(2 sqrt(f)) the law is F + ln(x + F) = ln(Re · ln(10)/5.02), and two of D. Clamond's steps
+ * (Ind. Eng. Chem. Res. 2009, 48(7), 3665) reach 1e-15. Answers F; x = e/3.7 · Re · ln(10)/5.02. Re above 2000, e 0 to 0.1.
+ */
+function colebrookF(reynolds: number, x: number): number {
+  const target = Math.log(RE_SCALE * reynolds);
+  let F = target - 0.2;
+  let sum = x + F;
+  let E = (Math.log(sum) - 0.2) / (1 + sum);
+  F -= ((1 + sum + 0.5 * E) * E * sum) / (1 + sum + E * (1 + E / 3));
+  sum = x + F;
+  E = (Math.log(sum) + F - target) / (1 + sum);
+  return F - ((1 + sum + 0.5 * E) * E * sum) / (1 + sum + E * (1 + E / 3));
+}
+
+/** What `frictionOf` leaves behind: the Darcy factor and its logarithmic slope, d ln f / d ln Re. One object, so that the iteration allocates nothing. */
+export const friction = { factor: 0, logSlope: 0 };
+
+/**
+ * Darcy friction factor and its logarithmic slope, left in `friction`: 64/Re below Re 2000, Colebrook-White above 4000, and
+ * between them the cubic in Re that meets both in value and slope, so that the head loss is continuous, smooth and rising.
+ * `reynolds` above 0; `relativeRoughness` = roughness over bore, 0 to 0.1.
+ */
+export function frictionOf(reynolds: number, relativeRoughness: number): void {
+  if (reynolds <= LAMINAR_RE) {
+    friction.factor = 64 / reynolds;
+    friction.logSlope = -1;
+    return;
+  }
+  if (reynolds >= TURBULENT_RE) {
+    const x = (relativeRoughness / 3.7) * RE_SCALE * reynolds;
+    const F = colebrookF(reynolds, x);
+    const root = HALF_LN10 / F;
+    friction.factor = root * root;
+    // From F + ln(x + F) = ln(Re) + const: dF/d ln Re = F / (1 + x + F), and f goes with F to the power -2.
+    friction.logSlope = -2 / (1 + x + F);
+    return;
+  }
+  const x = (relativeRoughness / 3.7) * RE_SCALE * TURBULENT_RE;
+  const F = colebrookF(TURBULENT_RE, x);
+  const turbulent = (HALF_LN10 / F) ** 2;
+  const turbulentSlope = (turbulent * -2) / (1 + x + F) / TURBULENT_RE;
+  const span = TURBULENT_RE - LAMINAR_RE;
+  const t = (reynolds - LAMINAR_RE) / span;
+  const a = -LAMINAR_F / LAMINAR_RE;
+  const rise = turbulent - LAMINAR_F;
+  // Cubic Hermite: f = f2 + span a t + (3 rise - span (2a + b)) t² + (span (a + b) - 2 rise) t³.
+  const c2 = 3 * rise - span * (2 * a + turbulentSlope);
+  const c3 = span * (a + turbulentSlope) - 2 * rise;
+  friction.factor = LAMINAR_F + t * (span * a + t * (c2 + t * c3));
+  friction.logSlope = ((span * a + t * (2 * c2 + 3 * c3 * t)) / span) * (reynolds / friction.factor);
+}
+
+/** Darcy friction factor alone; see `frictionOf`. */
+export function frictionFactor(reynolds: number, relativeRoughness: number): number {
+  frictionOf(reynolds, relativeRoughness);
+  return friction.factor;
+}

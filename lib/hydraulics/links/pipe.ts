@@ -1,0 +1,62 @@
+import type { FluidProperties } from '../fluids';
+import { friction, frictionOf } from '../friction';
+import type { PipeLink } from '../types';
+import { GRAVITY_MS2, type LinkBatch, type LinkLaw } from './law';
+
+const USUAL_VELOCITY_MS = 0.7;
+
+export const boreAreaM2 = (boreMm: number) => (Math.PI / 4) * (boreMm / 1000) ** 2;
+
+/** Reynolds number per L/s in a bore: rho D / (mu A), flow in m³/s. */
+export const reynoldsPerLs = (boreMm: number, fluid: FluidProperties) =>
+  fluid.densityKgM3 / (boreAreaM2(boreMm) * 1000 * (fluid.viscosityMPaS / 1000)) * (boreMm / 1000);
+
+/** Darcy-Weisbach with local losses: h = (f L/D + K) v²/2g. */
+class PipeBatch implements LinkBatch {
+  private readonly perReynolds: Float64Array;
+  private readonly velocityHead: Float64Array;
+  private readonly lengthInBores: Float64Array;
+  private readonly roughness: Float64Array;
+  private readonly minorK: Float64Array;
+
+  constructor(
+    links: PipeLink[],
+    private readonly first: number,
+    fluid: FluidProperties,
+  ) {
+    const column = (of: (link: PipeLink) => number) => Float64Array.from(links, of);
+    this.perReynolds = column((link) => reynoldsPerLs(link.boreMm, fluid));
+    this.velocityHead = column((link) => (1e-3 / boreAreaM2(link.boreMm)) ** 2 / (2 * GRAVITY_MS2));
+    this.lengthInBores = column((link) => (link.lengthM * 1000) / link.boreMm);
+    this.roughness = column((link) => link.roughnessMm / link.boreMm);
+    this.minorK = column((link) => link.minorK ?? 0);
+  }
+
+  evaluate(flow: Float64Array, loss: Float64Array, slope: Float64Array, a: number, b: number): void {
+    const { first, perReynolds, velocityHead, lengthInBores, roughness, minorK } = this;
+    for (let i = a; i < b; i++) {
+      const k = i - first;
+      const q = flow[i];
+      const magnitude = Math.abs(q);
+      const minor = velocityHead[k] * minorK[k] * magnitude;
+      const reynolds = perReynolds[k] * magnitude;
+      if (reynolds < 2000) {
+        // f/Re stays finite at rest: a pipe keeps its laminar slope there.
+        const laminar = ((64 * lengthInBores[k]) / perReynolds[k]) * velocityHead[k];
+        loss[i] = (laminar + minor) * q;
+        slope[i] = laminar + 2 * minor;
+        continue;
+      }
+      frictionOf(reynolds, roughness[k]);
+      const perFlow = velocityHead[k] * lengthInBores[k] * friction.factor * magnitude;
+      loss[i] = (perFlow + minor) * q;
+      slope[i] = perFlow * (2 + friction.logSlope) + 2 * minor;
+    }
+  }
+}
+
+export const pipeLaw: LinkLaw<PipeLink> = {
+  isShut: () => false,
+  usualFlowLs: (link) => USUAL_VELOCITY_MS * boreAreaM2(link.boreMm) * 1000,
+  gather: (links, first, fluid) => new PipeBatch(links, first, fluid),
+};

@@ -1,0 +1,3 @@
+import { chicken } from './chicken';
+
+export const egg = () => chicken;
