@@ -44,6 +44,8 @@ const config = [
       ],
     },
   },
+  // A tool's configuration is its file; it needs no name.
+  { files: ['*.config.{ts,mjs}'], rules: { 'import/no-anonymous-default-export': 'off' } },
   {
     files: ['**/*.{ts,tsx}'],
     rules: {

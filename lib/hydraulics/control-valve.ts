@@ -23,7 +23,6 @@ export function inherentRatio(characteristic: Characteristic, opening: number, r
 
 /** Stroke (0 to 1) that gives a ratio of Kv to Kv full open (0 to 1): the inverse of `inherentRatio`; 0 for an equal-percentage ratio at or below 1/R. */
 export function openingForRatio(characteristic: Characteristic, ratio: number, rangeability = DEFAULT_RANGEABILITY): number {
-  if (ratio <= 0) return 0;
   switch (characteristic) {
     case 'linear':
       return ratio;
@@ -60,5 +59,5 @@ export function authorityGrade(authorityRatio: number): 'good' | 'fair' | 'unsta
  * differential pressure: q = 1 / sqrt(1 - N + N / phi²).
  */
 export function installedFlowRatio(ratio: number, authorityRatio: number): number {
-  return ratio <= 0 ? 0 : 1 / Math.sqrt(1 - authorityRatio + authorityRatio / (ratio * ratio));
+  return 1 / Math.sqrt(1 - authorityRatio + authorityRatio / (ratio * ratio));
 }

@@ -11,6 +11,7 @@ const statuses = {
   'draft-changed': 409,
   'drawing-unfit': 422,
   'loop-state': 409,
+  'revision-unchanged': 409,
   'already-signed': 409,
   'name-taken': 409,
   'email-taken': 409,

@@ -10,8 +10,9 @@ export function identityOf(pid) {
   try {
     const stat = readFileSync(`/proc/${pid}/stat`, 'utf8');
     const fields = stat.slice(stat.lastIndexOf(')') + 2).split(' ');
-    const [state, startedAtTick] = [fields[0], fields[19]];
-    if (state === 'Z' || state === 'X') return null;
+    const [state, threads, startedAtTick] = [fields[0], Number(fields[17]), fields[19]];
+    // Dead but not yet collected. While other threads end, its ports are still taken: it counts as alive.
+    if (state === 'X' || (state === 'Z' && threads <= 1)) return null;
     return `${readFileSync('/proc/sys/kernel/random/boot_id', 'utf8').trim()}:${pid}:${startedAtTick}`;
   } catch {
     return null;

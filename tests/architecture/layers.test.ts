@@ -99,7 +99,9 @@ describe('other rules of the house', () => {
   });
 
   it('the type that means anything is refused', async () => {
-    expect(await rulesBroken('lib/units', 'export const parse = (text: any) => String(text);\n')).toContain('@typescript-eslint/no-explicit-any');
+    expect(await rulesBroken('lib/units', 'export const parse = (text: any) => String(text);\n')).toContain(
+      '@typescript-eslint/no-explicit-any',
+    );
   });
 
   it.each(['app', 'components', 'db', 'lib'])('%s is where the rules look for it', (folder) => {

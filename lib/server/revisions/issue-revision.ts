@@ -4,7 +4,7 @@ import { db } from '@/db/knex';
 import type { IssueRevision, LoopState } from '@/lib/api/loops';
 import type { Drawing } from '@/lib/network/drawing';
 import { drawingToDocument } from '@/lib/network/drawing-to-document';
-import { changesBetween } from '@/lib/network/merge-drawings';
+import { changesBetween, same } from '@/lib/network/merge-drawings';
 import { stationsOfDrawing, type DrawnStation } from '@/lib/network/stations-of-drawing';
 import { recordActivity } from '../activity/record-activity';
 import type { Access } from '../auth/authorize';
@@ -31,6 +31,10 @@ export async function issueRevision(access: Access, loopId: string, input: Issue
       throw new Problem('draft-changed', 'The drawing was saved by someone else since you looked at it. Look again, then issue.');
     }
     const drawing: Drawing = draft.drawing;
+    const before = await trx('revisions').where({ organization_id: organizationId, loop_id: loopId }).orderBy('number', 'desc').first('number', 'drawing');
+    if (before && same(before.drawing, drawing)) {
+      throw new Problem('revision-unchanged', `The drawing is that of revision ${before.number}: there is nothing new to issue.`);
+    }
     const { document } = drawingToDocument(drawing, loop.name);
     const { faults, solved } = solveDrawing(drawing, loop.name);
     if (!document || !solved?.balance) {
@@ -38,7 +42,6 @@ export async function issueRevision(access: Access, loopId: string, input: Issue
     }
     if (!solved.balance.converged) throw new Problem('drawing-unfit', 'The balance has no converged solution, so there are no settings to issue.');
 
-    const before = await trx('revisions').where({ organization_id: organizationId, loop_id: loopId }).orderBy('number', 'desc').first('number', 'drawing');
     const number = (before?.number ?? 0) + 1;
     const revisionId = uuidv7();
     await trx('revisions').insert({

@@ -1,0 +1,98 @@
+import type { Loops } from './graph/loops';
+import { SparseLdl } from './sparse/ldl';
+
+/**
+ * The matrix of the simultaneous correction: on its diagonal the summed slopes of each loop, beside it the slopes of the chains
+ * that two loops share, with the sign of their directions. `assemble` fills it from the slopes of the chains.
+ */
+export class LoopMatrix {
+  readonly factors: SparseLdl;
+  private readonly chainCount: number;
+  private readonly shared: SharedChains;
+
+  constructor(
+    private readonly loops: Loops,
+    chainCount: number,
+  ) {
+    this.chainCount = chainCount;
+    const through = loopsThroughChains(loops, chainCount);
+    this.factors = new SparseLdl(patternOf(loops, through));
+    this.shared = sharedChains(loops, through, this.factors);
+  }
+
+  assemble(chainSlope: Float64Array): void {
+    const { loops, factors, shared } = this;
+    const { diagonal, value } = factors;
+    for (let l = 0; l < loops.count; l++) {
+      let sum = 0;
+      for (let p = loops.start[l]; p < loops.start[l + 1]; p++) sum += chainSlope[loops.chain[p]];
+      diagonal[l] = sum;
+    }
+    value.fill(0);
+    const { slot, chain, sign } = shared;
+    for (let t = 0; t < slot.length; t++) value[slot[t]] += sign[t] * chainSlope[chain[t]];
+  }
+}
+
+/** Loops through each chain, with the direction in which each takes it. */
+interface ThroughChains {
+  start: Int32Array;
+  loop: Int32Array;
+  sign: Int8Array;
+}
+
+interface SharedChains {
+  slot: Int32Array;
+  chain: Int32Array;
+  sign: Int8Array;
+}
+
+export function loopsThroughChains(loops: Loops, chainCount: number): ThroughChains {
+  const start = new Int32Array(chainCount + 1);
+  for (const c of loops.chain) start[c + 1]++;
+  for (let c = 0; c < chainCount; c++) start[c + 1] += start[c];
+  const next = start.slice(0, chainCount);
+  const loop = new Int32Array(loops.chain.length);
+  const sign = new Int8Array(loops.chain.length);
+  for (let l = 0; l < loops.count; l++)
+    for (let p = loops.start[l]; p < loops.start[l + 1]; p++) {
+      const at = next[loops.chain[p]]++;
+      loop[at] = l;
+      sign[at] = loops.sign[p];
+    }
+  return { start, loop, sign };
+}
+
+function patternOf(loops: Loops, through: ThroughChains) {
+  const start = new Int32Array(loops.count + 1);
+  const index: number[] = [];
+  const met = new Int32Array(loops.count).fill(-1);
+  for (let l = 0; l < loops.count; l++) {
+    met[l] = l;
+    for (let p = loops.start[l]; p < loops.start[l + 1]; p++) {
+      const c = loops.chain[p];
+      for (let t = through.start[c]; t < through.start[c + 1]; t++) {
+        const other = through.loop[t];
+        if (met[other] === l) continue;
+        met[other] = l;
+        index.push(other);
+      }
+    }
+    start[l + 1] = index.length;
+  }
+  return { size: loops.count, start, index: Int32Array.from(index) };
+}
+
+function sharedChains(loops: Loops, through: ThroughChains, factors: SparseLdl): SharedChains {
+  const slot: number[] = [];
+  const chain: number[] = [];
+  const sign: number[] = [];
+  for (let c = 0; c + 1 < through.start.length; c++)
+    for (let a = through.start[c]; a < through.start[c + 1]; a++)
+      for (let b = through.start[c]; b < a; b++) {
+        slot.push(factors.slot(through.loop[a], through.loop[b]));
+        chain.push(c);
+        sign.push(through.sign[a] * through.sign[b]);
+      }
+  return { slot: Int32Array.from(slot), chain: Int32Array.from(chain), sign: Int8Array.from(sign) };
+}

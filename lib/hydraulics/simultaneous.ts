@@ -1,0 +1,180 @@
+import type { Loops } from './graph/loops';
+import type { DpControl } from './dp-control';
+import { LoopMatrix } from './loop-matrix';
+import type { NetworkState } from './network-state';
+
+export interface IterationOutcome {
+  closed: boolean;
+  iterations: number;
+}
+
+/** What an iteration stops at: head left around the worst loop (m) and summed flow change over summed flow. */
+export const CLOSED_HEAD_M = 1e-6;
+export const SETTLED_FLOW_RATIO = 1e-6;
+const MOST_ITERATIONS = 200;
+const MOST_FLOW_STEP_LS = 1e7;
+
+/**
+ * All loops corrected together: Newton's method on the heads around the loops, (B D Bᵀ) dq = -B h, with h and D the losses and slopes of the
+ * chains and B the loops' directions (D. W. Martin and G. Peters 1963 for nodes; Epp and Fowler 1970 for loops; the steps are
+ * those of the gradient method of E. Todini and S. Pilati 1987). The laws never fall with flow, so the solution is the
+ * least of a convex function, and a step that overshoots along its own direction is cut back to where that
+ * function is least: no network diverges. Flows are L/s, heads m.
+ */
+export class SimultaneousIteration {
+  private readonly matrix: LoopMatrix;
+  private readonly loopHead: Float64Array;
+  private readonly loopStep: Float64Array;
+  private readonly step: Float64Array;
+  private readonly before: Float64Array;
+
+  constructor(
+    private readonly state: NetworkState,
+    private readonly loops: Loops,
+    private readonly control: DpControl | null,
+  ) {
+    const chains = state.chainFlow.length;
+    this.matrix = new LoopMatrix(loops, chains);
+    this.loopHead = new Float64Array(loops.count);
+    this.loopStep = new Float64Array(loops.count);
+    this.step = new Float64Array(chains);
+    this.before = new Float64Array(chains);
+  }
+
+  /** First flows: those of the network with every law made a straight line. */
+  start(): void {
+    const { state, matrix, loopHead, loopStep, step } = this;
+    state.chainFlow.fill(0);
+    state.linearize();
+    this.sumLoopHeads();
+    matrix.assemble(state.chainSlope);
+    matrix.factors.factorize();
+    for (let l = 0; l < loopStep.length; l++) loopStep[l] = -loopHead[l];
+    matrix.factors.solve(loopStep, loopStep);
+    this.spreadStep();
+    state.chainFlow.set(step);
+  }
+
+  /** Iterates from the state's present flows until it is closed and settled. */
+  run(): IterationOutcome {
+    const { state, control } = this;
+    state.evaluate();
+    let change = Infinity;
+    for (let iterations = 0; ; iterations++) {
+      const worst = this.sumLoopHeads();
+      const off = control ? control.worstError(state) : 0;
+      const closed = worst <= CLOSED_HEAD_M && off <= CLOSED_HEAD_M;
+      if (closed && (change <= SETTLED_FLOW_RATIO || worst === 0)) {
+        if (!control?.switchStates(state)) return { closed: true, iterations };
+        state.evaluate();
+        this.sumLoopHeads();
+      }
+      if (iterations === MOST_ITERATIONS || Number.isNaN(worst)) return { closed: false, iterations };
+      this.findStep();
+      change = this.takeStep(worst + off);
+    }
+  }
+
+  /** Head left around each loop; answers the largest. */
+  private sumLoopHeads(): number {
+    const { loops, loopHead } = this;
+    const { chainLoss } = this.state;
+    let worst = 0;
+    for (let l = 0; l < loops.count; l++) {
+      let head = 0;
+      for (let p = loops.start[l]; p < loops.start[l + 1]; p++) head += loops.sign[p] * chainLoss[loops.chain[p]];
+      loopHead[l] = head;
+      const magnitude = Math.abs(head);
+      if (!(magnitude <= worst)) worst = magnitude;
+    }
+    return worst;
+  }
+
+  private findStep(): void {
+    const { state, matrix, loopHead, loopStep, control } = this;
+    matrix.assemble(state.chainSlope);
+    matrix.factors.factorize();
+    for (let l = 0; l < loopStep.length; l++) loopStep[l] = -loopHead[l];
+    matrix.factors.solve(loopStep, loopStep);
+    if (control) control.correct(state, this.loops, matrix.factors, loopStep);
+    this.spreadStep();
+  }
+
+  private spreadStep(): void {
+    const { loops, loopStep, step } = this;
+    step.fill(0);
+    for (let l = 0; l < loops.count; l++) {
+      const d = loopStep[l];
+      for (let p = loops.start[l]; p < loops.start[l + 1]; p++) step[loops.chain[p]] += loops.sign[p] * d;
+    }
+  }
+
+  /** Moves along the step and evaluates; answers the summed change over the summed flow. */
+  private takeStep(errorBefore: number): number {
+    const { state, step, before, control } = this;
+    before.set(state.chainFlow);
+    let largest = 0;
+    for (let c = 0; c < step.length; c++) largest = Math.max(largest, Math.abs(step[c]));
+    const longest = largest > MOST_FLOW_STEP_LS ? MOST_FLOW_STEP_LS / largest : 1;
+    const part = control?.isThrottling() ? this.cutByError(longest, errorBefore) : this.cutByPower(longest);
+    let moved = 0;
+    let total = 0;
+    for (let c = 0; c < step.length; c++) {
+      moved += Math.abs(part * step[c]);
+      total += Math.abs(state.chainFlow[c]);
+    }
+    return total > 0 ? moved / total : moved > 0 ? Infinity : 0;
+  }
+
+  private moveTo(part: number): void {
+    const { state, step, before } = this;
+    const { chainFlow } = state;
+    for (let c = 0; c < chainFlow.length; c++) chainFlow[c] = before[c] + part * step[c];
+    this.control?.moveTo(state, part);
+    state.evaluate();
+  }
+
+  /** The convex function's slope along the step: the head that the step's own flows meet. It rises along the step. */
+  private powerAlong(): number {
+    const { step } = this;
+    const { chainLoss } = this.state;
+    let sum = 0;
+    for (let c = 0; c < step.length; c++) sum += chainLoss[c] * step[c];
+    return sum;
+  }
+
+  /** Full step if the function still falls at its end, or has nearly stopped to; else where its slope is small (regula falsi between). */
+  private cutByPower(longest: number): number {
+    const atStart = this.powerAlong();
+    let low = 0;
+    let lowSlope = atStart;
+    let high = longest;
+    let part = longest;
+    for (let tries = 0; ; tries++) {
+      this.moveTo(part);
+      const slope = this.powerAlong();
+      if (slope <= 0.5 * Math.abs(atStart) && (tries === 0 || slope >= -0.5 * Math.abs(atStart))) return part;
+      if (tries >= 60 || part < 1e-12) return part;
+      let highSlope = slope;
+      if (slope > 0) high = part;
+      else {
+        low = part;
+        lowSlope = slope;
+        highSlope = Math.abs(atStart);
+      }
+      const falsi = low + ((high - low) * -lowSlope) / (highSlope - lowSlope);
+      part = Math.min(Math.max(falsi, low + 0.05 * (high - low)), high - 0.05 * (high - low));
+      if (!(part >= low)) part = (low + high) / 2;
+    }
+  }
+
+  /** With controllers at work the function is no longer convex: halve until the worst error falls, a few times at most. */
+  private cutByError(longest: number, errorBefore: number): number {
+    let part = longest;
+    for (let tries = 0; ; tries++, part /= 2) {
+      this.moveTo(part);
+      const error = this.sumLoopHeads() + this.control!.worstError(this.state);
+      if (error < errorBefore || tries === 6) return part;
+    }
+  }
+}

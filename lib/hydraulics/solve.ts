@@ -1,0 +1,75 @@
+import { DpControl } from './dp-control';
+import { type Loops, shortLoops, treeLoops } from './graph/loops';
+import { balanceHeads } from './hardy-cross';
+import { NetworkState } from './network-state';
+import { type PreparedNetwork, prepareNetwork } from './prepare';
+import { SimultaneousIteration } from './simultaneous';
+import { solveResult } from './solve-result';
+import type { LoopCorrection, Method, NetworkDocument, SolveResult, Warning } from './types';
+
+/** Chains in all loops up to which the loops of a least-resistance tree are used for correcting one after another. */
+const MOST_TREE_LOOP_CHAINS = 400_000;
+/** Corrections that a result carries at most when a history is asked for. */
+const MOST_HISTORY = 20_000;
+
+export interface SolveOptions {
+  /** Flows of an earlier solution by link number, L/s, to start from. */
+  startFlows?: Float64Array;
+}
+
+/**
+ * Steady flows and heads of a checked network document as its valves and pumps stand. Never throws for a checked document: what cannot be
+ * closed is answered with `converged: false` and the worst loops.
+ */
+export function solve(document: NetworkDocument): SolveResult {
+  return solvePrepared(prepareNetwork(document));
+}
+
+/** As `solve`, on a network prepared before; with flows of an earlier solution it is only corrected from there. */
+export function solvePrepared(network: PreparedNetwork, options: SolveOptions = {}): SolveResult {
+  const solution = findFlows(network, options);
+  return solveResult(network, solution);
+}
+
+export interface Solution {
+  state: NetworkState;
+  loops: Loops;
+  method: Method;
+  iterations: number;
+  closed: boolean;
+  control: DpControl | null;
+  warnings: Warning[];
+  history: LoopCorrection[] | null;
+}
+
+/** The iteration alone, without the result's tables. */
+export function findFlows(network: PreparedNetwork, { startFlows }: SolveOptions = {}): Solution {
+  const { document, chains } = network;
+  const state = new NetworkState(network);
+  const control = DpControl.of(network);
+  const loops = shortLoops(document.nodes.length, chains);
+  const simultaneous = new SimultaneousIteration(state, loops, control);
+  const warnings: Warning[] = [];
+  simultaneous.start();
+  if (startFlows) takeFlows(state, startFlows);
+
+  if (document.options?.method === 'hardy-cross') {
+    const usualSlope = state.chainSlope.slice();
+    const cross = treeLoops(document.nodes.length, chains, usualSlope, MOST_TREE_LOOP_CHAINS) ?? loops;
+    const history: LoopCorrection[] | null = document.options.history ? [] : null;
+    const outcome = balanceHeads(state, cross, control, history);
+    if (outcome.closed) return { state, loops: cross, method: 'hardy-cross', ...outcome, control, warnings, history: history?.slice(0, MOST_HISTORY) ?? null };
+    const message = `Correcting one loop after another had not closed after ${outcome.iterations} sweeps; all loops were corrected together from there.`;
+    warnings.push({ code: 'hardy-cross-slow', message });
+  }
+  const outcome = simultaneous.run();
+  return { state, loops, method: 'simultaneous', ...outcome, control, warnings, history: null };
+}
+
+function takeFlows(state: NetworkState, startFlows: Float64Array): void {
+  const { chains, baseFlow } = state.network;
+  for (let c = 0; c < chains.count; c++) {
+    const i = chains.member[chains.start[c]];
+    state.chainFlow[c] = chains.sign[chains.start[c]] * (startFlows[i] - baseFlow[i]);
+  }
+}
