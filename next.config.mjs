@@ -1,8 +1,8 @@
 /** @type {import('next').NextConfig} */
 const config = {
-  // The tests build beside the build that may be serving, and check types against their own.
+  // The tests build beside the build that may be serving. A build checks the types of what it builds; `npm test` checks the rest.
   distDir: process.env.NEXT_DIST_DIR || '.next',
-  typescript: { tsconfigPath: process.env.NEXT_DIST_DIR === '.next-test' ? 'tsconfig.test.json' : 'tsconfig.json' },
+  typescript: { tsconfigPath: 'tsconfig.build.json' },
   reactStrictMode: true,
   poweredByHeader: false,
   devIndicators: false,

@@ -1,4 +1,5 @@
 import { fluidProperties } from '@/lib/hydraulics/fluids';
+import { pipeSeries } from '@/lib/hydraulics/pipe-series';
 import type { ChosenValve, Drawing, DrawingPipe, Equipment, PipeEnd, Port, TerminalUnit } from '@/lib/network/drawing';
 
 /** What the demo's two loops are told apart by. Loads, lengths and coils are invented. */
@@ -32,7 +33,7 @@ export const hotLoop: DemoLoop = {
   sourceTag: 'BO',
   risers: ['A', 'B', 'C'],
   unitsPerBranch: 3,
-  loadsKw: [6.0, 4.5, 5.5],
+  loadsKw: [12.0, 9.0, 11.0],
   coilDropKpa: 9,
   fluid: { medium: 'water', massFraction: 0, supplyC: 80, returnC: 60 },
 };
@@ -44,9 +45,10 @@ const storeys = [
 ];
 
 /** Where things stand on the sheet, px. */
-const sheet = { riserX: 520, riserStep: 160, unitStep: 120, firstUnit: 150, supplyY: 50, unitY: 110, returnY: 260, mainSupplyY: 720, mainReturnY: 860 };
+const sheet = { riserX: 520, riserStep: 80, unitStep: 120, firstUnit: 150, supplyY: 50, unitY: 155, returnY: 260, mainSupplyY: 720, mainReturnY: 860 };
 
-const noValve: ChosenValve = { name: '', kvTable: [], settingTurns: null, isLocked: false };
+/** Stands in until `sizeDemo` knows the flow that each valve carries. */
+const noValve: ChosenValve = { name: '', kvTable: [{ setting: 0.5, kv: 1 }, { setting: 4, kv: 400 }], settingTurns: null, isLocked: false };
 
 /** The pieces and pipes of a demo loop; sizes, valves and the pump are chosen afterwards by `sizeDemo`. */
 export function drawDemo(loop: DemoLoop): Drawing {
@@ -62,9 +64,9 @@ export function drawDemo(loop: DemoLoop): Drawing {
       circuit,
       lengthM,
       series: 'steel-en10255-medium',
-      nominal: null,
-      boreMm: null,
-      roughnessMm: null,
+      nominal: 'DN100',
+      boreMm: 105.3,
+      roughnessMm: pipeSeries['steel-en10255-medium'].roughnessMm,
       minorK,
       bends: [],
     });
@@ -89,7 +91,7 @@ export function drawDemo(loop: DemoLoop): Drawing {
     const level1 = storeys[1]!;
     tee(`riser-s-${riser}`, level1.id, x0, level1.top + sheet.supplyY);
     tee(`riser-r-${riser}`, level1.id, x0 + 60, level1.top + sheet.returnY);
-    equipment.push({ ...place(`rv-${riser}`, `RV-${riser}`, 'storey-0', x0 + 60, 700, 90), kind: 'balancingValve', valve: noValve });
+    equipment.push({ ...place(`rv-${riser}`, `RV-${riser}`, 'storey-0', x0 + 60, 790, 90), kind: 'balancingValve', valve: noValve });
     pipe(r === 0 ? 'source.out' : `main-s-${loop.risers[r - 1]}.e`, isLast ? `riser-s-${riser}.s` : `main-s-${riser}.w`, r === 0 ? 6 : 14, 'supply', 2);
     if (!isLast) pipe(`main-s-${riser}.n`, `riser-s-${riser}.s`, 4, 'supply');
     pipe(`riser-r-${riser}.s`, `rv-${riser}.in`, 3, 'return');
@@ -99,20 +101,20 @@ export function drawDemo(loop: DemoLoop): Drawing {
     for (const [storey, level] of [[1, level1], [2, storeys[0]!]] as const) {
       const key = `${riser}${storey}`;
       const [supplyY, returnY] = [level.top + sheet.supplyY, level.top + sheet.returnY];
-      equipment.push({ ...place(`bv-${key}`, `BV-${storey}${riser}`, level.id, x0 + 90, returnY, 180), kind: 'balancingValve', valve: noValve });
+      equipment.push({ ...place(`bv-${key}`, `BV-${storey}${riser}`, level.id, x0 + 100, returnY, 180), kind: 'balancingValve', valve: noValve });
       for (let k = 0; k < loop.unitsPerBranch; k++) {
         const x = x0 + sheet.firstUnit + k * sheet.unitStep;
         const number = r * loop.unitsPerBranch + k + 1;
         const loadKw = Number((loop.loadsKw[k % loop.loadsKw.length]! * (1 + 0.08 * (r - 1))).toFixed(2));
         const unit: TerminalUnit = {
-          ...place(`unit-${key}-${k + 1}`, `${loop.unitTag}-${storey}.${String(number).padStart(2, '0')}`, level.id, x, level.top + sheet.unitY, 90),
+          ...place(`unit-${key}-${k + 1}`, `${loop.unitTag}-${storey}.${String(number).padStart(2, '0')}`, level.id, x, level.top + sheet.unitY),
           kind: 'terminalUnit',
           room: `${storey}.${String(10 + number)}`,
           loadKw,
           designFlowLs: flowOf(loadKw),
           coilDropKpa: loop.coilDropKpa,
           strainerKv: 6.3,
-          controlValve: { kvs: loop.service === 'chilled' ? 1.6 : 1, characteristic: 'equalPercentage', opening: 1 },
+          controlValve: { kvs: 1.6, characteristic: 'equalPercentage', opening: 1 },
           balancingValve: noValve,
         };
         equipment.push(unit);
@@ -137,8 +139,8 @@ export function drawDemo(loop: DemoLoop): Drawing {
 
   const plant = 'storey-0';
   equipment.push(
-    { ...place('vessel', 'EV-1', plant, 60, 760, 0), kind: 'expansionVessel', gaugePressureKpa: 180 },
-    { ...place('pump', 'P-1', plant, 150, sheet.mainSupplyY), kind: 'pump', curve: [], efficiency: [], speed: 1, hasNonReturn: true },
+    { ...place('vessel', 'EV-1', plant, 60, 800), kind: 'expansionVessel', gaugePressureKpa: 180 },
+    { ...place('pump', 'P-1', plant, 150, sheet.mainSupplyY), kind: 'pump', curve: pumpCurve(40, 6), efficiency: [], speed: 1, hasNonReturn: true },
     { ...place('check', 'NRV-1', plant, 250, sheet.mainSupplyY), kind: 'checkValve', kv: 100 },
     {
       ...place('source', `${loop.sourceTag}-1`, plant, 350, sheet.mainSupplyY),
@@ -155,6 +157,13 @@ export function drawDemo(loop: DemoLoop): Drawing {
   pipe('vessel.in', 'main-tee.w', 2, 'return');
   return { format: 'drawing/1', fluid: loop.fluid, pumpExcess: 'speed', storeys, equipment, pipes };
 }
+
+/** A falling curve through the shut-off head and the duty point, flow L/s and head m. */
+export const pumpCurve = (dutyHeadM: number, dutyFlowLs: number) =>
+  [0, 0.4, 0.8, 1, 1.3, 1.6].map((part) => ({
+    flowLs: Number((part * dutyFlowLs).toFixed(3)),
+    headM: Number((dutyHeadM * (1.25 - 0.25 * part * part)).toFixed(2)),
+  }));
 
 function end(text: string): PipeEnd {
   const [equipmentId, port] = text.split('.') as [string, Port];

@@ -2,6 +2,7 @@ import type { DpControl } from './dp-control';
 import type { Loops } from './graph/loops';
 import type { NetworkState } from './network-state';
 import { CLOSED_HEAD_M, type IterationOutcome } from './simultaneous';
+import { moveTowardsRoot, type RisingFunction } from './rising-root';
 import type { LoopCorrection } from './types';
 
 /** Evaluations of a chain after which the sweeps are given up, and sweeps at most. */
@@ -17,13 +18,14 @@ const SWEPT_HEAD_M = 0.1 * CLOSED_HEAD_M;
  *   dQ = - sum(h) / sum(dh/dQ),
  *
  * each loop with the flows that the loops before it have left. Where a correction would leave more head than it found
- * (a law with a kink, or flat at rest) it is halved; nothing else is added to the method. Flows L/s, heads m.
+ * (a law with a wall, or flat at rest) the same loop is corrected again at once; nothing else is added to the method. Flows L/s, heads m.
  */
 export function balanceHeads(state: NetworkState, loops: Loops, control: DpControl | null, history: LoopCorrection[] | null): IterationOutcome {
   const mostSweeps = Math.min(MOST_SWEEPS, Math.ceil(MOST_EVALUATIONS / Math.max(1, loops.chain.length)));
+  const around = new LoopHead(state, loops);
   state.evaluate();
   for (let sweep = 0; ; sweep++) {
-    const worst = worstHead(state, loops);
+    const worst = worstHead(around, loops);
     const off = control ? control.worstError(state) : 0;
     if (worst <= SWEPT_HEAD_M && off <= CLOSED_HEAD_M) {
       if (!control?.switchStates(state)) return { closed: true, iterations: sweep };
@@ -31,8 +33,11 @@ export function balanceHeads(state: NetworkState, loops: Loops, control: DpContr
     }
     if (sweep >= mostSweeps || Number.isNaN(worst)) return { closed: false, iterations: sweep };
     for (let loop = 0; loop < loops.count; loop++) {
-      const correction = correctLoop(state, loops, loop);
-      history?.push({ sweep: sweep + 1, loop, ...correction });
+      around.choose(loop);
+      const headM = around.value;
+      const slopeMPerLs = around.slope;
+      const correctionLs = moveTowardsRoot(around, headM, -headM / slopeMPerLs, Math.abs(headM));
+      history?.push({ sweep: sweep + 1, loop, headM, slopeMPerLs, correctionLs });
     }
     if (control) {
       control.nudge(state);
@@ -41,40 +46,52 @@ export function balanceHeads(state: NetworkState, loops: Loops, control: DpContr
   }
 }
 
-/** One correction of one loop. */
-function correctLoop(state: NetworkState, loops: Loops, loop: number): Omit<LoopCorrection, 'sweep' | 'loop'> {
-  const { chain, sign, start } = loops;
-  const { chainFlow, chainSlope } = state;
-  const headM = loopHead(state, loops, loop);
-  let slope = 0;
-  for (let p = start[loop]; p < start[loop + 1]; p++) slope += chainSlope[chain[p]];
-  let correction = -headM / slope;
-  let put = 0;
-  for (let halvings = 0; ; halvings++) {
-    for (let p = start[loop]; p < start[loop + 1]; p++) {
-      const c = chain[p];
-      chainFlow[c] += sign[p] * (correction - put);
-      state.evaluateChain(c);
-    }
-    put = correction;
-    if (Math.abs(loopHead(state, loops, loop)) <= Math.abs(headM) || halvings === 60) break;
-    correction /= 2;
+/** One loop's head as a function of the flow put round it. */
+class LoopHead implements RisingFunction {
+  value = 0;
+  slope = 0;
+  private loop = 0;
+  private put = 0;
+
+  constructor(
+    private readonly state: NetworkState,
+    private readonly loops: Loops,
+  ) {}
+
+  choose(loop: number): void {
+    this.loop = loop;
+    this.put = 0;
+    this.sum();
   }
-  return { headM, slopeMPerLs: slope, correctionLs: put };
+
+  evaluate(correction: number): void {
+    const { chain, sign, start } = this.loops;
+    for (let p = start[this.loop]; p < start[this.loop + 1]; p++) {
+      this.state.chainFlow[chain[p]] += sign[p] * (correction - this.put);
+      this.state.evaluateChain(chain[p]);
+    }
+    this.put = correction;
+    this.sum();
+  }
+
+  private sum(): void {
+    const { chain, sign, start } = this.loops;
+    const { chainLoss, chainSlope } = this.state;
+    this.value = 0;
+    this.slope = 0;
+    for (let p = start[this.loop]; p < start[this.loop + 1]; p++) {
+      this.value += sign[p] * chainLoss[chain[p]];
+      this.slope += chainSlope[chain[p]];
+    }
+  }
 }
 
-function loopHead(state: NetworkState, loops: Loops, loop: number): number {
-  let head = 0;
-  for (let p = loops.start[loop]; p < loops.start[loop + 1]; p++) head += loops.sign[p] * state.chainLoss[loops.chain[p]];
-  return head;
-}
-
-function worstHead(state: NetworkState, loops: Loops): number {
+function worstHead(around: LoopHead, loops: Loops): number {
   let worst = 0;
   for (let loop = 0; loop < loops.count; loop++) {
-    const head = Math.abs(loopHead(state, loops, loop));
+    around.choose(loop);
+    const head = Math.abs(around.value);
     if (!(head <= worst)) worst = head;
   }
   return worst;
 }
-

@@ -109,15 +109,7 @@ export class NetworkState {
     const { chains, baseFlow, document, position, fluid, kinds } = this.network;
     const { linkFlow, linkLoss, linkSlope, chainLoss, chainSlope, leastSlope } = this;
     for (let i = 0; i < linkFlow.length; i++) linkFlow[i] = usualFlowLs(document.links[position[i]], fluid);
-    // A terminal's design flow is also what everything in series with it carries.
-    for (const { kind, first, last } of kinds) {
-      if (kind !== 'terminal') continue;
-      for (let i = first; i < last; i++) {
-        const c = chains.chainOf[i];
-        if (c < 0) continue;
-        for (let p = chains.start[c]; p < chains.start[c + 1]; p++) linkFlow[chains.member[p]] = linkFlow[i];
-      }
-    }
+    this.shareDesignFlows();
     for (const { batch, first, last } of kinds) batch.evaluate(linkFlow, linkLoss, linkSlope, first, last);
     const isPump = new Uint8Array(linkFlow.length);
     for (const { kind, first, last } of kinds) if (kind === 'pump') isPump.fill(1, first, last);
@@ -135,5 +127,20 @@ export class NetworkState {
       chainSlope[c] = Math.max(line, 1e-9);
       leastSlope[c] = LEAST_SLOPE_RATIO * chainSlope[c];
     }
+  }
+
+  /** A terminal's design flow is also what everything in series with it carries, but no more than a limiter there lets through. */
+  private shareDesignFlows(): void {
+    const { chains, kinds } = this.network;
+    const { linkFlow } = this;
+    const shared = new Map<number, number>();
+    for (const name of ['terminal', 'flowLimiter'] as const) {
+      const range = kinds.find(({ kind }) => kind === name);
+      for (let i = range?.first ?? 0; i < (range?.last ?? 0); i++) {
+        const c = chains.chainOf[i];
+        if (c >= 0) shared.set(c, Math.min(linkFlow[i], shared.get(c) ?? Infinity));
+      }
+    }
+    for (const [c, flow] of shared) for (let p = chains.start[c]; p < chains.start[c + 1]; p++) linkFlow[chains.member[p]] = flow;
   }
 }

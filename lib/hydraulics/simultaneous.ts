@@ -2,6 +2,7 @@ import type { Loops } from './graph/loops';
 import type { DpControl } from './dp-control';
 import { LoopMatrix } from './loop-matrix';
 import type { NetworkState } from './network-state';
+import { moveTowardsRoot, type RisingFunction } from './rising-root';
 
 export interface IterationOutcome {
   closed: boolean;
@@ -27,6 +28,12 @@ export class SimultaneousIteration {
   private readonly loopStep: Float64Array;
   private readonly step: Float64Array;
   private readonly before: Float64Array;
+
+  private readonly alongStep: RisingFunction = {
+    value: 0,
+    slope: 0,
+    evaluate: (part) => this.evaluateAlong(part),
+  };
 
   constructor(
     private readonly state: NetworkState,
@@ -134,38 +141,33 @@ export class SimultaneousIteration {
     state.evaluate();
   }
 
-  /** The convex function's slope along the step: the head that the step's own flows meet. It rises along the step. */
-  private powerAlong(): number {
-    const { step } = this;
-    const { chainLoss } = this.state;
-    let sum = 0;
-    for (let c = 0; c < step.length; c++) sum += chainLoss[c] * step[c];
-    return sum;
+  /**
+   * The slope of the convex function along the step, and how it rises: the head that the step's own flows meet. The full step is taken
+   * if the function still falls at its end or has nearly stopped to; else the step is cut to about where it is least.
+   */
+  private cutByPower(longest: number): number {
+    const along = this.alongStep;
+    this.sumAlong();
+    const atStart = along.value;
+    return moveTowardsRoot(along, atStart, longest, 0.5 * Math.abs(atStart));
   }
 
-  /** Full step if the function still falls at its end, or has nearly stopped to; else where its slope is small (regula falsi between). */
-  private cutByPower(longest: number): number {
-    const atStart = this.powerAlong();
-    let low = 0;
-    let lowSlope = atStart;
-    let high = longest;
-    let part = longest;
-    for (let tries = 0; ; tries++) {
-      this.moveTo(part);
-      const slope = this.powerAlong();
-      if (slope <= 0.5 * Math.abs(atStart) && (tries === 0 || slope >= -0.5 * Math.abs(atStart))) return part;
-      if (tries >= 60 || part < 1e-12) return part;
-      let highSlope = slope;
-      if (slope > 0) high = part;
-      else {
-        low = part;
-        lowSlope = slope;
-        highSlope = Math.abs(atStart);
-      }
-      const falsi = low + ((high - low) * -lowSlope) / (highSlope - lowSlope);
-      part = Math.min(Math.max(falsi, low + 0.05 * (high - low)), high - 0.05 * (high - low));
-      if (!(part >= low)) part = (low + high) / 2;
+  private evaluateAlong(part: number): void {
+    this.moveTo(part);
+    this.sumAlong();
+  }
+
+  private sumAlong(): void {
+    const { step, alongStep } = this;
+    const { chainLoss, chainSlope } = this.state;
+    let value = 0;
+    let slope = 0;
+    for (let c = 0; c < step.length; c++) {
+      value += chainLoss[c] * step[c];
+      slope += chainSlope[c] * step[c] * step[c];
     }
+    alongStep.value = value;
+    alongStep.slope = slope;
   }
 
   /** With controllers at work the function is no longer convex: halve until the worst error falls, a few times at most. */

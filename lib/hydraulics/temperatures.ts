@@ -62,7 +62,7 @@ export function networkTemperatures(
   }
   const entering = document.nodes.map((node) => ({ flowLs: Math.max(0, node.inflowLs ?? 0), temperatureC: inflowC.get(node.id) ?? 0 }));
   const order = orderOfFlow(streams, leaving, entering);
-  const temperatureC = new Float64Array(document.nodes.length).fill(startingTemperature(streams, entering));
+  const temperatureC = new Float64Array(document.nodes.length);
   const converged = sweepUntilSteady(order, arriving, entering, temperatureC, capacity);
 
   const known = new Set(order);
@@ -70,11 +70,10 @@ export function networkTemperatures(
   const byId = new Map(streams.map((stream) => [stream.id, stream]));
   const links = document.links.map(({ id }): LinkTemperature => {
     const stream = byId.get(id);
-    if (!stream) return { id, inletC: null, outletC: null, heatToWaterKw: 0 };
-    const inletC = nodes[stream.from].temperatureC;
-    const outletC = inletC === null && stream.law?.kind !== 'fixedOutlet' ? null : outletOf(stream, inletC ?? 0, capacity);
-    const heatToWaterKw = inletC === null || outletC === null ? 0 : capacity * stream.flowLs * (outletC - inletC);
-    return { id, inletC, outletC, heatToWaterKw };
+    const inletC = stream ? nodes[stream.from].temperatureC : null;
+    if (!stream || inletC === null) return { id, inletC: null, outletC: null, heatToWaterKw: 0 };
+    const outletC = outletOf(stream, inletC, capacity);
+    return { id, inletC, outletC, heatToWaterKw: capacity * stream.flowLs * (outletC - inletC) };
   });
   const boundaryKw = document.nodes.reduce((sum, node, i) => {
     const inflowLs = node.inflowLs ?? 0;
@@ -127,18 +126,13 @@ function orderOfFlow(streams: Stream[], leaving: Stream[][], entering: { flowLs:
       const top = path[path.length - 1];
       const stream = leaving[top.node][top.next++];
       if (!stream) order.push(path.pop()!.node);
-      else if (!seen[stream.to] && stream.law?.kind !== 'fixedOutlet') {
+      else if (!seen[stream.to]) {
         seen[stream.to] = 1;
         path.push({ node: stream.to, next: 0 });
       }
     }
   }
   return order.reverse();
-}
-
-function startingTemperature(streams: Stream[], entering: { flowLs: number; temperatureC: number }[]): number {
-  for (const { law } of streams) if (law?.kind === 'fixedOutlet') return law.outletC;
-  return entering.find(({ flowLs }) => flowLs > 0)?.temperatureC ?? 0;
 }
 
 /** Gauss-Seidel on the mixing equations; stops when the geometric tail of the changes, change * ratio / (1 - ratio), is under tolerance. */

@@ -1,5 +1,5 @@
 import { inOneLifetime } from './lifetime.mjs';
-import { startNext, waitUntilUp } from './next-server.mjs';
+import { failWhenEnded, startNext, waitUntilUp } from './next-server.mjs';
 import { prepare, say } from './prepare.mjs';
 import { readSettings } from './settings.mjs';
 import { printSignIns } from './sign-ins.mjs';
@@ -14,5 +14,5 @@ await inOneLifetime(async (lifetime) => {
   await waitUntilUp({ url: `${settings.address}/api/health`, server, accept: () => true });
   say(`Evenhead (development) is at ${settings.address}`);
   if (prepared.demo) printSignIns();
-  return Promise.race([server.stopped, lifetime.untilStopped()]);
+  return Promise.race([failWhenEnded(server), lifetime.untilStopped()]);
 });

@@ -51,13 +51,21 @@ export function startNext({ mode, host, port, env, program = nextProgram, logFil
 }
 
 /**
+ * @param {NextServer} server
+ * @returns {Promise<never>}
+ */
+export async function failWhenEnded(server) {
+  const code = await server.stopped;
+  throw new SetupFailure(`The server ended by itself (exit code ${code}); its own lines above say why.`);
+}
+
+/**
+ * Comes back when the server answers well; fails when it ends before that or takes too long.
  * @param {{ url: string, server: NextServer, seconds?: number, accept?: (response: Response) => boolean }} options
  */
 export async function waitUntilUp({ url, server, seconds = 90, accept = (response) => response.ok }) {
   const deadline = Date.now() + seconds * 1000;
-  const ended = server.stopped.then((code) => {
-    throw new SetupFailure(`The server ended at its start (exit code ${code}); its own lines above say why.`);
-  });
+  const ended = failWhenEnded(server);
   ended.catch(() => {});
   let last = 'no answer';
   while (Date.now() < deadline) {

@@ -1,4 +1,3 @@
-import { existsSync } from 'node:fs';
 import { join } from 'node:path';
 import { openCluster } from './cluster.mjs';
 import { describe } from './failure.mjs';
@@ -57,13 +56,12 @@ export async function prepare(settings, { database, mode }, lifetime) {
  * @param {Lifetime} lifetime
  */
 async function openPrivateDatabase(folder, secrets, database, lifetime) {
-  const first = !existsSync(join(folder, 'cluster'));
   const cluster = await openCluster({ folder, secrets, say });
   lifetime.atEnd(async () => {
     // `npm start` and `npm run dev` of one checkout share the cluster: the last one out stops it.
     if (liveRuns(folder).length <= 1) await cluster.stop();
   });
-  if (!first) say(`database on 127.0.0.1:${cluster.port}`);
+  say(`database on 127.0.0.1:${cluster.port}`);
   return cluster.database(database);
 }
 

@@ -1,15 +1,9 @@
 import { buildIfStale } from './build.mjs';
 import { inOneLifetime } from './lifetime.mjs';
-import { startNext, waitUntilUp } from './next-server.mjs';
+import { failWhenEnded, startNext, waitUntilUp } from './next-server.mjs';
 import { prepare, say } from './prepare.mjs';
 import { readSettings } from './settings.mjs';
 import { printSignIns } from './sign-ins.mjs';
-
-/** @param {number} code */
-function sayEnded(code) {
-  console.error(`The server ended by itself (exit code ${code}); its own lines above say why. Start it again with npm start.`);
-  return 1;
-}
 
 const buildFolder = '.next';
 
@@ -27,5 +21,5 @@ await inOneLifetime(async (lifetime) => {
   say(`Evenhead is at ${settings.publicUrl}`);
   if (prepared.demo) printSignIns();
   say('stop it with Ctrl-C; what was entered is kept');
-  return Promise.race([server.stopped.then(sayEnded), lifetime.untilStopped()]);
+  return Promise.race([failWhenEnded(server), lifetime.untilStopped()]);
 });

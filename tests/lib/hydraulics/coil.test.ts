@@ -65,6 +65,8 @@ describe('a coil at another flow', () => {
     }
   });
 
+  it('is counterflow unless told', () => expect(coilOf(LOW).arrangement).toBe('counterflow'));
+
   it('without flow gives nothing', () => {
     expect(coilAtFlow(coilOf(LOW), 0, 50, 15)).toEqual({ loadKw: 0, waterOutC: 15, airOutC: 15, effectiveness: 0 });
   });

@@ -44,6 +44,7 @@ describe('where the pump’s power goes', () => {
     expect(power.lostByKind.resistance).toBeCloseTo(0.01 + 0.0025 + 0.0004, 12);
     expect(power.lostByKind.pump).toBeUndefined();
     expect(power.links.map((link) => link.id)).toEqual(N11.slice(1).map(([id]) => id));
+    expect(breakdownOf([['V', 'balancingValve', 0, 30]]).links).toEqual([{ id: 'V', kind: 'balancingValve', lostKw: 0 }]);
     expect(power.links[4]).toEqual({ id: 'V1', kind: 'balancingValve', lostKw: expect.closeTo(0.0075, 12) });
   });
 

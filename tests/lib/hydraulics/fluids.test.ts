@@ -133,7 +133,8 @@ describe('glycol', () => {
     ['ethylene-glycol', 0.4, -23.81],
   ] as const)('%s, mass fraction %d, freezes at %d °C and is refused below', (medium, massFraction, freezingC) => {
     expect(propertiesOf({ medium, massFraction, temperatureC: 20 }).freezingPointC).toBeCloseTo(freezingC, 2);
-    expect(fluidProperties({ medium, massFraction, temperatureC: freezingC + 0.01 }).ok).toBe(true);
+    const exactlyC = propertiesOf({ medium, massFraction, temperatureC: 20 }).freezingPointC!;
+    expect(fluidProperties({ medium, massFraction, temperatureC: exactlyC }).ok).toBe(true);
     const error = errorOf({ medium, massFraction, temperatureC: freezingC - 0.01 });
     expect(error).toMatchObject({ code: 'below-freezing-point', path: 'fluid.temperatureC' });
     expect(error?.message).toContain(`${freezingC.toFixed(2)} °C, to 100 °C`);
@@ -188,6 +189,7 @@ describe('a custom fluid', () => {
   const brine = { medium: 'custom', densityKgM3: 1100, viscosityMPaS: 2.2, specificHeatKJKgK: 3.4 } as const;
 
   it('is what it says, with nothing invented', () => {
+    expect(fluidProperties(brine)).toMatchObject({ ok: true, cautions: [] });
     expect(propertiesOf(brine)).toEqual({
       densityKgM3: 1100,
       viscosityMPaS: 2.2,

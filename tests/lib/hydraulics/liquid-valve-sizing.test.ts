@@ -74,6 +74,8 @@ describe('liquid valve sizing by IEC 60534-2-1', () => {
     expect(0.1 * flp * choked.kv * Math.sqrt(driving / (965.4 / 999.103))).toBeCloseTo(30, 8);
   });
 
+  it('takes a recovery factor of 1', () => expect(sized({ ...ANNEX, recoveryFactor: 1 }).chokedDropKpa).toBeCloseTo(613.81, 2));
+
   it('a valve of line size has no piping factor', () => {
     const lineSize = sized({ ...COLD, reducers: { valveMm: 25, pipeInMm: 25, pipeOutMm: 25 } });
     expect(lineSize.pipingFactor).toBe(1);
@@ -114,6 +116,9 @@ describe('liquid valve sizing by IEC 60534-2-1', () => {
     [{ reducers: { valveMm: 30, pipeInMm: 25, pipeOutMm: 40 } }, 'valve-larger-than-pipe', 'reducers.valveMm'],
     [{ reducers: { valveMm: 30, pipeInMm: 40, pipeOutMm: 25 } }, 'valve-larger-than-pipe', 'reducers.valveMm'],
     [{ reducers: REDUCERS }, 'valve-too-small', 'reducers.valveMm'],
+    // The inlet reducer alone takes what choked flow has to drive it (at 60 m³/h), or both take all of a small drop (at 20 m³/h).
+    [{ reducers: REDUCERS, flowM3h: 60 }, 'valve-too-small', 'reducers.valveMm'],
+    [{ reducers: REDUCERS, flowM3h: 20, outletKpaAbs: 660 }, 'valve-too-small', 'reducers.valveMm'],
   ])('%o is an error: %s', (change, code, path) => {
     const result = sizeLiquidValve({ ...ANNEX, ...change });
     expect(result).toMatchObject({ ok: false, error: { code, path } });

@@ -32,10 +32,10 @@ describe('the pressure survey of a solution', () => {
   const at = (...pressures: number[]) => ({ nodes: pressures.map((pressureKpa, i) => ({ id: `N${i}`, pressureKpa, headM: 0 })) });
 
   it('finds what boils, draws air, is low or above the rating', () => {
-    const survey = surveyPressures(at(-60, -1, 0, 29.9, 30, 600, 601), { vapourKpaAbs: 47.415, ratingKpa: 600 });
-    expect(survey.nodes.map((node) => node.concern)).toEqual(['boils', 'below-atmosphere', 'low', 'low', null, null, 'above-rating']);
-    expect(survey.lowest).toMatchObject({ id: 'N0', pressureKpa: -60, aboveVapourKpa: expect.closeTo(-6.09, 9) });
-    expect(survey.highest).toMatchObject({ id: 'N6', pressureKpa: 601, concern: 'above-rating' });
+    const survey = surveyPressures(at(-1, -60, 0, 29.9, 30, 601, 600), { vapourKpaAbs: 47.415, ratingKpa: 600 });
+    expect(survey.nodes.map((node) => node.concern)).toEqual(['below-atmosphere', 'boils', 'low', 'low', null, 'above-rating', null]);
+    expect(survey.lowest).toMatchObject({ id: 'N1', pressureKpa: -60, aboveVapourKpa: expect.closeTo(-6.09, 9) });
+    expect(survey.highest).toMatchObject({ id: 'N5', pressureKpa: 601, concern: 'above-rating' });
   });
 
   it('boils exactly at the vapour pressure, which rises with temperature and matters sooner at altitude', () => {

@@ -38,6 +38,7 @@ describe('a radiator', () => {
   it('gives nothing to a room as warm as its water', () => {
     expect(logMeanDifferenceK(60, 20, 20)).toBe(0);
     expect(logMeanDifferenceK(20, 10, 20)).toBe(0);
+    expect(logMeanDifferenceK(10, 30, 20)).toBe(0);
     expect(outputFactor(DESIGN, 60, 19, 20)).toBe(0);
   });
 

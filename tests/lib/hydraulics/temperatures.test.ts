@@ -96,8 +96,8 @@ describe('temperatures through a solved network', () => {
     ];
     const loop = solved(flows, { boiler: source(80), load: heat(-4.2) });
     expect(loop.converged).toBe(true);
-    expect(loop.node('R')).toBeCloseTo(80 - 100, 6);
-    expect(loop.node('S')).toBeCloseTo(80 - 99, 6);
+    expect(loop.node('R')).toBeCloseTo(80 - 100, 8);
+    expect(loop.node('S')).toBeCloseTo(80 - 99, 8);
     expect(Math.abs(loop.balance.imbalanceKw)).toBeLessThan(1e-7);
   });
 
@@ -184,6 +184,30 @@ describe('temperatures through a solved network', () => {
     expect(loop.node('R')).toBeCloseTo(0.9 * 50 + 0.1 * 10, 9);
     expect(loop.balance.boundaryKw).toBeCloseTo(4.2 * 0.1 * (10 - 50), 9);
     expect(Math.abs(loop.balance.imbalanceKw)).toBeLessThan(1e-9);
+  });
+
+  it('mix water from outside with what is there, and count its heat at its own temperature', () => {
+    const loop = solved(
+      [
+        ['boiler', 'R', 'S', 1],
+        ['load', 'S', 'R', 0.9],
+      ],
+      { boiler: source(60), load: heat(-37.8) },
+      { R: [0.1, 10], S: [-0.1] },
+    );
+    expect(loop.node('R')).toBeCloseTo(0.9 * 50 + 0.1 * 10, 9);
+    expect(loop.balance.boundaryKw).toBeCloseTo(4.2 * 0.1 * (10 - 60), 9);
+    expect(Math.abs(loop.balance.imbalanceKw)).toBeLessThan(1e-9);
+  });
+
+  it('say so where so little is renewed that they cannot settle', () => {
+    const flows: Flow[] = [
+      ['boiler', 'B', 'S', 2e-6],
+      ['load', 'S', 'R', 1],
+      ['recirculate', 'R', 'S', 1 - 2e-6],
+      ['back', 'R', 'B', 2e-6],
+    ];
+    expect(solved(flows, { boiler: source(80), load: heat(-4.2) }).converged).toBe(false);
   });
 
   it('can come from outside alone', () => {

@@ -32,6 +32,7 @@ describe('mixing', () => {
       { flowLs: 0.2, temperatureC: 62 },
     ];
     expect(mixedTemperatureC(supply)).toBeCloseTo(8.4, 12);
+    expect(mixedTemperatureC([...supply, ...supply])).toBeCloseTo(8.4, 12);
     expect(mixedTemperatureC(returns)).toBeCloseTo(68.3, 12);
   });
 

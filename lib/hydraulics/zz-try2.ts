@@ -1,0 +1,10 @@
+import { readFileSync, readdirSync } from 'node:fs';
+import { solve } from './solve';
+const dir='/work/shared/reference/networks/';
+const doc=JSON.parse(readFileSync(dir+'check-valve.json','utf8'));
+doc.options={method:'hardy-cross',history:true};
+import { prepareNetwork } from './prepare';
+import { findFlows } from './solve';
+const h=findFlows(prepareNetwork(doc));
+import * as S from './solve';
+console.log(h.method,h.iterations,h.warnings);
