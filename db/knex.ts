@@ -18,3 +18,14 @@ export function db(): Knex {
   }
   return holder.evenheadDb;
 }
+
+/** Runs the application's own functions on a transaction of the caller: all that they do happens, or nothing. For the demo alone. */
+export async function onConnection<Answer>(connection: Knex, work: () => Promise<Answer>): Promise<Answer> {
+  const before = holder.evenheadDb;
+  holder.evenheadDb = connection;
+  try {
+    return await work();
+  } finally {
+    holder.evenheadDb = before;
+  }
+}

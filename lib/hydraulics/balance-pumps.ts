@@ -2,14 +2,14 @@ import { pumpSpeed } from './links/pump';
 import type { PreparedNetwork } from './prepare';
 import type { PumpCircuits } from './pump-circuits';
 import { pumpEfficiency, pumpHeadAt, pumpResult } from './solve-result';
-import type { BalancedPump, LinkOf, NetworkDocument, PumpLink, Warning } from './types';
+import type { BalancedPump, LinkOf, PumpLink, Warning } from './types';
 
 /**
  * Duty and speed of each pump. A group's circuits may use the head of their index circuit, or with `pumpExcess: 'throttle'` all that the pumps
  * give at their speed where that is more. Pumps in series share a head as their curves at full speed do.
  */
-export function balancedPumps(network: PreparedNetwork, { groups, boosters }: PumpCircuits, document: NetworkDocument) {
-  const throttle = document.options?.pumpExcess === 'throttle';
+export function balancedPumps(network: PreparedNetwork, { groups, boosters }: PumpCircuits, flow: Float64Array) {
+  const throttle = network.document.options?.pumpExcess === 'throttle';
   const linkAt = (i: number) => network.document.links[network.position[i]] as LinkOf<'pump'>;
   const speeds = new Map<string, number>();
   const results: BalancedPump[] = [];
@@ -39,8 +39,8 @@ export function balancedPumps(network: PreparedNetwork, { groups, boosters }: Pu
   }
   for (const i of boosters) {
     const link = linkAt(i);
-    const flowLs = 0;
-    results.push(duty(link, flowLs, pumpHeadAt(link, flowLs, pumpSpeed(link)), pumpSpeed(link), network.fluid.densityKgM3));
+    const speed = pumpSpeed(link);
+    results.push(duty(link, flow[i], pumpHeadAt(link, flow[i], speed), speed, network.fluid.densityKgM3));
   }
   return { results, speeds, warnings, headFor: (group: number) => heads[group], shortfallFor: (group: number) => shortfalls[group] };
 }

@@ -2,10 +2,15 @@ import { balancedPumps } from './balance-pumps';
 import { balancedTerminals } from './balance-terminals';
 import { balancedValves, upstreamFirst } from './balance-valves';
 import { designFlows } from './design-flows';
+import { pumpSpeed } from './links/pump';
 import { type PumpCircuits, pumpCircuits } from './pump-circuits';
 import { solve } from './solve';
 import { listed } from './solve-warnings';
-import type { BalanceResult, NetworkDocument, NetworkLink, Warning } from './types';
+import type { BalanceResult, NetworkDocument, NetworkLink, PumpLink, Warning } from './types';
+
+const NO_SETTINGS = new Map<string, number>();
+const SETTLED_SPEED = 1e-9;
+const MOST_ROUNDS = 40;
 
 /**
  * Valve settings and pump duty for design flow everywhere, where proportional balancing ends: in each group of parallel circuits the
@@ -14,17 +19,10 @@ import type { BalanceResult, NetworkDocument, NetworkLink, Warning } from './typ
  * Control valves count as they stand; locked balancing valves stay.
  */
 export function balance(document: NetworkDocument): BalanceResult {
-  const design = designFlows(document);
+  const { design, loss, circuits, pumps } = findDuty(document);
   const { network, flow, live, conflict } = design;
   if (conflict.length) return unbalanced(document, conflict);
-
-  const loss = new Float64Array(flow.length);
-  const slope = new Float64Array(flow.length);
-  for (const { batch, first, last } of network.kinds) batch.evaluate(flow, loss, slope, first, last);
-  const circuits = pumpCircuits(network, flow, loss);
   const openCircuitHead = mostHeads(circuits);
-
-  const pumps = balancedPumps(network, circuits, document);
   takeExcess(circuits, pumps.headFor, upstreamFirst(network, circuits, flow));
   const valves = balancedValves(network, circuits, flow, loss, pumps.shortfallFor);
   const balanced = { ...document, links: document.links.map((link) => set(link, valves.settings, pumps.speeds)) };
@@ -44,6 +42,27 @@ export function balance(document: NetworkDocument): BalanceResult {
     solution,
     warnings: [...closedCircuits(document, live), ...pumps.warnings, ...valves.warnings],
   };
+}
+
+/**
+ * Design flows, the circuits at them and the pumps' duty. Where pumps decide some of the flows (in parallel, along a bypass) these
+ * change with the speeds and the speeds with them, until both stay.
+ */
+function findDuty(document: NetworkDocument) {
+  let atSpeeds = document;
+  for (let round = 0; ; round++) {
+    const design = designFlows(atSpeeds);
+    const { network, flow } = design;
+    const loss = new Float64Array(flow.length);
+    const slope = new Float64Array(flow.length);
+    for (const { batch, first, last } of network.kinds) batch.evaluate(flow, loss, slope, first, last);
+    const circuits = pumpCircuits(network, flow, loss);
+    const pumps = balancedPumps(network, circuits, flow);
+    const changed = { ...document, links: document.links.map((link) => set(link, NO_SETTINGS, pumps.speeds)) };
+    const isSettled = changed.links.every((link, at) => link.kind !== 'pump' || Math.abs(pumpSpeed(link) - pumpSpeed(atSpeeds.links[at] as PumpLink)) < SETTLED_SPEED);
+    if (!design.isPumpDependent || isSettled || round === MOST_ROUNDS || design.conflict.length) return { design, loss, circuits, pumps };
+    atSpeeds = changed;
+  }
 }
 
 /** Most head of any circuit through each stretch, over all pumps, m. */

@@ -1,19 +1,30 @@
-/** A link along its flow: head lost from a to b, m (a booster's is negative). */
+/** A link along its flow: head lost from a to b, m (a booster's is negative), and whether it is a terminal. */
 export interface Stretch {
   a: number;
   b: number;
   head: number;
+  isTerminal: boolean;
+}
+
+/** A stretch as walked on one of two floors: below, no terminal has been passed yet; a terminal leads up. */
+interface Walk {
+  a: number;
+  b: number;
+  stretch: number;
 }
 
 /**
- * The circuits of one pump at given flows: every way along the flow from its discharge back to its suction. Keeps the most head that any way
- * needs from the discharge to a node and from a node to the suction, and follows when a valve takes more.
+ * The circuits of one pump at given flows: every way along the flow from its discharge through a terminal back to its suction. A way
+ * that passes no terminal (a bypass) makes no demand; only a pump without terminals, as in a decoupled primary
+ * circuit, is asked for what its bare ways need. Keeps the most head needed to and from every place, and follows when a valve takes more.
  */
 export class Circuits {
-  readonly toNode: Float64Array;
-  readonly fromNode: Float64Array;
-  private readonly leaving: number[][];
-  private readonly arriving: number[][];
+  private readonly toPlace: Float64Array;
+  private readonly fromPlace: Float64Array;
+  private readonly leaving: Walk[][];
+  private readonly arriving: Walk[][];
+  private readonly walksOf: Walk[][];
+  private readonly goal: number;
 
   private constructor(
     private readonly stretches: Stretch[],
@@ -22,19 +33,30 @@ export class Circuits {
     readonly discharge: number,
     readonly suction: number,
   ) {
-    this.leaving = Array.from({ length: nodeCount }, () => []);
-    this.arriving = Array.from({ length: nodeCount }, () => []);
-    stretches.forEach(({ a, b }, k) => {
-      this.leaving[a].push(k);
-      this.arriving[b].push(k);
+    const lists = <T>(count: number) => Array.from({ length: count }, (): T[] => []);
+    this.leaving = lists<Walk>(2 * nodeCount);
+    this.arriving = lists<Walk>(2 * nodeCount);
+    this.walksOf = lists<Walk>(stretches.length);
+    const add = (a: number, b: number, stretch: number) => {
+      const walk = { a, b, stretch };
+      this.leaving[a].push(walk);
+      this.arriving[b].push(walk);
+      this.walksOf[stretch].push(walk);
+    };
+    stretches.forEach(({ a, b, isTerminal }, k) => {
+      add(a, isTerminal ? b + nodeCount : b, k);
+      add(a + nodeCount, b + nodeCount, k);
     });
-    this.toNode = new Float64Array(nodeCount).fill(-Infinity);
-    this.fromNode = new Float64Array(nodeCount).fill(-Infinity);
-    this.toNode[discharge] = 0;
-    this.fromNode[suction] = 0;
-    for (const v of order) for (const k of this.leaving[v]) this.toNode[stretches[k].b] = Math.max(this.toNode[stretches[k].b], this.toNode[v] + stretches[k].head);
-    for (const v of order.toReversed())
-      for (const k of this.arriving[v]) this.fromNode[stretches[k].a] = Math.max(this.fromNode[stretches[k].a], this.fromNode[v] + stretches[k].head);
+
+    this.toPlace = new Float64Array(2 * nodeCount).fill(-Infinity);
+    this.fromPlace = new Float64Array(2 * nodeCount).fill(-Infinity);
+    const places = [...order, ...order.map((v) => v + nodeCount)];
+    this.toPlace[discharge] = 0;
+    for (const v of places) for (const { b, stretch } of this.leaving[v]) this.toPlace[b] = Math.max(this.toPlace[b], this.toPlace[v] + this.headOf(stretch));
+    this.goal = this.toPlace[suction + nodeCount] > -Infinity ? suction + nodeCount : suction;
+    this.fromPlace[this.goal] = 0;
+    for (const v of places.reverse())
+      for (const { a, stretch } of this.arriving[v]) this.fromPlace[a] = Math.max(this.fromPlace[a], this.fromPlace[v] + this.headOf(stretch));
   }
 
   /** Null where no way leads from discharge to suction, or flows run in a ring without a pump. */
@@ -47,30 +69,36 @@ export class Circuits {
 
   /** Head of the index circuit, m. */
   get requiredHead(): number {
-    return this.toNode[this.suction];
+    return this.toPlace[this.goal];
   }
 
   /** Most head that a circuit through a stretch needs, m; -Infinity where none passes. */
   through(k: number): number {
-    const { a, b, head } = this.stretches[k];
-    return this.toNode[a] + head + this.fromNode[b];
+    let most = -Infinity;
+    for (const { a, b, stretch } of this.walksOf[k]) most = Math.max(most, this.toPlace[a] + this.headOf(stretch) + this.fromPlace[b]);
+    return most;
   }
 
   /** To be called after `head` of a stretch has grown. */
   grown(k: number): void {
-    const { a, b, head } = this.stretches[k];
-    this.raise(this.toNode, b, this.toNode[a] + head, this.leaving, 'b');
-    this.raise(this.fromNode, a, this.fromNode[b] + head, this.arriving, 'a');
+    for (const walk of this.walksOf[k]) {
+      this.raise(this.toPlace, walk, this.leaving, 'b', 'a');
+      this.raise(this.fromPlace, walk, this.arriving, 'a', 'b');
+    }
   }
 
-  private raise(values: Float64Array, node: number, value: number, beyond: number[][], end: 'a' | 'b'): void {
-    const waiting: [number, number][] = [[node, value]];
-    for (let next = waiting.pop(); next; next = waiting.pop()) {
-      const [v, reached] = next;
-      if (!(reached > values[v] + 1e-12)) continue;
-      values[v] = reached;
-      for (const k of beyond[v]) waiting.push([this.stretches[k][end], reached + this.stretches[k].head]);
+  private raise(places: Float64Array, first: Walk, onward: Walk[][], end: 'a' | 'b', start: 'a' | 'b'): void {
+    const waiting = [first];
+    for (let walk = waiting.pop(); walk; walk = waiting.pop()) {
+      const reached = places[walk[start]] + this.headOf(walk.stretch);
+      if (!(reached > places[walk[end]] + 1e-12)) continue;
+      places[walk[end]] = reached;
+      for (const next of onward[walk[end]]) waiting.push(next);
     }
+  }
+
+  private headOf(stretch: number): number {
+    return this.stretches[stretch].head;
   }
 }
 

@@ -12,6 +12,8 @@ export interface DesignFlows {
   flow: Float64Array;
   /** Terminals on a circuit that is open all round; the others have design flow 0. */
   live: Set<string>;
+  /** Whether pumps decide any of the flows: in parallel, or along a bypass. */
+  isPumpDependent: boolean;
   /** Nodes of parts where design flows do not add up, for which no flows exist. */
   conflict: string[];
 }
@@ -42,7 +44,8 @@ export function designFlows(document: NetworkDocument): DesignFlows {
     const link = open.links[at];
     return link.kind === 'terminal' ? (live.has(link.id) ? link.designFlowLs : 0) : restFlow.get(link.id)!;
   });
-  return { network, flow, live, conflict: solution.closed ? conflict : open.nodes.map((node) => node.id) };
+  const isPumpDependent = holdsPump(restNetwork, solution.loops.chain);
+  return { network, flow, live, isPumpDependent, conflict: solution.closed ? conflict : open.nodes.map((node) => node.id) };
 }
 
 function fullyOpen(link: NetworkLink): NetworkLink {
@@ -71,4 +74,12 @@ function liveTerminals({ document, chains, kinds, position }: PreparedNetwork): 
     for (let i = first; i < last; i++) if (chains.chainOf[i] >= 0 && looped[chains.chainOf[i]]) live.add(document.links[position[i]].id);
   }
   return live;
+}
+
+function holdsPump({ kinds, chains }: PreparedNetwork, looped: Int32Array): boolean {
+  const pumps = kinds.find(({ kind }) => kind === 'pump');
+  if (!pumps) return false;
+  const inLoop = new Set(looped);
+  for (let i = pumps.first; i < pumps.last; i++) if (inLoop.has(chains.chainOf[i])) return true;
+  return false;
 }

@@ -1,4 +1,5 @@
-import { GRAVITY_MS2, pressurePowerKw } from './pump-duty';
+import { GRAVITY_MS2 } from './links/law';
+import { pressurePowerKw } from './pump-duty';
 import type { LinkKind, NetworkDocument, SolveResult } from './types';
 
 export type LinkPower = { id: string; kind: LinkKind; lostKw: number };

@@ -1,4 +1,5 @@
-import { ATMOSPHERE_KPA, GRAVITY_MS2 } from './pump-duty';
+import { GRAVITY_MS2 } from './links/law';
+import { ATMOSPHERE_KPA } from './pump-duty';
 
 /**
  * Expansion vessel with a diaphragm, and the pressures to charge and fill it to. Volumes in L, pressures in kPa GAUGE unless named absolute.

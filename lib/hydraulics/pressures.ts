@@ -1,4 +1,5 @@
-import { ATMOSPHERE_KPA, GRAVITY_MS2 } from './pump-duty';
+import { GRAVITY_MS2 } from './links/law';
+import { ATMOSPHERE_KPA } from './pump-duty';
 import type { NetworkDocument, SolveResult } from './types';
 
 /** Gauge pressure below which a high point draws air or vents badly: 0.3 bar, common practice. */

@@ -75,14 +75,17 @@ function pumpRuns({ kinds, chains, from, to }: PreparedNetwork, flow: Float64Arr
 }
 
 function layOut(network: PreparedNetwork, flow: Float64Array, loss: Float64Array, without: number[]) {
-  const { from, to, document } = network;
+  const { from, to, document, kinds } = network;
+  const terminals = kinds.find(({ kind }) => kind === 'terminal');
   const left = new Set(without);
   const stretches: Stretch[] = [];
   const stretchOf = new Int32Array(from.length).fill(-1);
   for (let i = 0; i < from.length; i++) {
     if (left.has(i) || Math.abs(flow[i]) <= AT_REST_LS) continue;
     stretchOf[i] = stretches.length;
-    stretches.push(flow[i] > 0 ? { a: from[i], b: to[i], head: loss[i] } : { a: to[i], b: from[i], head: -loss[i] });
+    const isTerminal = terminals !== undefined && i >= terminals.first && i < terminals.last;
+    const forward = flow[i] > 0;
+    stretches.push({ a: forward ? from[i] : to[i], b: forward ? to[i] : from[i], head: forward ? loss[i] : -loss[i], isTerminal });
   }
   const circuitsOf = ({ discharge, suction }: PumpRun) => Circuits.of(stretches, document.nodes.length, discharge, suction);
   return { stretches, stretchOf, circuitsOf };

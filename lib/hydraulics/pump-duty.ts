@@ -1,9 +1,10 @@
+import { GRAVITY_MS2 } from './links/law';
+
 /**
  * Power, speed and suction of a pump. Flow in L/s, head in m, pressures in kPa, density in kg/m³, power in kW, efficiencies as fractions.
  * Check values: cases P5 to P7 and P13 to P15 in the tests.
  */
 
-export const GRAVITY_MS2 = 9.80665;
 export const ATMOSPHERE_KPA = 101.325;
 
 /** Power given to the water: rho g Q H. */

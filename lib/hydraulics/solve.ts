@@ -54,8 +54,9 @@ export function findFlows(network: PreparedNetwork, { startFlows }: SolveOptions
   if (startFlows) takeFlows(state, startFlows);
 
   if (document.options?.method === 'hardy-cross') {
-    const usualSlope = state.chainSlope.slice();
-    const cross = treeLoops(document.nodes.length, chains, usualSlope, MOST_TREE_LOOP_CHAINS) ?? loops;
+    // Slopes at the first flows: a valve that these hold shut is a wall, and wants a loop of its own.
+    state.evaluate();
+    const cross = treeLoops(document.nodes.length, chains, state.chainSlope, MOST_TREE_LOOP_CHAINS) ?? loops;
     const history: LoopCorrection[] | null = document.options.history ? [] : null;
     const outcome = balanceHeads(state, cross, control, history);
     if (outcome.closed) return { state, loops: cross, method: 'hardy-cross', ...outcome, control, warnings, history: history?.slice(0, MOST_HISTORY) ?? null };

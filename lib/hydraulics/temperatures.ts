@@ -18,6 +18,8 @@ export type LinkTemperature = { id: string; inletC: number | null; outletC: numb
 export type TemperatureWarning = { code: 'no-flow' | 'no-source'; id: string; message: string };
 export type Temperatures = {
   converged: boolean;
+  /** Passes over the nodes: two without recirculation. */
+  sweeps: number;
   nodes: { id: string; temperatureC: number | null }[];
   links: LinkTemperature[];
   /** Heat to the water from links that fix their outlet, from all other links, and by what crosses the boundary; and what fails to sum to 0. */
@@ -63,7 +65,7 @@ export function networkTemperatures(
   const entering = document.nodes.map((node) => ({ flowLs: Math.max(0, node.inflowLs ?? 0), temperatureC: inflowC.get(node.id) ?? 0 }));
   const order = orderOfFlow(streams, leaving, entering);
   const temperatureC = new Float64Array(document.nodes.length);
-  const converged = sweepUntilSteady(order, arriving, entering, temperatureC, capacity);
+  const { converged, sweeps } = sweepUntilSteady(order, arriving, entering, temperatureC, capacity);
 
   const known = new Set(order);
   const nodes = document.nodes.map((node, i) => ({ id: node.id, temperatureC: known.has(i) ? temperatureC[i] : null }));
@@ -81,7 +83,7 @@ export function networkTemperatures(
   }, 0);
   const balance = heatBalance(links, laws, boundaryKw);
   const warnings = warningsFor(document, nodes, byId, arriving, laws);
-  return { ok: true, temperatures: { converged, nodes, links, balance, warnings } };
+  return { ok: true, temperatures: { converged, sweeps, nodes, links, balance, warnings } };
 }
 
 function streamsOf(
@@ -142,9 +144,9 @@ function sweepUntilSteady(
   entering: { flowLs: number; temperatureC: number }[],
   temperatureC: Float64Array,
   capacity: number,
-): boolean {
+): { converged: boolean; sweeps: number } {
   let before = Infinity;
-  for (let sweep = 0; sweep < MOST_SWEEPS; sweep++) {
+  for (let sweeps = 1; sweeps <= MOST_SWEEPS; sweeps++) {
     let change = 0;
     for (const node of order) {
       let flow = entering[node].flowLs;
@@ -157,10 +159,11 @@ function sweepUntilSteady(
       temperatureC[node] = heat / flow;
     }
     const ratio = change / before;
-    if (change < ROUNDING_K || (ratio < 1 && change < 1e-6 && (change * ratio) / (1 - ratio) < TOLERANCE_K)) return true;
+    if (change < ROUNDING_K || (ratio < 1 && change < 1e-6 && (change * ratio) / (1 - ratio) < TOLERANCE_K))
+      return { converged: true, sweeps };
     before = change;
   }
-  return false;
+  return { converged: false, sweeps: MOST_SWEEPS };
 }
 
 function heatBalance(links: LinkTemperature[], laws: ReadonlyMap<string, ThermalLaw>, boundaryKw: number): Temperatures['balance'] {

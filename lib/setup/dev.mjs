@@ -1,10 +1,12 @@
 import { inOneLifetime } from './lifetime.mjs';
 import { failWhenEnded, startNext, waitUntilUp } from './next-server.mjs';
+import { requireNode } from './packages.mjs';
 import { prepare, say } from './prepare.mjs';
 import { readSettings } from './settings.mjs';
 import { printSignIns } from './sign-ins.mjs';
 
 await inOneLifetime(async (lifetime) => {
+  requireNode();
   const settings = readSettings({ command: 'npm run dev', defaultPort: 4310 });
   const prepared = await prepare(settings, { database: 'evenhead_dev', mode: 'development' }, lifetime);
   const server = startNext({ mode: 'dev', host: settings.host, port: settings.port, env: prepared.env });

@@ -1,6 +1,6 @@
 import { createHash } from 'node:crypto';
 import { chmodSync, mkdirSync, statSync } from 'node:fs';
-import { statfs } from 'node:fs/promises';
+import disks from 'node:fs/promises';
 import { dirname, join } from 'node:path';
 import { fileURLToPath } from 'node:url';
 import { SetupFailure } from './failure.mjs';
@@ -42,7 +42,7 @@ export function everyoneMayEnter(folder) {
  * @param {number} [bytes]
  */
 export async function requireFreeSpace(folder, bytes = enoughBytes) {
-  const disk = await statfs(folder);
+  const disk = await disks.statfs(folder);
   const freeBytes = disk.bavail * disk.bsize;
   if (freeBytes >= bytes) return;
   throw new SetupFailure(

@@ -4,7 +4,7 @@ import { describe } from './failure.mjs';
 import { startMailServer } from './mail-server.mjs';
 import { migrate } from './migrate.mjs';
 import { applicationEnv } from './next-server.mjs';
-import { installPackages, requireNode } from './packages.mjs';
+import { installPackages } from './packages.mjs';
 import { openDataFolder, requireFreeSpace } from './places.mjs';
 import { requireFreePort } from './ports.mjs';
 import { clearCrashedRuns, liveRuns, recordRun, requireNoOtherRun } from './runs.mjs';
@@ -25,7 +25,6 @@ export const say = (line) => console.log(`· ${line}`);
  * @returns {Promise<Prepared>}
  */
 export async function prepare(settings, { database, mode }, lifetime) {
-  requireNode();
   const folder = openDataFolder(say);
   await requireFreeSpace(folder);
   await clearCrashedRuns(folder, say);

@@ -1,7 +1,7 @@
 import { spawn } from 'node:child_process';
 import { setTimeout as pause } from 'node:timers/promises';
 import { Interrupted } from './failure.mjs';
-import { identityOf } from './process-identity.mjs';
+import { groupIsAlive } from './process-identity.mjs';
 
 /** @typedef {{ cwd?: string, env?: NodeJS.ProcessEnv, input?: string, user?: string, output?: 'show' | 'keep', evenWhenStopping?: boolean }} RunOptions */
 /** @typedef {{ code: number, output: string }} Finished */
@@ -54,7 +54,7 @@ export async function stopUnfinished() {
 }
 
 /**
- * Asks a process group that we started to end, insists after a while, and comes back when its leader is gone.
+ * Asks a process group that we started to end, insists after a while, and comes back when all of it is gone.
  * @param {number | undefined} pid the group's leader
  * @param {number} [patienceMs]
  */
@@ -62,10 +62,10 @@ export async function stopGroup(pid, patienceMs = 8000) {
   if (!pid) return;
   signalGroup(pid, 'SIGTERM');
   const deadline = Date.now() + patienceMs;
-  while (identityOf(pid) && Date.now() < deadline) await pause(50);
-  // The leader may be gone while a worker of its group is not.
-  signalGroup(pid, 'SIGKILL');
-  while (identityOf(pid)) await pause(50);
+  while (groupIsAlive(pid)) {
+    if (Date.now() > deadline) signalGroup(pid, 'SIGKILL');
+    await pause(50);
+  }
 }
 
 /**

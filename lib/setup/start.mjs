@@ -1,6 +1,7 @@
 import { buildIfStale } from './build.mjs';
 import { inOneLifetime } from './lifetime.mjs';
 import { failWhenEnded, startNext, waitUntilUp } from './next-server.mjs';
+import { requireNode } from './packages.mjs';
 import { prepare, say } from './prepare.mjs';
 import { readSettings } from './settings.mjs';
 import { printSignIns } from './sign-ins.mjs';
@@ -8,6 +9,7 @@ import { printSignIns } from './sign-ins.mjs';
 const buildFolder = '.next';
 
 await inOneLifetime(async (lifetime) => {
+  requireNode();
   const settings = readSettings({ command: 'npm start', defaultPort: 4300 });
   const prepared = await prepare(settings, { database: 'evenhead', mode: 'production' }, lifetime);
   await buildIfStale({ buildFolder, say });

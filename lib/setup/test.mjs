@@ -4,6 +4,7 @@ import { describe, Interrupted, SetupFailure } from './failure.mjs';
 import { inOneLifetime } from './lifetime.mjs';
 import { installPackages, requireNode } from './packages.mjs';
 import { requireFreeSpace, root } from './places.mjs';
+import { say } from './prepare.mjs';
 import { clearCrashedRuns, recordRun, requireNoOtherRun } from './runs.mjs';
 import { checkTypes, lint, reports, runVitest } from './test-phases.mjs';
 import { openThrowAwayCluster } from './throw-away.mjs';
@@ -19,7 +20,8 @@ const phases = {
   unit: () => runVitest('unit'),
   reference: () => runVitest('reference'),
   async integration({ throwAway }) {
-    return runVitest('integration', { DATABASE_URL: await (await throwAway()).migratedDatabase('integration', { demo: false }) });
+    const { folder, migratedDatabase } = await throwAway();
+    return runVitest('integration', { DATABASE_URL: await migratedDatabase('integration', { demo: false }), TMPDIR: folder });
   },
   async e2e({ throwAway, lifetime, addServer }) {
     return runEndToEnd({ throwAway: await throwAway(), lifetime, addServer, say });
@@ -28,9 +30,6 @@ const phases = {
 
 /** @type {Tally} */
 const total = { passed: 0, failed: 0 };
-
-/** @param {string} line */
-const say = (line) => console.log(`· ${line}`);
 
 /** @param {string} line */
 function fail(line) {

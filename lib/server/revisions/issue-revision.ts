@@ -8,8 +8,8 @@ import { changesBetween, same } from '@/lib/network/merge-drawings';
 import { stationsOfDrawing, type DrawnStation } from '@/lib/network/stations-of-drawing';
 import { recordActivity } from '../activity/record-activity';
 import type { Access } from '../auth/authorize';
-import { solveDrawing } from '../loops/solve-drawing';
 import { notFound, Problem } from '../problem';
+import { solveDrawing } from '../solving/solve-drawing';
 
 /** States in which a change of design may be issued; what has been submitted is first returned or accepted. */
 const issuableStates: LoopState[] = ['draft', 'issued', 'in-commissioning', 'accepted'];
@@ -36,7 +36,7 @@ export async function issueRevision(access: Access, loopId: string, input: Issue
       throw new Problem('revision-unchanged', `The drawing is that of revision ${before.number}: there is nothing new to issue.`);
     }
     const { document } = drawingToDocument(drawing, loop.name);
-    const { faults, solved } = solveDrawing(drawing, loop.name);
+    const { faults, solved } = await solveDrawing(drawing, loop.name, { personId: access.person.id });
     if (!document || !solved?.balance) {
       throw new Problem('drawing-unfit', 'The drawing cannot be issued while it cannot be solved and balanced.', { detail: faults });
     }

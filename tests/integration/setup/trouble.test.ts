@@ -6,8 +6,10 @@ import { join } from 'node:path';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { clusterUser, runningServer } from '@/lib/setup/cluster-folder.mjs';
 import { freePort } from '@/lib/setup/ports.mjs';
+import { run } from '@/lib/setup/processes.mjs';
 import { SmallCheckout } from '../../make/small-checkout';
 
+const isRoot = process.getuid?.() === 0;
 const checkout = new SmallCheckout();
 let port = 0;
 let env: Record<string, string> = {};
@@ -16,17 +18,17 @@ const readings = async () => (await fetch(`http://127.0.0.1:${port}/readings`)).
 beforeAll(async () => {
   port = await freePort();
   env = { PORT: String(port) };
-  const run = await checkout.startAndWait(env);
+  const started = await checkout.startAndWait(env);
   await fetch(`http://127.0.0.1:${port}/readings`, { method: 'POST' });
-  run.child.kill('SIGTERM');
-  await run.ended;
+  started.child.kill('SIGTERM');
+  await started.ended;
 });
 afterAll(() => checkout.remove());
 
 async function oneLineOf(settings: Record<string, string>): Promise<string> {
-  const run = checkout.start(settings);
-  expect(await run.ended).toBe(1);
-  const lines = run.output().trimEnd().split('\n');
+  const started = checkout.start(settings);
+  expect(await started.ended).toBe(1);
+  const lines = started.output().trimEnd().split('\n');
   expect(lines.filter((line) => !line.startsWith('· '))).toHaveLength(1);
   return lines.at(-1) ?? '';
 }
@@ -68,6 +70,13 @@ describe('what goes wrong is told in one line that says what to do', () => {
     } finally {
       writeFileSync(file, secrets, { mode: 0o600 });
     }
+  });
+
+  it.runIf(isRoot)('a program that is missing where nothing may be installed', async () => {
+    const code = `import(process.argv[1]).then((debian) => debian.installFromDebian(['postgresql'], 'There is no PostgreSQL on this machine', () => {}))`;
+    const asNobody = ['-u', 'nobody', '--', process.execPath, '-e', `${code}.catch((error) => console.log(error.message))`];
+    const { output } = await run('runuser', [...asNobody, checkout.path('lib/setup/debian.mjs')], { cwd: '/' });
+    expect(output).toBe('There is no PostgreSQL on this machine. Install it with: sudo apt-get install postgresql\n');
   });
 
   it('a managed database that does not answer', async () => {
@@ -119,24 +128,24 @@ describe('after a crash it recovers by itself', () => {
   it('a first start that was killed while it made the cluster', async () => {
     const fresh = new SmallCheckout();
     fresh.write('.data/cluster.unfinished/PG_VERSION', '15\n');
-    const run = await fresh.startAndWait({ PORT: String(await freePort()) });
-    run.child.kill('SIGTERM');
-    expect(await run.ended).toBe(0);
+    const started = await fresh.startAndWait({ PORT: String(await freePort()) });
+    started.child.kill('SIGTERM');
+    expect(await started.ended).toBe(0);
     expect(existsSync(fresh.path('.data/cluster.unfinished'))).toBe(false);
     await fresh.remove();
   });
 });
 
-describe.runIf(process.getuid?.() === 0)('a checkout that the user of PostgreSQL cannot enter', () => {
+describe.runIf(isRoot)('a checkout that the user of PostgreSQL cannot enter', () => {
   it('keeps its data in a folder of the machine, and says so', async () => {
     const closed = new SmallCheckout();
     chmodSync(closed.folder, 0o700);
-    const run = await closed.startAndWait({ PORT: String(await freePort()) });
-    const [, folder] = /the data is kept in (\S+)/.exec(run.output()) ?? [];
+    const started = await closed.startAndWait({ PORT: String(await freePort()) });
+    const [, folder] = /the data is kept in (\S+)/.exec(started.output()) ?? [];
     expect(folder).toMatch(/^\/var\/lib\/evenhead\/[0-9a-f]{12}$/);
     expect(readdirSync(folder)).toContain('cluster');
-    run.child.kill('SIGTERM');
-    expect(await run.ended).toBe(0);
+    started.child.kill('SIGTERM');
+    expect(await started.ended).toBe(0);
     expect(runningServer(join(folder, 'cluster'))).toBeNull();
     rmSync(folder, { recursive: true });
     await closed.remove();

@@ -207,7 +207,20 @@ describe('temperatures through a solved network', () => {
       ['recirculate', 'R', 'S', 1 - 2e-6],
       ['back', 'R', 'B', 2e-6],
     ];
-    expect(solved(flows, { boiler: source(80), load: heat(-4.2) }).converged).toBe(false);
+    expect(solved(flows, { boiler: source(80), load: heat(-4.2) })).toMatchObject({ converged: false, sweeps: 20_000 });
+  });
+
+  it('take two passes over a loop without recirculation, however long', () => {
+    const terminals = Array.from({ length: 200 }, (_, i) => i + 1);
+    const flows: Flow[] = terminals.flatMap((i): Flow[] => [
+      [`s${i}`, `S${i - 1}`, `S${i}`, 201 - i],
+      [`t${i}`, `S${i}`, `R${i}`, 1],
+      [`r${i}`, `R${i}`, `R${i - 1}`, 201 - i],
+    ]);
+    const laws = Object.fromEntries(terminals.map((i) => [`t${i}`, heat(4.2 * (1 + (i % 5)))]));
+    const ladder = solved([['chiller', 'R0', 'S0', 200], ...flows], { chiller: source(6), ...laws });
+    expect(ladder.sweeps).toBe(2);
+    expect(ladder.node('R0')).toBeCloseTo(9, 9);
   });
 
   it('can come from outside alone', () => {

@@ -6,7 +6,7 @@ import { saveDraft } from '@/lib/server/loops/save-draft';
 export const GET = route({
   permission: 'draft.see',
   scope: 'loop',
-  handle: ({ person, params }) => readDraft(person.organizationId, params.loopId!),
+  handle: ({ person, params }) => readDraft(person.organizationId, params.loopId),
 });
 
 export const PUT = route({
@@ -14,5 +14,5 @@ export const PUT = route({
   scope: 'loop',
   body: saveDraftSchema,
   maxBytes: 16 << 20,
-  handle: ({ params, body, ...access }) => saveDraft(access, params.loopId!, body),
+  handle: ({ params, body, ...access }) => saveDraft(access, params.loopId, body),
 });

@@ -6,12 +6,12 @@ import { listRevisions } from '@/lib/server/revisions/list-revisions';
 export const GET = route({
   permission: 'loop.see',
   scope: 'loop',
-  handle: ({ person, params }) => listRevisions(person.organizationId, params.loopId!),
+  handle: ({ person, params }) => listRevisions(person.organizationId, params.loopId),
 });
 
 export const POST = route({
   permission: 'revision.issue',
   scope: 'loop',
   body: issueRevisionSchema,
-  handle: ({ params, body, ...access }) => issueRevision(access, params.loopId!, body),
+  handle: ({ params, body, ...access }) => issueRevision(access, params.loopId, body),
 });

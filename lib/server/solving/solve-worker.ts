@@ -1,0 +1,2 @@
+/** What a thread of the pool runs. */
+export { solveDocument as default } from './solve-document';
