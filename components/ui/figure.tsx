@@ -20,7 +20,7 @@ export function Figure({ quantity, si, hasUnit, className }: FigureProps) {
   return (
     <span className={classNames('figures whitespace-nowrap', className)}>
       {formatQuantity(quantity, si, unit)}
-      {hasUnit && <span className="ml-1 font-sans text-[0.85em] text-quiet">{unit}</span>}
+      {hasUnit && <span className="text-quiet ml-1 font-sans text-[0.85em]">{unit}</span>}
     </span>
   );
 }

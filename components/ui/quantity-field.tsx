@@ -40,7 +40,21 @@ interface QuantityFieldProps {
  * A field for a quantity in the person's unit. It keeps what was typed for as long as the value stays what that text means, so
  * "12 gpm" is not rewritten under the hand, and shows the value's own digits once it is set from outside.
  */
-export function QuantityField({ label, quantity, value, onChange, onBlur, ref, name, error, hint, isTouch, isLabelHidden, className, ...rest }: QuantityFieldProps) {
+export function QuantityField({
+  label,
+  quantity,
+  value,
+  onChange,
+  onBlur,
+  ref,
+  name,
+  error,
+  hint,
+  isTouch,
+  isLabelHidden,
+  className,
+  ...rest
+}: QuantityFieldProps) {
   const id = useId();
   const unit = unitFor(quantity, useUnitChoice());
   const [typed, setTyped] = useState<{ text: string; si: number | null; message: string | null } | null>(null);
@@ -59,7 +73,7 @@ export function QuantityField({ label, quantity, value, onChange, onBlur, ref, n
   return (
     <div className={classNames('flex flex-col gap-1', className)}>
       <label htmlFor={id} className={isLabelHidden ? 'sr-only' : 'text-sm font-semibold'}>
-        {label} {hint && <span className="font-normal text-quiet">{hint}</span>}
+        {label} {hint && <span className="text-quiet font-normal">{hint}</span>}
       </label>
       <div className="relative">
         <input
@@ -76,12 +90,12 @@ export function QuantityField({ label, quantity, value, onChange, onBlur, ref, n
           className={classNames(inputClass, 'figures text-right', isTouch ? 'h-12 pr-20 text-xl' : 'h-10 pr-16')}
           {...rest}
         />
-        <span id={`${id}-unit`} className="pointer-events-none absolute inset-y-0 right-2.5 flex items-center text-sm text-quiet">
+        <span id={`${id}-unit`} className="text-quiet pointer-events-none absolute inset-y-0 right-2.5 flex items-center text-sm">
           {unit}
         </span>
       </div>
       {message && (
-        <p id={`${id}-error`} role="alert" className="text-sm text-high">
+        <p id={`${id}-error`} role="alert" className="text-high text-sm">
           ▴ {message}
         </p>
       )}

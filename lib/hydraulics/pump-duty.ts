@@ -27,23 +27,6 @@ export function electricalPowerKw(shaftKw: number, motorEfficiency: number, driv
   return shaftKw / (motorEfficiency * driveEfficiency);
 }
 
-export type EfficiencyPoint = { flowLs: number; fraction: number };
-
-/**
- * Efficiency at a flow and speed ratio (above 0), from points at full speed in rising order of flow, straight between them. By the affinity
- * laws it is that of the full-speed flow Q/n. Null beyond the points (nothing is extrapolated) and where it is 0.
- */
-export function efficiencyAtSpeed(points: readonly EfficiencyPoint[], flowLs: number, speedRatio = 1): number | null {
-  const full = flowLs / speedRatio;
-  const next = points.findIndex((point) => point.flowLs >= full);
-  if (next < 0 || (next === 0 && points[0].flowLs > full)) return null;
-  const high = points[next];
-  const low = points[Math.max(0, next - 1)];
-  const share = high === low ? 1 : (full - low.flowLs) / (high.flowLs - low.flowLs);
-  const fraction = low.fraction + share * (high.fraction - low.fraction);
-  return fraction > 0 ? fraction : null;
-}
-
 export type Duty = { flowLs: number; headM: number; shaftKw: number };
 
 /**

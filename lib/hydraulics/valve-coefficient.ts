@@ -1,3 +1,5 @@
+import { boreAreaM2 } from './links/pipe';
+
 /**
  * The valve law: Q [m³/h] = Kv sqrt(dp [bar] · 1000 / rho), Kv being the flow of water in m³/h at 1 bar (IEC 60534-2-1, turbulent, not choked).
  * Flows in L/s, differential pressures in kPa, density in kg/m³ (default 1000). Check values: cases V4 to V6 and N11 in the tests.
@@ -40,8 +42,4 @@ export function lossCoefficientFromKv(kv: number, boreMm: number): number {
 /** Kv of a local loss coefficient (above 0) in a bore in mm: the inverse of `lossCoefficientFromKv`. */
 export function kvFromLossCoefficient(lossCoefficient: number, boreMm: number): number {
   return 3600 * boreAreaM2(boreMm) * Math.sqrt(200 / lossCoefficient);
-}
-
-function boreAreaM2(boreMm: number): number {
-  return (Math.PI / 4) * (boreMm / 1000) ** 2;
 }

@@ -31,4 +31,5 @@ function unitFromText(quantity: Quantity, tail: string): string | null {
 
 const spelling = (unit: string): string => unit.toLowerCase().replace(/\s/g, '').replace('³', '3').replace('²', '2');
 
-const listed = (units: readonly string[]): string => (units.length < 2 ? units.join('') : `${units.slice(0, -1).join(', ')} or ${units.at(-1)}`);
+const listed = (units: readonly string[]): string =>
+  units.length < 2 ? units.join('') : `${units.slice(0, -1).join(', ')} or ${units.at(-1)}`;

@@ -3,7 +3,6 @@ import { describe, expect, it } from 'vitest';
 import {
   annualEnergyKwh,
   dutyAtSpeed,
-  efficiencyAtSpeed,
   electricalPowerKw,
   hydraulicPowerKw,
   pressurePowerKw,
@@ -46,37 +45,6 @@ describe('pump power', () => {
     ];
     expect(annualEnergyKwh(profile)).toBe(11_000);
     expect(annualEnergyKwh([])).toBe(0);
-  });
-});
-
-describe('efficiency at speed', () => {
-  const points = [
-    { flowLs: 0, fraction: 0 },
-    { flowLs: 4, fraction: 0.6 },
-    { flowLs: 8, fraction: 0.7 },
-    { flowLs: 10, fraction: 0.65 },
-  ];
-
-  it('is the curve itself at full speed, straight between its points', () => {
-    expect(efficiencyAtSpeed(points, 4)).toBeCloseTo(0.6, 12);
-    expect(efficiencyAtSpeed(points, 6)).toBeCloseTo(0.65, 12);
-    expect(efficiencyAtSpeed(points, 10)).toBeCloseTo(0.65, 12);
-    expect(efficiencyAtSpeed(points, 2)).toBeCloseTo(0.3, 12);
-  });
-
-  it('moves along with the flow when the pump slows', () => {
-    expect(efficiencyAtSpeed(points, 4, 0.5)).toBeCloseTo(0.7, 12);
-    expect(efficiencyAtSpeed(points, 4.5, 0.5)).toBeCloseTo(0.675, 12);
-  });
-
-  it('is unknown outside the points and where nothing is pumped', () => {
-    expect(efficiencyAtSpeed(points, 10.1)).toBeNull();
-    expect(efficiencyAtSpeed(points, 6, 0.5)).toBeNull();
-    expect(efficiencyAtSpeed(points, -1)).toBeNull();
-    expect(efficiencyAtSpeed(points, 0)).toBeNull();
-    expect(efficiencyAtSpeed([], 1)).toBeNull();
-    expect(efficiencyAtSpeed(points.slice(1), 4)).toBe(0.6);
-    expect(efficiencyAtSpeed(points.slice(1), 3.9)).toBeNull();
   });
 });
 

@@ -97,9 +97,12 @@ describe('reading what is typed', () => {
     expect(parseQuantity('flow', typed, 'L/s')).toEqual({ ok: false, message: expect.stringContaining('two ways') });
   });
 
-  it.each(['', '   ', 'NaN', 'Infinity', '1e999', '--1', '1.2.3', '1,2,3', '12 34', '3 3 kPa', '5 furlongs', 'gpm', '99999999999999'])('refuses %j with a sentence', (typed) => {
-    expect(parseQuantity('flow', typed, 'L/s')).toEqual({ ok: false, message: expect.stringMatching(/\.$/) });
-  });
+  it.each(['', '   ', 'NaN', 'Infinity', '1e999', '--1', '1.2.3', '1,2,3', '12 34', '3 3 kPa', '5 furlongs', 'gpm', '99999999999999'])(
+    'refuses %j with a sentence',
+    (typed) => {
+      expect(parseQuantity('flow', typed, 'L/s')).toEqual({ ok: false, message: expect.stringMatching(/\.$/) });
+    },
+  );
 
   it.each<[Quantity, string, string]>([
     ['flow', '12 gpm', 'US gpm'],

@@ -1,0 +1,106 @@
+'use client';
+
+import type { ReactNode } from 'react';
+import { Figure } from '@/components/ui/figure';
+import { classNames } from '@/components/ui/class-names';
+import type { Equipment } from '@/lib/network/drawing';
+import { sizeOf } from '@/lib/network/piece-geometry';
+import type { Detail } from './detail';
+import { signs, tones, verdictOf } from './deviation-mark';
+import { useCanvas, useEditor, useResults } from './editor-context';
+
+interface PieceLabelsProps {
+  piece: Equipment;
+  detail: Detail;
+  isFaulty: boolean;
+  isSelected: boolean;
+}
+
+/** What is said beside a piece: its tag, the figure of the overlay, the setting of its valve. */
+export function PieceLabels({ piece, detail, isFaulty, isSelected }: PieceLabelsProps) {
+  const { width, height } = sizeOf(piece);
+  const isUpright = piece.kind === 'terminalUnit' ? height > width : piece.rotation === 90 || piece.rotation === 270;
+  const figure = <OverlayFigure piece={piece} />;
+  const tag = piece.kind === 'tee' ? (isSelected || isFaulty) && piece.tag : piece.tag;
+  const fault = isFaulty && <span className="text-high" title="Faults: see the list">▴ </span>;
+
+  if (piece.kind === 'terminalUnit') {
+    const side = piece.isMirrored && isUpright ? 'right-1/2 mr-5 items-end' : 'left-1/2 ml-5';
+    return (
+      <>
+        <Column className={isUpright ? classNames('top-1/2 -translate-y-1/2', side) : 'top-full left-1/2 mt-0.5 -translate-x-1/2 items-center'}>
+          {figure}
+          {(detail === 'near' || isFaulty) && <span className="text-[11px] text-quiet">{fault}{tag}</span>}
+        </Column>
+        <IndexName piece={piece} />
+        {detail === 'near' && (
+          <Column className={isUpright ? classNames('top-[calc(50%+25px)]', piece.isMirrored ? 'right-1/2 mr-3.5' : 'left-1/2 ml-3.5') : 'top-1/2 left-full ml-1'}>
+            <SettingFigure piece={piece} />
+          </Column>
+        )}
+      </>
+    );
+  }
+  if (detail === 'middle' && !isFaulty && piece.kind !== 'pump' && piece.kind !== 'source') return null;
+  const isBrass = piece.kind === 'balancingValve';
+  return isUpright ? (
+    <Column className="top-1/2 left-full ml-1 -translate-y-1/2">
+      <span className={classNames('text-xs font-semibold', isBrass && 'text-brass')}>{fault}{tag} <SettingFigure piece={piece} /></span>
+      {figure}
+    </Column>
+  ) : (
+    <>
+      {tag && (
+        <Column className={classNames('left-1/2 -translate-x-1/2', piece.kind === 'tee' ? 'bottom-full' : isBrass ? 'top-[calc(50%+10px)]' : 'bottom-[calc(50%+17px)]')}>
+          <span className={classNames('text-xs font-semibold', isBrass && 'text-brass')}>{fault}{tag} <SettingFigure piece={piece} /></span>
+        </Column>
+      )}
+      <Column className={classNames('left-1/2 -translate-x-1/2 items-center', isBrass ? 'bottom-[calc(50%+12px)]' : 'top-[calc(50%+17px)]')}>{figure}</Column>
+    </>
+  );
+}
+
+const Column = ({ className, children }: { className: string; children: ReactNode }) => (
+  <div className={classNames('pointer-events-none absolute flex flex-col leading-tight whitespace-nowrap', className)}>{children}</div>
+);
+
+function IndexName({ piece }: { piece: Equipment }) {
+  const { figures } = useResults();
+  if (!figures?.pieces.get(piece.id)?.isIndex) return null;
+  return <Column className="bottom-full left-1/2 mb-6 -translate-x-1/2 text-[11px] font-semibold text-petrol">index circuit</Column>;
+}
+
+/** The setting that the balance found; where it has none, the one that the valve stands at. */
+function SettingFigure({ piece }: { piece: Equipment }) {
+  const { figures } = useResults();
+  const chosen = piece.kind === 'balancingValve' ? piece.valve : piece.kind === 'terminalUnit' ? piece.balancingValve : null;
+  if (!chosen) return null;
+  const setting = figures?.pieces.get(piece.id)?.valve?.setting ?? chosen.settingTurns;
+  return setting === null || setting === undefined ? null : <span className="figures text-xs text-brass">{setting.toFixed(1)}</span>;
+}
+
+function OverlayFigure({ piece }: { piece: Equipment }) {
+  const { figures } = useResults();
+  const { band } = useEditor();
+  const overlay = useCanvas((state) => state.overlay);
+  const solution = figures?.pieces.get(piece.id);
+  if (!solution || piece.kind === 'expansionVessel') return null;
+  const figureClass = 'text-[13px] font-bold';
+  if (piece.kind === 'pump' && solution.pump && overlay !== 'pressure') {
+    return (
+      <span className="text-xs text-quiet">
+        <Figure quantity="flow" si={solution.flowLs} hasUnit />, <Figure quantity="head" si={solution.pump.headM} hasUnit />
+      </span>
+    );
+  }
+  if (overlay === 'pressure') return solution.inletKpa === null ? null : <Figure quantity="pressure" si={solution.inletKpa} className="text-[11px]" />;
+  if (piece.kind === 'tee' || solution.flowLs === null) return null;
+  if (overlay === 'percent') {
+    if (piece.kind !== 'terminalUnit' || solution.percentOfDesign === null) return null;
+    const verdict = verdictOf(solution.percentOfDesign, band);
+    return <span className={classNames('figures', figureClass, tones[verdict])}><span className="text-[9px]">{signs[verdict]}</span> {solution.percentOfDesign.toFixed(0)}</span>;
+  }
+  if (overlay === 'flow') return <Figure quantity="flow" si={Math.abs(solution.flowLs)} className={piece.kind === 'terminalUnit' ? figureClass : 'text-[11px]'} />;
+  if (overlay === 'drop') return <Figure quantity="pressure" si={Math.abs(solution.dropKpa ?? 0)} className={piece.kind === 'terminalUnit' ? figureClass : 'text-[11px]'} />;
+  return null;
+}
