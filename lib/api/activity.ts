@@ -1,6 +1,7 @@
 import { z } from 'zod';
 
-export const activityQuerySchema = z.object({ projectId: z.uuid().optional(), before: z.iso.datetime({ offset: true }).optional() });
+/** GET /api/activity — `before` is the id of the oldest row already shown. */
+export const activityQuerySchema = z.object({ projectId: z.uuid().optional(), before: z.uuid().optional() });
 
 export interface ActivityRow {
   id: string;
@@ -12,4 +13,10 @@ export interface ActivityRow {
   loopId: string | null;
   loopName: string | null;
   at: string;
+}
+
+export interface ActivityPage {
+  /** Newest first. */
+  rows: ActivityRow[];
+  hasMore: boolean;
 }

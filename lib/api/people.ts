@@ -1,4 +1,5 @@
 import { z } from 'zod';
+import { quantities, unitsOf, type Quantity } from '@/lib/units/quantities';
 import { projectRoles, type ProjectRole } from './permissions';
 
 export const emailSchema = z.string().trim().toLowerCase().max(254).pipe(z.email('This is not an e-mail address.'));
@@ -25,10 +26,16 @@ export const changePasswordSchema = z.object({ currentPassword: z.string().max(1
 export const askForResetSchema = z.object({ email: emailSchema });
 export const usePasswordLinkSchema = z.object({ token: z.string().min(20).max(200), newPassword: passwordSchema });
 
+const isKnownUnit = ([quantity, unit]: [string, string]) =>
+  (quantities as string[]).includes(quantity) && unitsOf(quantity as Quantity).includes(unit);
+
 export const changeAccountSchema = z.object({
   name: nameSchema.optional(),
   theme: z.enum(['system', 'light', 'dark']).optional(),
-  units: z.record(z.string().max(40), z.string().max(20)).optional(),
+  units: z
+    .record(z.string().max(40), z.string().max(20))
+    .refine((units) => Object.entries(units).every(isKnownUnit), 'A unit that is not known was chosen.')
+    .optional(),
 });
 export type ChangeAccount = z.infer<typeof changeAccountSchema>;
 

@@ -1,5 +1,5 @@
 import { z } from 'zod';
-import type { StripTick } from './flow-strip';
+import type { StripBand, StripTick } from './flow-strip';
 import type { LoopService, LoopState } from './loops';
 import { projectRoles, type ProjectRole, type Role } from './permissions';
 
@@ -51,6 +51,8 @@ export interface ProjectSummary {
   building: string;
   roles: Role[];
   loops: LoopSummary[];
+  /** Behind the strips of its loops. */
+  band: StripBand;
 }
 
 export interface ProjectDetail extends ProjectSummary {

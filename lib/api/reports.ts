@@ -8,11 +8,27 @@ import type { ToleranceRule } from './projects';
 export const meanings = ['submitted', 'reviewed', 'returned', 'accepted'] as const;
 export type Meaning = (typeof meanings)[number];
 
-/** POST /api/loops/:loopId/signatures; `contentSha256` is that of the report as the signer saw it. */
-export const signSchema = z
-  .object({ meaning: z.enum(meanings), note: z.string().trim().max(2000), contentSha256: z.string().regex(/^[0-9a-f]{64}$/) })
+/** `contentSha256` is that of the report as the signer saw it: nobody signs what they have not seen. */
+const signed = { note: z.string().trim().max(2000), contentSha256: z.string().regex(/^[0-9a-f]{64}$/, 'The SHA-256 of the report that you saw.') };
+
+/** POST /api/loops/:loopId/submission */
+export const submitReportSchema = z.object(signed);
+/** POST /api/loops/:loopId/review */
+export const reviewReportSchema = z
+  .object({ meaning: z.enum(['reviewed', 'returned']), ...signed })
   .refine((it) => it.meaning !== 'returned' || it.note !== '', { path: ['note'], message: 'Say what has to be put right.' });
-export type Sign = z.infer<typeof signSchema>;
+/** POST /api/loops/:loopId/acceptance */
+export const acceptReportSchema = z.object(signed);
+
+/** What a signer puts under a report, whichever of the three it is. */
+export interface Sign {
+  meaning: Meaning;
+  note: string;
+  contentSha256: string;
+}
+
+/** GET /api/loops/:loopId/report/workbook: of the report as it stands, or with `number` of the accepted one of that number. */
+export const workbookQuerySchema = z.object({ number: z.coerce.number().int().min(1).max(1_000_000).optional() });
 
 export interface Signature {
   id: string;
@@ -21,12 +37,18 @@ export interface Signature {
   submission: number;
   personName: string;
   personRole: string;
+  contentSha256: string;
   signedAt: string;
 }
 
 export interface ReportStation extends Station {
-  /** The entry that counts: the newest that no other puts right. */
+  /** The entry that counts: the newest under this revision that no other puts right. */
   reading: Reading | null;
+}
+
+/** An entry with the station's name in the revision that it was taken under. */
+export interface ReportReading extends Reading {
+  tag: string;
 }
 
 /** What is handed over: one value from which the page, the workbook and the SHA-256 are made. */
@@ -34,14 +56,14 @@ export interface ReportContent {
   organization: string;
   project: { name: string; client: string; building: string };
   loop: { name: string; service: LoopService };
-  revision: { number: number; note: string; issuedBy: string; issuedAt: string };
+  revision: { number: number; note: string; issuedBy: string; issuedAt: string; changes: string[] };
   fluid: { medium: string; massFraction: number; supplyC: number; returnC: number; densityKgM3: number; viscosityMPaS: number };
   tolerances: ToleranceRule[];
   stations: ReportStation[];
   rounds: Round[];
   instruments: Instrument[];
-  /** Entries that were put right later, with what replaced them: nothing measured is left out. */
-  correctedReadings: Reading[];
+  /** Every entry of every revision, oldest first, those too that were put right later: nothing measured is left out. */
+  readings: ReportReading[];
   balance: BalanceResult;
 }
 

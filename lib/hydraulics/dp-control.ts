@@ -2,8 +2,8 @@ import type { Loops } from './graph/loops';
 import { metresPerKpa } from './links/law';
 import type { NetworkState } from './network-state';
 import type { PreparedNetwork } from './prepare';
+import type { LoopSolver } from './loop-matrix';
 import { solveDense } from './sparse/dense';
-import type { SparseLdl } from './sparse/ldl';
 import type { LinkOf } from './types';
 
 type ControllerState = 'open' | 'throttling' | 'shut';
@@ -64,7 +64,7 @@ export class DpControl {
    * Adds to the loops' step what the throttled heads change. With Z = M⁻¹ C the answer of the loops to each head, and W the sensed differentials'
    * answer to the loops, the heads' corrections y solve (S - W Z) y = setpoint - sensed - W step.
    */
-  correct(state: NetworkState, loops: Loops, factors: SparseLdl, loopStep: Float64Array): void {
+  correct(state: NetworkState, loops: Loops, solver: LoopSolver, loopStep: Float64Array): void {
     const active = this.controllers.filter((each) => each.state === 'throttling');
     if (!active.length) return;
     const { chains } = state.network;
@@ -75,8 +75,9 @@ export class DpControl {
       const sign = signInChain(state.network, c, each.link);
       for (let l = 0; l < loops.count; l++)
         for (let p = loops.start[l]; p < loops.start[l + 1]; p++) if (loops.chain[p] === c) column[l] += loops.sign[p] * sign;
-      factors.solve(column, column);
-      return column;
+      const answer = new Float64Array(loops.count);
+      solver.solve(column, answer);
+      return answer;
     });
     const n = active.length;
     const right = sensedChanges(state, loops, active, loopStep).map((change, j) => active[j].setpointM - sensed(state, active[j]) - change);

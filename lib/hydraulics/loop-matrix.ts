@@ -1,23 +1,42 @@
 import type { Loops } from './graph/loops';
+import { LoopGradients } from './loop-gradients';
 import { SparseLdl } from './sparse/ldl';
+import type { Pattern } from './sparse/minimum-degree';
+
+/** What corrects all loops together: filled from the slopes of the chains, then solved for any heads. */
+export interface LoopSolver {
+  assemble(chainSlope: Float64Array): void;
+  solve(heads: Float64Array, flows: Float64Array): void;
+}
+
+/** Entries beyond which factors cost more than they save, and the loops are solved by conjugate gradients. */
+const MOST_PATTERN = 3_000_000;
+const MOST_FILL = 8_000_000;
+
+export function loopSolver(loops: Loops, chainCount: number): LoopSolver {
+  const through = loopsThroughChains(loops, chainCount);
+  const pattern = patternOf(loops, through);
+  const factors = pattern && SparseLdl.of(pattern, MOST_FILL);
+  return factors ? new LoopMatrix(loops, through, factors) : new LoopGradients(loops, chainCount);
+}
 
 /**
  * The matrix of the simultaneous correction: on its diagonal the summed slopes of each loop, beside it the slopes of the chains
- * that two loops share, with the sign of their directions. `assemble` fills it from the slopes of the chains.
+ * that two loops share, with the sign of their directions.
  */
-export class LoopMatrix {
-  readonly factors: SparseLdl;
-  private readonly chainCount: number;
+class LoopMatrix implements LoopSolver {
   private readonly shared: SharedChains;
 
   constructor(
     private readonly loops: Loops,
-    chainCount: number,
+    through: ThroughChains,
+    private readonly factors: SparseLdl,
   ) {
-    this.chainCount = chainCount;
-    const through = loopsThroughChains(loops, chainCount);
-    this.factors = new SparseLdl(patternOf(loops, through));
-    this.shared = sharedChains(loops, through, this.factors);
+    this.shared = sharedChains(through, factors);
+  }
+
+  solve(heads: Float64Array, flows: Float64Array): void {
+    this.factors.solve(heads, flows);
   }
 
   assemble(chainSlope: Float64Array): void {
@@ -31,6 +50,7 @@ export class LoopMatrix {
     value.fill(0);
     const { slot, chain, sign } = shared;
     for (let t = 0; t < slot.length; t++) value[slot[t]] += sign[t] * chainSlope[chain[t]];
+    factors.factorize();
   }
 }
 
@@ -47,7 +67,7 @@ interface SharedChains {
   sign: Int8Array;
 }
 
-export function loopsThroughChains(loops: Loops, chainCount: number): ThroughChains {
+function loopsThroughChains(loops: Loops, chainCount: number): ThroughChains {
   const start = new Int32Array(chainCount + 1);
   for (const c of loops.chain) start[c + 1]++;
   for (let c = 0; c < chainCount; c++) start[c + 1] += start[c];
@@ -63,7 +83,7 @@ export function loopsThroughChains(loops: Loops, chainCount: number): ThroughCha
   return { start, loop, sign };
 }
 
-function patternOf(loops: Loops, through: ThroughChains) {
+function patternOf(loops: Loops, through: ThroughChains): Pattern | null {
   const start = new Int32Array(loops.count + 1);
   const index: number[] = [];
   const met = new Int32Array(loops.count).fill(-1);
@@ -78,12 +98,13 @@ function patternOf(loops: Loops, through: ThroughChains) {
         index.push(other);
       }
     }
+    if (index.length > MOST_PATTERN) return null;
     start[l + 1] = index.length;
   }
   return { size: loops.count, start, index: Int32Array.from(index) };
 }
 
-function sharedChains(loops: Loops, through: ThroughChains, factors: SparseLdl): SharedChains {
+function sharedChains(through: ThroughChains, factors: SparseLdl): SharedChains {
   const slot: number[] = [];
   const chain: number[] = [];
   const sign: number[] = [];

@@ -19,7 +19,7 @@ const INCH_MM = 25.4;
 
 /** Commercial steel, Moody's chart; some tables round it to 0.046. */
 const STEEL = { roughnessMm: 0.045, roughnessSource: 'commercial steel, customary value of the Moody chart' };
-const DRAWN = { roughnessMm: 0.0015, roughnessSource: 'drawn copper, brass and plastic, Crane TP-410' };
+const DRAWN = { roughnessMm: 0.0015, roughnessSource: 'drawn copper, brass and plastic, Technical Paper 410 (TP-410)' };
 
 const ASME = 'ASME B36.10M';
 const EN_10255 = 'EN 10255 outside diameters with the walls of BS 1387';

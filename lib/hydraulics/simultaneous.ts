@@ -1,6 +1,6 @@
 import type { Loops } from './graph/loops';
 import type { DpControl } from './dp-control';
-import { LoopMatrix } from './loop-matrix';
+import { type LoopSolver, loopSolver } from './loop-matrix';
 import type { NetworkState } from './network-state';
 import { moveTowardsRoot, type RisingFunction } from './rising-root';
 
@@ -23,7 +23,7 @@ const MOST_FLOW_STEP_LS = 1e7;
  * function is least: no network diverges. Flows are L/s, heads m.
  */
 export class SimultaneousIteration {
-  private readonly matrix: LoopMatrix;
+  private readonly solver: LoopSolver;
   private readonly loopHead: Float64Array;
   private readonly loopStep: Float64Array;
   private readonly step: Float64Array;
@@ -41,7 +41,7 @@ export class SimultaneousIteration {
     private readonly control: DpControl | null,
   ) {
     const chains = state.chainFlow.length;
-    this.matrix = new LoopMatrix(loops, chains);
+    this.solver = loopSolver(loops, chains);
     this.loopHead = new Float64Array(loops.count);
     this.loopStep = new Float64Array(loops.count);
     this.step = new Float64Array(chains);
@@ -50,14 +50,13 @@ export class SimultaneousIteration {
 
   /** First flows: those of the network with every law made a straight line. */
   start(): void {
-    const { state, matrix, loopHead, loopStep, step } = this;
+    const { state, solver, loopHead, loopStep, step } = this;
     state.chainFlow.fill(0);
     state.linearize();
     this.sumLoopHeads();
-    matrix.assemble(state.chainSlope);
-    matrix.factors.factorize();
-    for (let l = 0; l < loopStep.length; l++) loopStep[l] = -loopHead[l];
-    matrix.factors.solve(loopStep, loopStep);
+    solver.assemble(state.chainSlope);
+    for (let l = 0; l < loopHead.length; l++) loopHead[l] = -loopHead[l];
+    solver.solve(loopHead, loopStep);
     this.spreadStep();
     state.chainFlow.set(step);
   }
@@ -67,18 +66,22 @@ export class SimultaneousIteration {
     const { state, control } = this;
     state.evaluate();
     let change = Infinity;
+    let shrinking = 1;
     for (let iterations = 0; ; iterations++) {
       const worst = this.sumLoopHeads();
       const off = control ? control.worstError(state) : 0;
       const closed = worst <= CLOSED_HEAD_M && off <= CLOSED_HEAD_M;
-      if (closed && (change <= SETTLED_FLOW_RATIO || worst === 0)) {
+      // Settled: the next change, if it shrinks again as the last one did, would be below the tolerance.
+      if (closed && (change * shrinking <= SETTLED_FLOW_RATIO || worst === 0)) {
         if (!control?.switchStates(state)) return { closed: true, iterations };
         state.evaluate();
         this.sumLoopHeads();
       }
       if (iterations === MOST_ITERATIONS || Number.isNaN(worst)) return { closed: false, iterations };
       this.findStep();
-      change = this.takeStep(worst + off);
+      const next = this.takeStep(worst + off);
+      shrinking = change < Infinity ? Math.min(1, next / change) : 1;
+      change = next;
     }
   }
 
@@ -98,12 +101,11 @@ export class SimultaneousIteration {
   }
 
   private findStep(): void {
-    const { state, matrix, loopHead, loopStep, control } = this;
-    matrix.assemble(state.chainSlope);
-    matrix.factors.factorize();
-    for (let l = 0; l < loopStep.length; l++) loopStep[l] = -loopHead[l];
-    matrix.factors.solve(loopStep, loopStep);
-    if (control) control.correct(state, this.loops, matrix.factors, loopStep);
+    const { state, solver, loopHead, loopStep, control } = this;
+    solver.assemble(state.chainSlope);
+    for (let l = 0; l < loopHead.length; l++) loopHead[l] = -loopHead[l];
+    solver.solve(loopHead, loopStep);
+    if (control) control.correct(state, this.loops, solver, loopStep);
     this.spreadStep();
   }
 

@@ -1,7 +1,7 @@
 /**
  * Loss coefficients of an equal-bore tee or wye from the ratio of the branch's flow to the combined flow (0 to 1),
  * all referred to the velocity of the combined leg: dp = K rho v²/2. A coefficient may be below 0: the faster stream drags the other.
- * Source: Crane Technical Paper 410 (2009 on), chapter 2, for a branch of the run's own bore.
+ * Source: Technical Paper 410 (2009 on), chapter 2, for a branch of the run's own bore.
  */
 export type TeeLoss = { run: number; branch: number };
 

@@ -1,9 +1,14 @@
+import type { LinkKind, LinkOf, NetworkLink } from '@/lib/hydraulics/types';
 import type { Drawing } from '@/lib/network/drawing';
 import document from '../reference/data/networks/two-terminals.json';
 import { drawing, pipe, pump, source, tee, unit, vessel } from './drawing';
 
-const linkOf = (id: string) => document.links.find((link) => link.id === id)!;
-const kvTableOf = (id: string) => linkOf(id).kvTable!;
+/** The document's link of this id and kind. */
+function linkOf<K extends LinkKind>(id: string, kind: K): LinkOf<K> {
+  const found = (document.links as NetworkLink[]).find((link) => link.id === id && link.kind === kind);
+  if (!found) throw new Error(`the document has no ${kind} ${id}`);
+  return found as LinkOf<K>;
+}
 
 /** Joins pieces that touch in the document but not on a drawing, where every two pieces have a pipe between them. */
 const joint = (id: string, from: string, to: string) => ({ ...pipe(id, from, to, 0.001, 300), minorK: 0 });
@@ -14,33 +19,34 @@ const joint = (id: string, from: string, to: string) => ({ ...pipe(id, from, to,
  */
 export function drawTwoTerminals(): Drawing {
   const main = (id: string, from: string, to: string) => {
-    const { lengthM, boreMm, roughnessMm, minorK = 0 } = linkOf(id);
-    return { ...pipe(id, from, to, lengthM!, boreMm!), roughnessMm: roughnessMm!, minorK };
+    const { lengthM, boreMm, roughnessMm, minorK = 0 } = linkOf(id, 'pipe');
+    return { ...pipe(id, from, to, lengthM, boreMm), roughnessMm, minorK };
   };
   const terminal = (tag: string, coil: string, valve: string) => {
     const made = unit(tag);
     if (made.kind !== 'terminalUnit') throw new Error('not a unit');
-    const { designFlowLs, designDropKpa } = linkOf(coil);
+    const { designFlowLs, designDropKpa } = linkOf(coil, 'terminal');
+    const { kvTable, setting = null } = linkOf(valve, 'balancingValve');
     return {
       ...made,
-      designFlowLs: designFlowLs!,
-      coilDropKpa: designDropKpa!,
+      designFlowLs,
+      coilDropKpa: designDropKpa,
       strainerKv: null,
       controlValve: null,
-      balancingValve: { name: valve, kvTable: kvTableOf(valve), settingTurns: linkOf(valve).setting ?? null, isLocked: false },
+      balancingValve: { name: valve, kvTable, settingTurns: setting, isLocked: false },
     };
   };
   const made = pump('P-1');
   if (made.kind !== 'pump') throw new Error('not a pump');
-  const { curve, speed = 1, nonReturn = true } = linkOf('PU');
+  const { curve, speed = 1, nonReturn = true } = linkOf('PU', 'pump');
   const plant = source('CH-1');
-  const { designFlowLs, designDropKpa, kv } = linkOf('CH') as { designFlowLs?: number; designDropKpa?: number; kv?: number };
+  const { designFlowLs = null, designDropKpa = null, kv } = linkOf('CH', 'resistance');
   if (plant.kind !== 'source' || kv !== undefined) throw new Error('the source is given by its design pair');
   return {
     ...drawing(
       [
-        { ...made, curve: curve!, speed, hasNonReturn: nonReturn },
-        { ...plant, designFlowLs: designFlowLs!, designDropKpa: designDropKpa! },
+        { ...made, curve, speed, hasNonReturn: nonReturn },
+        { ...plant, designFlowLs, designDropKpa },
         terminal('FC-1', 'T1', 'V1'),
         terminal('FC-2', 'T2', 'V2'),
         tee('S-1'),

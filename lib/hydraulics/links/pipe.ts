@@ -18,6 +18,7 @@ class PipeBatch implements LinkBatch {
   private readonly lengthInBores: Float64Array;
   private readonly roughness: Float64Array;
   private readonly minorK: Float64Array;
+  private readonly guess: Float64Array;
 
   constructor(
     links: PipeLink[],
@@ -30,10 +31,11 @@ class PipeBatch implements LinkBatch {
     this.lengthInBores = column((link) => (link.lengthM * 1000) / link.boreMm);
     this.roughness = column((link) => link.roughnessMm / link.boreMm);
     this.minorK = column((link) => link.minorK ?? 0);
+    this.guess = new Float64Array(links.length);
   }
 
   evaluate(flow: Float64Array, loss: Float64Array, slope: Float64Array, a: number, b: number): void {
-    const { first, perReynolds, velocityHead, lengthInBores, roughness, minorK } = this;
+    const { first, perReynolds, velocityHead, lengthInBores, roughness, minorK, guess } = this;
     for (let i = a; i < b; i++) {
       const k = i - first;
       const q = flow[i];
@@ -47,7 +49,8 @@ class PipeBatch implements LinkBatch {
         slope[i] = laminar + 2 * minor;
         continue;
       }
-      frictionOf(reynolds, roughness[k]);
+      frictionOf(reynolds, roughness[k], guess[k]);
+      guess[k] = friction.guess;
       const perFlow = velocityHead[k] * lengthInBores[k] * friction.factor * magnitude;
       loss[i] = (perFlow + minor) * q;
       slope[i] = perFlow * (2 + friction.logSlope) + 2 * minor;

@@ -25,7 +25,13 @@ export class SparseLdl {
   private readonly pivot: Float64Array;
   private readonly work: Float64Array;
 
-  constructor(pattern: Pattern, order: Int32Array = minimumDegree(pattern)) {
+  /** Null where L would have more than `mostFill` entries. */
+  static of(pattern: Pattern, mostFill: number): SparseLdl | null {
+    const factors = new SparseLdl(pattern, minimumDegree(pattern), mostFill);
+    return factors.fill > mostFill ? null : factors;
+  }
+
+  private constructor(pattern: Pattern, order: Int32Array, mostFill: number) {
     const n = pattern.size;
     this.size = n;
     this.order = order;
@@ -41,7 +47,7 @@ export class SparseLdl {
     const columnCount = new Int32Array(n);
     const path: number[] = [];
     this.pathStart = new Int32Array(n + 1);
-    for (let k = 0; k < n; k++) {
+    for (let k = 0; k < n && path.length <= mostFill; k++) {
       flag[k] = k;
       for (let p = this.rowStart[k]; p < this.rowStart[k + 1]; p++) {
         for (let i = this.rowColumn[p]; flag[i] !== k; i = parent[i]) {

@@ -1,0 +1,231 @@
+'use client';
+
+import 'reactflow/dist/base.css';
+import './canvas.css';
+import { useCallback, useMemo, useRef, useState, useSyncExternalStore, type DragEvent, type MouseEvent } from 'react';
+import ReactFlow, {
+  Background,
+  BackgroundVariant,
+  ConnectionMode,
+  SelectionMode,
+  useReactFlow,
+  type Connection,
+  type EdgeChange,
+  type NodeChange,
+  type ReactFlowInstance,
+} from 'reactflow';
+import type { Drawing, EquipmentKind, Port } from '@/lib/network/drawing';
+import { placePieces } from '@/lib/network/move-pieces';
+import { GRID, sizeOf } from '@/lib/network/piece-geometry';
+import { edgesOf, nodesOf, type Measured } from './canvas-elements';
+import { useCanvas, useDrawing, useEditor } from './editor-context';
+import { PieceNode } from './piece-node';
+import { PipeEdge } from './pipe-edge';
+import { PipePreview, ConnectionPreview } from './pipe-preview';
+import { dropOntoPipe, joinEnds, joinToPipe, ON_PIPE_PX, placePiece, pressWithPipeTool } from './placing';
+import { beginGesture } from './store';
+import { StoreyBands } from './storey-bands';
+
+const nodeTypes = { piece: PieceNode };
+const edgeTypes = { pipe: PipeEdge };
+/** Above this many pieces only those in view are in the page. */
+const MANY_PIECES = 300;
+
+export const draggedKind = 'application/x-equipment-kind';
+
+/** The drawing as React Flow shows it: a projection of the document, to which every gesture is written back. */
+export function Canvas() {
+  const editor = useEditor();
+  const { drawingStore, canvasStore, canEdit } = editor;
+  const view = useReactFlow();
+  const drawing = useDrawing((it) => it);
+  const tool = useCanvas((state) => state.tool);
+  const pieces = useCanvas((state) => state.pieces);
+  const pipes = useCanvas((state) => state.pipes);
+  const isCoarse = useCoarsePointer();
+  const [measured, setMeasured] = useState<Map<string, Measured>>(new Map());
+  const [isConnecting, setConnecting] = useState(false);
+  const endGesture = useRef<(() => void) | null>(null);
+  const started = useRef<{ id: string; port: Port; isDone: boolean } | null>(null);
+
+  const nodes = useMemo(() => nodesOf(drawing, pieces, measured), [drawing, pieces, measured]);
+  const edges = useMemo(() => edgesOf(drawing, pipes), [drawing, pipes]);
+  const within = () => ON_PIPE_PX / view.getZoom();
+  const pointOf = (event: { clientX: number; clientY: number }) => view.screenToFlowPosition({ x: event.clientX, y: event.clientY });
+
+  const changeNodes = useCallback(
+    (changes: NodeChange[]) => {
+      const places = new Map<string, { x: number; y: number }>();
+      const selected = new Set(canvasStore.getState().pieces);
+      let isSelection = false;
+      const sizes: [string, Measured][] = [];
+      const pieceById = new Map(drawingStore.getState().drawing.equipment.map((piece) => [piece.id, piece]));
+      for (const change of changes) {
+        if (change.type === 'dimensions' && change.dimensions) sizes.push([change.id, change.dimensions]);
+        else if (change.type === 'select') {
+          isSelection = true;
+          if (change.selected) selected.add(change.id);
+          else selected.delete(change.id);
+        } else if (change.type === 'position' && change.position) {
+          const piece = pieceById.get(change.id);
+          if (!piece) continue;
+          const { width, height } = sizeOf(piece);
+          places.set(change.id, { x: change.position.x + width / 2, y: change.position.y + height / 2 });
+        }
+      }
+      if (sizes.length) setMeasured((before) => new Map([...before, ...sizes]));
+      if (isSelection) canvasStore.setState({ pieces: selected, page: 'properties' });
+      if (places.size && canEdit) drawingStore.getState().change((before) => placePieces(before, places));
+    },
+    [canvasStore, drawingStore, canEdit],
+  );
+
+  const changeEdges = useCallback(
+    (changes: EdgeChange[]) => {
+      const selected = new Set(canvasStore.getState().pipes);
+      for (const change of changes) {
+        if (change.type !== 'select') continue;
+        if (change.selected) selected.add(change.id);
+        else selected.delete(change.id);
+      }
+      canvasStore.setState({ pipes: selected, page: 'properties' });
+    },
+    [canvasStore],
+  );
+
+  /** A box selects the pieces in it and the pipes among them, not those that lead out of it. */
+  const keepInnerPipes = () => {
+    const { pieces: chosen } = canvasStore.getState();
+    const inner = drawingStore.getState().drawing.pipes.filter(({ from, to }) => chosen.has(from.equipmentId) && chosen.has(to.equipmentId));
+    canvasStore.setState({ pipes: new Set(inner.map(({ id }) => id)) });
+  };
+
+  const beginDrag = () => {
+    endGesture.current ??= beginGesture(drawingStore);
+  };
+  const endDrag = () => {
+    const chosen = [...canvasStore.getState().pieces];
+    if (chosen.length === 1) dropOntoPipe(editor, chosen[0], within());
+    endGesture.current?.();
+    endGesture.current = null;
+  };
+
+  const pressCanvas = (event: MouseEvent, pieceId?: string) => {
+    if (!canEdit || tool === 'select') return;
+    if (tool === 'pipe') {
+      const port = (event.target as Element).closest<HTMLElement>('.piece-port')?.dataset.handleid as Port | undefined;
+      pressWithPipeTool(editor, pointOf(event), { pieceId, end: pieceId && port ? { equipmentId: pieceId, port } : undefined }, within());
+    } else if (!pieceId) placePiece(editor, tool, pointOf(event), within());
+  };
+
+  const connectEnds = ({ source, target, sourceHandle, targetHandle }: Connection) => {
+    if (!source || !target) return;
+    if (started.current) started.current.isDone = true;
+    joinEnds(editor, { equipmentId: source, port: sourceHandle as Port }, { equipmentId: target, port: targetHandle as Port });
+  };
+  const endConnecting = (event: globalThis.MouseEvent | TouchEvent) => {
+    const begun = started.current;
+    started.current = null;
+    setConnecting(false);
+    if (!begun || begun.isDone) return;
+    const at = 'changedTouches' in event ? event.changedTouches[0] : event;
+    const start = { equipmentId: begun.id, port: begun.port };
+    const overId = document.elementFromPoint(at.clientX, at.clientY)?.closest('.react-flow__node')?.getAttribute('data-id');
+    if (overId && overId !== begun.id) {
+      canvasStore.setState({ pipeStart: { end: start, bends: [] } });
+      pressWithPipeTool(editor, pointOf(at), { pieceId: overId }, within());
+      canvasStore.setState({ pipeStart: null });
+    } else joinToPipe(editor, start, pointOf(at), within());
+  };
+
+  const drop = (event: DragEvent) => {
+    const kind = event.dataTransfer.getData(draggedKind);
+    if (!kind || !canEdit) return;
+    event.preventDefault();
+    placePiece(editor, kind as EquipmentKind, pointOf(event), within());
+  };
+
+  return (
+    <div
+      className="drawing-canvas absolute inset-0"
+      data-can-edit={canEdit}
+      data-tool={tool}
+      data-is-connecting={isConnecting || tool === 'pipe'}
+      onDragOver={(event) => event.dataTransfer.types.includes(draggedKind) && event.preventDefault()}
+      onDrop={drop}
+    >
+      <ReactFlow
+        aria-label="Drawing of the loop"
+        nodes={nodes}
+        edges={edges}
+        nodeTypes={nodeTypes}
+        edgeTypes={edgeTypes}
+        onNodesChange={changeNodes}
+        onEdgesChange={changeEdges}
+        onNodeDragStart={beginDrag}
+        onNodeDragStop={endDrag}
+        onSelectionDragStart={beginDrag}
+        onSelectionDragStop={endDrag}
+        onSelectionEnd={keepInnerPipes}
+        onPaneClick={pressCanvas}
+        onNodeClick={(event, node) => pressCanvas(event, node.id)}
+        onEdgeClick={(event) => pressCanvas(event)}
+        onConnectStart={(_, { nodeId, handleId }) => {
+          started.current = nodeId ? { id: nodeId, port: handleId as Port, isDone: false } : null;
+          setConnecting(true);
+        }}
+        onConnect={connectEnds}
+        onConnectEnd={endConnecting}
+        onInit={(instance) => showAll(instance, drawing)}
+        connectionLineComponent={ConnectionPreview}
+        connectionMode={ConnectionMode.Loose}
+        connectOnClick={false}
+        connectionRadius={isCoarse ? 28 : 16}
+        nodesDraggable={canEdit && tool === 'select'}
+        nodesConnectable={canEdit}
+        elementsSelectable
+        selectionOnDrag={tool === 'select' && !isCoarse}
+        selectionMode={SelectionMode.Partial}
+        panOnDrag={isCoarse ? true : [1, 2]}
+        multiSelectionKeyCode={['Meta', 'Control', 'Shift']}
+        selectionKeyCode={null}
+        deleteKeyCode={null}
+        disableKeyboardA11y
+        snapToGrid
+        snapGrid={[GRID, GRID]}
+        minZoom={0.05}
+        maxZoom={3}
+        onlyRenderVisibleElements={nodes.length > MANY_PIECES}
+        zoomOnDoubleClick={false}
+        proOptions={{ hideAttribution: true }}
+      >
+        <Background variant={BackgroundVariant.Dots} gap={GRID * 4} size={1.5} color="var(--paper-dot)" />
+        <StoreyBands />
+        {tool === 'pipe' && <PipePreview />}
+      </ReactFlow>
+    </div>
+  );
+}
+
+/** At first the whole drawing, not closer than its natural size; an empty one shows its storeys. */
+function showAll(view: ReactFlowInstance, { equipment, storeys }: Drawing) {
+  if (equipment.length) view.fitView({ padding: 0.12, maxZoom: 1.25 });
+  else if (storeys.length) {
+    const top = Math.min(...storeys.map((it) => it.top));
+    view.fitBounds({ x: -80, y: top, width: 900, height: Math.max(...storeys.map((it) => it.top + it.height)) - top }, { padding: 0.02 });
+  }
+}
+
+const coarseQuery = '(pointer: coarse)';
+
+function useCoarsePointer(): boolean {
+  return useSyncExternalStore(
+    (listener) => {
+      const query = window.matchMedia(coarseQuery);
+      query.addEventListener('change', listener);
+      return () => query.removeEventListener('change', listener);
+    },
+    () => window.matchMedia(coarseQuery).matches,
+    () => false,
+  );
+}

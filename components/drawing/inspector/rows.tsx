@@ -1,0 +1,160 @@
+'use client';
+
+import { useId, type ReactNode } from 'react';
+import { useController, useFormContext } from 'react-hook-form';
+import { Figure } from '@/components/ui/figure';
+import { inputClass } from '@/components/ui/field';
+import { QuantityField } from '@/components/ui/quantity-field';
+import { classNames } from '@/components/ui/class-names';
+import type { Quantity } from '@/lib/units/quantities';
+import { useUnreadFields } from './commit-form';
+
+/** A line of the inspector: what it is on the left, its field or figure on the right. */
+export const rowClass = 'grid grid-cols-[minmax(0,1fr)_9.5rem] items-center gap-x-3 border-b py-1 text-sm pointer-coarse:py-1.5';
+const compact = 'h-8 pointer-coarse:h-11';
+const several = 'several';
+
+export const Section = ({ title, action, children }: { title: string; action?: ReactNode; children: ReactNode }) => (
+  <section className="mt-4">
+    <div className="flex items-baseline justify-between">
+      <h3 className="text-xs font-semibold text-quiet">{title}</h3>
+      {action}
+    </div>
+    {children}
+  </section>
+);
+
+interface FieldRowProps {
+  name: string;
+  label: string;
+  /** Several pieces are edited at once and differ here. */
+  isMixed?: boolean;
+}
+
+export function QuantityRow({ name, label, quantity, isMixed }: FieldRowProps & { quantity: Quantity }) {
+  const { field, fieldState } = useController({ name });
+  const unread = useUnreadFields();
+  return (
+    <div className={rowClass}>
+      <span aria-hidden>{label}</span>
+      <QuantityField
+        label={label}
+        isLabelHidden
+        quantity={quantity}
+        {...field}
+        onChange={(si, { message }) => {
+          if (message) unread.current.add(name);
+          else unread.current.delete(name);
+          field.onChange(si);
+        }}
+        placeholder={isMixed ? several : undefined}
+        error={fieldState.error?.message}
+        className="[&_input]:h-8 [&_input]:pr-[4.2rem] pointer-coarse:[&_input]:h-11"
+      />
+    </div>
+  );
+}
+
+/** A plain number: a count, a ratio, a loss coefficient, or per cent of a stored fraction. */
+export function NumberRow({ name, label, isMixed, isPercent, unit }: FieldRowProps & { isPercent?: boolean; unit?: string }) {
+  const id = useId();
+  const { register, formState } = useFormContext();
+  const error = formState.errors[name]?.message as string | undefined;
+  const scale = isPercent ? 100 : 1;
+  const { field } = useController({ name });
+  const shown = typeof field.value === 'number' && Number.isFinite(field.value) ? Number((field.value * scale).toPrecision(12)) : '';
+  return (
+    <div className={rowClass}>
+      <label htmlFor={id}>{label}</label>
+      <div className="relative">
+        <input
+          id={id}
+          type="number"
+          step="any"
+          placeholder={isMixed ? several : undefined}
+          aria-invalid={Boolean(error)}
+          aria-describedby={`${id}-about`}
+          className={classNames(inputClass, compact, 'figures text-right [appearance:textfield]', unit || isPercent ? 'pr-[4.2rem]' : '')}
+          key={String(shown)}
+          defaultValue={shown}
+          {...register(name, { setValueAs: (text: unknown) => (text === '' ? null : typeof text === 'number' ? text : Number(text) / scale) })}
+        />
+        <span className="pointer-events-none absolute inset-y-0 right-2.5 flex items-center text-sm text-quiet">{isPercent ? '%' : unit}</span>
+      </div>
+      <p id={`${id}-about`} role={error ? 'alert' : undefined} className="col-span-2 text-right text-xs text-high empty:hidden">
+        {error}
+      </p>
+    </div>
+  );
+}
+
+export function TextRow({ name, label, placeholder }: FieldRowProps & { placeholder?: string }) {
+  const id = useId();
+  const { register, formState } = useFormContext();
+  const error = formState.errors[name]?.message as string | undefined;
+  return (
+    <div className={rowClass}>
+      <label htmlFor={id}>{label}</label>
+      <input id={id} placeholder={placeholder} aria-invalid={Boolean(error)} autoComplete="off" className={classNames(inputClass, compact)} {...register(name)} />
+      {error && <p role="alert" className="col-span-2 text-right text-xs text-high">{error}</p>}
+    </div>
+  );
+}
+
+/** A choice is taken at once. */
+export function SelectRow({ name, label, options, isMixed }: FieldRowProps & { options: [value: string, words: string][] }) {
+  const id = useId();
+  const { field } = useController({ name });
+  return (
+    <div className={rowClass}>
+      <label htmlFor={id}>{label}</label>
+      <select
+        id={id}
+        className={classNames(inputClass, compact, 'px-1.5')}
+        {...field}
+        value={isMixed ? '' : field.value}
+        onChange={(event) => {
+          field.onChange(event);
+          event.target.form?.requestSubmit();
+        }}
+      >
+        {isMixed && <option value="">{several}</option>}
+        {options.map(([value, words]) => (
+          <option key={value} value={value}>
+            {words}
+          </option>
+        ))}
+      </select>
+    </div>
+  );
+}
+
+export function CheckRow({ name, label }: FieldRowProps) {
+  const id = useId();
+  const { field } = useController({ name });
+  return (
+    <div className={rowClass}>
+      <label htmlFor={id}>{label}</label>
+      <input
+        id={id}
+        type="checkbox"
+        className="size-5 justify-self-end accent-petrol"
+        checked={Boolean(field.value)}
+        onChange={(event) => {
+          field.onChange(event.target.checked);
+          event.target.form?.requestSubmit();
+        }}
+      />
+    </div>
+  );
+}
+
+/** A figure that was computed: nothing to type. */
+export function FigureRow({ label, quantity, si, children }: { label: string; quantity?: Quantity; si?: number | null; children?: ReactNode }) {
+  return (
+    <div className={classNames(rowClass, 'min-h-9')}>
+      <span>{label}</span>
+      <span className="pr-2.5 text-right">{quantity ? <Figure quantity={quantity} si={si} hasUnit /> : children}</span>
+    </div>
+  );
+}

@@ -1,0 +1,141 @@
+'use client';
+
+import { useId } from 'react';
+import { inputClass } from '@/components/ui/field';
+import { QuantityField } from '@/components/ui/quantity-field';
+import { classNames } from '@/components/ui/class-names';
+import type { ChosenValve } from '@/lib/network/drawing';
+import { chosenValve, genericValves, genericValveSource } from '@/lib/network/valve-families';
+import { PointTable } from './point-table';
+import { rowClass } from './rows';
+
+interface ValveChoiceProps {
+  valve: ChosenValve;
+  /** The chosen units have different valves. */
+  isMixed?: boolean;
+  disabled: boolean;
+  onCommit: (change: Partial<ChosenValve>) => void;
+}
+
+const OWN = 'own';
+
+/** Which balancing valve: a generic one or one's own table of settings and Kv, where it stands, and whether it stays so. */
+export function ValveChoice({ valve, isMixed, disabled, onCommit }: ValveChoiceProps) {
+  const id = useId();
+  const generic = genericValves.find(({ name }) => name === valve.name);
+  const first = valve.kvTable[0]?.setting;
+  const last = valve.kvTable.at(-1)?.setting;
+  const choose = (name: string) => {
+    const chosen = genericValves.find((it) => it.name === name);
+    if (chosen) onCommit({ name: chosen.name, kvTable: chosen.kvTable, settingTurns: chosenValve(chosen).settingTurns });
+    else onCommit({ name: 'Own valve' });
+  };
+  return (
+    <>
+      <div className={rowClass}>
+        <label htmlFor={`${id}-valve`}>Valve</label>
+        <select
+          id={`${id}-valve`}
+          disabled={disabled}
+          className={classNames(inputClass, 'h-8 px-1.5 pointer-coarse:h-11')}
+          value={isMixed ? '' : generic ? generic.name : valve.name ? OWN : ''}
+          onChange={(event) => choose(event.target.value)}
+        >
+          <option value="" disabled>
+            {isMixed ? 'several' : 'choose…'}
+          </option>
+          {genericValves.map(({ name, nominal, kvs }) => (
+            <option key={name} value={name}>
+              Generic {nominal}, Kvs {kvs}
+            </option>
+          ))}
+          <option value={OWN}>Own table</option>
+        </select>
+      </div>
+      {!isMixed && generic && <p className="pt-1 text-xs text-quiet">{genericValveSource}</p>}
+      {!isMixed && !generic && valve.name !== '' && (
+        <>
+          <div className={rowClass}>
+            <label htmlFor={`${id}-name`}>Name</label>
+            <input
+              id={`${id}-name`}
+              key={valve.name}
+              defaultValue={valve.name}
+              disabled={disabled}
+              maxLength={200}
+              onBlur={(event) => event.target.value !== valve.name && onCommit({ name: event.target.value.trim() || 'Own valve' })}
+              className={classNames(inputClass, 'h-8')}
+            />
+          </div>
+          <PointTable
+            label="Settings and Kv"
+            columns={[
+              { key: 'setting', label: 'Setting', quantity: 'setting' },
+              { key: 'kv', label: 'Kv', quantity: 'valveCoefficient' },
+            ]}
+            points={valve.kvTable}
+            disabled={disabled}
+            onCommit={(points) => onCommit({ kvTable: points as ChosenValve['kvTable'] })}
+          />
+        </>
+      )}
+      {(valve.kvTable.length > 1 || isMixed) && (
+        <>
+          <StandsAt key={`${valve.settingTurns}`} valve={valve} range={first === undefined ? '' : `${first} to ${last}`} disabled={disabled} onCommit={onCommit} />
+          <div className={rowClass}>
+            <label htmlFor={`${id}-locked`}>Stays so in the balance</label>
+            <input
+              id={`${id}-locked`}
+              type="checkbox"
+              disabled={disabled}
+              checked={valve.isLocked}
+              onChange={(event) => onCommit({ isLocked: event.target.checked })}
+              className="size-5 justify-self-end accent-petrol"
+            />
+          </div>
+        </>
+      )}
+    </>
+  );
+}
+
+function StandsAt({ valve, range, disabled, onCommit }: ValveChoiceProps & { range: string }) {
+  const label = 'Stands at';
+  return (
+    <div className={rowClass}>
+      <span aria-hidden>
+        {label} <span className="text-xs text-quiet">{range}</span>
+      </span>
+      <SettingField label={label} valve={valve} disabled={disabled} onCommit={onCommit} />
+    </div>
+  );
+}
+
+function SettingField({ label, valve, disabled, onCommit }: ValveChoiceProps & { label: string }) {
+  const typed = { si: valve.settingTurns };
+  const take = () => {
+    if (typed.si !== valve.settingTurns) onCommit({ settingTurns: typed.si });
+  };
+  return (
+    <form
+      onSubmit={(event) => {
+        event.preventDefault();
+        take();
+      }}
+    >
+      <QuantityField
+        label={label}
+        isLabelHidden
+        quantity="setting"
+        value={valve.settingTurns}
+        placeholder="open"
+        disabled={disabled}
+        onChange={(si, { message }) => {
+          if (!message) typed.si = si;
+        }}
+        onBlur={take}
+        className="[&_input]:h-8 [&_input]:pr-[4.2rem] pointer-coarse:[&_input]:h-11"
+      />
+    </form>
+  );
+}
