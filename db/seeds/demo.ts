@@ -1,9 +1,10 @@
 import type { Knex } from 'knex';
 import { v7 as uuidv7 } from 'uuid';
-import { emptyDrawing } from '@/lib/network/drawing';
 import { hashPassword } from '@/lib/server/auth/passwords';
 import { defaultTolerances } from '@/lib/api/tolerances';
 import signIns from '../demo-sign-ins.json';
+import { chilledLoop, drawDemo, hotLoop } from './demo-drawing';
+import { sizeDemo } from './size-demo';
 
 const people = [
   { who: 'owen', name: 'Owen Pasko', isAdministrator: true, role: 'owner' },
@@ -64,14 +65,14 @@ export async function loadDemo(knex: Knex): Promise<boolean> {
         source: rule.source,
       });
     }
-    for (const [name, service] of [['CHW-1', 'chilled'], ['HTG-1', 'hot']] as const) {
+    for (const [name, loop] of [['CHW-1', chilledLoop], ['HTG-1', hotLoop]] as const) {
       const loopId = uuidv7();
-      await trx('loops').insert({ organization_id: organizationId, id: loopId, project_id: projectId, name, service, created_by: mara });
+      await trx('loops').insert({ organization_id: organizationId, id: loopId, project_id: projectId, name, service: loop.service, created_by: mara });
       await trx('drafts').insert({
         organization_id: organizationId,
         loop_id: loopId,
         version: 1,
-        drawing: JSON.stringify(emptyDrawing(service)),
+        drawing: JSON.stringify(sizeDemo(drawDemo(loop))),
         saved_by: mara,
       });
     }

@@ -42,9 +42,12 @@ export interface Signature {
 }
 
 export interface ReportStation extends Station {
-  /** The entry that counts: the newest under this revision that no other puts right. */
+  /** The entry that counts: the newest that no other puts right, taken for the design flow that is still asked. */
   reading: Reading | null;
 }
+
+/** A round with entries. When it was closed is left out: submitting closes it, and must not change what is signed. */
+export type ReportRound = Omit<Round, 'closedAt'>;
 
 /** An entry with the station's name in the revision that it was taken under. */
 export interface ReportReading extends Reading {
@@ -60,7 +63,7 @@ export interface ReportContent {
   fluid: { medium: string; massFraction: number; supplyC: number; returnC: number; densityKgM3: number; viscosityMPaS: number };
   tolerances: ToleranceRule[];
   stations: ReportStation[];
-  rounds: Round[];
+  rounds: ReportRound[];
   instruments: Instrument[];
   /** Every entry of every revision, oldest first, those too that were put right later: nothing measured is left out. */
   readings: ReportReading[];

@@ -1,4 +1,6 @@
 import { fluidProperties } from '@/lib/hydraulics/fluids';
+import { GRAVITY_MS2 } from '@/lib/hydraulics/links/law';
+import { hydraulicPowerKw } from '@/lib/hydraulics/pump-duty';
 import type { DrawingFluid, DrawingPipe } from './drawing';
 import type { PipeSolution } from './drawing-figures';
 import { sizeSource } from './pipe-choice';
@@ -129,5 +131,21 @@ export function designPairWorking(title: string, pair: { designFlowLs: number; d
     ],
     result: `${digits(designDropKpa * (flowLs / designFlowLs) ** 2)} kPa`,
     source: 'Turbulent loss, quadratic in flow, through the design point.',
+  };
+}
+
+/** Power that a pump gives to the water, kW. */
+export function pumpWorking(flowLs: number, headM: number, densityKgM3: number): Working {
+  return {
+    title: 'Hydraulic power',
+    formula: 'P = ρ · g · Q · H',
+    numbers: `${digits(densityKgM3)} · ${GRAVITY_MS2} · ${digits(flowLs / 1000)} · ${digits(headM)} / 1000`,
+    inputs: [
+      { name: 'Flow Q', value: `${digits(flowLs)} L/s` },
+      { name: 'Head H on the curve at this flow', value: `${digits(headM)} m` },
+      { name: 'Density ρ', value: `${digits(densityKgM3)} kg/m³` },
+    ],
+    result: `${digits(hydraulicPowerKw(flowLs, headM, densityKgM3))} kW`,
+    source: 'Head: the curve as typed, a smooth monotone line through its points; other speeds by the affinity laws.',
   };
 }

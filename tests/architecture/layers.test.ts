@@ -8,7 +8,8 @@ import { describe, expect, it, vi } from 'vitest';
 vi.setConfig({ testTimeout: 60_000 });
 
 const root = fileURLToPath(new URL('../..', import.meta.url));
-const eslint = new ESLint({ cwd: root });
+const tested = ['import/no-restricted-paths', '@typescript-eslint/no-explicit-any'];
+const eslint = new ESLint({ cwd: root, ruleFilter: ({ ruleId }) => tested.includes(ruleId) });
 
 /** Pairs written out here and not read from the configuration: an arrow that is dropped there must fail here. */
 const forbidden: [importer: string, imported: string][] = [
@@ -96,7 +97,7 @@ describe('the arrows of the architecture', () => {
 
 describe('other rules of the house', () => {
   it('two modules that import each other are refused', async () => {
-    const unguarded = new ESLint({ cwd: root, ignore: false });
+    const unguarded = new ESLint({ cwd: root, ignore: false, ruleFilter: ({ ruleId }) => ruleId === 'import/no-cycle' });
     const results = await unguarded.lintFiles(['tests/architecture/cycle/*.ts']);
     expect(results.map(({ messages }) => messages.map(({ ruleId }) => ruleId))).toEqual([['import/no-cycle'], ['import/no-cycle']]);
   });

@@ -1,11 +1,12 @@
 'use client';
 
-import { useId, type ReactNode } from 'react';
+import { useId, useState, type ReactNode } from 'react';
 import { useController, useFormContext } from 'react-hook-form';
 import { Figure } from '@/components/ui/figure';
 import { inputClass } from '@/components/ui/field';
 import { QuantityField } from '@/components/ui/quantity-field';
 import { classNames } from '@/components/ui/class-names';
+import { readNumber } from '@/lib/units/number-text';
 import type { Quantity } from '@/lib/units/quantities';
 import { useUnreadFields } from './commit-form';
 
@@ -58,32 +59,45 @@ export function QuantityRow({ name, label, quantity, isMixed }: FieldRowProps & 
 /** A plain number: a count, a ratio, a loss coefficient, or per cent of a stored fraction. */
 export function NumberRow({ name, label, isMixed, isPercent, unit }: FieldRowProps & { isPercent?: boolean; unit?: string }) {
   const id = useId();
-  const { register, formState } = useFormContext();
-  const error = formState.errors[name]?.message as string | undefined;
+  const { field, fieldState } = useController({ name });
+  const unread = useUnreadFields();
+  const [typed, setTyped] = useState<{ text: string; value: number | null; message: string | null } | null>(null);
   const scale = isPercent ? 100 : 1;
-  const { field } = useController({ name });
-  const shown = typeof field.value === 'number' && Number.isFinite(field.value) ? Number((field.value * scale).toPrecision(12)) : '';
+  const isOwn = typed !== null && Object.is(typed.value, field.value);
+  const shown = field.value === null ? '' : String(Number((Number(field.value) * scale).toPrecision(12)));
+  const error = (isOwn ? typed.message : null) ?? fieldState.error?.message;
+  const take = (text: string) => {
+    const read = text.trim() === '' ? null : readNumber(text);
+    const value = read?.ok ? read.value / scale : null;
+    const message = read && !read.ok ? read.message : null;
+    if (message) unread.current.add(name);
+    else unread.current.delete(name);
+    setTyped({ text, value, message });
+    field.onChange(value);
+  };
   return (
     <div className={rowClass}>
       <label htmlFor={id}>{label}</label>
       <div className="relative">
         <input
           id={id}
-          type="number"
-          step="any"
+          inputMode="decimal"
+          autoComplete="off"
           placeholder={isMixed ? several : undefined}
           aria-invalid={Boolean(error)}
-          aria-describedby={`${id}-about`}
-          className={classNames(inputClass, compact, 'figures text-right [appearance:textfield]', unit || isPercent ? 'pr-[4.2rem]' : '')}
-          key={String(shown)}
-          defaultValue={shown}
-          {...register(name, { setValueAs: (text: unknown) => (text === '' ? null : typeof text === 'number' ? text : Number(text) / scale) })}
+          aria-describedby={error ? `${id}-error` : undefined}
+          className={classNames(inputClass, compact, 'figures text-right', unit || isPercent ? 'pr-[4.2rem]' : '')}
+          {...field}
+          value={isOwn ? typed.text : shown}
+          onChange={(event) => take(event.target.value)}
         />
         <span className="pointer-events-none absolute inset-y-0 right-2.5 flex items-center text-sm text-quiet">{isPercent ? '%' : unit}</span>
       </div>
-      <p id={`${id}-about`} role={error ? 'alert' : undefined} className="col-span-2 text-right text-xs text-high empty:hidden">
-        {error}
-      </p>
+      {error && (
+        <p id={`${id}-error`} role="alert" className="col-span-2 text-right text-xs text-high">
+          ▴ {error}
+        </p>
+      )}
     </div>
   );
 }

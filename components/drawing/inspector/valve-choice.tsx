@@ -1,6 +1,6 @@
 'use client';
 
-import { useId } from 'react';
+import { useId, useState } from 'react';
 import { inputClass } from '@/components/ui/field';
 import { QuantityField } from '@/components/ui/quantity-field';
 import { classNames } from '@/components/ui/class-names';
@@ -112,9 +112,9 @@ function StandsAt({ valve, range, disabled, onCommit }: ValveChoiceProps & { ran
 }
 
 function SettingField({ label, valve, disabled, onCommit }: ValveChoiceProps & { label: string }) {
-  const typed = { si: valve.settingTurns };
+  const [typed, setTyped] = useState<{ si: number | null; isUnread: boolean }>({ si: valve.settingTurns, isUnread: false });
   const take = () => {
-    if (typed.si !== valve.settingTurns) onCommit({ settingTurns: typed.si });
+    if (!typed.isUnread && typed.si !== valve.settingTurns) onCommit({ settingTurns: typed.si });
   };
   return (
     <form
@@ -127,12 +127,10 @@ function SettingField({ label, valve, disabled, onCommit }: ValveChoiceProps & {
         label={label}
         isLabelHidden
         quantity="setting"
-        value={valve.settingTurns}
+        value={typed.si}
         placeholder="open"
         disabled={disabled}
-        onChange={(si, { message }) => {
-          if (!message) typed.si = si;
-        }}
+        onChange={(si, { message }) => setTyped({ si, isUnread: message !== null })}
         onBlur={take}
         className="[&_input]:h-8 [&_input]:pr-[4.2rem] pointer-coarse:[&_input]:h-11"
       />

@@ -1,6 +1,7 @@
 import { createHash, randomBytes } from 'node:crypto';
 import type { Knex } from 'knex';
 import { v7 as uuidv7 } from 'uuid';
+import { db } from '@/db/knex';
 import { publicLink } from '../mail/send-mail';
 import { Problem } from '../problem';
 
@@ -48,8 +49,8 @@ export interface OpenLink {
  * The person of a link that still works, or null. The token comes before any organisation is known, so this is the one query
  * that finds its organisation by what it looks for.
  */
-export async function findOpenLink(connection: Knex, token: string): Promise<OpenLink | null> {
-  const row = await connection('password_links')
+export async function findOpenLink(token: string): Promise<OpenLink | null> {
+  const row = await db()('password_links')
     .join('people', (join) =>
       join.on('people.organization_id', 'password_links.organization_id').on('people.id', 'password_links.person_id'),
     )

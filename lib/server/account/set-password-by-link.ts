@@ -7,7 +7,7 @@ import { setPassword } from './set-password';
 
 /** Sets the password of the person that a link was made for; the link then works no more. Answers whom to sign in. */
 export async function setPasswordByLink({ token, newPassword }: { token: string; newPassword: string }): Promise<{ email: string }> {
-  const link = await findOpenLink(db(), token);
+  const link = await findOpenLink(token);
   if (!link) throw linkUsed();
   const person = { organizationId: link.organizationId, id: link.personId, name: link.name };
   const passwordHash = await hashPassword(newPassword);

@@ -1,5 +1,5 @@
 import { db } from '@/db/knex';
-import type { ActivityPage } from '@/lib/api/activity';
+import type { ActivityPage, ActivityRow } from '@/lib/api/activity';
 import type { Person } from '../auth/person';
 
 interface Asked {
@@ -47,5 +47,5 @@ export async function readActivity(person: Person, { projectId, before, limit = 
       loopName: 'loops.name',
       at: 'activity.at',
     });
-  return { rows: rows.slice(0, limit).map((row) => ({ ...row, at: row.at.toISOString() })), hasMore: rows.length > limit };
+  return { rows: rows.slice(0, limit).map((row: ActivityRow & { at: Date }) => ({ ...row, at: row.at.toISOString() })), hasMore: rows.length > limit };
 }

@@ -1,9 +1,18 @@
 import type { NextAuthOptions } from 'next-auth';
 import Credentials from 'next-auth/providers/credentials';
 import { z } from 'zod';
+import { log } from '../log';
+import { Problem } from '../problem';
 import { checkPassword } from './check-password';
 
 const credentialsSchema = z.object({ email: z.string().max(320), password: z.string().max(1000) });
+
+/** What is thrown here is shown on the sign-in page, so only a refusal made for people goes on as it is. */
+function tellRefusalOnly(error: unknown): never {
+  if (error instanceof Problem) throw error;
+  log.error({ err: error }, 'unexpected error while signing in');
+  throw new Error('Something went wrong on the server. Try again.');
+}
 
 /**
  * E-mail and password, session in a signed cookie (HttpOnly, SameSite=Lax, Secure whenever the public address is https).
@@ -18,7 +27,7 @@ export const authOptions: NextAuthOptions = {
       credentials: { email: {}, password: {} },
       authorize: async (input) => {
         const parsed = credentialsSchema.safeParse(input);
-        return parsed.success ? checkPassword(parsed.data) : null;
+        return parsed.success ? checkPassword(parsed.data).catch(tellRefusalOnly) : null;
       },
     }),
   ],

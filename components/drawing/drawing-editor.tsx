@@ -1,0 +1,114 @@
+'use client';
+
+import { useRouter } from 'next/navigation';
+import { useMemo, useState } from 'react';
+import { ReactFlowProvider } from 'reactflow';
+import { useStore } from 'zustand';
+import { Button } from '@/components/ui/button';
+import type { DraftBody, LoopDetail } from '@/lib/api/loops';
+import { useSolution } from '@/lib/client/solutions';
+import type { Drawing } from '@/lib/network/drawing';
+import { faultsOf } from '@/lib/network/drawing-faults';
+import { figuresOfDrawing } from '@/lib/network/drawing-figures';
+import { same } from '@/lib/network/merge-drawings';
+import { createCanvasStore } from './canvas-state';
+import { ConflictDialog } from './dialogs/conflict-dialog';
+import { IssueDialog } from './dialogs/issue-dialog';
+import { EditorContext, ResultsContext, useCanvas, type Editor, type Results } from './editor-context';
+import { savingWords, StatusBar } from './status-bar';
+import { createDrawingStore } from './store';
+import { useDraftSaver } from './use-draft-saver';
+import { Workspace } from './workspace';
+
+interface DrawingEditorProps {
+  loop: LoopDetail;
+  personId: string;
+  loaded: DraftBody;
+  /** The drawing of the newest revision, to tell whether the draft differs. */
+  issued: { number: number; drawing: Drawing } | null;
+}
+
+/** The drawing as its designer works on it: drawn, solved and saved as one goes. */
+export function DrawingEditor(props: DrawingEditorProps) {
+  const [editor] = useState<Editor>(() => ({
+    drawingStore: createDrawingStore(props.loaded.drawing),
+    canvasStore: createCanvasStore(lastPipeOf(props.loaded.drawing)),
+    canEdit: true,
+    band: props.loop.band,
+  }));
+  return (
+    <EditorContext value={editor}>
+      <ReactFlowProvider>
+        <Editing {...props} editor={editor} />
+      </ReactFlowProvider>
+    </EditorContext>
+  );
+}
+
+function Editing({ loop, personId, loaded, issued, editor }: DrawingEditorProps & { editor: Editor }) {
+  const { drawingStore, canvasStore } = editor;
+  const router = useRouter();
+  const drawing = useStore(drawingStore, (state) => state.drawing);
+  const open = useCanvas((state) => state.open);
+  const { saver, state: saving } = useDraftSaver(drawingStore, { loopId: loop.id, personId, loaded });
+  const { body, isOld, error } = useSolution(loop.id, drawing);
+  const basis = useCanvas((state) => state.basis);
+  const results = useMemo<Results>(() => {
+    const solved = body?.solved ?? null;
+    return {
+      solved,
+      figures: solved && figuresOfDrawing(drawing, solved, basis),
+      faults: body && !isOld ? body.faults : faultsOf(drawing),
+      isOld,
+      index: new Set(solved?.indexCircuit.map(({ id }) => id)),
+    };
+  }, [body, drawing, basis, isOld]);
+  const isAhead = useMemo(() => issued === null || !same(issued.drawing, drawing), [issued, drawing]);
+  const revisionWords = issued === null ? 'Never issued' : isAhead ? `Draft, differs from revision ${issued.number}` : `Same as revision ${issued.number}`;
+
+  const saveFirst = async () => ((await saver.saveNow()) ? saver.version : null);
+  const resolve = (merged: Drawing) => {
+    if (saving.kind !== 'conflict') return;
+    saver.resolve(merged, saving.theirs);
+    drawingStore.setState({ drawing: merged });
+    // Steps from before would take the other person's changes away again.
+    drawingStore.temporal.getState().clear();
+  };
+  return (
+    <ResultsContext value={results}>
+      <Workspace
+        hasBothBases={Boolean(body?.solved?.balance)}
+        bar={
+          <>
+            <span className="hidden text-sm text-quiet sm:inline">{revisionWords}</span>
+            <Button look="primary" size="small" disabled={!isAhead} onClick={() => canvasStore.setState({ open: 'issue' })}>
+              Issue revision
+            </Button>
+          </>
+        }
+        status={<StatusBar saving={savingWords(saving)} solveError={error?.message ?? null} revision={revisionWords} />}
+      />
+      {saving.kind === 'conflict' && <ConflictDialog base={saving.base} mine={drawing} theirs={saving.theirs} onResolve={resolve} />}
+      {open === 'issue' && (
+        <IssueDialog
+          loopId={loop.id}
+          nextNumber={(issued?.number ?? 0) + 1}
+          saveFirst={saveFirst}
+          onClose={() => canvasStore.setState({ open: null })}
+          onIssued={() => {
+            canvasStore.setState({ open: null });
+            router.refresh();
+          }}
+        />
+      )}
+    </ResultsContext>
+  );
+}
+
+/** New pipes go on from the last one of the drawing. */
+function lastPipeOf({ pipes }: Drawing): Parameters<typeof createCanvasStore>[0] {
+  const last = pipes.at(-1);
+  if (!last) return {};
+  const { lengthM, series, nominal, boreMm, roughnessMm, minorK } = last;
+  return { newPipe: { lengthM, series, nominal, boreMm, roughnessMm, minorK } };
+}

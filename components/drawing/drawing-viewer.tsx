@@ -1,0 +1,60 @@
+'use client';
+
+import { useMemo, useState } from 'react';
+import { ReactFlowProvider } from 'reactflow';
+import type { StripBand } from '@/lib/api/flow-strip';
+import type { RevisionBody } from '@/lib/api/loops';
+import type { Drawing } from '@/lib/network/drawing';
+import { drawingToDocument, placeOfLink } from '@/lib/network/drawing-to-document';
+import { figuresOfDrawing } from '@/lib/network/drawing-figures';
+import { circuitThrough } from '@/lib/network/index-circuit';
+import { createCanvasStore } from './canvas-state';
+import { EditorContext, noResults, ResultsContext, type Editor, type Results } from './editor-context';
+import { StatusBar } from './status-bar';
+import { createDrawingStore } from './store';
+import { Workspace } from './workspace';
+
+interface DrawingViewerProps {
+  drawing: Drawing;
+  band: StripBand;
+  /** The revision whose drawing this is; null for a draft that was never issued, which has no results. */
+  revision: Pick<RevisionBody, 'number' | 'issuedAt' | 'issuedBy' | 'balance'> | null;
+}
+
+/** An issued drawing with its results, to be read and not changed. */
+export function DrawingViewer({ drawing, band, revision }: DrawingViewerProps) {
+  const [editor] = useState<Editor>(() => ({
+    drawingStore: createDrawingStore(drawing),
+    canvasStore: createCanvasStore({ basis: 'balanced' }),
+    canEdit: false,
+    band,
+  }));
+  const results = useMemo(() => (revision ? resultsOfRevision(drawing, revision.balance) : noResults), [drawing, revision]);
+  const issued = revision && `Revision ${revision.number}, issued by ${revision.issuedBy} on ${new Date(revision.issuedAt).toLocaleDateString('en-GB', { day: 'numeric', month: 'long', year: 'numeric' })}`;
+  return (
+    <EditorContext value={editor}>
+      <ResultsContext value={results}>
+        <ReactFlowProvider>
+          <Workspace
+            hasBothBases={false}
+            bar={<span className="px-2 text-sm text-quiet">{issued ?? 'Draft, never issued'}</span>}
+            status={<StatusBar saving={null} solveError={null} revision={revision ? 'To be read only' : 'Draft, to be read only'} />}
+          />
+        </ReactFlowProvider>
+      </ResultsContext>
+    </EditorContext>
+  );
+}
+
+function resultsOfRevision(drawing: Drawing, balance: RevisionBody['balance']): Results {
+  const { document, faults } = drawingToDocument(drawing, '');
+  const links = document && balance.indexTerminal ? circuitThrough(document, balance.solution, balance.indexTerminal) : [];
+  const indexCircuit = links.map((id) => placeOfLink(drawing, id));
+  return {
+    solved: { solve: null, balance, balanceMissing: null, indexCircuit, solveMs: 0 },
+    figures: figuresOfDrawing(drawing, { solve: null, balance }, 'balanced'),
+    faults,
+    isOld: false,
+    index: new Set(indexCircuit.map(({ id }) => id)),
+  };
+}

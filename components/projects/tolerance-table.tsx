@@ -1,0 +1,41 @@
+import type { StationKind, ToleranceRule } from '@/lib/api/projects';
+
+export const stationKindWords: Record<StationKind, string> = { terminal: 'Terminals', branch: 'Branches', pump: 'Pump' };
+
+const signed = (percent: number): string => (percent === 0 ? '0' : `${percent > 0 ? '+' : '−'}${Math.abs(percent)}`);
+
+/** The agreed bands around design flow, with where they come from. */
+export function ToleranceTable({ tolerances }: { tolerances: ToleranceRule[] }) {
+  const sources = [...new Set(tolerances.map(({ source }) => source))];
+  return (
+    <>
+      <table className="w-full">
+        <thead>
+          <tr className="border-b text-left text-sm text-quiet">
+            <th className="py-1.5 font-normal">Of design flow</th>
+            <th className="py-1.5 text-right font-normal">below, %</th>
+            <th className="py-1.5 text-right font-normal">above, %</th>
+          </tr>
+        </thead>
+        <tbody className="divide-y">
+          {tolerances.map(({ stationKind, lowerPercent, upperPercent, source }) => (
+            <tr key={stationKind}>
+              <th scope="row" className="py-1.5 text-left font-normal">
+                {stationKindWords[stationKind]}
+                {sources.length > 1 && <span className="ml-1 align-super text-xs text-quiet">{sources.indexOf(source) + 1}</span>}
+              </th>
+              <td className="figures text-right">{signed(lowerPercent)}</td>
+              <td className="figures text-right">{signed(upperPercent)}</td>
+            </tr>
+          ))}
+        </tbody>
+      </table>
+      {sources.map((source, i) => (
+        <p key={source} className="mt-2 text-sm text-quiet">
+          {sources.length > 1 && `${i + 1} `}
+          {source}.
+        </p>
+      ))}
+    </>
+  );
+}
