@@ -48,7 +48,7 @@ const config = [
   ...nextTypescript,
   {
     files: ['**/*.{ts,tsx,mjs}'],
-    settings: { 'import/resolver': { typescript: { alwaysTryTypes: true, project: 'tsconfig.json' } } },
+    settings: { 'import/ignore': ['node_modules'], 'import/resolver': { typescript: { alwaysTryTypes: true, project: 'tsconfig.json' } } },
     rules: {
       '@typescript-eslint/no-unused-vars': ['error', { argsIgnorePattern: '^_', varsIgnorePattern: '^_' }],
       'import/no-cycle': ['error', { ignoreExternal: true }],

@@ -6,7 +6,7 @@ import { Mark } from '@/components/shell/mark';
 export default function AccountLayout({ children }: { children: ReactNode }) {
   return (
     <div className="grid min-h-dvh lg:grid-cols-[1fr_30rem]">
-      <aside className="hidden flex-col justify-between p-10 lg:flex">
+      <aside className="hidden flex-col justify-between gap-10 p-10 lg:flex">
         <Mark />
         <LoopOrnament />
         <p className="max-w-md text-quiet">Designed, balanced on site and handed over: one record from the first line on the drawing to the owner’s signed report.</p>

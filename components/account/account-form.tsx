@@ -64,7 +64,7 @@ export function AccountForm({ name, theme, units }: AccountFormProps) {
       <fieldset className="grid gap-x-4 gap-y-3 border-t pt-4 sm:grid-cols-2">
         <legend className="sr-only">Units</legend>
         <p className="text-sm text-quiet sm:col-span-2">
-          The units you read and type in. Whatever you choose, a value may carry its own: <span className="figures">12 gpm</span>, <span className="figures">3,4 m³/h</span>.
+          The units you read and type in. Whatever you choose, a value may carry its own: “12 gpm”, “3,4 m³/h”.
         </p>
         {choosable.map((quantity) => (
           <SelectField key={quantity} label={quantityWords[quantity]} {...form.register(`units.${quantity}`)}>

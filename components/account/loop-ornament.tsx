@@ -3,7 +3,7 @@ const circuits = [0, 1, 2, 3, 4, 5];
 /** Beside the forms of the signed-out pages: a supply main, a return main, and the circuits between them. Ornament only. */
 export function LoopOrnament() {
   return (
-    <svg viewBox="0 0 620 420" aria-hidden className="w-full max-w-2xl" fill="none" strokeWidth={1.5}>
+    <svg viewBox="40 55 550 290" aria-hidden className="mx-auto w-full max-w-4xl" fill="none" strokeWidth={1.5}>
       <path d="M70 320V80H560" stroke="var(--petrol)" strokeWidth={2.5} />
       <path d="M560 320H70" stroke="var(--petrol)" strokeWidth={2.5} strokeDasharray="9 6" />
       <path d="M300 73l14 7-14 7z" fill="var(--petrol)" />

@@ -14,7 +14,8 @@ const signInSchema = z.object({ email: emailSchema, password: z.string().min(1, 
 
 /** Signs in and goes where the person was going; the address stays when the password was wrong. */
 export function SignInForm({ next }: { next: string }) {
-  const form = useForm({ resolver: zodResolver(signInSchema), defaultValues: { email: '', password: '' } });
+  // No default values: what was typed before the page came alive is then taken over and not wiped.
+  const form = useForm({ resolver: zodResolver(signInSchema) });
   const { errors, isSubmitting, isSubmitSuccessful } = form.formState;
 
   const submit = form.handleSubmit(async (values) => {
@@ -24,13 +25,14 @@ export function SignInForm({ next }: { next: string }) {
       window.location.assign(next);
       return;
     }
-    form.resetField('password');
+    form.setValue('password', '');
     form.setError('root', { message: refusalOf(answer?.error) });
     form.setFocus('password');
   });
 
   return (
-    <form onSubmit={submit} noValidate className="flex flex-col gap-4">
+    // `post`, so that a press before the page came alive never puts the password into the address.
+    <form onSubmit={submit} method="post" noValidate className="flex flex-col gap-4">
       <TextField label="E-mail" type="email" autoComplete="username" autoFocus error={errors.email?.message} {...form.register('email')} />
       <TextField label="Password" type="password" autoComplete="current-password" error={errors.password?.message} {...form.register('password')} />
       <FormTrouble message={errors.root?.message} />

@@ -9,7 +9,7 @@ export function ActivityList({ rows, hasProject }: { rows: ActivityRow[]; hasPro
       {rows.map((row) => (
         <li key={row.id} className="flex flex-wrap items-baseline justify-between gap-x-6 px-4 py-2.5">
           <p className="min-w-0">
-            <span className="font-semibold">{row.personName}</span> {row.verb} {row.subject}
+            <span className="font-semibold">{row.personName}</span> {row.verb} <Subject row={row} />
             <Place row={row} hasProject={hasProject} />
           </p>
           <Moment at={row.at} className="figures text-xs whitespace-nowrap text-quiet" />
@@ -19,18 +19,29 @@ export function ActivityList({ rows, hasProject }: { rows: ActivityRow[]; hasPro
   );
 }
 
+const namesLoop = ({ subject, loopName }: ActivityRow) => Boolean(loopName && subject.includes(loopName));
+
+/** What was acted on; leads to the loop or project that it names. */
+function Subject({ row }: { row: ActivityRow }) {
+  const { projectId, loopId, projectName, subject } = row;
+  if (projectId && loopId && namesLoop(row)) return <Link href={`/projects/${projectId}/loops/${loopId}`}>{subject}</Link>;
+  if (projectId && subject === projectName) return <Link href={`/projects/${projectId}`}>{subject}</Link>;
+  return subject;
+}
+
+/** Where it was, as far as the subject does not say so. */
 function Place({ row, hasProject }: { row: ActivityRow; hasProject?: boolean }) {
   const { projectId, projectName, loopId, loopName, subject } = row;
   if (!projectId || !projectName) return null;
-  const isLoopNamed = loopId && loopName && loopName !== subject;
-  const isProjectNamed = hasProject && projectName !== subject;
-  if (!isLoopNamed && !isProjectNamed) return null;
+  const loop = loopId && loopName && !namesLoop(row) && <Link href={`/projects/${projectId}/loops/${loopId}`}>{loopName}</Link>;
+  const project = hasProject && projectName !== subject && <Link href={`/projects/${projectId}`}>{projectName}</Link>;
+  if (!loop && !project) return null;
   return (
     <span className="text-quiet">
       {' · '}
-      {isProjectNamed && <Link href={`/projects/${projectId}`}>{projectName}</Link>}
-      {isLoopNamed && isProjectNamed && ' / '}
-      {isLoopNamed && <Link href={`/projects/${projectId}/loops/${loopId}`}>{loopName}</Link>}
+      {project}
+      {loop && project && ' / '}
+      {loop}
     </span>
   );
 }

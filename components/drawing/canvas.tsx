@@ -2,7 +2,7 @@
 
 import 'reactflow/dist/base.css';
 import './canvas.css';
-import { useCallback, useMemo, useRef, useState, useSyncExternalStore, type DragEvent, type MouseEvent } from 'react';
+import { useCallback, useMemo, useRef, useState, useSyncExternalStore, type CSSProperties, type DragEvent, type MouseEvent } from 'react';
 import ReactFlow, {
   Background,
   BackgroundVariant,
@@ -12,11 +12,11 @@ import ReactFlow, {
   type Connection,
   type EdgeChange,
   type NodeChange,
-  type ReactFlowInstance,
 } from 'reactflow';
-import type { Drawing, EquipmentKind, Port } from '@/lib/network/drawing';
+import type { EquipmentKind, Port } from '@/lib/network/drawing';
 import { placePieces } from '@/lib/network/move-pieces';
 import { GRID, sizeOf } from '@/lib/network/piece-geometry';
+import { useGrowth } from './detail';
 import { edgesOf, nodesOf, type Measured } from './canvas-elements';
 import { useCanvas, useDrawing, useEditor } from './editor-context';
 import { PieceNode } from './piece-node';
@@ -24,6 +24,7 @@ import { PipeEdge } from './pipe-edge';
 import { PipePreview, ConnectionPreview } from './pipe-preview';
 import { dropOntoPipe, joinEnds, joinToPipe, ON_PIPE_PX, placePiece, pressWithPipeTool } from './placing';
 import { beginGesture } from './store';
+import { showAll } from './show-all';
 import { StoreyBands } from './storey-bands';
 
 const nodeTypes = { piece: PieceNode };
@@ -43,6 +44,7 @@ export function Canvas() {
   const pieces = useCanvas((state) => state.pieces);
   const pipes = useCanvas((state) => state.pipes);
   const isCoarse = useCoarsePointer();
+  const growth = useGrowth();
   const [measured, setMeasured] = useState<Map<string, Measured>>(new Map());
   const [isConnecting, setConnecting] = useState(false);
   const endGesture = useRef<(() => void) | null>(null);
@@ -148,6 +150,7 @@ export function Canvas() {
   return (
     <div
       className="drawing-canvas absolute inset-0"
+      style={{ '--words': growth.words, '--lines': growth.lines } as CSSProperties}
       data-can-edit={canEdit}
       data-tool={tool}
       data-is-connecting={isConnecting || tool === 'pipe'}
@@ -199,21 +202,12 @@ export function Canvas() {
         zoomOnDoubleClick={false}
         proOptions={{ hideAttribution: true }}
       >
-        <Background variant={BackgroundVariant.Dots} gap={GRID * 4} size={1.5} color="var(--paper-dot)" />
+        <Background variant={BackgroundVariant.Dots} gap={GRID * 4} size={2.5} color="var(--paper-dot)" />
         <StoreyBands />
         {tool === 'pipe' && <PipePreview />}
       </ReactFlow>
     </div>
   );
-}
-
-/** At first the whole drawing, not closer than its natural size; an empty one shows its storeys. */
-function showAll(view: ReactFlowInstance, { equipment, storeys }: Drawing) {
-  if (equipment.length) view.fitView({ padding: 0.12, maxZoom: 1.25 });
-  else if (storeys.length) {
-    const top = Math.min(...storeys.map((it) => it.top));
-    view.fitBounds({ x: -80, y: top, width: 900, height: Math.max(...storeys.map((it) => it.top + it.height)) - top }, { padding: 0.02 });
-  }
 }
 
 const coarseQuery = '(pointer: coarse)';

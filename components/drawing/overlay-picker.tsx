@@ -81,4 +81,4 @@ export function Legend({ hasBothBases }: { hasBothBases: boolean }) {
   );
 }
 
-const basisItem = 'min-h-7 flex-1 px-2 font-semibold hover:bg-well data-[state=on]:bg-well pointer-coarse:min-h-11';
+const basisItem = 'min-h-7 flex-1 px-2 font-semibold whitespace-nowrap hover:bg-well data-[state=on]:bg-well pointer-coarse:min-h-11';

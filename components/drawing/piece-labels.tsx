@@ -30,11 +30,11 @@ export function PieceLabels({ piece, detail, isFaulty, isSelected }: PieceLabels
       <>
         <Column className={isUpright ? classNames('top-1/2 -translate-y-1/2', side) : 'top-full left-1/2 mt-0.5 -translate-x-1/2 items-center'}>
           {figure}
-          {(detail === 'near' || isFaulty) && <span className="text-[11px] text-quiet">{fault}{tag}</span>}
+          {(detail === 'near' || isFaulty) && <span className="text-[calc(11px*var(--words))] text-quiet">{fault}{tag}</span>}
         </Column>
         <IndexName piece={piece} />
         {detail === 'near' && (
-          <Column className={isUpright ? classNames('top-[calc(50%+25px)]', piece.isMirrored ? 'right-1/2 mr-3.5' : 'left-1/2 ml-3.5') : 'top-1/2 left-full ml-1'}>
+          <Column className={isUpright ? classNames('top-[calc(50%+33px)] -translate-y-1/2', piece.isMirrored ? 'right-1/2 mr-3.5' : 'left-1/2 ml-3.5') : 'top-1/2 left-full ml-1'}>
             <SettingFigure piece={piece} />
           </Column>
         )}
@@ -45,14 +45,14 @@ export function PieceLabels({ piece, detail, isFaulty, isSelected }: PieceLabels
   const isBrass = piece.kind === 'balancingValve';
   return isUpright ? (
     <Column className="top-1/2 left-full ml-1 -translate-y-1/2">
-      <span className={classNames('text-xs font-semibold', isBrass && 'text-brass')}>{fault}{tag} <SettingFigure piece={piece} /></span>
+      <span className={classNames('text-[calc(12px*var(--words))] font-semibold', isBrass && 'text-brass')}>{fault}{tag} <SettingFigure piece={piece} /></span>
       {figure}
     </Column>
   ) : (
     <>
       {tag && (
         <Column className={classNames('left-1/2 -translate-x-1/2', piece.kind === 'tee' ? 'bottom-full' : isBrass ? 'top-[calc(50%+10px)]' : 'bottom-[calc(50%+17px)]')}>
-          <span className={classNames('text-xs font-semibold', isBrass && 'text-brass')}>{fault}{tag} <SettingFigure piece={piece} /></span>
+          <span className={classNames('text-[calc(12px*var(--words))] font-semibold', isBrass && 'text-brass')}>{fault}{tag} <SettingFigure piece={piece} /></span>
         </Column>
       )}
       <Column className={classNames('left-1/2 -translate-x-1/2 items-center', isBrass ? 'bottom-[calc(50%+12px)]' : 'top-[calc(50%+17px)]')}>{figure}</Column>
@@ -67,7 +67,7 @@ const Column = ({ className, children }: { className: string; children: ReactNod
 function IndexName({ piece }: { piece: Equipment }) {
   const { figures } = useResults();
   if (!figures?.pieces.get(piece.id)?.isIndex) return null;
-  return <Column className="bottom-full left-1/2 mb-6 -translate-x-1/2 text-[11px] font-semibold text-petrol">index circuit</Column>;
+  return <Column className="top-1.5 left-full ml-1 text-[calc(11px*var(--words))] font-semibold text-petrol">index circuit</Column>;
 }
 
 /** The setting that the balance found; where it has none, the one that the valve stands at. */
@@ -76,7 +76,7 @@ function SettingFigure({ piece }: { piece: Equipment }) {
   const chosen = piece.kind === 'balancingValve' ? piece.valve : piece.kind === 'terminalUnit' ? piece.balancingValve : null;
   if (!chosen) return null;
   const setting = figures?.pieces.get(piece.id)?.valve?.setting ?? chosen.settingTurns;
-  return setting === null || setting === undefined ? null : <span className="figures text-xs text-brass">{setting.toFixed(1)}</span>;
+  return setting === null || setting === undefined ? null : <span className="figures ml-1 text-[calc(12px*var(--words))] text-brass">{setting.toFixed(1)}</span>;
 }
 
 function OverlayFigure({ piece }: { piece: Equipment }) {
@@ -85,22 +85,22 @@ function OverlayFigure({ piece }: { piece: Equipment }) {
   const overlay = useCanvas((state) => state.overlay);
   const solution = figures?.pieces.get(piece.id);
   if (!solution || piece.kind === 'expansionVessel') return null;
-  const figureClass = 'text-[13px] font-bold';
+  const figureClass = 'text-[calc(13px*var(--words))] font-bold';
   if (piece.kind === 'pump' && solution.pump && overlay !== 'pressure') {
     return (
-      <span className="text-xs text-quiet">
+      <span className="text-[calc(12px*var(--words))] text-quiet">
         <Figure quantity="flow" si={solution.flowLs} hasUnit />, <Figure quantity="head" si={solution.pump.headM} hasUnit />
       </span>
     );
   }
-  if (overlay === 'pressure') return solution.inletKpa === null ? null : <Figure quantity="pressure" si={solution.inletKpa} className="text-[11px]" />;
+  if (overlay === 'pressure') return solution.inletKpa === null ? null : <Figure quantity="pressure" si={solution.inletKpa} className="text-[calc(11px*var(--words))]" />;
   if (piece.kind === 'tee' || solution.flowLs === null) return null;
   if (overlay === 'percent') {
     if (piece.kind !== 'terminalUnit' || solution.percentOfDesign === null) return null;
     const verdict = verdictOf(solution.percentOfDesign, band);
-    return <span className={classNames('figures', figureClass, tones[verdict])}><span className="text-[9px]">{signs[verdict]}</span> {solution.percentOfDesign.toFixed(0)}</span>;
+    return <span className={classNames('figures', figureClass, tones[verdict])}><span className="font-sans font-normal">{signs[verdict]}</span> {solution.percentOfDesign.toFixed(0)}</span>;
   }
-  if (overlay === 'flow') return <Figure quantity="flow" si={Math.abs(solution.flowLs)} className={piece.kind === 'terminalUnit' ? figureClass : 'text-[11px]'} />;
-  if (overlay === 'drop') return <Figure quantity="pressure" si={Math.abs(solution.dropKpa ?? 0)} className={piece.kind === 'terminalUnit' ? figureClass : 'text-[11px]'} />;
+  if (overlay === 'flow') return <Figure quantity="flow" si={Math.abs(solution.flowLs)} className={piece.kind === 'terminalUnit' ? figureClass : 'text-[calc(11px*var(--words))]'} />;
+  if (overlay === 'drop') return <Figure quantity="pressure" si={Math.abs(solution.dropKpa ?? 0)} className={piece.kind === 'terminalUnit' ? figureClass : 'text-[calc(11px*var(--words))]'} />;
   return null;
 }

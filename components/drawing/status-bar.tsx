@@ -8,14 +8,14 @@ import { useEditor, useResults } from './editor-context';
 /** The line at the foot of the page: what the solver, the faults and the saving have to say. */
 export function StatusBar({ saving, solveError, revision }: { saving: string | null; solveError: string | null; revision: string }) {
   const { canvasStore } = useEditor();
-  const { faults, solved } = useResults();
+  const { faults, solved, isOld } = useResults();
   const zoom = useStore(({ transform }) => Math.round(transform[2] * 100));
   const errors = faults.filter(({ severity }) => severity === 'error').length;
   const warnings = faults.length - errors;
   const parts = [errors && `${errors} ${errors === 1 ? 'fault' : 'faults'}`, warnings && `${warnings} ${warnings === 1 ? 'warning' : 'warnings'}`].filter(Boolean).join(', ');
   return (
     <footer className="flex min-h-8 flex-wrap items-center gap-x-5 border-t bg-sheet px-4 py-1 text-xs">
-      <span role="status">{solved || solveError ? <SolveWords error={solveError} /> : errors ? 'Not solved: faults stand in the drawing' : 'Nothing to solve yet'}</span>
+      <span role="status">{solved || solveError ? <SolveWords error={solveError} /> : errors ? 'Not solved: faults stand in the drawing' : isOld ? '○ Solving…' : 'Nothing to solve yet'}</span>
       {faults.length > 0 && (
         <button
           type="button"
@@ -38,7 +38,7 @@ function SolveWords({ error }: { error: string | null }) {
   if (!solved?.solve) return <>Settings as issued</>;
   const { converged, iterations, residuals } = solved.solve;
   if (!converged) return <span className="text-high">▴ No converged solution after {iterations} iterations, worst loop {digits(residuals.loopPa)} Pa</span>;
-  const words = `Solved in ${solved.solveMs < 10 ? solved.solveMs.toFixed(1) : solved.solveMs.toFixed(0)} ms, ${iterations} iterations, worst loop ${digits(residuals.loopPa)} Pa`;
+  const words = `Solved in ${solved.solveMs < 10 ? solved.solveMs.toFixed(1) : solved.solveMs.toFixed(0)} ms, ${iterations} iterations, worst loop ${Number(residuals.loopPa.toPrecision(2))} Pa`;
   return <>{isOld ? `○ Solving… (before: ${words})` : `● ${words}`}</>;
 }
 

@@ -11,6 +11,7 @@ import { removeFromDrawing } from '@/lib/network/remove-pieces';
 import { overlays, selectOnly } from './canvas-state';
 import { useEditor, type Editor } from './editor-context';
 import { placePiece } from './placing';
+import { showAll } from './show-all';
 import type { ActionId } from './shortcuts';
 
 type Actions = Record<ActionId, () => void>;
@@ -28,7 +29,7 @@ type ViewAction = 'find' | 'fit' | 'zoom-in' | 'zoom-out' | 'next-overlay' | 'sh
 function viewing({ canvasStore, drawingStore }: Editor, view: ReactFlowInstance): Pick<Actions, ViewAction> {
   return {
     find: () => canvasStore.setState({ open: 'find' }),
-    fit: () => void view.fitView({ padding: 0.12, maxZoom: 1.25, duration: 200 }),
+    fit: () => showAll(view, drawingStore.getState().drawing, 200),
     'zoom-in': () => void view.zoomIn({ duration: 120 }),
     'zoom-out': () => void view.zoomOut({ duration: 120 }),
     'next-overlay': () => canvasStore.setState(({ overlay }) => ({ overlay: overlays[(overlays.indexOf(overlay) + 1) % overlays.length] })),

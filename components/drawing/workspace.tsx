@@ -33,7 +33,7 @@ export function Workspace({ bar, status, hasBothBases }: WorkspaceProps) {
         {canEdit && <ToolRail />}
         <div className="relative min-w-0 flex-1">
           <Canvas />
-          <div className="pointer-events-none absolute inset-x-3 top-3 z-10 flex flex-wrap-reverse items-start justify-between gap-2 *:pointer-events-auto">
+          <div className="pointer-events-none absolute inset-x-3 top-3 z-10 flex items-start justify-between gap-2 max-lg:flex-col-reverse *:pointer-events-auto">
             <Legend hasBothBases={hasBothBases} />
             <OverlayPicker />
           </div>

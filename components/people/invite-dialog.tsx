@@ -33,7 +33,7 @@ export function InviteDialog() {
 
 function InviteForm({ onDone }: { onDone: () => void }) {
   const router = useRouter();
-  const form = useForm({
+  const form = useForm<InvitePerson>({
     resolver: zodResolver(invitePersonSchema),
     defaultValues: { name: '', email: '', isAdministrator: false, defaultRole: 'technician' },
   });

@@ -17,7 +17,7 @@ export function PeopleList({ people, mayManage }: { people: PersonRow[]; mayMana
               {roleWords[person.defaultRole]}
               {person.isAdministrator && <span className="text-brass"> · Administrator</span>}
             </p>
-            <p className="text-sm text-quiet">{standing(person)}</p>
+            <p className="text-sm text-quiet sm:text-right">{standing(person)}</p>
           </div>
           {mayManage && <PersonActions person={person} />}
         </li>
@@ -28,5 +28,5 @@ export function PeopleList({ people, mayManage }: { people: PersonRow[]; mayMana
 
 function standing({ isActive, hasPassword }: PersonRow): string {
   if (!isActive) return 'Shut out';
-  return hasPassword ? 'Active' : 'Invited, not yet here';
+  return hasPassword ? '' : 'Invited, not yet here';
 }

@@ -6,18 +6,32 @@ import { FlowStrip } from '../strip/flow-strip';
 
 const serviceWords = { chilled: 'Chilled water', hot: 'Hot water' } as const;
 
-/** One loop of a project: name, service, flow strip, where it stands. */
-export function LoopRow({ projectId, loop, band }: { projectId: string; loop: LoopSummary; band: StripBand }) {
+export function LoopList({ projectId, loops, band }: { projectId: string; loops: LoopSummary[]; band: StripBand }) {
   return (
-    <li className="relative grid grid-cols-[minmax(0,1fr)_auto] items-center gap-x-4 gap-y-1 px-4 py-2.5 hover:bg-well sm:grid-cols-[minmax(0,1fr)_10rem_11rem]">
+    <ul className="divide-y">
+      {loops.map((loop) => (
+        <LoopRow key={loop.id} projectId={projectId} loop={loop} band={band} />
+      ))}
+    </ul>
+  );
+}
+
+/** One loop of a project: name, service, flow strip, where it stands. The whole row leads to it. */
+function LoopRow({ projectId, loop, band }: { projectId: string; loop: LoopSummary; band: StripBand }) {
+  return (
+    <li className="relative grid grid-cols-[minmax(0,1fr)_auto] items-center gap-x-5 gap-y-1.5 px-4 py-2.5 hover:bg-well md:grid-cols-[minmax(0,1fr)_auto_10rem_11rem]">
       <span className="min-w-0 truncate">
         <Link href={`/projects/${projectId}/loops/${loop.id}`} className="font-semibold text-ink no-underline after:absolute after:inset-0">
           {loop.name}
         </Link>
-        <span className="ml-3 text-sm text-quiet">{serviceWords[loop.service]}</span>
+        <span className="ml-3 hidden text-sm text-quiet sm:inline">{serviceWords[loop.service]}</span>
       </span>
-      <span className="order-last col-span-2 sm:order-none sm:col-span-1">
+      <span className="order-last text-right text-sm text-quiet md:order-none">
+        <Within ticks={loop.strip} />
+      </span>
+      <span className="order-3 md:order-none">
         <FlowStrip ticks={loop.strip} band={band} size="row" />
+        {loop.strip.length === 0 && <span className="text-sm text-quiet sm:hidden">{serviceWords[loop.service]}</span>}
       </span>
       <span className="text-right text-sm whitespace-nowrap text-quiet">
         {stateWords[loop.state]}
@@ -31,12 +45,12 @@ export function LoopRow({ projectId, loop, band }: { projectId: string; loop: Lo
   );
 }
 
-export function LoopList({ projectId, loops, band }: { projectId: string; loops: LoopSummary[]; band: StripBand }) {
+function Within({ ticks }: { ticks: LoopSummary['strip'] }) {
+  if (ticks.length === 0) return null;
+  const within = ticks.filter(({ verdict }) => verdict === 'within').length;
   return (
-    <ul className="divide-y">
-      {loops.map((loop) => (
-        <LoopRow key={loop.id} projectId={projectId} loop={loop} band={band} />
-      ))}
-    </ul>
+    <>
+      <span className="figures text-ink">{within}</span> of <span className="figures">{ticks.length}</span> within
+    </>
   );
 }

@@ -14,7 +14,7 @@ import { Button } from '../ui/button';
 import { Dialog } from '../ui/dialog';
 import { TextField } from '../ui/field';
 import { FormTrouble } from '../ui/form-trouble';
-import { stationKindWords } from './tolerance-table';
+import { inOrder, stationKindWords } from './tolerance-table';
 
 const formSchema = z.object({ tolerances: z.array(toleranceRuleSchema) });
 type FormValues = z.infer<typeof formSchema>;
@@ -41,7 +41,7 @@ export function ToleranceSettings({ projectId, tolerances }: { projectId: string
 
 function ToleranceForm({ projectId, tolerances, onDone }: { projectId: string; tolerances: ToleranceRule[]; onDone: () => void }) {
   const router = useRouter();
-  const form = useForm<FormValues>({ resolver: zodResolver(formSchema), defaultValues: { tolerances } });
+  const form = useForm<FormValues>({ resolver: zodResolver(formSchema), defaultValues: { tolerances: inOrder(tolerances) } });
   const save = useMutation({
     mutationFn: (values: FormValues) => send('PATCH', `/api/projects/${projectId}`, values),
     onSuccess: () => {
@@ -55,7 +55,7 @@ function ToleranceForm({ projectId, tolerances, onDone }: { projectId: string; t
   const percent = { type: 'number', step: 'any', inputMode: 'decimal', className: 'figures text-right' } as const;
   return (
     <form onSubmit={form.handleSubmit((values) => save.mutate(values))} noValidate className="flex flex-col gap-5">
-      {tolerances.map(({ stationKind }, i) => (
+      {inOrder(tolerances).map(({ stationKind }, i) => (
         <fieldset key={stationKind} className="grid grid-cols-2 gap-3">
           <legend className="mb-1 font-semibold">{stationKindWords[stationKind]}</legend>
           <TextField label="Below" hint="%" {...percent} error={errors.tolerances?.[i]?.lowerPercent?.message} {...form.register(`tolerances.${i}.lowerPercent`, { valueAsNumber: true })} />

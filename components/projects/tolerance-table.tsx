@@ -1,6 +1,10 @@
-import type { StationKind, ToleranceRule } from '@/lib/api/projects';
+import { stationKinds, type StationKind, type ToleranceRule } from '@/lib/api/projects';
 
 export const stationKindWords: Record<StationKind, string> = { terminal: 'Terminals', branch: 'Branches', pump: 'Pump' };
+
+/** In the order that the trade names them. */
+export const inOrder = (rules: ToleranceRule[]): ToleranceRule[] =>
+  [...rules].sort((a, b) => stationKinds.indexOf(a.stationKind) - stationKinds.indexOf(b.stationKind));
 
 const signed = (percent: number): string => (percent === 0 ? '0' : `${percent > 0 ? '+' : '−'}${Math.abs(percent)}`);
 
@@ -18,7 +22,7 @@ export function ToleranceTable({ tolerances }: { tolerances: ToleranceRule[] }) 
           </tr>
         </thead>
         <tbody className="divide-y">
-          {tolerances.map(({ stationKind, lowerPercent, upperPercent, source }) => (
+          {inOrder(tolerances).map(({ stationKind, lowerPercent, upperPercent, source }) => (
             <tr key={stationKind}>
               <th scope="row" className="py-1.5 text-left font-normal">
                 {stationKindWords[stationKind]}

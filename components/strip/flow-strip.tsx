@@ -23,25 +23,27 @@ export function FlowStrip({ ticks, band, size = 'header' }: { ticks: StripTick[]
   const says = measured.length
     ? `${within} of ${ticks.length} terminals within ${band.lowerPercent} to ${band.upperPercent} per cent of design, ${ticks.length - measured.length} not measured`
     : `${ticks.length} terminals, none measured yet`;
+  // Across in parts of the width, so that a strip as wide as its page keeps its marks round.
+  const across = (x: number) => `${(100 * x) / width}%`;
   return (
-    <svg role="img" aria-label={`Flow strip: ${says}`} viewBox={`0 0 ${width} ${height}`} width={size === 'page' ? '100%' : width} height={height} preserveAspectRatio="none" className="block max-w-full">
-      <rect x={0} width={width} y={strip.bandTop} height={strip.bandBottom - strip.bandTop} fill="var(--rule)" opacity={0.55} />
-      <line x1={0} x2={width} y1={strip.designY} y2={strip.designY} stroke="var(--brass)" strokeWidth={1} />
+    <svg role="img" aria-label={`Flow strip: ${says}`} width={size === 'page' ? '100%' : width} height={height} className="block max-w-full">
+      <rect x={0} width="100%" y={strip.bandTop} height={strip.bandBottom - strip.bandTop} fill="var(--rule)" opacity={0.55} />
+      <line x1={0} x2="100%" y1={strip.designY} y2={strip.designY} stroke="var(--brass)" strokeWidth={1} />
       {strip.ticks.map(({ x, y, tick }) => {
         if (y === null || tick.verdict === null || tick.percentOfDesign === null) {
-          return <line key={tick.tag} x1={x} x2={x} y1={strip.designY - 2.5} y2={strip.designY + 2.5} stroke="var(--quiet)" strokeWidth={1} />;
+          return <line key={tick.tag} x1={across(x)} x2={across(x)} y1={strip.designY - 2.5} y2={strip.designY + 2.5} stroke="var(--quiet)" strokeWidth={1} />;
         }
         const colour = colours[tick.verdict];
         return (
-          <g key={tick.tag} stroke={colour} fill={colour}>
+          <svg key={tick.tag} x={across(x)} y={0} overflow="visible" stroke={colour} fill={colour}>
             <title>{`${tick.tag}: ${tick.percentOfDesign.toFixed(1)} % of design`}</title>
-            <line x1={x} x2={x} y1={strip.designY} y2={y} strokeWidth={stroke} />
+            <line y1={strip.designY} y2={y} strokeWidth={stroke} />
             {tick.verdict === 'within' ? (
-              <circle cx={x} cy={y} r={mark} stroke="none" />
+              <circle cy={y} r={mark} stroke="none" />
             ) : (
-              <path stroke="none" d={tick.verdict === 'high' ? `M${x - mark} ${y + mark}H${x + mark}L${x} ${y - mark}Z` : `M${x - mark} ${y - mark}H${x + mark}L${x} ${y + mark}Z`} />
+              <path stroke="none" d={tick.verdict === 'high' ? `M${-mark} ${y + mark}H${mark}L0 ${y - mark}Z` : `M${-mark} ${y - mark}H${mark}L0 ${y + mark}Z`} />
             )}
-          </g>
+          </svg>
         );
       })}
     </svg>

@@ -8,17 +8,22 @@ import type { ToleranceRule } from './projects';
 export const meanings = ['submitted', 'reviewed', 'returned', 'accepted'] as const;
 export type Meaning = (typeof meanings)[number];
 
+/** What the signer types. */
+export const signNoteSchema = z.object({ note: z.string().trim().max(2000) });
+export const returnNoteSchema = z.object({ note: signNoteSchema.shape.note.min(1, 'Say what has to be put right.') });
+
 /** `contentSha256` is that of the report as the signer saw it: nobody signs what they have not seen. */
-const signed = { note: z.string().trim().max(2000), contentSha256: z.string().regex(/^[0-9a-f]{64}$/, 'The SHA-256 of the report that you saw.') };
+const signedSchema = signNoteSchema.extend({ contentSha256: z.string().regex(/^[0-9a-f]{64}$/, 'The SHA-256 of the report that you saw.') });
 
 /** POST /api/loops/:loopId/submission */
-export const submitReportSchema = z.object(signed);
+export const submitReportSchema = signedSchema;
 /** POST /api/loops/:loopId/review */
-export const reviewReportSchema = z
-  .object({ meaning: z.enum(['reviewed', 'returned']), ...signed })
-  .refine((it) => it.meaning !== 'returned' || it.note !== '', { path: ['note'], message: 'Say what has to be put right.' });
+export const reviewReportSchema = z.discriminatedUnion('meaning', [
+  signedSchema.extend({ meaning: z.literal('reviewed') }),
+  signedSchema.extend({ meaning: z.literal('returned'), ...returnNoteSchema.shape }),
+]);
 /** POST /api/loops/:loopId/acceptance */
-export const acceptReportSchema = z.object(signed);
+export const acceptReportSchema = signedSchema;
 
 /** What a signer puts under a report, whichever of the three it is. */
 export interface Sign {

@@ -1,17 +1,23 @@
-import type { StripBand, StripTick } from '@/lib/api/flow-strip';
-
 /** The strip shows at most this far from design; a tick beyond stops at the edge. Per cent of design. */
 export const stripReach = { lowest: 40, highest: 160 };
 
-export interface StripGeometry {
+interface Tick {
+  percentOfDesign: number | null;
+}
+
+export interface StripGeometry<T extends Tick> {
   designY: number;
   bandTop: number;
   bandBottom: number;
-  ticks: { x: number; y: number | null; tick: StripTick }[];
+  ticks: { x: number; y: number | null; tick: T }[];
 }
 
 /** Where everything of a flow strip lies in a box of this size: shared by the screen, the workbook and the printed report. */
-export function stripGeometry(ticks: StripTick[], band: StripBand, box: { width: number; height: number; margin: number }): StripGeometry {
+export function stripGeometry<T extends Tick>(
+  ticks: T[],
+  band: { lowerPercent: number; upperPercent: number },
+  box: { width: number; height: number; margin: number },
+): StripGeometry<T> {
   const { width, height, margin } = box;
   const yOf = (percent: number) => {
     const kept = Math.min(Math.max(percent, stripReach.lowest), stripReach.highest);

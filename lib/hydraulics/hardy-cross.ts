@@ -6,8 +6,8 @@ import { moveTowardsRoot, type RisingFunction } from './rising-root';
 import type { LoopCorrection } from './types';
 
 /** Evaluations of a chain after which the sweeps are given up, and sweeps at most. */
-const MOST_EVALUATIONS = 2e7;
-const MOST_SWEEPS = 5000;
+const MOST_EVALUATIONS = 4e6;
+const MOST_SWEEPS = 2000;
 /** Head left around the worst loop at the end of the sweeps, m: they close slowly, so nearer than one simultaneous step needs. */
 const SWEPT_HEAD_M = 0.1 * CLOSED_HEAD_M;
 

@@ -98,7 +98,7 @@ function checkNodes(nodes: unknown, fault: Fault): Set<string> {
     fault.add('nodes', 'must be a list');
     return ids;
   }
-  nodes.forEach((node: unknown, i) => {
+  Array.from(nodes).forEach((node: unknown, i) => {
     const path = `nodes[${i}]`;
     if (!isRecord(node)) return fault.add(path, 'must be an object');
     const at = fault.of(node, path);
@@ -120,7 +120,7 @@ function checkReference(reference: unknown, nodeIds: Set<string>, fault: Fault):
 function checkLinks(links: unknown, nodeIds: Set<string>, purpose: Purpose, fault: Fault): void {
   if (!Array.isArray(links)) return fault.add('links', 'must be a list');
   const ids = new Set<string>();
-  links.forEach((link: unknown, i) => {
+  Array.from(links).forEach((link: unknown, i) => {
     const path = `links[${i}]`;
     if (!isRecord(link)) return fault.add(path, 'must be an object');
     const at = fault.of(link, path);

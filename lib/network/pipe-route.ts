@@ -49,8 +49,14 @@ function candidates(a: End, b: End): Point[][] {
   for (const x of columns.slice(3)) for (const y of rows.slice(3)) {
     ways.push([{ x, y: a.y }, { x, y }, { x: b.x, y }], [{ x: a.x, y }, { x, y }, { x, y: b.y }]);
   }
+  // Back around both pieces, where their ends look away from each other.
+  const [out, into] = [stubOf(a), stubOf(b)];
+  for (const y of [...rows.slice(0, 1), Math.min(a.y, b.y) - 2 * STUB, Math.max(a.y, b.y) + 2 * STUB]) ways.push([out, { x: out.x, y }, { x: into.x, y }, into]);
+  for (const x of [...columns.slice(0, 1), Math.min(a.x, b.x) - 2 * STUB, Math.max(a.x, b.x) + 2 * STUB]) ways.push([out, { x, y: out.y }, { x, y: into.y }, into]);
   return ways;
 }
+
+const stubOf = ({ x, y, leaves }: End): Point => ({ x: x + STUB * (leaves?.x ?? 0), y: y + STUB * (leaves?.y ?? 0) });
 
 function costOf(path: Point[], a: End, b: End): number {
   let cost = (path.length - 2) * CORNER_COST;

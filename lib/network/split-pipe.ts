@@ -68,10 +68,11 @@ export function insertOnPipe(drawing: Drawing, pieceId: string, { pipe, at }: Fo
   const piece = drawing.equipment.find(({ id }) => id === pieceId);
   if (!piece || piece.kind === 'expansionVessel') return drawing;
   const place = at.along.x === 0 ? { x: at.x, y: snap(at.y) } : { x: snap(at.x), y: at.y };
-  const points = quarterTurns.find((rotation) => looksAlong(portPlace({ ...piece, rotation }, 'out'), at.along));
-  const turned: Equipment = { ...piece, ...place, rotation: points ?? piece.rotation };
+  const isTee = piece.kind === 'tee';
+  const rotation = isTee ? piece.rotation : quarterTurns.find((turn) => looksAlong(portPlace({ ...piece, rotation: turn }, 'out'), at.along));
+  const turned: Equipment = { ...piece, ...place, rotation: rotation ?? piece.rotation };
   const moved = { ...drawing, equipment: drawing.equipment.map((it) => (it.id === pieceId ? turned : it)) };
-  const ends = piece.kind === 'tee' ? { into: sideTowards(at.along, { x: 0, y: 0 }), outOf: sideTowards({ x: 0, y: 0 }, at.along) } : { into: 'in' as const, outOf: 'out' as const };
+  const ends = isTee ? { into: sideTowards(at.along, { x: 0, y: 0 }), outOf: sideTowards({ x: 0, y: 0 }, at.along) } : { into: 'in' as const, outOf: 'out' as const };
   return splitPipe(moved, pipe.id, pieceId, ends, at.part);
 }
 

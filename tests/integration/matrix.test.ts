@@ -2,6 +2,7 @@ import { beforeAll, describe, expect, it } from 'vitest';
 import { may, permissions, roles, type Permission, type Role } from '@/lib/api/permissions';
 import { call } from '../make/call';
 import { withDatabase } from '../make/database';
+import { withMail } from '../make/mail';
 import { makeOrganization, type MadeOrganization } from '../make/organization';
 import { makeRound, type MadeRound } from '../make/round';
 import { signInAs } from '../make/session';
@@ -29,6 +30,7 @@ const declared = Object.entries(modules)
 const guarded = declared.filter(({ handler }) => handler.permission !== 'public');
 
 const suite = withDatabase();
+withMail();
 let home: MadeOrganization & MadeRound;
 let away: MadeOrganization & MadeRound;
 

@@ -2,13 +2,15 @@ import { AnalysisStatistic, InitHydOption, LinkProperty, Project, Workspace } fr
 import { balancingValveKv } from '@/lib/hydraulics/links/balancing-valve';
 import { resistanceOfKv } from '@/lib/hydraulics/links/quadratic';
 import { fluidProperties } from '@/lib/hydraulics/fluids';
-import type { NetworkDocument, NetworkLink } from '@/lib/hydraulics/types';
+import { pumpHeadAt } from '@/lib/hydraulics/solve-result';
+import type { LinkOf, NetworkDocument, NetworkLink } from '@/lib/hydraulics/types';
 
 /** EPANET's own gravity, ft/s² in metres, which its minor losses are reckoned with. */
 const EPANET_GRAVITY = 32.2 * 0.3048;
 /** EPANET takes a kinematic viscosity relative to this, m²/s. */
 const EPANET_VISCOSITY = 1.1e-5 * 0.3048 ** 2;
 const STUB_BORE_MM = 50;
+const CURVE_PARTS = 200;
 
 /**
  * A network document as an EPANET 2.2 input file: pipes by Darcy-Weisbach, quadratic links as stubs with a minor loss coefficient, the pump
@@ -27,7 +29,7 @@ export function epanetInput(document: NetworkDocument, accuracy: number): string
     const ends = `l${k} ${name.get(link.from)} ${name.get(link.to)}`;
     if (link.kind === 'pump') {
       pumps.push(`${ends} HEAD c${k}`);
-      for (const { flowLs, headM } of link.curve) curves.push(`c${k} ${flowLs} ${headM}`);
+      curves.push(...curvePoints(link).map(({ flowLs, headM }) => `c${k} ${flowLs} ${headM}`));
     } else if (link.kind === 'pipe') pipes.push(`${ends} ${link.lengthM} ${link.boreMm} ${link.roughnessMm} ${link.minorK ?? 0} OPEN`);
     else {
       const velocityPerLs = 1e-3 / ((Math.PI / 4) * (STUB_BORE_MM / 1000) ** 2);
@@ -64,6 +66,18 @@ export function epanetInput(document: NetworkDocument, accuracy: number): string
     'STATUS NO',
     '[END]',
   ].join('\n');
+}
+
+/** EPANET joins a curve's points by straight lines: points close enough to be the smooth curve, and on past its end to zero head. */
+function curvePoints(link: LinkOf<'pump'>) {
+  const step = link.curve[link.curve.length - 1].flowLs / CURVE_PARTS;
+  const points = [];
+  for (let k = 0; k <= 4 * CURVE_PARTS; k++) {
+    const headM = pumpHeadAt(link, k * step, 1);
+    if (headM <= 0) break;
+    points.push({ flowLs: k * step, headM });
+  }
+  return points;
 }
 
 export interface EpanetRun {

@@ -22,7 +22,7 @@ export function StoreyList() {
   const storeys = useDrawing((drawing) => drawing.storeys);
   const falling = [...storeys].sort((a, b) => a.top - b.top);
   const add = (where: 'above' | 'below') => change((drawing) => addStorey(drawing, where));
-  const addClass = 'min-h-8 font-semibold text-petrol hover:underline';
+  const addClass = 'min-h-8 text-sm font-semibold text-petrol hover:underline';
   return (
     <Section title="Storeys">
       {canEdit && (

@@ -3,7 +3,7 @@
  * right, unturned. The sheet shows through no body, so that pipes end at it.
  */
 
-const body = { fill: 'var(--symbol-fill, var(--paper))', stroke: 'currentColor', strokeWidth: 1.5, strokeLinejoin: 'round', strokeLinecap: 'round' } as const;
+const body = { fill: 'var(--symbol-fill, var(--paper))', stroke: 'currentColor', strokeWidth: 'calc(1.5px * var(--lines, 1))', strokeLinejoin: 'round', strokeLinecap: 'round' } as const;
 const line = { ...body, fill: 'none' } as const;
 
 const valve = 'M-12 -8V8L12 -8V8Z';
@@ -87,7 +87,7 @@ export function TerminalUnit({ hasControl = true, hasBalancing = true, hasStrain
       {hasStrainer && (
         <g transform="translate(0 -50)">
           <rect {...body} x={-5} y={-4} width={10} height={8} />
-          <path {...line} strokeWidth={1} d="M-5 4L5 -4" />
+          <path {...line} d="M-5 4L5 -4" />
         </g>
       )}
       {hasControl && (

@@ -23,12 +23,12 @@ export class SparseLdl {
   private readonly path: Int32Array;
   private readonly lower: Float64Array;
   private readonly pivot: Float64Array;
-  private readonly work: Float64Array;
+  private readonly row: Float64Array;
 
-  /** Null where L would have more than `mostFill` entries. */
-  static of(pattern: Pattern, mostFill: number): SparseLdl | null {
+  /** Null where L would have more than `mostFill` entries or take more than `mostWork` multiplications. */
+  static of(pattern: Pattern, mostFill: number, mostWork: number): SparseLdl | null {
     const factors = new SparseLdl(pattern, minimumDegree(pattern), mostFill);
-    return factors.fill > mostFill ? null : factors;
+    return factors.fill > mostFill || factors.work() > mostWork ? null : factors;
   }
 
   private constructor(pattern: Pattern, order: Int32Array, mostFill: number) {
@@ -68,7 +68,7 @@ export class SparseLdl {
     this.lower = new Float64Array(this.fill);
     this.filled = new Int32Array(n);
     this.pivot = new Float64Array(n);
-    this.work = new Float64Array(n);
+    this.row = new Float64Array(n);
   }
 
   /** Where the entry (i, j), i ≠ j, of the caller's numbering goes in `value`; it must be in the pattern. */
@@ -79,19 +79,25 @@ export class SparseLdl {
     throw new RangeError(`(${i}, ${j}) is not in the pattern`);
   }
 
+  private work(): number {
+    let work = 0;
+    for (let i = 0; i < this.size; i++) work += (this.columnStart[i + 1] - this.columnStart[i]) ** 2 / 2;
+    return work;
+  }
+
   factorize(): void {
-    const { size, order, diagonal, value, rowStart, rowColumn, columnStart, columnRow, filled, pathStart, path, lower, pivot, work } = this;
+    const { size, order, diagonal, value, rowStart, rowColumn, columnStart, columnRow, filled, pathStart, path, lower, pivot, row } = this;
     for (let k = 0; k < size; k++) {
       const own = diagonal[order[k]];
       let d = own;
-      for (let p = rowStart[k]; p < rowStart[k + 1]; p++) work[rowColumn[p]] = value[p];
+      for (let p = rowStart[k]; p < rowStart[k + 1]; p++) row[rowColumn[p]] = value[p];
       filled[k] = columnStart[k];
       for (let t = pathStart[k]; t < pathStart[k + 1]; t++) {
         const i = path[t];
-        const y = work[i];
-        work[i] = 0;
+        const y = row[i];
+        row[i] = 0;
         const end = filled[i];
-        for (let p = columnStart[i]; p < end; p++) work[columnRow[p]] -= lower[p] * y;
+        for (let p = columnStart[i]; p < end; p++) row[columnRow[p]] -= lower[p] * y;
         const l = y / pivot[i];
         d -= l * y;
         columnRow[end] = k;
@@ -105,20 +111,20 @@ export class SparseLdl {
 
   /** Solves M x = b with the last factors; x may be b. */
   solve(b: Float64Array, x: Float64Array): void {
-    const { size, order, columnStart, columnRow, lower, pivot, work } = this;
-    for (let k = 0; k < size; k++) work[k] = b[order[k]];
+    const { size, order, columnStart, columnRow, lower, pivot, row } = this;
+    for (let k = 0; k < size; k++) row[k] = b[order[k]];
     for (let k = 0; k < size; k++) {
-      const y = work[k];
-      for (let p = columnStart[k]; p < columnStart[k + 1]; p++) work[columnRow[p]] -= lower[p] * y;
+      const y = row[k];
+      for (let p = columnStart[k]; p < columnStart[k + 1]; p++) row[columnRow[p]] -= lower[p] * y;
     }
     for (let k = size - 1; k >= 0; k--) {
-      let y = work[k] / pivot[k];
-      for (let p = columnStart[k]; p < columnStart[k + 1]; p++) y -= lower[p] * work[columnRow[p]];
-      work[k] = y;
+      let y = row[k] / pivot[k];
+      for (let p = columnStart[k]; p < columnStart[k + 1]; p++) y -= lower[p] * row[columnRow[p]];
+      row[k] = y;
     }
     for (let k = 0; k < size; k++) {
-      x[order[k]] = work[k];
-      work[k] = 0;
+      x[order[k]] = row[k];
+      row[k] = 0;
     }
   }
 

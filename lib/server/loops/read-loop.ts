@@ -28,13 +28,15 @@ export async function readLoop({ person, roles }: Access, loopId: string): Promi
     state: row.state,
     project: { id: row.projectId, name: row.projectName },
     roles,
-    revision: revision && {
-      id: revision.id,
-      number: revision.number,
-      note: revision.note,
-      issuedAt: revision.issued_at.toISOString(),
-      issuedBy: revision.name,
-    },
+    revision: revision
+      ? {
+          id: revision.id,
+          number: revision.number,
+          note: revision.note,
+          issuedAt: revision.issued_at.toISOString(),
+          issuedBy: revision.name,
+        }
+      : null,
     isDraftAhead: may(roles, 'draft.see') ? await isDraftAhead(organizationId, loopId, revision?.id) : null,
     strip: strips.get(loopId)?.ticks ?? [],
     band: bandOf(await readTolerances(organizationId, row.projectId)),

@@ -1,9 +1,10 @@
+import type { Knex } from 'knex';
 import { db } from '@/db/knex';
 import type { ToleranceRule } from '@/lib/api/projects';
 
 /** The tolerance bands agreed for a project, one for each kind of station. */
-export async function readTolerances(organizationId: string, projectId: string): Promise<ToleranceRule[]> {
-  return db()('tolerance_rules').where({ organization_id: organizationId, project_id: projectId }).orderBy('station_kind').select({
+export async function readTolerances(organizationId: string, projectId: string, connection: Knex = db()): Promise<ToleranceRule[]> {
+  return connection('tolerance_rules').where({ organization_id: organizationId, project_id: projectId }).orderBy('station_kind').select({
     stationKind: 'station_kind',
     lowerPercent: 'lower_percent',
     upperPercent: 'upper_percent',

@@ -17,7 +17,7 @@ export default async function DrawingPage({ params }: { params: Promise<{ projec
   if (!access || access.projectId !== projectId) notFound();
   const { organizationId, id: personId } = access.person;
   const loop = await readLoop(access, loopId);
-  const revision = loop.revision && (await readRevision(organizationId, loopId, loop.revision.number));
+  const revision = loop.revision ? await readRevision(organizationId, loopId, loop.revision.number) : null;
 
   return (
     <main className="flex h-[calc(100dvh-var(--header,7rem))] min-h-[26rem] flex-1 flex-col lg:h-[calc(100dvh-3.6rem)]">

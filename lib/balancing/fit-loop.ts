@@ -1,0 +1,90 @@
+import type { NetworkDocument } from '@/lib/hydraulics/types';
+import { Gaussian } from './fit/gaussian';
+import { mostLikely } from './fit/most-likely';
+import { ReadingModel } from './fit/reading-model';
+import { type Cause, faultDeviation, FaultSearch, type Suspicion } from './fit/suspicions';
+import { type Priors, type Unknown, unknownsOf, usualPriors } from './fit/unknowns';
+import type { LoopReading, ReadingRound } from './readings';
+
+/** What one reading showed, what the fitted loop would show there, and how far they are apart in standard deviations. */
+export interface FittedReading {
+  round: number;
+  reading: LoopReading;
+  expected: number;
+  deviations: number;
+  /** Set aside as one that does not belong to this loop. */
+  isSetAside: boolean;
+}
+
+/** A fault that the fit takes as likelier than none: `link` is its valve, pump or the run's terminal or first pipe, and `round` the first in which it acts. */
+export interface SuspectedFault {
+  cause: Cause;
+  link: string;
+  round: number;
+  logOdds: number;
+  /** True over assumed: resistance, Kv, head, or reading over expectation. */
+  factor: number;
+}
+
+/** The loop as its readings show it. */
+export interface FittedLoop {
+  document: NetworkDocument;
+  rounds: ReadingRound[];
+  unknowns: Unknown[];
+  /** Natural logarithm of each unknown's factor. */
+  values: Float64Array;
+  /** Prior standard deviation of each unknown, widened where a fault is suspected. */
+  deviations: Float64Array;
+  readings: FittedReading[];
+  faults: SuspectedFault[];
+  converged: boolean;
+  /** The linear model at the fit, its unknowns in units of `deviations`. */
+  posterior: Gaussian;
+  /** How all single faults weigh at the fit; see `diagnose`. */
+  search: FaultSearch;
+}
+
+const MOST_PASSES = 8;
+
+/**
+ * Fits the loop's resistances, charts, pump heads and meters to readings: maximum a posteriori with log-normal priors about the
+ * design, each reading by its own error. A reading or unknown that would be beyond its spread is freed where a fault there is likelier than
+ * none. Throws a RangeError for a reading at a link that is not in the document.
+ */
+export function fitLoop(document: NetworkDocument, rounds: ReadingRound[], priors: Priors = usualPriors): FittedLoop {
+  const unknowns = unknownsOf(document, rounds, priors);
+  const model = new ReadingModel(document, rounds, unknowns);
+  const deviations = Float64Array.from(unknowns, (unknown) => unknown.deviation);
+  const noise = new Float64Array(model.placed.length).fill(1);
+  const accepted: Suspicion[] = [];
+
+  let fit = mostLikely(model, deviations, noise, new Float64Array(unknowns.length));
+  let search = new FaultSearch(document, rounds, unknowns, model.placed, fit, deviations, noise);
+  for (let pass = 0; pass < MOST_PASSES; pass++) {
+    const found = search.likely();
+    if (!found.length) break;
+    for (const suspicion of found) {
+      const deviation = faultDeviation(suspicion.cause);
+      if (suspicion.unknown !== null) deviations[suspicion.unknown] = Math.hypot(deviations[suspicion.unknown], deviation);
+      else noise[suspicion.reading!] += deviation ** 2;
+    }
+    accepted.push(...found);
+    fit = mostLikely(model, deviations, noise, fit.values);
+    search = new FaultSearch(document, rounds, unknowns, model.placed, fit, deviations, noise);
+  }
+
+  const readings = model.placed.map(({ reading, round }, m) => {
+    return { round, reading, expected: fit.shown[m], deviations: fit.misfit[m], isSetAside: noise[m] > 1 };
+  });
+  const faults = accepted.map(({ cause, unknown, reading, logOdds }): SuspectedFault => {
+    if (unknown !== null) {
+      const { id, rounds: acts } = unknowns[unknown];
+      return { cause, link: id, round: acts.indexOf(true), logOdds, factor: Math.exp(fit.values[unknown]) };
+    }
+    const { reading: wrong, round, expected } = readings[reading!];
+    return { cause, link: wrong.link, round, logOdds, factor: wrong.value / expected };
+  });
+  const scaledRows = fit.rows.map((row) => row.map((each, j) => each * deviations[j]));
+  const posterior = new Gaussian(scaledRows, noise);
+  return { document, rounds, unknowns, values: fit.values, deviations, readings, faults, converged: fit.converged, posterior, search };
+}

@@ -1,0 +1,88 @@
+/**
+ * A linear Gaussian model in the space of its readings: readings = A u + noise, u standard normal, noise of variance `noise`. With fewer
+ * readings than unknowns all is had from S = A Aᵀ + noise and its Cholesky factor (A. Tarantola, B. Valette 1982; C. Rodgers 2000, m-form).
+ */
+export class Gaussian {
+  private readonly factor: Float64Array[];
+
+  /** `damping` 0 is Gauss-Newton; more of it (K. Levenberg 1944, D. Marquardt 1963) counts the priors for 1 + damping. */
+  constructor(
+    private readonly rows: Float64Array[],
+    noise: ArrayLike<number>,
+    private readonly damping = 0,
+    gram = gramOf(rows),
+  ) {
+    this.factor = gram.map((row, m) => {
+      const own = row.slice();
+      own[m] += (1 + damping) * noise[m];
+      return own;
+    });
+    cholesky(this.factor);
+  }
+
+  /** S⁻¹ b. */
+  solve(b: ArrayLike<number>): Float64Array {
+    const x = this.whiten(b);
+    for (let i = x.length - 1; i >= 0; i--) {
+      x[i] /= this.factor[i][i];
+      const row = this.factor[i];
+      for (let k = 0; k < i; k++) x[k] -= row[k] * x[i];
+    }
+    return x;
+  }
+
+  /** L⁻¹ b, of S = L Lᵀ. */
+  whiten(b: ArrayLike<number>): Float64Array {
+    const x = Float64Array.from(b);
+    for (let i = 0; i < x.length; i++) {
+      const row = this.factor[i];
+      let sum = x[i];
+      for (let k = 0; k < i; k++) sum -= row[k] * x[k];
+      x[i] = sum / row[i];
+    }
+    return x;
+  }
+
+  /** The damped posterior covariance times a vector of unknowns. */
+  covarianceTimes(g: Float64Array): Float64Array {
+    const taken = transposeTimes(this.rows, this.solve(this.rows.map((row) => dot(row, g))), g.length);
+    return g.map((each, j) => (each - taken[j]) / (1 + this.damping));
+  }
+
+  /** How the readings see a direction of unknowns: L⁻¹ A a. Posterior covariance of a and b = a · b - seen(a) · seen(b). */
+  seen(direction: Float64Array): Float64Array {
+    return this.whiten(this.rows.map((row) => dot(row, direction)));
+  }
+}
+
+export function dot(a: ArrayLike<number>, b: ArrayLike<number>): number {
+  let sum = 0;
+  for (let k = 0; k < a.length; k++) sum += a[k] * b[k];
+  return sum;
+}
+
+export function transposeTimes(rows: Float64Array[], weights: ArrayLike<number>, length: number): Float64Array {
+  const sum = new Float64Array(length);
+  rows.forEach((row, m) => {
+    const weight = weights[m];
+    for (let j = 0; j < length; j++) sum[j] += weight * row[j];
+  });
+  return sum;
+}
+
+/** Lower half of A Aᵀ. */
+export function gramOf(rows: Float64Array[]): Float64Array[] {
+  return rows.map((row, m) => Float64Array.from({ length: m + 1 }, (_, k) => dot(row, rows[k])));
+}
+
+function cholesky(rows: Float64Array[]): void {
+  for (let i = 0; i < rows.length; i++) {
+    const row = rows[i];
+    for (let j = 0; j <= i; j++) {
+      const other = rows[j];
+      let sum = row[j];
+      for (let k = 0; k < j; k++) sum -= row[k] * other[k];
+      row[j] = i === j ? Math.sqrt(Math.max(sum, 1e-12)) : sum / other[j];
+    }
+  }
+}

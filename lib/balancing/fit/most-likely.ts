@@ -1,0 +1,67 @@
+import { Gaussian, gramOf, transposeTimes } from './gaussian';
+import type { ReadingModel } from './reading-model';
+
+const MOST_STEPS = 25;
+const SETTLED_COST = 1e-3;
+/** No resistance is taken further than this logarithm from its design: beyond, it is as good as shut. */
+const FURTHEST = 9;
+
+/** The unknowns at their most likely values, with the model made linear there. */
+export interface MostLikely {
+  values: Float64Array;
+  /** Sum of the squared misfits of readings and of unknowns, each in its own standard deviations. */
+  cost: number;
+  converged: boolean;
+  shown: Float64Array;
+  /** Reading minus expectation, in standard deviations of the reading as the meter's data give it. */
+  misfit: Float64Array;
+  /** Jacobian of the scaled readings per unit of each unknown. */
+  rows: Float64Array[];
+}
+
+/**
+ * Maximum a posteriori by Levenberg-Marquardt steps: Gauss-Newton, damped where a step does not lower the misfit.
+ * `deviations` are prior standard deviations of the unknowns, `noise` variances of the scaled readings.
+ */
+export function mostLikely(model: ReadingModel, deviations: ArrayLike<number>, noise: Float64Array, start: Float64Array): MostLikely {
+  const observed = Float64Array.from(model.placed, (each) => each.scaled);
+  const evaluate = (values: Float64Array) => {
+    const solved = model.solve(values);
+    const misfit = observed.map((each, m) => each - solved.scaled[m]);
+    let cost = solved.closed ? 0 : Infinity;
+    misfit.forEach((each, m) => (cost += (each * each) / noise[m]));
+    values.forEach((value, j) => (cost += deviations[j] > 0 ? (value / deviations[j]) ** 2 : 0));
+    return { values, solved, misfit, cost };
+  };
+
+  let here = evaluate(start);
+  let rows = model.jacobian(here.solved);
+  let damping = 0;
+  let converged = false;
+  for (let step = 0; step < MOST_STEPS && !converged; step++) {
+    const scaledRows = rows.map((row) => row.map((each, j) => each * deviations[j]));
+    const pull = transposeTimes(scaledRows, here.misfit.map((each, m) => each / noise[m]), here.values.length);
+    const downhill = pull.map((each, j) => each - (deviations[j] > 0 ? here.values[j] / deviations[j] : 0));
+    const gram = gramOf(scaledRows);
+    for (;;) {
+      const move = new Gaussian(scaledRows, noise, damping, gram).covarianceTimes(downhill);
+      const next = evaluate(here.values.map((value, j) => clamp(value + deviations[j] * move[j])));
+      const gained = here.cost - next.cost;
+      if (gained >= 0) {
+        here = next;
+        damping = damping < 0.01 ? 0 : damping / 10;
+        converged = gained < SETTLED_COST;
+        break;
+      }
+      damping = Math.max(0.1, 10 * damping);
+      if (damping > 1e6) {
+        converged = true;
+        break;
+      }
+    }
+    rows = model.jacobian(here.solved);
+  }
+  return { values: here.values, cost: here.cost, converged: converged && here.solved.closed, shown: here.solved.shown, misfit: here.misfit, rows };
+}
+
+const clamp = (value: number) => Math.min(Math.max(value, -FURTHEST), FURTHEST);

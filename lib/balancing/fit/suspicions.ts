@@ -1,0 +1,141 @@
+import { kvAtSetting } from '@/lib/hydraulics/links/balancing-valve';
+import type { NetworkDocument } from '@/lib/hydraulics/types';
+import { type ReadingRound, settingIn } from '../readings';
+import { dot, Gaussian, gramOf } from './gaussian';
+import type { MostLikely } from './most-likely';
+import type { PlacedReading } from './reading-model';
+import type { Unknown } from './unknowns';
+
+export type Cause = 'blocked' | 'mis-set' | 'wrong-chart' | 'pump-off-curve' | 'wrong-reading';
+
+/** A fault that would explain what the design's spread does not. */
+export interface Suspicion {
+  cause: Cause;
+  /** Position of the unknown that it frees, or of the reading that it sets aside. */
+  unknown: number | null;
+  reading: number | null;
+  /** Natural logarithm of the odds for it against no fault there, prior odds included. */
+  logOdds: number;
+  /** How far it moves its unknown (natural logarithm), or its reading (standard deviations). */
+  shift: number;
+}
+
+/**
+ * How far each fault takes its unknown, as a standard deviation of its logarithm, and the odds for one before anything is measured.
+ * A wrong reading is one by a factor of about e in its differential pressure.
+ */
+const faults: Record<Cause, { deviation: number; odds: number }> = {
+  blocked: { deviation: 1.5, odds: 0.02 },
+  'mis-set': { deviation: 1, odds: 0.02 },
+  'wrong-chart': { deviation: 0.4, odds: 0.01 },
+  'pump-off-curve': { deviation: 0.4, odds: 0.01 },
+  'wrong-reading': { deviation: 30, odds: 0.003 },
+};
+const causeOf: Partial<Record<Unknown['kind'], Cause>> = { run: 'blocked', setting: 'mis-set', chart: 'wrong-chart', pump: 'pump-off-curve' };
+
+/** A valve opens or closes no further than its table; this much of its Kv is left to the table's own error. */
+const TABLE_ERROR = 0.05;
+const WORTH_A_SECOND_LOOK = -2;
+
+export const faultDeviation = (cause: Cause) => faults[cause].deviation;
+
+interface Weighed extends Suspicion {
+  column: Float64Array;
+  variance: number;
+}
+
+/**
+ * Weighs every single fault by the generalised likelihood ratio (S. Narasimhan, R. Mah 1987) at the fit's linear model, with the prior odds and
+ * the width of each fault as an alternative prior. A freed unknown costs -½ ln(1 + Δ k·S⁻¹k) and gains ½ Δ (k·S⁻¹r)² / (1 + Δ k·S⁻¹k).
+ */
+export class FaultSearch {
+  private gram: Float64Array[];
+  private readonly innovation: Float64Array;
+  private readonly noise: Float64Array;
+
+  constructor(
+    private readonly document: NetworkDocument,
+    private readonly rounds: ReadingRound[],
+    private readonly unknowns: Unknown[],
+    private readonly placed: PlacedReading[],
+    private readonly fit: MostLikely,
+    private readonly deviations: Float64Array,
+    noise: Float64Array,
+  ) {
+    this.noise = noise.slice();
+    this.gram = gramOf(fit.rows.map((row) => row.map((each, j) => each * deviations[j])));
+    // Readings less what the prior expects, on the linear model.
+    this.innovation = fit.misfit.map((each, m) => each + dot(fit.rows[m], fit.values));
+  }
+
+  /** Faults more likely than none, the most likely first, each found with the earlier ones taken as true. */
+  likely(): Suspicion[] {
+    const found: Suspicion[] = [];
+    let candidates = this.weigh(this.candidates());
+    for (;;) {
+      candidates = candidates.filter((each) => each.logOdds > WORTH_A_SECOND_LOOK).sort((a, b) => b.logOdds - a.logOdds);
+      const best = candidates.shift();
+      if (!best || best.logOdds <= 0) return found;
+      found.push(best);
+      this.accept(best);
+      candidates = this.weigh(candidates);
+    }
+  }
+
+  /** Every fault with its odds, whether likely or not. */
+  all(): Suspicion[] {
+    return this.weigh(this.candidates());
+  }
+
+  private accept({ reading, column, variance }: Weighed): void {
+    if (reading !== null) this.noise[reading] += variance;
+    else for (let m = 0; m < column.length; m++) for (let k = 0; k <= m; k++) this.gram[m][k] += variance * column[m] * column[k];
+  }
+
+  private candidates(): Weighed[] {
+    const { unknowns, placed, fit, deviations, noise } = this;
+    const weighed = (cause: Cause, unknown: number | null, reading: number | null, column: Float64Array): Weighed => {
+      return { cause, unknown, reading, column, variance: faults[cause].deviation ** 2, logOdds: -Infinity, shift: 0 };
+    };
+    const ofUnknowns = unknowns.flatMap((unknown, j) => {
+      const cause = causeOf[unknown.kind];
+      // What is freed already is not freed twice.
+      if (!cause || deviations[j] > 0.9 * faults[cause].deviation) return [];
+      return [weighed(cause, j, null, Float64Array.from(fit.rows, (row) => row[j]))];
+    });
+    const ofReadings = placed.flatMap((_, m) => {
+      if (noise[m] > 1) return [];
+      const column = new Float64Array(placed.length);
+      column[m] = 1;
+      return [weighed('wrong-reading', null, m, column)];
+    });
+    return [...ofUnknowns, ...ofReadings];
+  }
+
+  private weigh(candidates: Weighed[]): Weighed[] {
+    const gaussian = new Gaussian([], this.noise, 0, this.gram);
+    const innovation = gaussian.whiten(this.innovation);
+    return candidates.map((each) => {
+      const column = gaussian.whiten(each.column);
+      const growth = 1 + each.variance * dot(column, column);
+      const match = dot(column, innovation);
+      const shift = (each.variance * match) / growth;
+      const logOdds = Math.log(faults[each.cause].odds) - 0.5 * Math.log(growth) + (0.5 * each.variance * match * match) / growth;
+      return { ...each, shift, logOdds: this.isPossible(each, shift) ? logOdds : -Infinity };
+    });
+  }
+
+  /** Dirt only adds resistance, and a valve stands within its table. */
+  private isPossible({ cause, unknown }: Weighed, shift: number): boolean {
+    if (cause === 'blocked') return shift > 0;
+    if (cause !== 'mis-set') return true;
+    const { links, rounds } = this.unknowns[unknown!];
+    const link = this.document.links[links[0]];
+    if (link.kind !== 'balancingValve') return false;
+    const table = link.kvTable;
+    const kv = kvAtSetting(table, settingIn(this.rounds[rounds.indexOf(true)].settings, link));
+    const least = Math.log(table[0].kv / kv);
+    const most = Math.log(table[table.length - 1].kv / kv);
+    return shift > 0 ? most > TABLE_ERROR : least < -TABLE_ERROR;
+  }
+}

@@ -1,0 +1,90 @@
+import { readdirSync, readFileSync } from 'node:fs';
+import { describe, expect, it } from 'vitest';
+import { balance } from '@/lib/hydraulics/balance';
+import { size } from '@/lib/hydraulics/size';
+import { solve } from '@/lib/hydraulics/solve';
+import type { NetworkDocument } from '@/lib/hydraulics/types';
+import { parseNetworkDocument, type Purpose } from '@/lib/network/document';
+import { numbersFrom, passiveKinds, randomMesh } from '../../make/any-network';
+import { houseExample } from '../../make/house-example';
+
+const MUTATIONS = 10_000;
+/** Generous for a machine that does other things beside; a hang is what this looks for. */
+const SLOWEST_MS = 5_000;
+
+type Json = null | boolean | number | string | Json[] | { [key: string]: Json };
+
+const folder = new URL('../../reference/data/networks/', import.meta.url);
+const stored = readdirSync(folder)
+  .filter((file) => !file.includes('expected'))
+  .map((file) => readFileSync(new URL(file, folder), 'utf8'));
+const withController = houseExample();
+withController.links.push({ id: 'DPC', kind: 'dpController', from: 'n3', to: 'X', setpointKpa: 12, sense: ['n2', 'X'], kvs: 2 });
+const texts = [
+  ...stored,
+  JSON.stringify({ ...withController, options: { sizing: { maxPaPerM: 300, maxVelocityMs: 1.5 } } }),
+  ...[1, 2, 3].map((seed) => JSON.stringify({ ...randomMesh(seed, 8, 5, passiveKinds, 2), options: { method: 'hardy-cross' } })),
+];
+
+/** Every place of a value inside another: its holder and key. */
+function places(value: Json): { holder: Record<string, Json>; key: string }[] {
+  if (typeof value !== 'object' || value === null) return [];
+  const holder = value as Record<string, Json>;
+  return Object.keys(holder).flatMap((key) => [{ holder, key }, ...places(holder[key])]);
+}
+
+/** Changes one place: to something odd, to another place's value, away, doubled, or a number to another size. */
+function mutate(document: Json, random: () => number): void {
+  const all = places(document);
+  if (random() < 0.6) {
+    const numbers = all.filter(({ holder, key }) => typeof holder[key] === 'number');
+    const { holder, key } = numbers[Math.floor(random() * numbers.length)];
+    holder[key] = (holder[key] as number) * 10 ** (12 * random() - 6);
+    return;
+  }
+  const { holder, key } = all[Math.floor(random() * all.length)];
+  const other = all[Math.floor(random() * all.length)];
+  const value = holder[key];
+  const odd: Json[] = [null, true, '', 'pump', 0, -1, 1e-12, 1e300, -0, [], {}, [null], 1e9, 1e-9, 0.5, 'X'];
+  const kind = random();
+  if (kind < 0.3) holder[key] = odd[Math.floor(random() * odd.length)];
+  else if (kind < 0.5) holder[key] = structuredClone(other.holder[other.key]);
+  else if (kind < 0.6 && !Array.isArray(holder)) delete holder[key];
+  else if (Array.isArray(value) && value.length && kind < 0.8) value.push(structuredClone(value[Math.floor(random() * value.length)]));
+  else if (typeof value === 'number') holder[key] = value * 10 ** (18 * random() - 9);
+  else if (Array.isArray(value)) value.splice(Math.floor(random() * value.length), 1);
+  else holder[key] = odd[Math.floor(random() * odd.length)];
+}
+
+const commands: Record<Purpose, (document: NetworkDocument) => object> = { solve, balance, size };
+
+/** Whether any number inside is not finite. */
+const hasBadNumber = (value: unknown): boolean =>
+  typeof value === 'number' ? !Number.isFinite(value) : typeof value === 'object' && value !== null && Object.values(value).some(hasBadNumber);
+
+describe('a damaged document', () => {
+  it('is given a result of finite numbers or a named error, in good time, ten thousand times', { timeout: 600_000 }, () => {
+    const random = numbersFrom(2026);
+    let refused = 0;
+    for (let k = 0; k < MUTATIONS; k++) {
+      const document = JSON.parse(texts[k % texts.length]) as Json;
+      for (let m = 0; m <= 2 * random(); m++) mutate(document, random);
+      const purpose = (['solve', 'solve', 'balance', 'size'] as const)[k % 4];
+      const begun = performance.now();
+      const parsed = parseNetworkDocument(document, purpose);
+      if (parsed.ok) {
+        const result = commands[purpose](parsed.document);
+        if (hasBadNumber(result)) throw new Error(`not finite: ${JSON.stringify(document)}`);
+      } else {
+        refused++;
+        expect(parsed.error.code).toMatch(/^[a-z-]+$/);
+        expect(parsed.error.issues.length).toBeGreaterThan(0);
+        for (const issue of parsed.error.issues) expect(issue.message).not.toBe('');
+      }
+      const took = performance.now() - begun;
+      if (took > SLOWEST_MS) throw new Error(`${took} ms: ${JSON.stringify(document)}`);
+    }
+    expect(refused).toBeGreaterThan(MUTATIONS / 10);
+    expect(refused).toBeLessThan(MUTATIONS * 0.9);
+  });
+});
