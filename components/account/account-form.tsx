@@ -44,7 +44,8 @@ export function AccountForm({ name, theme, units }: AccountFormProps) {
   const save = useMutation({
     mutationFn: (values: ChangeAccount) => send('PATCH', '/api/account', values),
     onSuccess: (_, values) => {
-      form.reset(values);
+      // What was typed while it saved stays.
+      form.reset(values, { keepValues: true });
       toast('Saved');
       router.refresh();
     },

@@ -1,4 +1,4 @@
-import type { StripBand } from '@/lib/api/flow-strip';
+import type { StripBand } from '@/lib/commissioning/flow-strip';
 
 export type Verdict = 'low' | 'within' | 'high';
 

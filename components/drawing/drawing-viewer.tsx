@@ -2,7 +2,7 @@
 
 import { useMemo, useState } from 'react';
 import { ReactFlowProvider } from 'reactflow';
-import type { StripBand } from '@/lib/api/flow-strip';
+import type { StripBand } from '@/lib/commissioning/flow-strip';
 import type { RevisionBody } from '@/lib/api/loops';
 import type { Drawing } from '@/lib/network/drawing';
 import { drawingToDocument, placeOfLink } from '@/lib/network/drawing-to-document';

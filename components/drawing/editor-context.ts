@@ -3,7 +3,7 @@
 import { createContext, useContext } from 'react';
 import { useStore } from 'zustand';
 import type { SolvedBody } from '@/lib/api/loops';
-import type { StripBand } from '@/lib/api/flow-strip';
+import type { StripBand } from '@/lib/commissioning/flow-strip';
 import type { Drawing } from '@/lib/network/drawing';
 import type { DrawnFigures } from '@/lib/network/drawing-figures';
 import type { Fault } from '@/lib/network/drawing-faults';

@@ -1,5 +1,5 @@
 import Link from 'next/link';
-import type { StripBand } from '@/lib/api/flow-strip';
+import type { StripBand } from '@/lib/commissioning/flow-strip';
 import type { LoopSummary } from '@/lib/api/projects';
 import { stateWords } from '../shell/loop-header';
 import { FlowStrip } from '../strip/flow-strip';

@@ -1,6 +1,6 @@
 import { Figure, UnitName } from '@/components/ui/figure';
 import { Sheet } from '@/components/ui/sheet';
-import { Figures, Head, RowName, TableFrame } from '@/components/ui/table';
+import { Figures, Head, RowName, onlyWide, TableFrame } from '@/components/ui/table';
 import { pumpsOf } from '@/lib/api/report-judgement';
 import type { ReportContent } from '@/lib/api/reports';
 import { OfDesign } from './of-design';
@@ -18,7 +18,7 @@ export function PumpTable({ content }: { content: ReportContent }) {
             <Head isFigure unit={<UnitName quantity="flow" />}>Design</Head>
             <Head isFigure unit={<UnitName quantity="head" />}>Head</Head>
             <Head isFigure unit="% of full">Speed</Head>
-            <Head isFigure unit={<UnitName quantity="power" />}>Shaft</Head>
+            <Head isFigure unit={<UnitName quantity="power" />} className={onlyWide}>Shaft</Head>
             <Head isFigure unit={<UnitName quantity="flow" />}>Measured</Head>
             <Head isFigure unit="%">Of design</Head>
           </tr>
@@ -30,7 +30,7 @@ export function PumpTable({ content }: { content: ReportContent }) {
               <Figures><Figure quantity="flow" si={duty.flowLs} /></Figures>
               <Figures><Figure quantity="head" si={duty.requiredHeadM} /></Figures>
               <Figures>{(duty.speed * 100).toFixed(1)}</Figures>
-              <Figures><Figure quantity="power" si={duty.shaftKw} /></Figures>
+              <Figures className={onlyWide}><Figure quantity="power" si={duty.shaftKw} /></Figures>
               <Figures><Figure quantity="flow" si={station.reading?.flowLs} /></Figures>
               <Figures><OfDesign content={content} station={station} /></Figures>
             </tr>

@@ -1,11 +1,9 @@
 import { Figure, UnitName } from '@/components/ui/figure';
 import { Sheet } from '@/components/ui/sheet';
-import { Figures, Head, RowName, TableFrame, Words } from '@/components/ui/table';
+import { Figures, Head, RowName, onlyWide, TableFrame, Words } from '@/components/ui/table';
 import { terminalsOf } from '@/lib/api/report-judgement';
 import type { ReportContent } from '@/lib/api/reports';
 import { OfDesign } from './of-design';
-
-const onlyWide = 'hidden md:table-cell print:table-cell';
 
 /** Every terminal as it was left; on a phone what counts, the rest is in the workbook. */
 export function TerminalsTable({ content }: { content: ReportContent }) {

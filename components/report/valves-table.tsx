@@ -1,12 +1,10 @@
 import { Figure, UnitName } from '@/components/ui/figure';
 import { Sheet } from '@/components/ui/sheet';
-import { Figures, Head, RowName, TableFrame, Words } from '@/components/ui/table';
+import { Figures, Head, RowName, onlyWide, TableFrame, Words } from '@/components/ui/table';
 import { valvesOf } from '@/lib/api/report-judgement';
 import type { ReportContent } from '@/lib/api/reports';
 import { OfDesign } from './of-design';
 import { valveStateWords } from './valve-state-words';
-
-const onlyWide = 'hidden md:table-cell print:table-cell';
 
 /** Balancing valves of branches and mains; those of the terminals stand with their terminals. */
 export function BranchValvesTable({ content }: { content: ReportContent }) {

@@ -1,4 +1,4 @@
-import type { StripBand, StripTick } from '@/lib/api/flow-strip';
+import type { StripBand, StripTick } from '@/lib/commissioning/flow-strip';
 import { stripGeometry } from '@/lib/commissioning/strip-geometry';
 
 /** Width and height in px of the strip in a list row, in a loop's header and on a page of its own. */

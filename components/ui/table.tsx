@@ -10,6 +10,9 @@ export function TableFrame({ label, className, children }: { label: string; clas
   );
 }
 
+/** For columns that a phone leaves out and paper keeps. */
+export const onlyWide = 'hidden md:table-cell print:table-cell';
+
 interface HeadProps extends ThHTMLAttributes<HTMLTableCellElement> {
   /** Stands after the name; every figure of the column is in it. */
   unit?: ReactNode;
@@ -21,7 +24,7 @@ export function Head({ unit, isFigure, className, children, ...rest }: HeadProps
     <th
       scope="col"
       className={classNames(
-        'sticky top-0 z-10 bg-sheet px-2 py-2 align-bottom text-xs leading-tight font-semibold text-quiet first:pl-4 last:pr-4',
+        'sticky top-0 z-10 bg-sheet px-1.5 py-2 sm:px-2 align-bottom text-xs leading-tight font-semibold text-quiet first:pl-4 last:pr-4',
         'shadow-[inset_0_-1px_0_var(--ink)] print:static',
         isFigure ? 'text-right' : 'text-left',
         className,
@@ -34,7 +37,7 @@ export function Head({ unit, isFigure, className, children, ...rest }: HeadProps
   );
 }
 
-const cell = 'border-b px-2 py-1.5 align-top first:pl-4 last:pr-4';
+const cell = 'border-b px-1.5 py-1.5 sm:px-2 align-top first:pl-4 last:pr-4';
 
 export const Figures = ({ className, ...rest }: TdHTMLAttributes<HTMLTableCellElement>) => (
   <td className={classNames(cell, 'figures text-right whitespace-nowrap', className)} {...rest} />

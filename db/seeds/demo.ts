@@ -1,10 +1,17 @@
 import type { Knex } from 'knex';
 import { v7 as uuidv7 } from 'uuid';
+import type { Access } from '@/lib/server/auth/authorize';
 import { hashPassword } from '@/lib/server/auth/passwords';
+import type { Person } from '@/lib/server/auth/person';
+import { issueRevision } from '@/lib/server/revisions/issue-revision';
 import { defaultTolerances } from '@/lib/api/tolerances';
 import signIns from '../demo-sign-ins.json';
-import { chilledLoop, drawDemo, hotLoop } from './demo-drawing';
+import { onConnection } from '../knex';
+import { chilledLoop, drawDemo, hotLoop, type DemoLoop } from './demo-drawing';
+import { measureDemo, type DemoMeters } from './demo-readings';
 import { sizeDemo } from './size-demo';
+
+const organization = 'Quillfeather Estates';
 
 const people = [
   { who: 'owen', name: 'Owen Pasko', isAdministrator: true, role: 'owner' },
@@ -18,7 +25,7 @@ export async function loadDemo(knex: Knex): Promise<boolean> {
   return knex.transaction(async (trx) => {
     if (await trx('organizations').first('organization_id')) return false;
     const organizationId = uuidv7();
-    await trx('organizations').insert({ organization_id: organizationId, name: 'Quillfeather Estates' });
+    await trx('organizations').insert({ organization_id: organizationId, name: organization });
 
     const ids = new Map<string, string>();
     for (const person of people) {
@@ -65,17 +72,52 @@ export async function loadDemo(knex: Knex): Promise<boolean> {
         source: rule.source,
       });
     }
-    for (const [name, loop] of [['CHW-1', chilledLoop], ['HTG-1', hotLoop]] as const) {
-      const loopId = uuidv7();
-      await trx('loops').insert({ organization_id: organizationId, id: loopId, project_id: projectId, name, service: loop.service, created_by: mara });
-      await trx('drafts').insert({
-        organization_id: organizationId,
-        loop_id: loopId,
-        version: 1,
-        drawing: JSON.stringify(sizeDemo(drawDemo(loop))),
-        saved_by: mara,
-      });
-    }
+    const person = (who: string, name: string) => ({ organizationId, organizationName: organization, id: ids.get(who)!, name });
+    const designer: Access = { person: asPerson(person('mara', 'Mara Ellin'), 'designer'), roles: ['designer'], projectId };
+    const technician: Access = { person: asPerson(person('tobin', 'Tobin Ashgrove'), 'technician'), roles: ['technician'], projectId };
+    const meters = await addMeters(trx, organizationId);
+    await onConnection(trx, async () => {
+      for (const [name, loop] of [['CHW-1', chilledLoop], ['HTG-1', hotLoop]] as const) {
+        const loopId = await addLoop(trx, designer, name, loop);
+        await issueRevision(designer, loopId, { draftVersion: 1, note: 'For construction' });
+        if (loop === chilledLoop) await measureDemo(trx, technician, loopId, meters);
+      }
+    });
     return true;
   });
+}
+
+const asPerson = (person: Pick<Person, 'organizationId' | 'organizationName' | 'id' | 'name'>, defaultRole: Person['defaultRole']): Person => ({
+  ...person,
+  email: '',
+  isAdministrator: false,
+  defaultRole,
+  theme: 'system',
+  units: {},
+});
+
+async function addLoop(trx: Knex.Transaction, { person, projectId }: Access, name: string, loop: DemoLoop): Promise<string> {
+  const loopId = uuidv7();
+  await trx('loops').insert({ organization_id: person.organizationId, id: loopId, project_id: projectId, name, service: loop.service, created_by: person.id });
+  await trx('drafts').insert({
+    organization_id: person.organizationId,
+    loop_id: loopId,
+    version: 1,
+    drawing: JSON.stringify(sizeDemo(drawDemo(loop))),
+    saved_by: person.id,
+  });
+  return loopId;
+}
+
+/** Two meters in date and one that is overdue, so that the warning can be seen. */
+async function addMeters(trx: Knex.Transaction, organizationId: string): Promise<DemoMeters> {
+  const [pressureId, flowId] = [uuidv7(), uuidv7()];
+  const day = (fromToday: number) => new Date(Date.now() + fromToday * 86_400_000).toISOString().slice(0, 10);
+  const meter = { organization_id: organizationId, accuracy_absolute: 0 };
+  await trx('instruments').insert([
+    { ...meter, id: pressureId, name: 'Differential pressure meter', kind: 'differential-pressure', serial: 'DP-02', range_low: 0, range_high: 200, accuracy_percent: 1, accuracy_absolute: 0.1, calibrated_on: day(-262), calibration_due_on: day(103) },
+    { ...meter, id: flowId, name: 'Clamp-on ultrasonic meter', kind: 'flow', serial: 'UF-01', range_low: 0.05, range_high: 40, accuracy_percent: 2, calibrated_on: day(-120), calibration_due_on: day(245) },
+    { ...meter, id: uuidv7(), name: 'Differential pressure meter, old', kind: 'differential-pressure', serial: 'DP-01', range_low: 0, range_high: 100, accuracy_percent: 2, accuracy_absolute: 0.2, calibrated_on: day(-500), calibration_due_on: day(-135) },
+  ]);
+  return { pressureId, flowId };
 }

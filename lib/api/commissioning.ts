@@ -1,6 +1,6 @@
 import { z } from 'zod';
 import type { KvPoint } from '@/lib/network/drawing';
-import type { StripBand, StripTick } from './flow-strip';
+import type { StripBand, StripTick } from '@/lib/commissioning/flow-strip';
 import type { StationKind, ToleranceRule } from './projects';
 
 export const methods = ['valve-drop', 'direct-flow'] as const;
@@ -10,7 +10,7 @@ export type Verdict = (typeof verdicts)[number];
 export const instrumentKinds = ['differential-pressure', 'flow'] as const;
 export type InstrumentKind = (typeof instrumentKinds)[number];
 
-const isoDate = z.string().regex(/^\d{4}-\d{2}-\d{2}$/, 'A date such as 2026-03-14.');
+const isoDate = z.iso.date('A date such as 2026-03-14.');
 
 export const instrumentSchema = z
   .object({
@@ -38,6 +38,7 @@ export interface Instrument extends InstrumentInput {
 
 /** POST /api/loops/:loopId/rounds; the id is made by the client, so that a repeated request starts no second round. */
 export const startRoundSchema = z.object({ id: z.uuid(), purpose: z.string().trim().min(1, 'Say what this round is for.').max(200) });
+export type StartRound = z.infer<typeof startRoundSchema>;
 /** PATCH /api/rounds/:roundId */
 export const closeRoundSchema = z.object({ isClosed: z.literal(true) });
 
@@ -125,6 +126,8 @@ export interface CommissioningBody {
   revision: { id: string; number: number } | null;
   /** Fluid at the loop's mean temperature, from which flows are computed. */
   densityKgM3: number | null;
+  /** Drop that the loop's pumps give together at no flow, kPa; no reading across a valve can be above it. */
+  pumpShutOffKpa: number | null;
   tolerances: ToleranceRule[];
   stations: Station[];
   rounds: Round[];

@@ -2,7 +2,7 @@ import { z } from 'zod';
 import type { BalanceResult, SolveResult } from '@/lib/hydraulics/types';
 import { drawingSchema, type Drawing, type Place } from '@/lib/network/drawing';
 import type { Fault } from '@/lib/network/drawing-faults';
-import type { StripBand, StripTick } from './flow-strip';
+import type { StripBand, StripTick } from '@/lib/commissioning/flow-strip';
 import type { Role } from './permissions';
 
 export const loopServices = ['chilled', 'hot'] as const;

@@ -1,5 +1,5 @@
 import { z } from 'zod';
-import type { StripBand, StripTick } from './flow-strip';
+import type { StripBand, StripTick } from '@/lib/commissioning/flow-strip';
 import type { LoopService, LoopState } from './loops';
 import { projectRoles, type ProjectRole, type Role } from './permissions';
 

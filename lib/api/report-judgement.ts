@@ -1,6 +1,6 @@
 import type { BalancedPump, BalancedValve } from '@/lib/hydraulics/types';
 import type { Verdict } from './commissioning';
-import type { StripBand, StripTick } from './flow-strip';
+import type { StripBand, StripTick } from '@/lib/commissioning/flow-strip';
 import type { ReportContent, ReportStation } from './reports';
 import type { ToleranceRule } from './projects';
 

@@ -1,7 +1,7 @@
 import { z } from 'zod';
 import type { BalanceResult } from '@/lib/hydraulics/types';
 import type { Instrument, Reading, Round, Station } from './commissioning';
-import type { StripBand, StripTick } from './flow-strip';
+import type { StripBand, StripTick } from '@/lib/commissioning/flow-strip';
 import type { LoopService, LoopState } from './loops';
 import type { ToleranceRule } from './projects';
 

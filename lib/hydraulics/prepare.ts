@@ -1,4 +1,4 @@
-import { type FluidProperties, fluidProperties } from './fluids';
+import { type FluidCaution, type FluidProperties, fluidProperties } from './fluids';
 import { type SpanningForest, spanningForest } from './graph/adjacency';
 import { type Chains, chainsOf } from './graph/chains';
 import type { LinkBatch } from './links/law';
@@ -20,6 +20,8 @@ export interface KindRange {
 export interface PreparedNetwork {
   document: NetworkDocument;
   fluid: FluidProperties;
+  /** What the property data warn of. */
+  cautions: FluidCaution[];
   nodeIndex: Map<string, number>;
   /** Document position of each open link, and the reverse (-1 for a shut one). */
   position: Int32Array;
@@ -65,7 +67,8 @@ export function prepareNetwork(document: NetworkDocument): PreparedNetwork {
   const reference = document.reference ? nodeIndex.get(document.reference.node)! : 0;
   const forest = spanningForest(nodeCount, from, to, [reference]);
   const baseFlow = forcedFlows(document, forest, from);
-  return { document, fluid, nodeIndex, position, numberOf, from, to, kinds, forest, baseFlow, chains: chainsOf(nodeCount, from, to) };
+  const chains = chainsOf(nodeCount, from, to);
+  return { document, fluid, cautions: found.cautions, nodeIndex, position, numberOf, from, to, kinds, forest, baseFlow, chains };
 }
 
 function openLinksByKind(links: NetworkLink[]): Record<LinkKind, number[]> {

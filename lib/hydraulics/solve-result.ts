@@ -1,12 +1,12 @@
 import { cubicAt, evaluateCubic, monotoneCubic } from './monotone-cubic';
-import { frictionFactor } from './friction';
+import { frictionFactor, LAMINAR_RE, TURBULENT_RE } from './friction';
 import { GRAVITY_MS2, metresPerKpa } from './links/law';
 import { boreAreaM2, reynoldsPerLs } from './links/pipe';
 import { headAt, pumpCurve, pumpHead, pumpSpeed } from './links/pump';
 import type { PreparedNetwork } from './prepare';
 import type { Solution } from './solve';
 import { solveWarnings } from './solve-warnings';
-import type { LinkResult, NetworkLink, NodeResult, PumpLink, PumpResult, SolveResult } from './types';
+import type { FlowRegime, LinkResult, NetworkLink, NodeResult, PumpLink, PumpResult, SolveResult } from './types';
 
 /** Converged means: every loop closes within this, Pa, and every node balances within that, L/s. */
 const CONVERGED_LOOP_PA = 1;
@@ -102,7 +102,14 @@ function linkResult(
     reynolds,
     // At rest 64/Re has no bound and the loss none: the factor is then given as 0.
     frictionFactor: reynolds > 0 ? frictionFactor(reynolds, link.roughnessMm / link.boreMm) : 0,
+    regime: regimeOf(reynolds),
   };
+}
+
+function regimeOf(reynolds: number): FlowRegime {
+  if (reynolds < 1e-6) return 'at-rest';
+  if (reynolds < LAMINAR_RE) return 'laminar';
+  return reynolds < TURBULENT_RE ? 'transition' : 'turbulent';
 }
 
 /** A pump's head and powers, kW: hydraulic rho g Q H, shaft that over the efficiency at Q / speed. */

@@ -1,9 +1,9 @@
-import { spanningForest } from './graph/adjacency';
+import { type SpanningForest, spanningForest } from './graph/adjacency';
 import { WALL_SLOPE } from './links/law';
 import { pumpSpeed } from './links/pump';
 import type { PreparedNetwork } from './prepare';
 import type { Solution } from './solve';
-import type { LinkResult, LinkOf, Warning } from './types';
+import type { LinkResult, LinkOf, NetworkDocument, Warning } from './types';
 
 /** A wall that lets this much through, L/s, is being forced by an inflow: no steady flow exists. */
 const FORCED_LS = 1e-5;
@@ -14,7 +14,9 @@ const MOST_NAMES = 12;
 export function solveWarnings(network: PreparedNetwork, solution: Solution, links: LinkResult[]): Warning[] {
   return [
     ...solution.warnings,
-    ...cutOffWarnings(network),
+    ...network.cautions,
+    ...partWarnings(network),
+    ...transitionWarnings(links),
     ...pumpWarnings(network, links),
     ...wallWarnings(network, solution),
     ...controllerWarnings(network, solution),
@@ -23,33 +25,52 @@ export function solveWarnings(network: PreparedNetwork, solution: Solution, link
 
 export const listed = (ids: string[]) => (ids.length > MOST_NAMES ? `${ids.slice(0, MOST_NAMES).join(', ')} and ${ids.length - MOST_NAMES} more` : ids.join(', '));
 
+/** Networks that nothing joins to the one with the reference stand on their own first node at 0 kPa. */
+function loneNetworkWarnings(document: NetworkDocument, whole: SpanningForest, reference: number): Warning[] {
+  return whole.roots.flatMap((root, network): Warning[] => {
+    if (network === whole.part[reference]) return [];
+    const { id } = document.nodes[root];
+    return [{ code: 'no-reference', id, message: `Nothing joins ${id} to the reference: pressures there are counted from 0 kPa at ${id}.` }];
+  });
+}
+
 /** Parts that hang on the rest only by shut links: their flows are zero unless they have a pump of their own, their pressures are not known. */
-function cutOffWarnings({ document, nodeIndex, forest, numberOf }: PreparedNetwork): Warning[] {
+function partWarnings({ document, nodeIndex, forest }: PreparedNetwork): Warning[] {
   const { nodes, links } = document;
-  if (numberOf.every((i) => i >= 0)) return [];
+  if (forest.roots.length === 1) return [];
   const from = Int32Array.from(links, (link) => nodeIndex.get(link.from)!);
   const to = Int32Array.from(links, (link) => nodeIndex.get(link.to)!);
   const whole = spanningForest(nodes.length, from, to);
+  const reference = document.reference ? nodeIndex.get(document.reference.node)! : 0;
 
   // Of each network the part with the reference stands for the rest, else the part with most nodes.
   const size = new Int32Array(forest.roots.length);
   for (const part of forest.part) size[part]++;
-  const reference = document.reference ? forest.part[nodeIndex.get(document.reference.node)!] : -1;
+  const referencePart = forest.part[reference];
   const main = new Int32Array(whole.roots.length).fill(-1);
   forest.roots.forEach((root, part) => {
     const network = whole.part[root];
     const held = main[network];
-    if (held < 0 || part === reference || (held !== reference && size[part] > size[held])) main[network] = part;
+    if (held < 0 || part === referencePart || (held !== referencePart && size[part] > size[held])) main[network] = part;
   });
 
   const members: string[][] = forest.roots.map(() => []);
   nodes.forEach((node, v) => members[forest.part[v]].push(node.id));
-  return forest.roots.flatMap((root, part) => {
+  const cutOff = forest.roots.flatMap((root, part): Warning[] => {
     if (main[whole.part[root]] === part) return [];
     const ids = members[part];
     const message = `Closed links cut off ${listed(ids)}: nothing flows to or from there, and its pressure is not known.`;
-    return [{ code: 'cut-off' as const, id: ids[0], message }];
+    return [{ code: 'cut-off', id: ids[0], message }];
   });
+  return [...cutOff, ...loneNetworkWarnings(document, whole, reference)];
+}
+
+/** Between Re 2000 and 4000 no law is sure: the pipes there are named together. */
+function transitionWarnings(links: LinkResult[]): Warning[] {
+  const ids = links.flatMap((link) => (link.regime === 'transition' ? [link.id] : []));
+  if (!ids.length) return [];
+  const message = `Flow is between laminar and turbulent in ${listed(ids)}: the friction there is uncertain.`;
+  return [{ code: 'transition-flow', id: ids[0], message }];
 }
 
 function pumpWarnings({ document }: PreparedNetwork, links: LinkResult[]): Warning[] {

@@ -145,7 +145,7 @@ export type WarningCode =
   | 'no-pump'
   | 'cut-off'
   | 'no-reference'
-  | 'laminar-or-transition'
+  | 'transition-flow'
   | 'forced-flow'
   | 'controller-open'
   | 'controller-shut'
@@ -168,7 +168,10 @@ export interface LinkResult {
   velocityMs?: number;
   reynolds?: number;
   frictionFactor?: number;
+  regime?: FlowRegime;
 }
+
+export type FlowRegime = 'at-rest' | 'laminar' | 'transition' | 'turbulent';
 
 export interface NodeResult {
   id: string;

@@ -35,6 +35,8 @@ export function CommitForm<T extends FieldValues>({ schema, values, onCommit, la
         <form aria-label={label} onSubmit={take} onBlur={take} noValidate>
           <fieldset disabled={disabled} className="min-w-0">
             {children}
+            {/* Without it a browser takes Enter for nothing where there are several fields. */}
+            <button type="submit" hidden tabIndex={-1} />
           </fieldset>
         </form>
       </UnreadContext>

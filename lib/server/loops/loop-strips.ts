@@ -1,5 +1,5 @@
 import { db } from '@/db/knex';
-import type { StripBand, StripTick } from '@/lib/api/flow-strip';
+import type { StripBand, StripTick } from '@/lib/commissioning/flow-strip';
 import type { ToleranceRule } from '@/lib/api/projects';
 import { defaultTolerances } from '@/lib/api/tolerances';
 

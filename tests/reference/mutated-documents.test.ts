@@ -5,8 +5,8 @@ import { size } from '@/lib/hydraulics/size';
 import { solve } from '@/lib/hydraulics/solve';
 import type { NetworkDocument } from '@/lib/hydraulics/types';
 import { parseNetworkDocument, type Purpose } from '@/lib/network/document';
-import { numbersFrom, passiveKinds, randomMesh } from '../../make/any-network';
-import { houseExample } from '../../make/house-example';
+import { numbersFrom, passiveKinds, randomMesh } from '../make/any-network';
+import { houseExample } from '../make/house-example';
 
 const MUTATIONS = 10_000;
 /** Generous for a machine that does other things beside; a hang is what this looks for. */
@@ -14,17 +14,21 @@ const SLOWEST_MS = 5_000;
 
 type Json = null | boolean | number | string | Json[] | { [key: string]: Json };
 
-const folder = new URL('../../reference/data/networks/', import.meta.url);
+const folder = new URL('./data/networks/', import.meta.url);
 const stored = readdirSync(folder)
   .filter((file) => !file.includes('expected'))
   .map((file) => readFileSync(new URL(file, folder), 'utf8'));
 const withController = houseExample();
 withController.links.push({ id: 'DPC', kind: 'dpController', from: 'n3', to: 'X', setpointKpa: 12, sense: ['n2', 'X'], kvs: 2 });
-const texts = [
-  ...stored,
-  JSON.stringify({ ...withController, options: { sizing: { maxPaPerM: 300, maxVelocityMs: 1.5 } } }),
-  ...[1, 2, 3].map((seed) => JSON.stringify({ ...randomMesh(seed, 8, 5, passiveKinds, 2), options: { method: 'hardy-cross' } })),
-];
+const texts = [...stored, JSON.stringify(withController), ...[1, 2, 3].map((seed) => JSON.stringify(randomMesh(seed, 8, 5, passiveKinds, 2)))].map(readyToSize);
+
+/** Every document also asks for sizes, so that all three commands have work. */
+function readyToSize(text: string, k: number): string {
+  const document = JSON.parse(text) as NetworkDocument;
+  const links = document.links.map((link) => (link.kind === 'pipe' ? { ...link, size: true, series: 'steel-asme-sch40' } : link));
+  const method = k % 2 ? 'hardy-cross' : undefined;
+  return JSON.stringify({ ...document, links, options: { method, sizing: { maxPaPerM: 300, maxVelocityMs: 1.5 } } });
+}
 
 /** Every place of a value inside another: its holder and key. */
 function places(value: Json): { holder: Record<string, Json>; key: string }[] {
@@ -65,7 +69,7 @@ const hasBadNumber = (value: unknown): boolean =>
 describe('a damaged document', () => {
   it('is given a result of finite numbers or a named error, in good time, ten thousand times', { timeout: 600_000 }, () => {
     const random = numbersFrom(2026);
-    let refused = 0; let slow=300; const tot:any={};
+    let refused = 0;
     for (let k = 0; k < MUTATIONS; k++) {
       const document = JSON.parse(texts[k % texts.length]) as Json;
       for (let m = 0; m <= 2 * random(); m++) mutate(document, random);
@@ -82,9 +86,9 @@ describe('a damaged document', () => {
         for (const issue of parsed.error.issues) expect(issue.message).not.toBe('');
       }
       const took = performance.now() - begun;
-      tot[purpose+(parsed.ok?"ok":"bad")]=(tot[purpose+(parsed.ok?"ok":"bad")]??0)+took; if(took>slow){slow=took;console.log(k,took,parsed.ok && JSON.stringify(document).slice(0,20000000));}
+      if (took > SLOWEST_MS) throw new Error(`${took} ms: ${JSON.stringify(document)}`);
     }
-    console.log(tot,refused);expect(refused).toBeGreaterThan(MUTATIONS / 10);
+    expect(refused).toBeGreaterThan(MUTATIONS / 10);
     expect(refused).toBeLessThan(MUTATIONS * 0.9);
   });
 });
