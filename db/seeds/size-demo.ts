@@ -25,7 +25,12 @@ export function sizeDemo(drawn: Drawing): Drawing {
   const sizeOfPipe = new Map(sized.pipes.map((pipe) => [pipe.id, pipe]));
   const withPipes: Drawing = {
     ...drawn,
-    pipes: drawn.pipes.map((pipe) => ({ ...pipe, nominal: sizeOfPipe.get(pipe.id)!.nominal, boreMm: sizeOfPipe.get(pipe.id)!.boreMm })),
+    pipes: drawn.pipes.map((pipe) => {
+      // The vessel's pipe carries nothing: its size is that of the vessel's connection.
+      if (pipe.from.equipmentId === 'vessel') return { ...pipe, nominal: 'DN25', boreMm: 27.3 };
+      const { nominal, boreMm } = sizeOfPipe.get(pipe.id)!;
+      return { ...pipe, nominal, boreMm };
+    }),
   };
 
   const first = balance(documentOf(withPipes));

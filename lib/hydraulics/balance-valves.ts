@@ -16,6 +16,12 @@ const freeValves = ({ kinds, document, position }: PreparedNetwork, { stretchOf 
     .flatMap(({ first, last }) => Array.from({ length: last - first }, (_, k) => first + k))
     .filter((i) => stretchOf[i] >= 0 && !(document.links[position[i]] as BalancingValveLink).locked);
 
+/** Ids of the free balancing valves through which flow runs, but no circuit of a pump. */
+export const valvesOffCircuit = (network: PreparedNetwork, circuits: PumpCircuits): string[] =>
+  freeValves(network, circuits)
+    .filter((i) => circuits.groups.every((group) => group.circuits.through(circuits.stretchOf[i]) === -Infinity))
+    .map((i) => network.document.links[network.position[i]].id);
+
 /** The free balancing valves, those that carry most first, and of equals those nearer to a pump. */
 export function upstreamFirst(network: PreparedNetwork, circuits: PumpCircuits, flow: Float64Array): number[] {
   const near = linksFromPump(network, circuits);

@@ -1,6 +1,6 @@
 import { balancedPumps } from './balance-pumps';
 import { balancedTerminals } from './balance-terminals';
-import { balancedValves, upstreamFirst } from './balance-valves';
+import { balancedValves, upstreamFirst, valvesOffCircuit } from './balance-valves';
 import { designFlows } from './design-flows';
 import { pumpSpeed } from './links/pump';
 import { type PumpCircuits, pumpCircuits } from './pump-circuits';
@@ -46,10 +46,11 @@ export function balance(document: NetworkDocument): BalanceResult {
 
 /**
  * Design flows, the circuits at them and the pumps' duty. Where pumps decide some of the flows (in parallel, along a bypass) these
- * change with the speeds and the speeds with them, until both stay.
+ * change with the speeds and the speeds with them, until both stay. A valve on no terminal's circuit (on a bypass) stays as it is set.
  */
-function findDuty(document: NetworkDocument) {
-  let atSpeeds = document;
+function findDuty(given: NetworkDocument) {
+  let document = given;
+  let atSpeeds = given;
   for (let round = 0; ; round++) {
     const design = designFlows(atSpeeds);
     const { network, flow } = design;
@@ -58,10 +59,17 @@ function findDuty(document: NetworkDocument) {
     for (const { batch, first, last } of network.kinds) batch.evaluate(flow, loss, slope, first, last);
     const circuits = pumpCircuits(network, flow, loss);
     const pumps = balancedPumps(network, circuits, flow);
-    const changed = { ...document, links: document.links.map((link) => set(link, NO_SETTINGS, pumps.speeds)) };
-    const isSettled = changed.links.every((link, at) => link.kind !== 'pump' || Math.abs(pumpSpeed(link) - pumpSpeed(atSpeeds.links[at] as PumpLink)) < SETTLED_SPEED);
-    if (!design.isPumpDependent || isSettled || round === MOST_ROUNDS || design.conflict.length) return { design, loss, circuits, pumps };
-    atSpeeds = changed;
+    const found = { design, loss, circuits, pumps };
+    if (design.conflict.length || round === MOST_ROUNDS) return found;
+
+    const idle = new Set(valvesOffCircuit(network, circuits));
+    if (!idle.size && !design.isPumpDependent) return found;
+    const keep = (link: NetworkLink) => (idle.has(link.id) && link.kind === 'balancingValve' ? { ...link, locked: true } : link);
+    document = { ...document, links: document.links.map(keep) };
+    const next = { ...document, links: document.links.map((link) => set(link, NO_SETTINGS, pumps.speeds)) };
+    const isSettled = next.links.every((link, at) => link.kind !== 'pump' || Math.abs(pumpSpeed(link) - pumpSpeed(atSpeeds.links[at] as PumpLink)) < SETTLED_SPEED);
+    if (!idle.size && isSettled) return found;
+    atSpeeds = next;
   }
 }
 

@@ -2,13 +2,21 @@ import type { BalancedValve } from '@/lib/hydraulics/types';
 import type { ChosenValve, Drawing, Equipment } from './drawing';
 import { unitLinkId } from './drawing-to-document';
 
+/** A hundredth of a turn is finer than any handwheel shows, and is what the schedule prints. */
+function onHandwheel(setting: number, { kvTable }: ChosenValve): number {
+  const rounded = Math.round(setting * 100) / 100;
+  return Math.min(Math.max(rounded, kvTable[0]?.setting ?? rounded), kvTable.at(-1)?.setting ?? rounded);
+}
+
 /** The drawing with the settings of a balance in its valves; valves that are locked, or that the balance does not name, stay. */
 export function adoptSettings(drawing: Drawing, valves: BalancedValve[]): { drawing: Drawing; count: number } {
   const settingOf = new Map(valves.map(({ id, setting }) => [id, setting]));
   let count = 0;
   const adopted = (valve: ChosenValve, linkId: string): ChosenValve => {
-    const settingTurns = settingOf.get(linkId);
-    if (settingTurns === undefined || valve.isLocked || valve.settingTurns === settingTurns) return valve;
+    const exact = settingOf.get(linkId);
+    if (exact === undefined || valve.isLocked) return valve;
+    const settingTurns = onHandwheel(exact, valve);
+    if (valve.settingTurns === settingTurns) return valve;
     count += 1;
     return { ...valve, settingTurns };
   };

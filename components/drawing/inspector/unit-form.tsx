@@ -4,11 +4,14 @@ import { toast } from 'sonner';
 import { z } from 'zod';
 import { characteristics, terminalUnitSchema, type ChosenValve, type TerminalUnit } from '@/lib/network/drawing';
 import { designFlowOfLoad } from '@/lib/network/working';
+import { fromUnit, toUnit } from '@/lib/units/format-quantity';
+import { unitFor } from '@/lib/units/quantities';
+import { useUnitChoice } from '../../shell/units-context';
 import { useDrawing, useEditor } from '../editor-context';
 import { CommitForm } from './commit-form';
 import { commonValues } from './common-values';
-import { NumberRow, QuantityRow, Section, SelectRow, TextRow } from './rows';
 import { characteristicWords } from './control-valve-form';
+import { NumberRow, QuantityRow, Section, SelectRow, TextRow } from './rows';
 import { useEdit } from './use-edit';
 import { ValveChoice } from './valve-choice';
 import { WorkingList } from './working-list';
@@ -29,6 +32,7 @@ export function UnitForm({ units }: { units: TerminalUnit[] }) {
   const { canEdit } = useEditor();
   const fluid = useDrawing((drawing) => drawing.fluid);
   const { editPieces } = useEdit();
+  const flowUnit = unitFor('flow', useUnitChoice());
   const isSingle = units.length === 1;
   const coil = commonValues(units.map((unit) => ({ room: unit.room, loadKw: unit.loadKw, designFlowLs: unit.designFlowLs, coilDropKpa: unit.coilDropKpa, strainerKv: unit.strainerKv })));
   const loaded = units.filter((unit) => unit.loadKw !== null);
@@ -41,10 +45,11 @@ export function UnitForm({ units }: { units: TerminalUnit[] }) {
       toast(refusal.refused);
       return;
     }
-    // Four digits: more would be a precision that no load has.
+    // Four digits as they are read: more would be a precision that no load has.
+    const rounded = (flowLs: number) => fromUnit('flow', Number(toUnit('flow', flowLs, flowUnit).toPrecision(4)), flowUnit);
     editPieces(loaded, (unit) => {
       const flow = designFlowOfLoad(unit.loadKw!, fluid);
-      return 'refused' in flow ? unit : { ...unit, designFlowLs: Number(flow.flowLs.toPrecision(4)) };
+      return 'refused' in flow ? unit : { ...unit, designFlowLs: rounded(flow.flowLs) };
     });
   };
 

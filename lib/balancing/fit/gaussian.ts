@@ -55,10 +55,18 @@ export class Gaussian {
   }
 }
 
-export function dot(a: ArrayLike<number>, b: ArrayLike<number>): number {
-  let sum = 0;
-  for (let k = 0; k < a.length; k++) sum += a[k] * b[k];
-  return sum;
+export function dot(a: Float64Array, b: Float64Array): number {
+  // Four sums at once: most of a fit's time is spent here.
+  let [s0, s1, s2, s3] = [0, 0, 0, 0];
+  let k = 0;
+  for (; k + 3 < a.length; k += 4) {
+    s0 += a[k] * b[k];
+    s1 += a[k + 1] * b[k + 1];
+    s2 += a[k + 2] * b[k + 2];
+    s3 += a[k + 3] * b[k + 3];
+  }
+  for (; k < a.length; k++) s0 += a[k] * b[k];
+  return s0 + s1 + s2 + s3;
 }
 
 export function transposeTimes(rows: Float64Array[], weights: ArrayLike<number>, length: number): Float64Array {
@@ -72,7 +80,11 @@ export function transposeTimes(rows: Float64Array[], weights: ArrayLike<number>,
 
 /** Lower half of A Aᵀ. */
 export function gramOf(rows: Float64Array[]): Float64Array[] {
-  return rows.map((row, m) => Float64Array.from({ length: m + 1 }, (_, k) => dot(row, rows[k])));
+  return rows.map((row, m) => {
+    const products = new Float64Array(m + 1);
+    for (let k = 0; k <= m; k++) products[k] = dot(row, rows[k]);
+    return products;
+  });
 }
 
 function cholesky(rows: Float64Array[]): void {

@@ -2,7 +2,7 @@ import { Gaussian, gramOf, transposeTimes } from './gaussian';
 import type { ReadingModel } from './reading-model';
 
 const MOST_STEPS = 25;
-const SETTLED_COST = 1e-3;
+const SETTLED_COST = 0.01;
 /** No resistance is taken further than this logarithm from its design: beyond, it is as good as shut. */
 const FURTHEST = 9;
 

@@ -36,13 +36,18 @@ const causeOf: Partial<Record<Unknown['kind'], Cause>> = { run: 'blocked', setti
 /** A valve opens or closes no further than its table; this much of its Kv is left to the table's own error. */
 const TABLE_ERROR = 0.05;
 const WORTH_A_SECOND_LOOK = -2;
+/** Faults that look this much alike to the readings (squared cosine) are not taken in one go: the first may explain what speaks for the next. */
+const ALIKE = 0.1;
 
 export const faultDeviation = (cause: Cause) => faults[cause].deviation;
 
 interface Weighed extends Suspicion {
   column: Float64Array;
+  whitened: Float64Array;
   variance: number;
 }
+
+const squaredCosine = (a: Float64Array, b: Float64Array) => dot(a, b) ** 2 / (dot(a, a) * dot(b, b));
 
 /**
  * Weighs every single fault by the generalised likelihood ratio (S. Narasimhan, R. Mah 1987) at the fit's linear model, with the prior odds and
@@ -68,7 +73,7 @@ export class FaultSearch {
     this.innovation = fit.misfit.map((each, m) => each + dot(fit.rows[m], fit.values));
   }
 
-  /** Faults more likely than none, the most likely first, each found with the earlier ones taken as true. */
+  /** Unlike faults more likely than none, the most likely first, each found with the earlier ones taken as true. */
   likely(): Suspicion[] {
     const found: Suspicion[] = [];
     let candidates = this.weigh(this.candidates());
@@ -77,8 +82,9 @@ export class FaultSearch {
       const best = candidates.shift();
       if (!best || best.logOdds <= 0) return found;
       found.push(best);
+      const unlike = candidates.filter((each) => squaredCosine(each.whitened, best.whitened) < ALIKE);
       this.accept(best);
-      candidates = this.weigh(candidates);
+      candidates = this.weigh(unlike);
     }
   }
 
@@ -95,7 +101,7 @@ export class FaultSearch {
   private candidates(): Weighed[] {
     const { unknowns, placed, fit, deviations, noise } = this;
     const weighed = (cause: Cause, unknown: number | null, reading: number | null, column: Float64Array): Weighed => {
-      return { cause, unknown, reading, column, variance: faults[cause].deviation ** 2, logOdds: -Infinity, shift: 0 };
+      return { cause, unknown, reading, column, whitened: column, variance: faults[cause].deviation ** 2, logOdds: -Infinity, shift: 0 };
     };
     const ofUnknowns = unknowns.flatMap((unknown, j) => {
       const cause = causeOf[unknown.kind];
@@ -116,12 +122,12 @@ export class FaultSearch {
     const gaussian = new Gaussian([], this.noise, 0, this.gram);
     const innovation = gaussian.whiten(this.innovation);
     return candidates.map((each) => {
-      const column = gaussian.whiten(each.column);
-      const growth = 1 + each.variance * dot(column, column);
-      const match = dot(column, innovation);
+      const whitened = gaussian.whiten(each.column);
+      const growth = 1 + each.variance * dot(whitened, whitened);
+      const match = dot(whitened, innovation);
       const shift = (each.variance * match) / growth;
       const logOdds = Math.log(faults[each.cause].odds) - 0.5 * Math.log(growth) + (0.5 * each.variance * match * match) / growth;
-      return { ...each, shift, logOdds: this.isPossible(each, shift) ? logOdds : -Infinity };
+      return { ...each, whitened, shift, logOdds: this.isPossible(each, shift) ? logOdds : -Infinity };
     });
   }
 

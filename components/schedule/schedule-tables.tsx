@@ -1,0 +1,69 @@
+'use client';
+
+import { useSearchParams } from 'next/navigation';
+import { useMemo } from 'react';
+import type { StripBand } from '@/lib/api/flow-strip';
+import type { Schedule } from '@/lib/network/schedule-rows';
+import { classNames } from '../ui/class-names';
+import { pipeColumns, pumpColumns, sourceColumns, terminalColumns, valveColumns } from './schedule-columns';
+import { SortableTable } from './sortable-table';
+
+const tables = [
+  ['terminals', 'Terminals'],
+  ['valves', 'Balancing valves'],
+  ['pipes', 'Pipes'],
+  ['pumps', 'Pumps'],
+  ['sources', 'Source'],
+] as const;
+
+interface ScheduleTablesProps {
+  schedule: Schedule;
+  bands: { terminal: StripBand; branch: StripBand };
+  drawingHref: string;
+}
+
+/** The tables of the loop, one at a time; which one stands in the address, so that it can be shared. */
+export function ScheduleTables({ schedule, bands, drawingHref }: ScheduleTablesProps) {
+  const asked = useSearchParams().get('table');
+  const open = tables.find(([key]) => key === asked)?.[0] ?? 'terminals';
+  const columns = useMemo(() => ({ terminals: terminalColumns(bands.terminal), valves: valveColumns(bands.branch) }), [bands]);
+  const show = (key: string) => window.history.replaceState(null, '', `?table=${key}`);
+
+  return (
+    <div className="flex min-h-0 flex-1 flex-col rounded border bg-sheet print:border-0">
+      <div role="group" aria-label="Tables" className="flex gap-5 overflow-x-auto border-b px-4 print:hidden">
+        {tables.map(([key, name]) => (
+          <button
+            key={key}
+            type="button"
+            aria-pressed={open === key}
+            onClick={() => show(key)}
+            className={classNames('min-h-11 border-b-2 font-semibold whitespace-nowrap', open === key ? 'border-brass' : 'border-transparent text-quiet hover:text-ink')}
+          >
+            {name} <span className="figures ml-1 text-xs font-normal text-quiet">{schedule[key].length}</span>
+          </button>
+        ))}
+      </div>
+      {schedule[open].length === 0 ? (
+        <p className="p-6 text-quiet">None on this drawing.</p>
+      ) : (
+        <>
+          {open === 'terminals' && (
+            <SortableTable
+              label="Terminals"
+              nameHead="Terminal"
+              columns={columns.terminals}
+              rows={schedule.terminals}
+              mark={({ isIndex }) => (isIndex ? 'index' : null)}
+              drawingHref={drawingHref}
+            />
+          )}
+          {open === 'valves' && <SortableTable label="Balancing valves" nameHead="Valve" columns={columns.valves} rows={schedule.valves} drawingHref={drawingHref} />}
+          {open === 'pipes' && <SortableTable label="Pipes" nameHead="From – to" columns={pipeColumns} rows={schedule.pipes} drawingHref={drawingHref} />}
+          {open === 'pumps' && <SortableTable label="Pumps" nameHead="Pump" columns={pumpColumns} rows={schedule.pumps} drawingHref={drawingHref} />}
+          {open === 'sources' && <SortableTable label="Source" nameHead="Source" columns={sourceColumns} rows={schedule.sources} drawingHref={drawingHref} />}
+        </>
+      )}
+    </div>
+  );
+}

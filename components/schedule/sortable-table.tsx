@@ -1,0 +1,83 @@
+'use client';
+
+import Link from 'next/link';
+import { useMemo, useState } from 'react';
+import { Button } from '../ui/button';
+import { Figures, Head, RowName, TableFrame, Words } from '../ui/table';
+import type { ScheduleColumn } from './column';
+import { nextSorting, sortRows, type Sorting } from './sort-rows';
+
+const MOST_AT_FIRST = 300;
+
+interface SortableTableProps<Row> {
+  label: string;
+  /** Of the column that names the row and leads to its place on the drawing. */
+  nameHead: string;
+  columns: ScheduleColumn<Row>[];
+  rows: Row[];
+  mark?: (row: Row) => string | null;
+  drawingHref: string;
+}
+
+export function SortableTable<Row extends { id: string; tag: string }>({ label, nameHead, columns, rows, mark, drawingHref }: SortableTableProps<Row>) {
+  const [sorting, setSorting] = useState<Sorting | null>(null);
+  const [showsAll, setShowsAll] = useState(false);
+  const sorted = useMemo(() => {
+    if (!sorting) return rows;
+    const sortBy = sorting.key === 'tag' ? ({ tag }: Row) => tag : columns.find(({ key }) => key === sorting.key)!.sortBy;
+    return sortRows(rows, sortBy, sorting.isDescending);
+  }, [rows, columns, sorting]);
+  const shown = showsAll ? sorted : sorted.slice(0, MOST_AT_FIRST);
+  const sortable = (key: string) => ({
+    'aria-sort': sorting?.key !== key ? ('none' as const) : sorting.isDescending ? ('descending' as const) : ('ascending' as const),
+  });
+  const press = (key: string) => setSorting(nextSorting(sorting, key));
+
+  return (
+    <TableFrame label={label} className="min-h-0 flex-1">
+      <thead>
+        <tr>
+          <Head className="left-0 z-20!" {...sortable('tag')}>
+            <SortButton head={nameHead} sorting={sorting?.key === 'tag' ? sorting : null} onPress={() => press('tag')} />
+          </Head>
+          {columns.map(({ key, head, unit, isFigure }) => (
+            <Head key={key} unit={unit} isFigure={isFigure} {...sortable(key)}>
+              <SortButton head={head} sorting={sorting?.key === key ? sorting : null} onPress={() => press(key)} />
+            </Head>
+          ))}
+        </tr>
+      </thead>
+      <tbody>
+        {shown.map((row) => (
+          <tr key={row.id} className="break-inside-avoid hover:bg-well">
+            <RowName className="sticky left-0 bg-sheet">
+              <Link href={`${drawingHref}?select=${encodeURIComponent(row.id)}`} prefetch={false} className="no-underline hover:underline">
+                {row.tag}
+              </Link>
+              {mark?.(row) && <span className="ml-2 rounded border border-brass px-1 text-xs font-semibold text-brass">{mark(row)}</span>}
+            </RowName>
+            {columns.map(({ key, isFigure, show }) => (isFigure ? <Figures key={key}>{show(row)}</Figures> : <Words key={key}>{show(row)}</Words>))}
+          </tr>
+        ))}
+        {shown.length < sorted.length && (
+          <tr>
+            <td colSpan={columns.length + 1} className="p-4">
+              <Button onClick={() => setShowsAll(true)}>Show all {sorted.length}</Button>
+            </td>
+          </tr>
+        )}
+      </tbody>
+    </TableFrame>
+  );
+}
+
+function SortButton({ head, sorting, onPress }: { head: string; sorting: Sorting | null; onPress: () => void }) {
+  return (
+    <button type="button" onClick={onPress} className="min-h-6 text-[inherit] font-semibold hover:text-ink hover:underline" title={`Sort by ${head.toLowerCase()}`}>
+      {head}
+      <span aria-hidden className="text-brass">
+        {sorting && (sorting.isDescending ? ' ↓' : ' ↑')}
+      </span>
+    </button>
+  );
+}
