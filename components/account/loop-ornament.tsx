@@ -6,8 +6,8 @@ export function LoopOrnament() {
     <svg viewBox="40 55 550 290" aria-hidden className="mx-auto w-full max-w-4xl" fill="none" strokeWidth={1.5}>
       <path d="M70 320V80H560" stroke="var(--petrol)" strokeWidth={2.5} />
       <path d="M560 320H70" stroke="var(--petrol)" strokeWidth={2.5} strokeDasharray="9 6" />
-      <path d="M300 73l14 7-14 7z" fill="var(--petrol)" />
-      <path d="M324 313l-14 7 14 7z" fill="var(--petrol)" />
+      <path d="M273 73l14 7-14 7z" fill="var(--petrol)" />
+      <path d="M287 313l-14 7 14 7z" fill="var(--petrol)" />
       <g stroke="var(--ink)">
         <circle cx={70} cy={220} r={22} fill="var(--paper)" />
         <path d="M70 198L89 231H51Z" />

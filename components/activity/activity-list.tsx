@@ -19,13 +19,17 @@ export function ActivityList({ rows, hasProject }: { rows: ActivityRow[]; hasPro
   );
 }
 
+/** A page of links would be louder than what was done. */
+const inInk = 'text-ink no-underline hover:underline';
+const inQuiet = 'text-quiet no-underline hover:underline';
+
 const namesLoop = ({ subject, loopName }: ActivityRow) => Boolean(loopName && subject.includes(loopName));
 
 /** What was acted on; leads to the loop or project that it names. */
 function Subject({ row }: { row: ActivityRow }) {
   const { projectId, loopId, projectName, subject } = row;
-  if (projectId && loopId && namesLoop(row)) return <Link href={`/projects/${projectId}/loops/${loopId}`}>{subject}</Link>;
-  if (projectId && subject === projectName) return <Link href={`/projects/${projectId}`}>{subject}</Link>;
+  if (projectId && loopId && namesLoop(row)) return <Link className={inInk} href={`/projects/${projectId}/loops/${loopId}`}>{subject}</Link>;
+  if (projectId && subject === projectName) return <Link className={inInk} href={`/projects/${projectId}`}>{subject}</Link>;
   return subject;
 }
 
@@ -33,8 +37,8 @@ function Subject({ row }: { row: ActivityRow }) {
 function Place({ row, hasProject }: { row: ActivityRow; hasProject?: boolean }) {
   const { projectId, projectName, loopId, loopName, subject } = row;
   if (!projectId || !projectName) return null;
-  const loop = loopId && loopName && !namesLoop(row) && <Link href={`/projects/${projectId}/loops/${loopId}`}>{loopName}</Link>;
-  const project = hasProject && projectName !== subject && <Link href={`/projects/${projectId}`}>{projectName}</Link>;
+  const loop = loopId && loopName && !namesLoop(row) && <Link className={inQuiet} href={`/projects/${projectId}/loops/${loopId}`}>{loopName}</Link>;
+  const project = hasProject && projectName !== subject && <Link className={inQuiet} href={`/projects/${projectId}`}>{projectName}</Link>;
   if (!loop && !project) return null;
   return (
     <span className="text-quiet">

@@ -9,7 +9,9 @@ export function ProjectFilter({ projects, projectId }: { projects: { id: string;
   return (
     <SelectField
       label="Project"
-      value={projectId ?? ''}
+      // Begins anew with the address, and keeps the choice while the page is on its way.
+      key={projectId}
+      defaultValue={projectId ?? ''}
       onChange={(event) => router.replace(event.target.value ? `/activity?project=${event.target.value}` : '/activity', { scroll: false })}
       className="bg-sheet"
     >

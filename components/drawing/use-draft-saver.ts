@@ -26,6 +26,7 @@ export function useDraftSaver(store: DrawingStore, { loopId, personId, loaded }:
       store.getState().change(() => kept);
       toast('What was drawn here and not yet saved is back, and is being saved now.');
     }
+    saver.start();
     const stopListening = store.subscribe(({ drawing }) => saver.change(drawing));
     const keep = () => void saver.keep();
     const retry = () => void saver.saveNow();

@@ -45,12 +45,15 @@ function LoopRow({ projectId, loop, band }: { projectId: string; loop: LoopSumma
   );
 }
 
+/** How far the loop is; before the first reading only how large. */
 function Within({ ticks }: { ticks: LoopSummary['strip'] }) {
   if (ticks.length === 0) return null;
+  const count = <span className="figures">{ticks.length}</span>;
+  if (ticks.every(({ verdict }) => verdict === null)) return <>{count} terminals</>;
   const within = ticks.filter(({ verdict }) => verdict === 'within').length;
   return (
     <>
-      <span className="figures text-ink">{within}</span> of <span className="figures">{ticks.length}</span> within
+      <span className="figures text-ink">{within}</span> of {count} within
     </>
   );
 }

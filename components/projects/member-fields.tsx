@@ -55,7 +55,7 @@ export function MemberFields({ members, onChange, people }: MemberFieldsProps) {
               </option>
             ))}
           </select>
-          <Button look="quiet" className="w-10 shrink-0 px-0" aria-label={`Take member ${index + 1} off`} onClick={() => onChange(members.filter((_, i) => i !== index))}>
+          <Button look="quiet" className="w-10 shrink-0 px-0!" aria-label={`Take member ${index + 1} off`} onClick={() => onChange(members.filter((_, i) => i !== index))}>
             <X size={16} aria-hidden />
           </Button>
         </div>

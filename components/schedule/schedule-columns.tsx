@@ -1,5 +1,5 @@
 import type { ReactNode } from 'react';
-import type { StripBand } from '@/lib/api/flow-strip';
+import type { StripBand } from '@/lib/commissioning/flow-strip';
 import type { PipeRow, PumpRow, ScheduledSetting, SourceRow, TerminalRow, ValveRow } from '@/lib/network/schedule-rows';
 import type { Quantity } from '@/lib/units/quantities';
 import { valveStateWords } from '../report/valve-state-words';

@@ -2,7 +2,7 @@
 
 import { useSearchParams } from 'next/navigation';
 import { useMemo } from 'react';
-import type { StripBand } from '@/lib/api/flow-strip';
+import type { StripBand } from '@/lib/commissioning/flow-strip';
 import type { Schedule } from '@/lib/network/schedule-rows';
 import { classNames } from '../ui/class-names';
 import { pipeColumns, pumpColumns, sourceColumns, terminalColumns, valveColumns } from './schedule-columns';

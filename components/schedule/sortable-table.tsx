@@ -20,7 +20,7 @@ interface SortableTableProps<Row> {
 }
 
 export function SortableTable<Row extends { id: string; tag: string }>({ label, nameHead, columns, rows, mark, drawingHref }: SortableTableProps<Row>) {
-  const [sorting, setSorting] = useState<Sorting | null>(null);
+  const [sorting, setSorting] = useState<Sorting | null>({ key: 'tag', isDescending: false });
   const [showsAll, setShowsAll] = useState(false);
   const sorted = useMemo(() => {
     if (!sorting) return rows;

@@ -1,5 +1,5 @@
 import type { BalancedPump, BalancedValve } from '@/lib/hydraulics/types';
-import type { Verdict } from './commissioning';
+import { verdictOf as verdictInBand, type Verdict } from '@/lib/commissioning/verdict';
 import type { StripBand, StripTick } from '@/lib/commissioning/flow-strip';
 import type { ReportContent, ReportStation } from './reports';
 import type { ToleranceRule } from './projects';
@@ -16,8 +16,7 @@ export function verdictOf(content: ReportContent, { kind, reading }: ReportStati
   if (!reading) return null;
   const band = bandFor(content, kind);
   if (!band) return reading.verdict;
-  if (reading.percentOfDesign < 100 + band.lowerPercent) return 'low';
-  return reading.percentOfDesign > 100 + band.upperPercent ? 'high' : 'within';
+  return verdictInBand(reading.percentOfDesign, band);
 }
 
 export const terminalsOf = (content: ReportContent): ReportStation[] => content.stations.filter(({ kind }) => kind === 'terminal');

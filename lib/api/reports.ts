@@ -54,6 +54,9 @@ export interface ReportStation extends Station {
 /** A round with entries. When it was closed is left out: submitting closes it, and must not change what is signed. */
 export type ReportRound = Omit<Round, 'closedAt'>;
 
+/** A meter that was read. Whether it was retired since is left out: it says nothing of what was read. */
+export type ReportInstrument = Omit<Instrument, 'isRetired'>;
+
 /** An entry with the station's name in the revision that it was taken under. */
 export interface ReportReading extends Reading {
   tag: string;
@@ -69,7 +72,7 @@ export interface ReportContent {
   tolerances: ToleranceRule[];
   stations: ReportStation[];
   rounds: ReportRound[];
-  instruments: Instrument[];
+  instruments: ReportInstrument[];
   /** Every entry of every revision, oldest first, those too that were put right later: nothing measured is left out. */
   readings: ReportReading[];
   balance: BalanceResult;

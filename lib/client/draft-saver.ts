@@ -111,6 +111,11 @@ export class DraftSaver {
     return () => this.listeners.delete(listener);
   };
 
+  /** Goes on with what is not acknowledged yet, after `stop` or a restored drawing. */
+  start(): void {
+    if (this.drawing !== this.base && this.state.kind !== 'conflict') this.saveAfter(SAVE_AFTER_MS);
+  }
+
   stop(): void {
     this.keep();
     clearTimeout(this.saveTimer);

@@ -6,6 +6,6 @@ export function showRefusal<Values extends FieldValues>(error: unknown, form: Pi
   if (!(error instanceof RequestError)) throw error;
   const names = Object.keys(form.getValues());
   const here = error.fields.filter(({ path }) => names.includes(path.split('.')[0]!));
-  for (const { path, message } of here) form.setError(path as Path<Values>, { message });
+  for (const { path, message } of here) form.setError(path as Path<Values>, { message }, { shouldFocus: true });
   if (here.length === 0) form.setError('root', { message: error.message });
 }

@@ -1,4 +1,4 @@
-import { flowThroughValveLs } from '@/lib/hydraulics/valve-coefficient';
+import { dropAcrossValveKpa, flowThroughValveLs } from '@/lib/hydraulics/valve-coefficient';
 import { kvAtSetting } from '@/lib/hydraulics/links/balancing-valve';
 
 /** One line of a valve's table: handwheel turns and the Kv there, both rising. */
@@ -34,4 +34,10 @@ export function flowFromDrop({ kvTable, settingTurns, dropKpa, densityKgM3 }: Dr
   if (!(dropKpa >= 0)) return { ok: false, path: 'dropKpa', message: 'A drop cannot be negative: check the hoses.' };
   const kv = kvAtSetting([...kvTable], settingTurns);
   return { ok: true, kv, flowLs: flowThroughValveLs(kv, dropKpa, densityKgM3) };
+}
+
+/** The drop that would show at a setting if the flow were as designed, kPa; null where the valve's table says nothing of that setting. */
+export function dropAtDesignKpa(read: Omit<DropRead, 'dropKpa'>, designFlowLs: number): number | null {
+  const found = flowFromDrop({ ...read, dropKpa: 1 });
+  return found.ok && found.kv > 0 ? dropAcrossValveKpa(found.kv, designFlowLs, read.densityKgM3) : null;
 }

@@ -1,4 +1,5 @@
 import type { Loops } from './graph/loops';
+import { GrowingList } from './growing-list';
 import { LoopGradients } from './loop-gradients';
 import { SparseLdl } from './sparse/ldl';
 import type { Pattern } from './sparse/minimum-degree';
@@ -86,7 +87,7 @@ function loopsThroughChains(loops: Loops, chainCount: number): ThroughChains {
 
 function patternOf(loops: Loops, through: ThroughChains): Pattern | null {
   const start = new Int32Array(loops.count + 1);
-  const index: number[] = [];
+  const index = new GrowingList(2 * loops.chain.length);
   const met = new Int32Array(loops.count).fill(-1);
   for (let l = 0; l < loops.count; l++) {
     met[l] = l;
@@ -102,13 +103,13 @@ function patternOf(loops: Loops, through: ThroughChains): Pattern | null {
     if (index.length > MOST_PATTERN) return null;
     start[l + 1] = index.length;
   }
-  return { size: loops.count, start, index: Int32Array.from(index) };
+  return { size: loops.count, start, index: index.toArray() };
 }
 
 function sharedChains(through: ThroughChains, factors: SparseLdl): SharedChains {
-  const slot: number[] = [];
-  const chain: number[] = [];
-  const sign: number[] = [];
+  const slot = new GrowingList(through.loop.length);
+  const chain = new GrowingList(through.loop.length);
+  const sign = new GrowingList(through.loop.length);
   for (let c = 0; c + 1 < through.start.length; c++)
     for (let a = through.start[c]; a < through.start[c + 1]; a++)
       for (let b = through.start[c]; b < a; b++) {
@@ -116,5 +117,5 @@ function sharedChains(through: ThroughChains, factors: SparseLdl): SharedChains 
         chain.push(c);
         sign.push(through.sign[a] * through.sign[b]);
       }
-  return { slot: Int32Array.from(slot), chain: Int32Array.from(chain), sign: Int8Array.from(sign) };
+  return { slot: slot.toArray(), chain: chain.toArray(), sign: Int8Array.from(sign.toArray()) };
 }

@@ -43,23 +43,30 @@ export function prepareNetwork(document: NetworkDocument): PreparedNetwork {
   const found = fluidProperties(document.fluid);
   if (!found.ok) throw new RangeError(found.error.message);
   const fluid = found.properties;
-  const nodeIndex = new Map(document.nodes.map((node, i) => [node.id, i]));
-  const nodeCount = document.nodes.length;
+  const { nodes, links } = document;
+  const nodeCount = nodes.length;
+  const nodeIndex = new Map<string, number>();
+  for (let v = 0; v < nodeCount; v++) nodeIndex.set(nodes[v].id, v);
 
-  const open = openLinksByKind(document.links);
+  const open = openLinksByKind(links);
   const position = Int32Array.from(linkKinds.flatMap((kind) => open[kind]));
-  const numberOf = new Int32Array(document.links.length).fill(-1);
-  position.forEach((at, i) => (numberOf[at] = i));
-  const from = position.map((at) => nodeIndex.get(document.links[at].from)!);
-  const to = position.map((at) => nodeIndex.get(document.links[at].to)!);
+  const numberOf = new Int32Array(links.length).fill(-1);
+  const from = new Int32Array(position.length);
+  const to = new Int32Array(position.length);
+  for (let i = 0; i < position.length; i++) {
+    const link = links[position[i]];
+    numberOf[position[i]] = i;
+    from[i] = nodeIndex.get(link.from)!;
+    to[i] = nodeIndex.get(link.to)!;
+  }
 
   const kinds: KindRange[] = [];
   let first = 0;
   for (const kind of linkKinds) {
     const last = first + open[kind].length;
     if (last > first) {
-      const links = open[kind].map((at) => document.links[at]);
-      kinds.push({ kind, first, last, batch: gather(kind, links, first, fluid) });
+      const members = open[kind].map((at) => links[at]);
+      kinds.push({ kind, first, last, batch: gather(kind, members, first, fluid) });
     }
     first = last;
   }
@@ -73,9 +80,7 @@ export function prepareNetwork(document: NetworkDocument): PreparedNetwork {
 
 function openLinksByKind(links: NetworkLink[]): Record<LinkKind, number[]> {
   const open = Object.fromEntries(linkKinds.map((kind) => [kind, [] as number[]])) as Record<LinkKind, number[]>;
-  links.forEach((link, at) => {
-    if (!isShut(link)) open[link.kind].push(at);
-  });
+  for (let at = 0; at < links.length; at++) if (!isShut(links[at])) open[links[at].kind].push(at);
   return open;
 }
 

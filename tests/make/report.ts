@@ -88,7 +88,6 @@ export function reportContent(stations: ReportStation[], readings: ReportReading
         accuracyAbsolute: 0.1,
         calibratedOn: '2025-03-14',
         calibrationDueOn: '2026-03-14',
-        isRetired: false,
       },
     ],
     readings,

@@ -2,7 +2,8 @@ import { Gaussian, gramOf, transposeTimes } from './gaussian';
 import type { ReadingModel } from './reading-model';
 
 const MOST_STEPS = 25;
-const SETTLED_COST = 0.01;
+/** A step that lowers the misfit by less than this part of it is the last: the next would gain its square. */
+const SETTLED = 0.002;
 /** No resistance is taken further than this logarithm from its design: beyond, it is as good as shut. */
 const FURTHEST = 9;
 
@@ -50,7 +51,7 @@ export function mostLikely(model: ReadingModel, deviations: ArrayLike<number>, n
       if (gained >= 0) {
         here = next;
         damping = damping < 0.01 ? 0 : damping / 10;
-        converged = gained < SETTLED_COST;
+        converged = gained <= SETTLED * next.cost;
         break;
       }
       damping = Math.max(0.1, 10 * damping);

@@ -1,3 +1,4 @@
+import { GrowingList } from '../growing-list';
 import { adjacencyOf } from './adjacency';
 
 /**
@@ -25,9 +26,9 @@ export function chainsOf(nodeCount: number, from: Int32Array, to: Int32Array): C
   const member = new Int32Array(linkCount);
   const sign = new Int8Array(linkCount);
   const chainOf = new Int32Array(linkCount).fill(-1);
-  const starts: number[] = [];
-  const ends: number[] = [];
-  const begins: number[] = [];
+  const starts = new GrowingList(linkCount);
+  const ends = new GrowingList(linkCount);
+  const begins = new GrowingList(linkCount);
   let filled = 0;
 
   /** Follows one run from a junction until the next, or back to where it began. */
@@ -58,14 +59,16 @@ export function chainsOf(nodeCount: number, from: Int32Array, to: Int32Array): C
   // What is left are circuits without a junction: each is one chain from any of its nodes round to itself.
   for (let v = 0; v < nodeCount; v++) if (degree[v] === 2) followFrom(v);
 
+  const count = starts.length;
+  starts.push(filled);
   return {
-    count: starts.length,
-    start: Int32Array.from([...starts, filled]),
+    count,
+    start: starts.toArray(),
     member: member.slice(0, filled),
     sign: sign.slice(0, filled),
     chainOf,
-    from: Int32Array.from(begins),
-    to: Int32Array.from(ends),
+    from: begins.toArray(),
+    to: ends.toArray(),
   };
 }
 

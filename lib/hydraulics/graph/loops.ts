@@ -1,4 +1,5 @@
 import { spanningForest, type SpanningForest } from './adjacency';
+import { GrowingList } from '../growing-list';
 import type { Chains } from './chains';
 import { contract } from './contraction';
 
@@ -66,16 +67,19 @@ function leastTree(nodeCount: number, from: Int32Array, to: Int32Array, resistan
 }
 
 class LoopList {
-  private readonly start: number[] = [];
-  private readonly chain: number[] = [];
-  private readonly sign: number[] = [];
-  private readonly down: number[] = [];
+  private readonly start = new GrowingList();
+  private readonly chain: GrowingList;
+  private readonly sign: GrowingList;
+  private readonly down = new GrowingList();
 
   constructor(
     private readonly from: Int32Array,
     private readonly to: Int32Array,
     private readonly forest: SpanningForest,
-  ) {}
+  ) {
+    this.chain = new GrowingList(2 * from.length);
+    this.sign = new GrowingList(2 * from.length);
+  }
 
   get length(): number {
     return this.chain.length;
@@ -93,27 +97,26 @@ class LoopList {
   /** Adds the tree's way from a to b. */
   walk(a: number, b: number): void {
     const { depth, parent, treeLink } = this.forest;
-    const { down } = this;
+    const { from, to, down } = this;
     down.length = 0;
     while (a !== b) {
       if (depth[a] >= depth[b]) {
-        this.add(treeLink[a], this.from[treeLink[a]] === a ? 1 : -1);
+        this.add(treeLink[a], from[treeLink[a]] === a ? 1 : -1);
         a = parent[a];
       } else {
         down.push(b);
         b = parent[b];
       }
     }
-    for (let k = down.length - 1; k >= 0; k--) this.add(treeLink[down[k]], this.to[treeLink[down[k]]] === down[k] ? 1 : -1);
+    for (let k = down.length - 1; k >= 0; k--) {
+      const v = down.at(k);
+      this.add(treeLink[v], to[treeLink[v]] === v ? 1 : -1);
+    }
   }
 
   finish(): Loops {
-    const { start, chain, sign } = this;
-    return {
-      count: start.length,
-      start: Int32Array.from([...start, chain.length]),
-      chain: Int32Array.from(chain),
-      sign: Int8Array.from(sign),
-    };
+    const count = this.start.length;
+    this.begin();
+    return { count, start: this.start.toArray(), chain: this.chain.toArray(), sign: Int8Array.from(this.sign.toArray()) };
   }
 }

@@ -25,13 +25,21 @@ class PipeBatch implements LinkBatch {
     private readonly first: number,
     fluid: FluidProperties,
   ) {
-    const column = (of: (link: PipeLink) => number) => Float64Array.from(links, of);
-    this.perReynolds = column((link) => reynoldsPerLs(link.boreMm, fluid));
-    this.velocityHead = column((link) => (1e-3 / boreAreaM2(link.boreMm)) ** 2 / (2 * GRAVITY_MS2));
-    this.lengthInBores = column((link) => (link.lengthM * 1000) / link.boreMm);
-    this.roughness = column((link) => link.roughnessMm / link.boreMm);
-    this.minorK = column((link) => link.minorK ?? 0);
-    this.guess = new Float64Array(links.length);
+    const count = links.length;
+    this.perReynolds = new Float64Array(count);
+    this.velocityHead = new Float64Array(count);
+    this.lengthInBores = new Float64Array(count);
+    this.roughness = new Float64Array(count);
+    this.minorK = new Float64Array(count);
+    this.guess = new Float64Array(count);
+    for (let k = 0; k < count; k++) {
+      const { boreMm, lengthM, roughnessMm, minorK } = links[k];
+      this.perReynolds[k] = reynoldsPerLs(boreMm, fluid);
+      this.velocityHead[k] = (1e-3 / boreAreaM2(boreMm)) ** 2 / (2 * GRAVITY_MS2);
+      this.lengthInBores[k] = (lengthM * 1000) / boreMm;
+      this.roughness[k] = roughnessMm / boreMm;
+      this.minorK[k] = minorK ?? 0;
+    }
   }
 
   evaluate(flow: Float64Array, loss: Float64Array, slope: Float64Array, a: number, b: number): void {

@@ -1,11 +1,12 @@
+import type { Knex } from 'knex';
 import { db } from '@/db/knex';
 import type { Instrument } from '@/lib/api/commissioning';
 
 /** The meters of the organisation by serial number, retired ones too. */
-export async function listInstruments(organizationId: string): Promise<Instrument[]> {
+export async function listInstruments(organizationId: string, connection: Knex = db()): Promise<Instrument[]> {
   // As text: a date has no hour, and the driver would give it one of this machine's time zone.
-  const day = (column: string) => db().raw('to_char(??, ?)', [column, 'YYYY-MM-DD']);
-  return db()('instruments')
+  const day = (column: string) => connection.raw('to_char(??, ?)', [column, 'YYYY-MM-DD']);
+  return connection('instruments')
     .where({ organization_id: organizationId })
     .orderBy('serial')
     .select({

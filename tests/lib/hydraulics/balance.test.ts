@@ -149,7 +149,7 @@ describe('balance', () => {
   });
 
   it('leaves a valve on a bypass as it is set', () => {
-    const document = houseExample({ kv: [9, 6, 4.1569219382] });
+    const document = houseExample({ kv: [9, 6, 4.1569219382], pump: (q) => 90 - 15 * q * q });
     const kvTable = [1, 4].map((setting) => ({ setting, kv: setting }));
     document.links.push({ id: 'BY', kind: 'balancingValve', from: 'n1', to: 'X', kvTable, setting: 1 });
     const result = balance(document);

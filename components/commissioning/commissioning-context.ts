@@ -1,0 +1,56 @@
+import type { CommissioningBody, Reading, Round, Station } from '@/lib/api/commissioning';
+import type { StripTick } from '@/lib/api/flow-strip';
+import type { LoopState } from '@/lib/api/loops';
+import type { ToleranceRule } from '@/lib/api/projects';
+import { defaultTolerances } from '@/lib/api/tolerances';
+import type { KeptReadings, KeptState } from '@/lib/client/kept-readings';
+
+/** What every part of a loop's commissioning looks at. */
+export interface Commissioning {
+  loop: { id: string; name: string; projectId: string; state: LoopState };
+  /** Address of the list of stations. */
+  base: string;
+  personId: string;
+  body: CommissioningBody;
+  kept: KeptReadings;
+  keptState: KeptState;
+  /** The open round. */
+  round: Round | null;
+  /** The open round, or the last one. */
+  shownRound: Round | null;
+  /** Whether this person may enter readings now. */
+  isEntryOpen: boolean;
+  mayRecord: boolean;
+  /** The entries that count in the round shown and in the one before, by station. */
+  standing: Map<string, Reading>;
+  lastStanding: Map<string, Reading>;
+}
+
+export const bandOf = (tolerances: ToleranceRule[], station: Station): ToleranceRule =>
+  [...tolerances, ...defaultTolerances].find(({ stationKind }) => stationKind === station.kind)!;
+
+/** Entries of this tablet that wait at a station in the open round. */
+export const waitingAt = ({ keptState, round }: Commissioning, stationId: string) =>
+  keptState.entries.filter((entry) => entry.reading.stationId === stationId && entry.roundId === round?.id);
+
+/** Stations measured in the round shown, those included whose entry still waits on this tablet. */
+export const measuredIn = (commissioning: Commissioning): number =>
+  commissioning.body.stations.filter(({ id }) => commissioning.standing.has(id) || waitingAt(commissioning, id).length > 0).length;
+
+/** The strip of the round shown: each terminal in walking order as it stands there. */
+export const stripOf = ({ body, standing }: Commissioning): StripTick[] =>
+  body.stations
+    .filter(({ kind }) => kind === 'terminal')
+    .map(({ id, tag }) => {
+      const reading = standing.get(id);
+      return { tag, percentOfDesign: reading?.percentOfDesign ?? null, verdict: reading?.verdict ?? null };
+    });
+
+/** "±10 %" or "0 to +10 %". */
+export function bandWords({ lowerPercent, upperPercent }: { lowerPercent: number; upperPercent: number }): string {
+  if (-lowerPercent === upperPercent) return `±${upperPercent} %`;
+  return `${lowerPercent === 0 ? '0' : `−${-lowerPercent}`} to +${upperPercent} %`;
+}
+
+export const placeOf = ({ storey, room }: Pick<Station, 'storey' | 'room'>): string =>
+  [storey, room && `room ${room}`].filter(Boolean).join(', ') || 'No place on the drawing';

@@ -1,0 +1,38 @@
+import Link from 'next/link';
+import { isOverdue } from '@/lib/commissioning/calibration';
+import { useNow } from './use-now';
+import type { Entry } from './use-entry';
+
+/** The meter that is read; the device remembers it for the next station. */
+export function MeterPicker({ entry }: { entry: Entry }) {
+  const { meters, meter } = entry;
+  const now = useNow();
+  if (meters.length === 0) {
+    return (
+      <p className="text-quiet text-sm">
+        No {entry.typed.method === 'valve-drop' ? 'differential pressure' : 'flow'} meter is in the list. <Link href="/instruments">Add it under Instruments</Link>.
+      </p>
+    );
+  }
+  return (
+    <label className="flex min-w-0 flex-wrap items-center gap-x-2">
+      <span className="text-quiet">Meter</span>
+      <select value={meter?.id ?? ''} onChange={(event) => entry.chooseMeter(event.target.value)} className="bg-sheet h-12 max-w-full min-w-0 rounded border px-2 font-semibold">
+        {!meter && <option value="">Choose the meter</option>}
+        {meters.map(({ id, serial, name }) => (
+          <option key={id} value={id}>
+            {serial}, {name}
+          </option>
+        ))}
+      </select>
+      {meter && now && isOverdue(meter, now) ? (
+        <span className="text-high font-semibold">▴ overdue since {dayWords(meter.calibrationDueOn!)}</span>
+      ) : (
+        meter && <span className="text-quiet text-sm">{meter.calibrationDueOn ? `due ${dayWords(meter.calibrationDueOn)}` : 'no due date'}</span>
+      )}
+    </label>
+  );
+}
+
+const dayForm = new Intl.DateTimeFormat('en-GB', { day: 'numeric', month: 'short', year: 'numeric', timeZone: 'UTC' });
+const dayWords = (day: string) => dayForm.format(new Date(`${day}T00:00:00Z`));

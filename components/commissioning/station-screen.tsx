@@ -1,0 +1,95 @@
+'use client';
+
+import { useState } from 'react';
+import type { RecordReading, Station } from '@/lib/api/commissioning';
+import { neighbours } from '@/lib/commissioning/walking-order';
+import type { Question } from '@/lib/commissioning/suspicion';
+import { Notice } from '../ui/notice';
+import { waitingAt, type Commissioning } from './commissioning-context';
+import { EntryForm } from './entry-form';
+import { EntryPad } from './entry-pad';
+import { KeptLine } from './kept-line';
+import { goTo } from './place-link';
+import { QuestionsDialog } from './questions-dialog';
+import { StationBar } from './station-bar';
+import { StationEntries } from './station-entries';
+import { StationHead } from './station-head';
+import { useEntry } from './use-entry';
+import { WaitingEntry } from './waiting-entry';
+
+/** One station, one reading: made for a tablet in a gloved hand, the same on every screen. */
+export function StationScreen({ commissioning, station }: { commissioning: Commissioning; station: Station }) {
+  const { body, base, round, kept, keptState, isEntryOpen } = commissioning;
+  const entry = useEntry(commissioning, station);
+  const [message, setMessage] = useState<string | null>(null);
+  const [asked, setAsked] = useState<{ reading: RecordReading; questions: Question[] } | null>(null);
+  const { before, next } = neighbours(body.stations, station);
+  const ofStation = body.readings.filter(({ stationId }) => stationId === station.id).toReversed();
+  const waiting = waitingAt(commissioning, station.id);
+
+  const keep = async (reading: RecordReading) => {
+    // Where it is known that there is no signal, nobody is made to wait at each station for an answer that does not come.
+    const goesOn = keptState.isOffline;
+    setAsked(null);
+    kept.keep({ roundId: round!.id, reading, tag: station.tag });
+    entry.clear();
+    const sent = kept.send();
+    if (!goesOn) await sent;
+    const isHere = window.location.pathname.endsWith(station.id);
+    if (isHere && (goesOn || !kept.state.entries.some((it) => it.reading.id === reading.id))) goTo(next ? `${base}/stations/${next.id}` : base);
+  };
+  const press = () => {
+    const finished = entry.finish();
+    setMessage('message' in finished ? finished.message : null);
+    if ('message' in finished) return;
+    if (finished.questions.length) setAsked(finished);
+    else void keep(finished.reading);
+  };
+
+  return (
+    <div className="flex h-dvh flex-col">
+      <StationBar commissioning={commissioning} />
+      <main className="flex min-h-0 flex-1 flex-col landscape:flex-row">
+        <div className="flex min-h-0 flex-1 flex-col gap-3.5 overflow-y-auto p-4 landscape:p-6">
+          <StationHead commissioning={commissioning} station={station} />
+          {waiting.map((it) => (
+            <WaitingEntry
+              key={it.reading.id}
+              entry={it}
+              isSending={keptState.isSending}
+              onSend={() => void kept.send()}
+              onTakeBack={() => {
+                kept.release(it.reading.id);
+                entry.takeUp(it.reading, it.reading.correctsReadingId);
+              }}
+            />
+          ))}
+          {isEntryOpen ? (
+            <EntryForm
+              commissioning={commissioning}
+              station={station}
+              entry={entry}
+              correcting={body.readings.find(({ id }) => id === entry.typed.correctsReadingId)}
+              onKeep={press}
+            />
+          ) : (
+            <Notice>{commissioning.mayRecord ? 'No round is open: readings are entered in a round. Start one on the list of stations.' : 'Technicians of the project enter readings here; you read along.'}</Notice>
+          )}
+          <StationEntries readings={ofStation} openRoundId={isEntryOpen ? round!.id : null} onCorrect={(reading) => entry.takeUp(reading, reading.id)} />
+        </div>
+        <EntryPad
+          entry={isEntryOpen ? entry : null}
+          message={message}
+          isSending={keptState.isSending}
+          hasWaiting={waiting.length > 0}
+          before={before && { tag: before.tag, path: `${base}/stations/${before.id}` }}
+          next={next ? { tag: next.tag, path: `${base}/stations/${next.id}` } : null}
+          listPath={base}
+          onKeep={press}
+        />
+      </main>
+      <KeptLine commissioning={commissioning} />
+      <QuestionsDialog questions={asked?.questions ?? []} onLookAgain={() => setAsked(null)} onKeep={() => asked && void keep(asked.reading)} />
+    </div>
+  );
+}

@@ -1,0 +1,19 @@
+interface Walked {
+  walkingOrder: number;
+}
+
+/** The station before and after one in walking order. */
+export function neighbours<S extends Walked>(stations: readonly S[], at: S): { before: S | null; next: S | null } {
+  const walked = [...stations].sort((a, b) => a.walkingOrder - b.walkingOrder);
+  const i = walked.findIndex(({ walkingOrder }) => walkingOrder === at.walkingOrder);
+  return { before: walked[i - 1] ?? null, next: walked[i + 1] ?? null };
+}
+
+/** Stations by storey, both in walking order; those without a storey under an empty name. */
+export function byStorey<S extends Walked & { storey: string }>(stations: readonly S[]): { storey: string; stations: S[] }[] {
+  const groups = new Map<string, S[]>();
+  for (const station of [...stations].sort((a, b) => a.walkingOrder - b.walkingOrder)) {
+    groups.set(station.storey, [...(groups.get(station.storey) ?? []), station]);
+  }
+  return [...groups].map(([storey, grouped]) => ({ storey, stations: grouped }));
+}
