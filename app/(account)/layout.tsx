@@ -9,9 +9,11 @@ export default function AccountLayout({ children }: { children: ReactNode }) {
       <aside className="hidden flex-col justify-between gap-10 p-10 lg:flex">
         <Mark />
         <LoopOrnament />
-        <p className="max-w-md text-quiet">Designed, balanced on site and handed over: one record from the first line on the drawing to the owner’s signed report.</p>
+        <p className="text-quiet max-w-md">
+          Designed, balanced on site and handed over: one record from the first line on the drawing to the owner’s signed report.
+        </p>
       </aside>
-      <main className="flex flex-col justify-center gap-6 bg-sheet px-6 py-10 sm:px-12 lg:border-l">
+      <main className="bg-sheet flex flex-col justify-center gap-6 px-6 py-10 sm:px-12 lg:border-l">
         <div className="lg:hidden">
           <Mark />
         </div>

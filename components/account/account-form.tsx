@@ -55,7 +55,13 @@ export function AccountForm({ name, theme, units }: AccountFormProps) {
   return (
     <form onSubmit={form.handleSubmit((values) => save.mutate(values))} noValidate className="flex flex-col gap-4">
       <div className="grid gap-4 sm:grid-cols-2">
-        <TextField label="Name" hint="as it stands on reports you sign" autoComplete="name" error={errors.name?.message} {...form.register('name')} />
+        <TextField
+          label="Name"
+          hint="as it stands on reports you sign"
+          autoComplete="name"
+          error={errors.name?.message}
+          {...form.register('name')}
+        />
         <SelectField label="Theme" {...form.register('theme')}>
           <option value="system">As the device</option>
           <option value="light">Light</option>
@@ -64,7 +70,7 @@ export function AccountForm({ name, theme, units }: AccountFormProps) {
       </div>
       <fieldset className="grid gap-x-4 gap-y-3 border-t pt-4 sm:grid-cols-2">
         <legend className="sr-only">Units</legend>
-        <p className="text-sm text-quiet sm:col-span-2">
+        <p className="text-quiet text-sm sm:col-span-2">
           The units you read and type in. Whatever you choose, a value may carry its own: “12 gpm”, “3,4 m³/h”.
         </p>
         {choosable.map((quantity) => (

@@ -34,9 +34,21 @@ export function SignInForm({ next }: { next: string }) {
     // `post`, so that a press before the page came alive never puts the password into the address.
     <form onSubmit={submit} method="post" noValidate className="flex flex-col gap-4">
       <TextField label="E-mail" type="email" autoComplete="username" autoFocus error={errors.email?.message} {...form.register('email')} />
-      <TextField label="Password" type="password" autoComplete="current-password" error={errors.password?.message} {...form.register('password')} />
+      <TextField
+        label="Password"
+        type="password"
+        autoComplete="current-password"
+        error={errors.password?.message}
+        {...form.register('password')}
+      />
       <FormTrouble message={errors.root?.message} />
-      <Button type="submit" look="primary" className="mt-1" isPending={isSubmitting || (isSubmitSuccessful && !errors.root)} pendingText="Signing in…">
+      <Button
+        type="submit"
+        look="primary"
+        className="mt-1"
+        isPending={isSubmitting || (isSubmitSuccessful && !errors.root)}
+        pendingText="Signing in…"
+      >
         Sign in
       </Button>
       <Link href="/reset" className="self-start text-sm">

@@ -11,10 +11,11 @@ import { ActivityList } from './activity-list';
 export function ActivityFeed({ projectId, first }: { projectId?: string; first: ActivityPage }) {
   const feed = useInfiniteQuery(activityOptions(projectId, first));
   const rows = feed.data.pages.flatMap((page) => page.rows);
-  if (rows.length === 0) return <Notice title="Nothing has been done here yet">What people make, issue, measure and sign is written down here.</Notice>;
+  if (rows.length === 0)
+    return <Notice title="Nothing has been done here yet">What people make, issue, measure and sign is written down here.</Notice>;
   return (
     <>
-      <div className="rounded border bg-sheet">
+      <div className="bg-sheet rounded border">
         <ActivityList rows={rows} hasProject={!projectId} />
       </div>
       <div className="mt-4 flex flex-col items-center gap-3">

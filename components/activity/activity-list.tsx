@@ -12,7 +12,7 @@ export function ActivityList({ rows, hasProject }: { rows: ActivityRow[]; hasPro
             <span className="font-semibold">{row.personName}</span> {row.verb} <Subject row={row} />
             <Place row={row} hasProject={hasProject} />
           </p>
-          <Moment at={row.at} className="figures text-xs whitespace-nowrap text-quiet" />
+          <Moment at={row.at} className="figures text-quiet text-xs whitespace-nowrap" />
         </li>
       ))}
     </ol>
@@ -28,8 +28,18 @@ const namesLoop = ({ subject, loopName }: ActivityRow) => Boolean(loopName && su
 /** What was acted on; leads to the loop or project that it names. */
 function Subject({ row }: { row: ActivityRow }) {
   const { projectId, loopId, projectName, subject } = row;
-  if (projectId && loopId && namesLoop(row)) return <Link className={inInk} href={`/projects/${projectId}/loops/${loopId}`}>{subject}</Link>;
-  if (projectId && subject === projectName) return <Link className={inInk} href={`/projects/${projectId}`}>{subject}</Link>;
+  if (projectId && loopId && namesLoop(row))
+    return (
+      <Link className={inInk} href={`/projects/${projectId}/loops/${loopId}`}>
+        {subject}
+      </Link>
+    );
+  if (projectId && subject === projectName)
+    return (
+      <Link className={inInk} href={`/projects/${projectId}`}>
+        {subject}
+      </Link>
+    );
   return subject;
 }
 
@@ -37,8 +47,16 @@ function Subject({ row }: { row: ActivityRow }) {
 function Place({ row, hasProject }: { row: ActivityRow; hasProject?: boolean }) {
   const { projectId, projectName, loopId, loopName, subject } = row;
   if (!projectId || !projectName) return null;
-  const loop = loopId && loopName && !namesLoop(row) && <Link className={inQuiet} href={`/projects/${projectId}/loops/${loopId}`}>{loopName}</Link>;
-  const project = hasProject && projectName !== subject && <Link className={inQuiet} href={`/projects/${projectId}`}>{projectName}</Link>;
+  const loop = loopId && loopName && !namesLoop(row) && (
+    <Link className={inQuiet} href={`/projects/${projectId}/loops/${loopId}`}>
+      {loopName}
+    </Link>
+  );
+  const project = hasProject && projectName !== subject && (
+    <Link className={inQuiet} href={`/projects/${projectId}`}>
+      {projectName}
+    </Link>
+  );
   if (!loop && !project) return null;
   return (
     <span className="text-quiet">

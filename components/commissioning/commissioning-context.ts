@@ -1,5 +1,5 @@
 import type { CommissioningBody, Reading, Round, Station } from '@/lib/api/commissioning';
-import type { StripTick } from '@/lib/api/flow-strip';
+import type { StripTick } from '@/lib/commissioning/flow-strip';
 import type { LoopState } from '@/lib/api/loops';
 import type { ToleranceRule } from '@/lib/api/projects';
 import { defaultTolerances } from '@/lib/api/tolerances';

@@ -1,5 +1,6 @@
 import Link from 'next/link';
 import { isOverdue } from '@/lib/commissioning/calibration';
+import { dayWords } from '../instruments/instrument-words';
 import { useNow } from './use-now';
 import type { Entry } from './use-entry';
 
@@ -33,6 +34,3 @@ export function MeterPicker({ entry }: { entry: Entry }) {
     </label>
   );
 }
-
-const dayForm = new Intl.DateTimeFormat('en-GB', { day: 'numeric', month: 'short', year: 'numeric', timeZone: 'UTC' });
-const dayWords = (day: string) => dayForm.format(new Date(`${day}T00:00:00Z`));

@@ -14,7 +14,7 @@ import { same } from '@/lib/network/merge-drawings';
 import { createCanvasStore } from './canvas-state';
 import { ConflictDialog } from './dialogs/conflict-dialog';
 import { IssueDialog } from './dialogs/issue-dialog';
-import { EditorContext, ResultsContext, useCanvas, type Editor, type Results } from './editor-context';
+import { EditorContext, faultyOf, ResultsContext, useCanvas, type Editor, type Results } from './editor-context';
 import { savingWords, StatusBar } from './status-bar';
 import { createDrawingStore } from './store';
 import { useDraftSaver } from './use-draft-saver';
@@ -51,20 +51,26 @@ function Editing({ loop, personId, loaded, issued, editor }: DrawingEditorProps 
   const drawing = useStore(drawingStore, (state) => state.drawing);
   const open = useCanvas((state) => state.open);
   const { saver, state: saving } = useDraftSaver(drawingStore, { loopId: loop.id, personId, loaded });
-  const { body, isOld, error } = useSolution(loop.id, drawing);
+  const { answer, settled, isOld, error } = useSolution(loop.id, drawing);
   const basis = useCanvas((state) => state.basis);
+  // Not of the drawing under the hand: a drag changes no figure, and every piece reads these.
   const results = useMemo<Results>(() => {
-    const solved = body?.solved ?? null;
+    const solved = answer?.body.solved ?? null;
+    const faults = answer && !isOld ? answer.body.faults : faultsOf(settled);
     return {
       solved,
-      figures: solved && figuresOfDrawing(drawing, solved, basis),
-      faults: body && !isOld ? body.faults : faultsOf(drawing),
+      figures: answer && solved && figuresOfDrawing(answer.drawing, solved, basis),
+      faults,
+      faulty: faultyOf(faults),
       isOld,
       index: new Set(solved?.indexCircuit.map(({ id }) => id)),
     };
-  }, [body, drawing, basis, isOld]);
+  }, [answer, settled, basis, isOld]);
   const isAhead = useMemo(() => issued === null || !same(issued.drawing, drawing), [issued, drawing]);
   const revisionWords = issued === null ? 'Never issued' : isAhead ? `Draft, differs from revision ${issued.number}` : `Same as revision ${issued.number}`;
+
+  /** What the other person saved, once its comparison was put off. */
+  const [later, setLater] = useState<DraftBody | null>(null);
 
   const saveFirst = async () => ((await saver.saveNow()) ? saver.version : null);
   const resolve = (merged: Drawing) => {
@@ -77,7 +83,7 @@ function Editing({ loop, personId, loaded, issued, editor }: DrawingEditorProps 
   return (
     <ResultsContext value={results}>
       <Workspace
-        hasBothBases={Boolean(body?.solved?.balance)}
+        hasBothBases={Boolean(results.solved?.balance)}
         bar={
           <>
             <span className="hidden text-sm text-quiet sm:inline">{revisionWords}</span>
@@ -86,9 +92,11 @@ function Editing({ loop, personId, loaded, issued, editor }: DrawingEditorProps 
             </Button>
           </>
         }
-        status={<StatusBar saving={savingWords(saving)} solveError={error?.message ?? null} revision={revisionWords} />}
+        status={<StatusBar saving={savingWords(saving)} onCompare={saving.kind === 'conflict' ? () => setLater(null) : undefined} solveError={error?.message ?? null} revision={revisionWords} />}
       />
-      {saving.kind === 'conflict' && <ConflictDialog base={saving.base} mine={drawing} theirs={saving.theirs} onResolve={resolve} />}
+      {saving.kind === 'conflict' && later !== saving.theirs && (
+        <ConflictDialog base={saving.base} mine={drawing} theirs={saving.theirs} onResolve={resolve} onLater={() => setLater(saving.theirs)} />
+      )}
       {open === 'issue' && (
         <IssueDialog
           loopId={loop.id}

@@ -9,7 +9,7 @@ import { drawingToDocument, placeOfLink } from '@/lib/network/drawing-to-documen
 import { figuresOfDrawing } from '@/lib/network/drawing-figures';
 import { circuitThrough } from '@/lib/network/index-circuit';
 import { createCanvasStore } from './canvas-state';
-import { EditorContext, noResults, ResultsContext, type Editor, type Results } from './editor-context';
+import { EditorContext, faultyOf, noResults, ResultsContext, type Editor, type Results } from './editor-context';
 import { StatusBar } from './status-bar';
 import { createDrawingStore } from './store';
 import { Workspace } from './workspace';
@@ -54,6 +54,7 @@ function resultsOfRevision(drawing: Drawing, balance: RevisionBody['balance']): 
     solved: { solve: null, balance, balanceMissing: null, indexCircuit, solveMs: 0 },
     figures: figuresOfDrawing(drawing, { solve: null, balance }, 'balanced'),
     faults,
+    faulty: faultyOf(faults),
     isOld: false,
     index: new Set(indexCircuit.map(({ id }) => id)),
   };

@@ -34,11 +34,15 @@ export interface Results {
   solved: Omit<SolvedBody, 'solve'> & { solve: SolvedBody['solve'] | null } | null;
   figures: DrawnFigures | null;
   faults: Fault[];
+  /** Ids of the pieces and pipes that an error stands at. */
+  faulty: ReadonlySet<string>;
   isOld: boolean;
   /** Ids of the pieces and pipes of the index circuit. */
   index: ReadonlySet<string>;
 }
 
-export const noResults: Results = { solved: null, figures: null, faults: [], isOld: false, index: new Set() };
+export const noResults: Results = { solved: null, figures: null, faults: [], faulty: new Set(), isOld: false, index: new Set() };
 export const ResultsContext = createContext<Results>(noResults);
 export const useResults = (): Results => useContext(ResultsContext);
+
+export const faultyOf = (faults: Fault[]): ReadonlySet<string> => new Set(faults.filter(({ severity }) => severity === 'error').map(({ place }) => place.id));

@@ -67,7 +67,7 @@ const Column = ({ className, children }: { className: string; children: ReactNod
 function IndexName({ piece }: { piece: Equipment }) {
   const { figures } = useResults();
   if (!figures?.pieces.get(piece.id)?.isIndex) return null;
-  return <Column className="top-1.5 left-full ml-1 text-[calc(11px*var(--words))] font-semibold text-petrol">index circuit</Column>;
+  return <Column className="top-1.5 left-full ml-1 text-[calc(11px*var(--words))] font-semibold text-petrol">index</Column>;
 }
 
 /** The setting that the balance found; where it has none, the one that the valve stands at. */

@@ -20,12 +20,12 @@ const inkOf = (piece: Equipment) => (piece.kind === 'balancingValve' ? 'var(--br
 export const PieceNode = memo(function PieceNode({ id, data, selected, isConnectable }: NodeProps<PieceNodeProps>) {
   const { piece } = data;
   const { width, height } = sizeOf(piece);
-  const { index, faults } = useResults();
+  const { index, faulty } = useResults();
   const detail = useDetail();
   const update = useUpdateNodeInternals();
   // React Flow measures the ends when a size changes; a turn or a mirror may leave the size as it is.
   useEffect(() => update(id), [update, id, piece.rotation, piece.isMirrored]);
-  const isFaulty = faults.some(({ place, severity }) => severity === 'error' && place.id === piece.id);
+  const isFaulty = faulty.has(piece.id);
 
   return (
     <div style={{ width, height }} className="relative">

@@ -25,14 +25,14 @@ const SHORT = 36;
 
 /** A pipe: solid in supply, dashed in return, with the arrow of its flow and the figure of the overlay. */
 export const PipeEdge = memo(function PipeEdge({ data, selected }: EdgeProps<PipeEdgeProps>) {
-  const { figures, index, faults } = useResults();
+  const { figures, index, faulty } = useResults();
   const overlay = useCanvas((state) => state.overlay);
   const detail = useDetail();
   if (!data) return null;
   const { pipe, path } = data;
   const d = pathText(path);
   const solution = figures?.pipes.get(pipe.id);
-  const isFaulty = faults.some(({ place, severity }) => severity === 'error' && place.id === pipe.id);
+  const isFaulty = faulty.has(pipe.id);
   const colour = selected ? 'var(--brass)' : isFaulty ? 'var(--high)' : 'var(--ink)';
   const place = labelPlace(path);
   return (

@@ -5,8 +5,17 @@ import type { SaveState } from '@/lib/client/draft-saver';
 import { digits } from '@/lib/network/working';
 import { useEditor, useResults } from './editor-context';
 
+interface StatusBarProps {
+  /** Null where nothing is ever saved. */
+  saving: string | null;
+  /** Compares with what someone else saved. */
+  onCompare?: () => void;
+  solveError: string | null;
+  revision: string;
+}
+
 /** The line at the foot of the page: what the solver, the faults and the saving have to say. */
-export function StatusBar({ saving, solveError, revision }: { saving: string | null; solveError: string | null; revision: string }) {
+export function StatusBar({ saving, onCompare, solveError, revision }: StatusBarProps) {
   const { canvasStore } = useEditor();
   const { faults, solved, isOld } = useResults();
   const zoom = useStore(({ transform }) => Math.round(transform[2] * 100));
@@ -26,7 +35,12 @@ export function StatusBar({ saving, solveError, revision }: { saving: string | n
         </button>
       )}
       <span className="ml-auto text-quiet">{revision}</span>
-      {saving && <span role="status" className="text-quiet">{saving}</span>}
+      {saving && <span role="status" className={saving.startsWith('▴') ? 'text-high' : 'text-quiet'}>{saving}</span>}
+      {onCompare && (
+        <button type="button" className="min-h-6 font-semibold text-petrol hover:underline" onClick={onCompare}>
+          Compare and save
+        </button>
+      )}
       <span className="figures text-quiet" aria-label="Scale">{zoom} %</span>
     </footer>
   );
@@ -38,7 +52,7 @@ function SolveWords({ error }: { error: string | null }) {
   if (!solved?.solve) return <>Settings as issued</>;
   const { converged, iterations, residuals } = solved.solve;
   if (!converged) return <span className="text-high">▴ No converged solution after {iterations} iterations, worst loop {digits(residuals.loopPa)} Pa</span>;
-  const words = `Solved in ${solved.solveMs < 10 ? solved.solveMs.toFixed(1) : solved.solveMs.toFixed(0)} ms, ${iterations} iterations, worst loop ${Number(residuals.loopPa.toPrecision(2))} Pa`;
+  const words = `Solved in ${solved.solveMs < 10 ? solved.solveMs.toFixed(1) : solved.solveMs.toFixed(0)} ms, ${iterations} iterations, worst loop ${residuals.loopPa < 0.001 ? 'under 0.001' : residuals.loopPa.toFixed(3)} Pa`;
   return <>{isOld ? `○ Solving… (before: ${words})` : `● ${words}`}</>;
 }
 

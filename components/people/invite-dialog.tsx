@@ -24,7 +24,12 @@ export function InviteDialog() {
       <Button look="primary" onClick={() => setOpen(true)}>
         <UserPlus size={16} aria-hidden /> Invite a person
       </Button>
-      <Dialog isOpen={isOpen} onClose={() => setOpen(false)} title="Invite a person" description="They get a letter with a link to set their password.">
+      <Dialog
+        isOpen={isOpen}
+        onClose={() => setOpen(false)}
+        title="Invite a person"
+        description="They get a letter with a link to set their password."
+      >
         <InviteForm onDone={() => setOpen(false)} />
       </Dialog>
     </>
@@ -51,7 +56,12 @@ function InviteForm({ onDone }: { onDone: () => void }) {
     <form onSubmit={form.handleSubmit((values) => invite.mutate(values))} noValidate className="flex flex-col gap-4">
       <TextField label="Name" autoComplete="off" error={errors.name?.message} {...form.register('name')} />
       <TextField label="E-mail" type="email" autoComplete="off" error={errors.email?.message} {...form.register('email')} />
-      <SelectField label="Usual role" hint="on projects they are put on" error={errors.defaultRole?.message} {...form.register('defaultRole')}>
+      <SelectField
+        label="Usual role"
+        hint="on projects they are put on"
+        error={errors.defaultRole?.message}
+        {...form.register('defaultRole')}
+      >
         {projectRoles.map((role) => (
           <option key={role} value={role}>
             {roleWords[role]}

@@ -35,18 +35,18 @@ export function PersonActions({ person }: { person: PersonRow }) {
       <DropdownMenu.Trigger
         disabled={change.isPending || resend.isPending}
         aria-label={`Change ${person.name}`}
-        className="inline-flex size-10 items-center justify-center rounded text-quiet hover:bg-well hover:text-ink disabled:opacity-50"
+        className="text-quiet hover:bg-well hover:text-ink inline-flex size-10 items-center justify-center rounded disabled:opacity-50"
       >
         <Ellipsis size={18} aria-hidden />
       </DropdownMenu.Trigger>
       <DropdownMenu.Portal>
-        <DropdownMenu.Content align="end" className="z-50 min-w-60 rounded border bg-sheet p-1 text-ink shadow-lg">
+        <DropdownMenu.Content align="end" className="bg-sheet text-ink z-50 min-w-60 rounded border p-1 shadow-lg">
           {person.isActive && !person.hasPassword && (
             <DropdownMenu.Item className={item} onSelect={() => resend.mutate()}>
               Send the invitation again
             </DropdownMenu.Item>
           )}
-          <DropdownMenu.Label className="px-3 pt-2 pb-1 text-sm text-quiet">Usual role</DropdownMenu.Label>
+          <DropdownMenu.Label className="text-quiet px-3 pt-2 pb-1 text-sm">Usual role</DropdownMenu.Label>
           <DropdownMenu.RadioGroup
             value={person.defaultRole}
             onValueChange={(role) => change.mutate({ defaultRole: projectRoles.find((known) => known === role) })}

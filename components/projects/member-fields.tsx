@@ -21,7 +21,8 @@ interface MemberFieldsProps {
 
 /** Who is on a project and as what: a row each, another at the end. */
 export function MemberFields({ members, onChange, people }: MemberFieldsProps) {
-  const change = (index: number, part: Partial<Member>) => onChange(members.map((member, i) => (i === index ? { ...member, ...part } : member)));
+  const change = (index: number, part: Partial<Member>) =>
+    onChange(members.map((member, i) => (i === index ? { ...member, ...part } : member)));
   const next = people.find(({ id }) => !members.some(({ personId }) => personId === id)) ?? people[0];
   return (
     <fieldset className="flex flex-col gap-2">
@@ -55,13 +56,23 @@ export function MemberFields({ members, onChange, people }: MemberFieldsProps) {
               </option>
             ))}
           </select>
-          <Button look="quiet" className="w-10 shrink-0 px-0!" aria-label={`Take member ${index + 1} off`} onClick={() => onChange(members.filter((_, i) => i !== index))}>
+          <Button
+            look="quiet"
+            className="w-10 shrink-0 px-0!"
+            aria-label={`Take member ${index + 1} off`}
+            onClick={() => onChange(members.filter((_, i) => i !== index))}
+          >
             <X size={16} aria-hidden />
           </Button>
         </div>
       ))}
       {next && (
-        <Button look="quiet" size="small" className="self-start" onClick={() => onChange([...members, { personId: next.id, role: next.defaultRole }])}>
+        <Button
+          look="quiet"
+          size="small"
+          className="self-start"
+          onClick={() => onChange([...members, { personId: next.id, role: next.defaultRole }])}
+        >
           <Plus size={16} aria-hidden /> Add a member
         </Button>
       )}

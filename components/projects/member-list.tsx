@@ -11,7 +11,7 @@ export function MemberList({ members }: { members: ProjectDetail['members'] }) {
           <span className="min-w-0 truncate" title={email}>
             {name}
           </span>
-          <span className="text-sm text-quiet">{roleWords[role]}</span>
+          <span className="text-quiet text-sm">{roleWords[role]}</span>
         </li>
       ))}
     </ul>

@@ -24,7 +24,12 @@ export function NewProjectDialog({ people }: { people: PersonRow[] }) {
       <Button look="primary" onClick={() => setOpen(true)}>
         <Plus size={16} aria-hidden /> New project
       </Button>
-      <Dialog isOpen={isOpen} onClose={() => setOpen(false)} title="New project" description="You become its designer. The tolerance bands can be changed on its page.">
+      <Dialog
+        isOpen={isOpen}
+        onClose={() => setOpen(false)}
+        title="New project"
+        description="You become its designer. The tolerance bands can be changed on its page."
+      >
         <NewProjectForm people={people} onCancel={() => setOpen(false)} />
       </Dialog>
     </>
@@ -33,7 +38,10 @@ export function NewProjectDialog({ people }: { people: PersonRow[] }) {
 
 function NewProjectForm({ people, onCancel }: { people: PersonRow[]; onCancel: () => void }) {
   const router = useRouter();
-  const form = useForm<CreateProject>({ resolver: zodResolver(createProjectSchema), defaultValues: { name: '', client: '', building: '', members: [] } });
+  const form = useForm<CreateProject>({
+    resolver: zodResolver(createProjectSchema),
+    defaultValues: { name: '', client: '', building: '', members: [] },
+  });
   const create = useMutation({
     mutationFn: (values: CreateProject) => send<{ id: string }>('POST', '/api/projects', values),
     onSuccess: ({ id }) => router.push(`/projects/${id}`),
@@ -45,7 +53,11 @@ function NewProjectForm({ people, onCancel }: { people: PersonRow[]; onCancel: (
       <TextField label="Name" autoComplete="off" error={errors.name?.message} {...form.register('name')} />
       <TextField label="Client" autoComplete="off" error={errors.client?.message} {...form.register('client')} />
       <TextField label="Building" autoComplete="off" error={errors.building?.message} {...form.register('building')} />
-      <Controller control={form.control} name="members" render={({ field }) => <MemberFields members={field.value} onChange={field.onChange} people={people} />} />
+      <Controller
+        control={form.control}
+        name="members"
+        render={({ field }) => <MemberFields members={field.value} onChange={field.onChange} people={people} />}
+      />
       <FormTrouble message={errors.root?.message ?? errors.members?.find?.((it) => it?.personId)?.personId?.message} />
       <div className="flex justify-end gap-2">
         <Button look="quiet" onClick={onCancel}>

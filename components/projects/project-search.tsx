@@ -13,7 +13,7 @@ export function ProjectSearch({ text }: { text: string }) {
     startSearch(() => router.replace(wanted.trim() ? `/projects?q=${encodeURIComponent(wanted.trim())}` : '/projects', { scroll: false }));
   return (
     <form role="search" action="/projects" className="relative min-w-0 flex-1 sm:max-w-sm" aria-busy={isSearching}>
-      <Search size={16} aria-hidden className="absolute top-3 left-2.5 text-quiet" />
+      <Search size={16} aria-hidden className="text-quiet absolute top-3 left-2.5" />
       <input
         type="search"
         name="q"
@@ -21,7 +21,7 @@ export function ProjectSearch({ text }: { text: string }) {
         onChange={(event) => search(event.target.value)}
         aria-label="Search projects"
         placeholder="Project, client, building or loop"
-        className={`${inputClass} h-10 bg-sheet pl-8`}
+        className={`${inputClass} bg-sheet h-10 pl-8`}
       />
     </form>
   );

@@ -53,7 +53,11 @@ function SettingsForm({ project, people, onDone }: { project: ProjectDetail; peo
       <TextField label="Name" error={errors.name?.message} {...form.register('name')} />
       <TextField label="Client" error={errors.client?.message} {...form.register('client')} />
       <TextField label="Building" error={errors.building?.message} {...form.register('building')} />
-      <Controller control={form.control} name="members" render={({ field }) => <MemberFields members={field.value} onChange={field.onChange} people={people} />} />
+      <Controller
+        control={form.control}
+        name="members"
+        render={({ field }) => <MemberFields members={field.value} onChange={field.onChange} people={people} />}
+      />
       <FormTrouble message={errors.root?.message ?? errors.members?.find?.((it) => it?.personId)?.personId?.message} />
       <div className="flex justify-end gap-2">
         <Button look="quiet" onClick={onDone}>

@@ -58,8 +58,20 @@ function ToleranceForm({ projectId, tolerances, onDone }: { projectId: string; t
       {inOrder(tolerances).map(({ stationKind }, i) => (
         <fieldset key={stationKind} className="grid grid-cols-2 gap-3">
           <legend className="mb-1 font-semibold">{stationKindWords[stationKind]}</legend>
-          <TextField label="Below" hint="%" {...percent} error={errors.tolerances?.[i]?.lowerPercent?.message} {...form.register(`tolerances.${i}.lowerPercent`, { valueAsNumber: true })} />
-          <TextField label="Above" hint="%" {...percent} error={errors.tolerances?.[i]?.upperPercent?.message} {...form.register(`tolerances.${i}.upperPercent`, { valueAsNumber: true })} />
+          <TextField
+            label="Below"
+            hint="%"
+            {...percent}
+            error={errors.tolerances?.[i]?.lowerPercent?.message}
+            {...form.register(`tolerances.${i}.lowerPercent`, { valueAsNumber: true })}
+          />
+          <TextField
+            label="Above"
+            hint="%"
+            {...percent}
+            error={errors.tolerances?.[i]?.upperPercent?.message}
+            {...form.register(`tolerances.${i}.upperPercent`, { valueAsNumber: true })}
+          />
           <div className="col-span-2">
             <TextField label="Source" error={errors.tolerances?.[i]?.source?.message} {...form.register(`tolerances.${i}.source`)} />
           </div>

@@ -15,7 +15,7 @@ export function ToleranceTable({ tolerances }: { tolerances: ToleranceRule[] }) 
     <>
       <table className="w-full">
         <thead>
-          <tr className="border-b text-left text-sm text-quiet">
+          <tr className="text-quiet border-b text-left text-sm">
             <th className="py-1.5 font-normal">Of design flow</th>
             <th className="py-1.5 text-right font-normal">below, %</th>
             <th className="py-1.5 text-right font-normal">above, %</th>
@@ -26,7 +26,7 @@ export function ToleranceTable({ tolerances }: { tolerances: ToleranceRule[] }) 
             <tr key={stationKind}>
               <th scope="row" className="py-1.5 text-left font-normal">
                 {stationKindWords[stationKind]}
-                {sources.length > 1 && <span className="ml-1 align-super text-xs text-quiet">{sources.indexOf(source) + 1}</span>}
+                {sources.length > 1 && <span className="text-quiet ml-1 align-super text-xs">{sources.indexOf(source) + 1}</span>}
               </th>
               <td className="figures text-right">{signed(lowerPercent)}</td>
               <td className="figures text-right">{signed(upperPercent)}</td>
@@ -35,7 +35,7 @@ export function ToleranceTable({ tolerances }: { tolerances: ToleranceRule[] }) 
         </tbody>
       </table>
       {sources.map((source, i) => (
-        <p key={source} className="mt-2 text-sm text-quiet">
+        <p key={source} className="text-quiet mt-2 text-sm">
           {sources.length > 1 && `${i + 1} `}
           {source}.
         </p>

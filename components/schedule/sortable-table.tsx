@@ -2,10 +2,10 @@
 
 import Link from 'next/link';
 import { useMemo, useState } from 'react';
+import { nextSorting, sortRows, type Sorting } from '@/lib/client/sort-rows';
 import { Button } from '../ui/button';
 import { Figures, Head, RowName, TableFrame, Words } from '../ui/table';
 import type { ScheduleColumn } from './column';
-import { nextSorting, sortRows, type Sorting } from './sort-rows';
 
 const MOST_AT_FIRST = 300;
 
@@ -56,7 +56,7 @@ export function SortableTable<Row extends { id: string; tag: string }>({ label, 
               </Link>
               {mark?.(row) && <span className="ml-2 rounded border border-brass px-1 text-xs font-semibold text-brass">{mark(row)}</span>}
             </RowName>
-            {columns.map(({ key, isFigure, show }) => (isFigure ? <Figures key={key}>{show(row)}</Figures> : <Words key={key}>{show(row)}</Words>))}
+            {columns.map(({ key, isFigure, show }) => (isFigure ? <Figures key={key}>{show(row)}</Figures> : <Words key={key} className="whitespace-nowrap">{show(row)}</Words>))}
           </tr>
         ))}
         {shown.length < sorted.length && (

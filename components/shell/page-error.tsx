@@ -14,7 +14,7 @@ export function PageError({ error, retry }: PageErrorProps) {
       <h1>This page could not be shown</h1>
       <p className="text-quiet">Something went wrong on the way. What you saved is safe; try again.</p>
       {error.digest && (
-        <p className="text-sm text-quiet">
+        <p className="text-quiet text-sm">
           If it stays, quote number <span className="figures">{error.digest}</span>.
         </p>
       )}

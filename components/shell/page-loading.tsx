@@ -3,8 +3,8 @@ export function PageLoading() {
   return (
     <div role="status" className="flex flex-col gap-2 py-16">
       <span className="sr-only">Loading</span>
-      <span className="h-0.5 w-24 origin-left animate-pulse bg-petrol" />
-      <span className="h-0.5 w-24 origin-left animate-pulse bg-brass [animation-delay:300ms]" />
+      <span className="bg-petrol h-0.5 w-24 origin-left animate-pulse" />
+      <span className="bg-brass h-0.5 w-24 origin-left animate-pulse [animation-delay:300ms]" />
     </div>
   );
 }

@@ -60,6 +60,7 @@ export function QuantityField({
   const [typed, setTyped] = useState<{ text: string; si: number | null; message: string | null } | null>(null);
   const isOwn = typed !== null && Object.is(typed.si, value);
   const text = isOwn ? typed.text : typedQuantity(quantity, value, unit);
+  const hasOwnUnit = /[^\d.,\s+\-\u2212]/.test(text);
   const message = (isOwn ? typed.message : null) ?? error;
 
   const take = (next: string) => {
@@ -91,7 +92,7 @@ export function QuantityField({
           {...rest}
         />
         <span id={`${id}-unit`} className="text-quiet pointer-events-none absolute inset-y-0 right-2.5 flex items-center text-sm">
-          {unit}
+          {hasOwnUnit ? '' : unit}
         </span>
       </div>
       {message && (

@@ -12,8 +12,8 @@ interface SheetProps {
 /** A part of a page: a white sheet with a heading. */
 export function Sheet({ title, action, isFlush, children }: SheetProps) {
   return (
-    <section className="rounded border bg-sheet">
-      <div className={`flex min-h-12 items-center justify-between gap-3 px-4 pt-2 ${isFlush ? 'border-b pb-2' : ''}`}>
+    <section className="bg-sheet rounded border">
+      <div className={`flex min-h-12 break-after-avoid items-center justify-between gap-3 px-4 pt-2 ${isFlush ? 'border-b pb-2' : ''}`}>
         <h2>{title}</h2>
         {action}
       </div>

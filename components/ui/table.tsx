@@ -25,7 +25,7 @@ export function Head({ unit, isFigure, className, children, ...rest }: HeadProps
       scope="col"
       className={classNames(
         'sticky top-0 z-10 bg-sheet px-1.5 py-2 sm:px-2 align-bottom text-xs leading-tight font-semibold text-quiet first:pl-4 last:pr-4',
-        'shadow-[inset_0_-1px_0_var(--ink)] print:static',
+        'shadow-[inset_0_-1px_0_var(--ink)] print:static print:border-b print:border-ink print:shadow-none',
         isFigure ? 'text-right' : 'text-left',
         className,
       )}

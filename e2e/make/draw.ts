@@ -25,7 +25,10 @@ export function designer(page: Page) {
     const pipes = page.locator('.react-flow__edge');
     const before = await pipes.count();
     const [start, end] = [await port(...from).boundingBox(), await port(...to).boundingBox()];
-    await page.mouse.move(start!.x + start!.width / 2, start!.y + start!.height / 2);
+    // The ends of a piece show themselves once the pointer is over it.
+    const piece = (await page.locator(`.react-flow__node[data-id="${from[0]}"]`).boundingBox())!;
+    await page.mouse.move(piece.x + piece.width / 2, piece.y + piece.height / 2);
+    await page.mouse.move(start!.x + start!.width / 2, start!.y + start!.height / 2, { steps: 4 });
     await page.mouse.down();
     await page.mouse.move(end!.x + end!.width / 2 + 3, end!.y + end!.height / 2, { steps: 6 });
     await page.mouse.move(end!.x + end!.width / 2, end!.y + end!.height / 2);
@@ -45,7 +48,7 @@ export function designer(page: Page) {
     await page.evaluate((text) => navigator.clipboard.writeText(text), rows.map((row) => row.join('\t')).join('\n'));
     await panel.getByLabel(`Paste ${label} from a spreadsheet`).click();
     await page.keyboard.press('ControlOrMeta+v');
-    await expect(page.getByText(`${rows.length} points pasted`)).toBeVisible();
+    await expect(panel.getByLabel(`Remove point ${rows.length}`)).toBeVisible();
   };
 
   const selectNothing = async (): Promise<void> => {

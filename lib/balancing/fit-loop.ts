@@ -1,6 +1,6 @@
 import type { NetworkDocument } from '@/lib/hydraulics/types';
 import { Gaussian } from './fit/gaussian';
-import { mostLikely } from './fit/most-likely';
+import { linearWithin, mostLikely } from './fit/most-likely';
 import { ReadingModel } from './fit/reading-model';
 import { type Cause, faultDeviation, FaultSearch, type Suspicion } from './fit/suspicions';
 import { type Priors, type Unknown, unknownsOf, usualPriors } from './fit/unknowns';
@@ -44,7 +44,7 @@ export interface FittedLoop {
   search: FaultSearch;
 }
 
-const MOST_PASSES = 8;
+const MOST_PASSES = 12;
 
 /**
  * Fits the loop's resistances, charts, pump heads and meters to readings: maximum a posteriori with log-normal priors about the
@@ -54,23 +54,19 @@ const MOST_PASSES = 8;
 export function fitLoop(document: NetworkDocument, rounds: ReadingRound[], priors: Priors = usualPriors): FittedLoop {
   const unknowns = unknownsOf(document, rounds, priors);
   const model = new ReadingModel(document, rounds, unknowns);
-  const deviations = Float64Array.from(unknowns, (unknown) => unknown.deviation);
-  const noise = new Float64Array(model.placed.length).fill(1);
-  const accepted: Suspicion[] = [];
-
+  let accepted: Suspicion[] = [];
+  let { deviations, noise } = spreadsWith(accepted, unknowns, model.placed.length);
   let fit = mostLikely(model, deviations, noise, new Float64Array(unknowns.length));
-  let search = new FaultSearch(document, rounds, unknowns, model.placed, fit, deviations, noise);
+  const searchNow = () => new FaultSearch(document, rounds, unknowns, model.placed, linearWithin(model, deviations, fit), deviations, noise);
+  let search = searchNow();
   for (let pass = 0; pass < MOST_PASSES; pass++) {
-    const found = search.likely();
-    if (!found.length) break;
-    for (const suspicion of found) {
-      const deviation = faultDeviation(suspicion.cause);
-      if (suspicion.unknown !== null) deviations[suspicion.unknown] = Math.hypot(deviations[suspicion.unknown], deviation);
-      else noise[suspicion.reading!] += deviation ** 2;
-    }
-    accepted.push(...found);
-    fit = mostLikely(model, deviations, noise, fit.values);
-    search = new FaultSearch(document, rounds, unknowns, model.placed, fit, deviations, noise);
+    const gone = search.unlikely(accepted);
+    const found = gone.length ? [] : search.likely();
+    if (!found.length && !gone.length) break;
+    accepted = [...accepted.filter((each) => !gone.includes(each)), ...found];
+    ({ deviations, noise } = spreadsWith(accepted, unknowns, model.placed.length));
+    fit = mostLikely(model, deviations, noise, fit.values.map((value, j) => (deviations[j] > 0 ? value : 0)));
+    search = searchNow();
   }
 
   const readings = model.placed.map(({ reading, round }, m) => {
@@ -87,4 +83,16 @@ export function fitLoop(document: NetworkDocument, rounds: ReadingRound[], prior
   const scaledRows = fit.rows.map((row) => row.map((each, j) => each * deviations[j]));
   const posterior = new Gaussian(scaledRows, noise);
   return { document, rounds, unknowns, values: fit.values, deviations, readings, faults, converged: fit.converged, posterior, search };
+}
+
+/** Prior deviations and variances of the readings, widened where a fault is suspected. */
+function spreadsWith(accepted: Suspicion[], unknowns: Unknown[], readings: number) {
+  const deviations = Float64Array.from(unknowns, (unknown) => unknown.deviation);
+  const noise = new Float64Array(readings).fill(1);
+  for (const { cause, unknown, reading } of accepted) {
+    const deviation = faultDeviation(cause);
+    if (unknown !== null) deviations[unknown] = Math.hypot(deviations[unknown], deviation);
+    else noise[reading!] += deviation ** 2;
+  }
+  return { deviations, noise };
 }

@@ -9,6 +9,8 @@ export interface Station {
   designFlowLs: number;
   /** Links between it and the pump, there and back. */
   distance: number;
+  /** Links of one circuit through it that lie on the terminal's side of it. */
+  behind: string[];
   parent: Station | null;
   members: Station[];
 }
@@ -35,7 +37,7 @@ export function loopHierarchy(document: NetworkDocument): LoopHierarchy {
     way.forEach((id, distance) => {
       const kind = kindOf.get(id);
       if (kind !== 'balancingValve' && kind !== 'pump') return;
-      const station = stations.get(id) ?? { link: id, kind: kind === 'pump' ? 'pump' : 'valve', terminals: [], designFlowLs: 0, distance: Infinity, parent: null, members: [] };
+      const station = stations.get(id) ?? { link: id, kind: kind === 'pump' ? 'pump' : 'valve', terminals: [], designFlowLs: 0, distance: Infinity, behind: [terminal.id, ...way.slice(0, distance)], parent: null, members: [] };
       stations.set(id, station);
       station.terminals.push(terminal.id);
       station.designFlowLs += terminal.designFlowLs;

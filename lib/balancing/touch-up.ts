@@ -83,7 +83,7 @@ function bestMove(valve: BalancingValveLink, setting: number, column: Float64Arr
   const stands = Math.min(Math.max(Number((Math.round(wanted / settingStep) * settingStep).toPrecision(12)), kvTable[0].setting), largestSetting(kvTable));
   if (stands === setting) return null;
   const moved = Math.log(kvAtSetting(kvTable, stands) / kv);
-  let next = logRatios.map((each, t) => each + moved * column[t]);
+  let next: Float64Array = logRatios.map((each, t) => each + moved * column[t]);
   for (const pump of pumps) next = centred(next, pump);
   return { valve, setting: stands, logRatios: next, outside: expectedOutside(next, spreads, tolerance) };
 }

@@ -1,7 +1,7 @@
 'use client';
 
 import { keepPreviousData, useQuery } from '@tanstack/react-query';
-import { useEffect, useRef, useState } from 'react';
+import { useEffect, useMemo, useRef, useState } from 'react';
 import type { SolutionBody } from '@/lib/api/loops';
 import { calculatedPart } from '@/lib/network/calculated-part';
 import type { Drawing } from '@/lib/network/drawing';
@@ -9,12 +9,20 @@ import { send } from './http';
 
 const WAIT_MS = 250;
 
+interface Answer {
+  body: SolutionBody;
+  /** The drawing it is the answer for. */
+  drawing: Drawing;
+}
+
 export interface Solution {
-  body: SolutionBody | null;
-  /** The figures are those of an earlier drawing; new ones are on their way. */
+  /** The last good answer; null before the first. */
+  answer: Answer | null;
+  /** The drawing as it last stood still for a moment; the answer is for it, or on its way. */
+  settled: Drawing;
+  /** The answer is for an earlier drawing. */
   isOld: boolean;
   error: Error | null;
-  solveAgain: () => void;
 }
 
 /**
@@ -23,20 +31,23 @@ export interface Solution {
  */
 export function useSolution(loopId: string, drawing: Drawing): Solution {
   const settled = useSettled(drawing);
-  const key = calculatedPart(settled);
-  const { data, error, isPlaceholderData, isFetching, refetch } = useQuery({
+  const key = useMemo(() => calculatedPart(settled), [settled]);
+  const { data, error, isPlaceholderData, isFetching } = useQuery({
     queryKey: ['solution', loopId, key],
-    queryFn: ({ signal }) => send<SolutionBody>('POST', `/api/loops/${loopId}/solve`, { drawing: settled }, signal),
+    queryFn: async ({ signal }): Promise<Answer> => ({
+      body: await send<SolutionBody>('POST', `/api/loops/${loopId}/solve`, { drawing: settled }, signal),
+      drawing: settled,
+    }),
     placeholderData: keepPreviousData,
+    structuralSharing: false,
     staleTime: Infinity,
     gcTime: 60_000,
     retry: 2,
   });
-  const isOld = isPlaceholderData || isFetching || settled !== drawing;
   // With an error there is no placeholder: the last good answer is still what the drawing should show.
-  const [lastGood, setLastGood] = useState<SolutionBody | null>(null);
+  const [lastGood, setLastGood] = useState<Answer | null>(null);
   if (data && data !== lastGood) setLastGood(data);
-  return { body: data ?? lastGood, isOld: isOld || Boolean(error), error, solveAgain: () => void refetch() };
+  return { answer: data ?? lastGood, settled, isOld: isPlaceholderData || isFetching || Boolean(error), error };
 }
 
 /** The drawing once it has stood still for a moment. */

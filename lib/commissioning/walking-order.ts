@@ -17,3 +17,7 @@ export function byStorey<S extends Walked & { storey: string }>(stations: readon
   }
   return [...groups].map(([storey, grouped]) => ({ storey, stations: grouped }));
 }
+
+/** The station that is come to first. */
+export const firstOf = <S extends Walked>(stations: readonly S[]): S | undefined =>
+  stations.reduce<S | undefined>((first, it) => (first && first.walkingOrder <= it.walkingOrder ? first : it), undefined);

@@ -16,7 +16,10 @@ export default async function PasswordPage({ searchParams }: { searchParams: Pro
         <h1>This link works no more</h1>
         <Notice tone="brass">It has been used, has run out, or was replaced by a newer one.</Notice>
         <p>
-          <Link href="/reset">Ask for a new link</Link>, or ask whoever invited you for another invitation.
+          <Link href="/reset" className="underline">
+            Ask for a new link
+          </Link>
+          , or ask whoever invited you for another invitation.
         </p>
       </>
     );
@@ -25,7 +28,7 @@ export default async function PasswordPage({ searchParams }: { searchParams: Pro
     <>
       <div>
         <h1>{link.purpose === 'invitation' ? `Welcome, ${link.name}` : 'Set a new password'}</h1>
-        <p className="mt-1 text-quiet">For {link.email}</p>
+        <p className="text-quiet mt-1">For {link.email}</p>
       </div>
       <PasswordLinkForm token={token} email={link.email} />
     </>

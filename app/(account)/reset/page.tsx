@@ -8,7 +8,7 @@ export default function ResetPage() {
     <>
       <div>
         <h1>Set a new password</h1>
-        <p className="mt-1 text-quiet">We send you a link with which you can set one.</p>
+        <p className="text-quiet mt-1">We send you a link with which you can set one.</p>
       </div>
       <ResetForm />
     </>

@@ -5,17 +5,19 @@ import { Button } from '@/components/ui/button';
 import { Dialog } from '@/components/ui/dialog';
 import type { DraftBody } from '@/lib/api/loops';
 import type { Drawing } from '@/lib/network/drawing';
-import { mergeDrawings, takeTheirs, type Conflict, type Difference } from '@/lib/network/merge-drawings';
+import { mergeDrawings, same, takeTheirs, type Conflict, type Difference } from '@/lib/network/merge-drawings';
 
 interface ConflictDialogProps {
   base: Drawing;
   mine: Drawing;
   theirs: DraftBody;
   onResolve: (merged: Drawing) => void;
+  /** Looks at the drawing first; nothing is saved until the two are joined. */
+  onLater: () => void;
 }
 
-/** Two people saved: what each changed, and for what both changed, whose stands. It cannot be passed over: nothing may be lost. */
-export function ConflictDialog({ base, mine, theirs, onResolve }: ConflictDialogProps) {
+/** Two people saved: what each changed, and for what both changed, whose stands. */
+export function ConflictDialog({ base, mine, theirs, onResolve, onLater }: ConflictDialogProps) {
   const merge = useMemo(() => mergeDrawings(base, mine, theirs.drawing), [base, mine, theirs]);
   const [takenTheirs, setTakenTheirs] = useState<ReadonlySet<Conflict>>(new Set());
   const choose = (conflict: Conflict, isTheirs: boolean) => {
@@ -29,7 +31,7 @@ export function ConflictDialog({ base, mine, theirs, onResolve }: ConflictDialog
   return (
     <Dialog
       isOpen
-      onClose={() => undefined}
+      onClose={onLater}
       isWide
       title={`${theirs.savedBy} saved this drawing meanwhile`}
       description={`At ${savedAt}, while you were drawing. Both sets of changes are kept${merge.conflicts.length ? '; where you changed the same piece, choose' : ''}.`}
@@ -52,7 +54,8 @@ export function ConflictDialog({ base, mine, theirs, onResolve }: ConflictDialog
         <Changes title="Yours" differences={merge.differences.filter(({ by }) => by === 'you')} />
         <Changes title={theirs.savedBy} differences={merge.differences.filter(({ by }) => by === 'them')} />
       </div>
-      <div className="mt-5 flex justify-end">
+      <div className="mt-5 flex justify-end gap-2">
+        <Button onClick={onLater}>Look at the drawing first</Button>
         <Button look="primary" onClick={save}>
           Save both together
         </Button>
@@ -88,9 +91,19 @@ function ConflictRow({ conflict, theirName, isTheirs, onChoose }: { conflict: Co
 function differingFields(mine: unknown, theirs: unknown): [string, string] {
   if (mine === null || theirs === null) return [mine === null ? 'removed' : 'kept', theirs === null ? 'removed' : 'kept'];
   const [a, b] = [mine as Record<string, unknown>, theirs as Record<string, unknown>];
-  const keys = Object.keys({ ...a, ...b }).filter((key) => JSON.stringify(a[key]) !== JSON.stringify(b[key]));
-  const tell = (side: Record<string, unknown>) => keys.map((key) => `${key} ${JSON.stringify(side[key])?.slice(0, 60)}`).join(', ');
+  const keys = Object.keys({ ...a, ...b }).filter((key) => !same(a[key], b[key]));
+  const tell = (side: Record<string, unknown>) => keys.map((key) => `${words(key)}: ${valueWords(side[key])}`).join(', ');
   return [tell(a), tell(b)];
+}
+
+/** `designFlowLs` reads as "design flow ls": the unit of the file stays with its number. */
+const words = (key: string) => key.replace(/([A-Z])/g, ' $1').toLowerCase();
+
+function valueWords(value: unknown): string {
+  if (value === null || value === undefined || value === '') return 'none';
+  if (typeof value !== 'object') return String(value);
+  const named = (value as { name?: unknown }).name;
+  return typeof named === 'string' && named ? named : 'changed';
 }
 
 const Changes = ({ title, differences }: { title: string; differences: Difference[] }) => (

@@ -7,17 +7,37 @@ const SETTLED = 0.002;
 /** No resistance is taken further than this logarithm from its design: beyond, it is as good as shut. */
 const FURTHEST = 9;
 
-/** The unknowns at their most likely values, with the model made linear there. */
-export interface MostLikely {
+/** The model made linear at some values of the unknowns. */
+export interface LinearModel {
   values: Float64Array;
-  /** Sum of the squared misfits of readings and of unknowns, each in its own standard deviations. */
-  cost: number;
-  converged: boolean;
-  shown: Float64Array;
   /** Reading minus expectation, in standard deviations of the reading as the meter's data give it. */
   misfit: Float64Array;
   /** Jacobian of the scaled readings per unit of each unknown. */
   rows: Float64Array[];
+}
+
+/** The unknowns at their most likely values. */
+export interface MostLikely extends LinearModel {
+  /** Sum of the squared misfits of readings and of unknowns, each in its own standard deviations. */
+  cost: number;
+  converged: boolean;
+  shown: Float64Array;
+}
+
+/** An unknown further than this many of its deviations carries somebody else's fault. */
+const MOST_DEVIATIONS = 2;
+
+/**
+ * The linear model at a fit where every unknown is taken back to twice its deviation: there faults that have not been freed yet still show
+ * in the readings, not in resistances bent to hide them.
+ */
+export function linearWithin(model: ReadingModel, deviations: Float64Array, fit: MostLikely): LinearModel {
+  const values = fit.values.map((value, j) => Math.min(Math.max(value, -MOST_DEVIATIONS * deviations[j]), MOST_DEVIATIONS * deviations[j]));
+  if (values.every((value, j) => value === fit.values[j])) return fit;
+  const solved = model.solve(values);
+  if (!solved.closed) return fit;
+  const misfit = Float64Array.from(model.placed, (each, m) => each.scaled - solved.scaled[m]);
+  return { values, misfit, rows: model.jacobian(solved) };
 }
 
 /**

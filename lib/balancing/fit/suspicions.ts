@@ -2,7 +2,7 @@ import { kvAtSetting } from '@/lib/hydraulics/links/balancing-valve';
 import type { NetworkDocument } from '@/lib/hydraulics/types';
 import { type ReadingRound, settingIn } from '../readings';
 import { dot, Gaussian, gramOf } from './gaussian';
-import type { MostLikely } from './most-likely';
+import type { LinearModel } from './most-likely';
 import type { PlacedReading } from './reading-model';
 import type { Unknown } from './unknowns';
 
@@ -47,6 +47,12 @@ interface Weighed extends Suspicion {
   variance: number;
 }
 
+function unit(length: number, at: number): Float64Array {
+  const column = new Float64Array(length);
+  column[at] = 1;
+  return column;
+}
+
 const squaredCosine = (a: Float64Array, b: Float64Array) => dot(a, b) ** 2 / (dot(a, a) * dot(b, b));
 
 /**
@@ -63,7 +69,7 @@ export class FaultSearch {
     private readonly rounds: ReadingRound[],
     private readonly unknowns: Unknown[],
     private readonly placed: PlacedReading[],
-    private readonly fit: MostLikely,
+    private readonly fit: LinearModel,
     private readonly deviations: Float64Array,
     noise: Float64Array,
   ) {
@@ -86,6 +92,19 @@ export class FaultSearch {
       this.accept(best);
       candidates = this.weigh(unlike);
     }
+  }
+
+  /** Of faults taken as true already, those that are no longer likelier than none, all others being kept. */
+  unlikely(accepted: Suspicion[]): Suspicion[] {
+    const gaussian = new Gaussian([], this.noise, 0, this.gram);
+    const innovation = gaussian.whiten(this.innovation);
+    return accepted.filter(({ cause, unknown, reading }) => {
+      const { deviation, odds } = faults[cause];
+      const whitened = gaussian.whiten(unknown !== null ? Float64Array.from(this.fit.rows, (row) => row[unknown]) : unit(this.placed.length, reading!));
+      // S holds the fault's own variance; taken out of it, k·S⁻¹k and k·S⁻¹r both grow by 1 / (1 - Δ k·S⁻¹k).
+      const shrinkage = Math.max(1 - deviation ** 2 * dot(whitened, whitened), 1e-12);
+      return Math.log(odds) + 0.5 * Math.log(shrinkage) + (0.5 * deviation ** 2 * dot(whitened, innovation) ** 2) / shrinkage <= 0;
+    });
   }
 
   /** Every fault with its odds, whether likely or not. */
@@ -111,9 +130,7 @@ export class FaultSearch {
     });
     const ofReadings = placed.flatMap((_, m) => {
       if (noise[m] > 1) return [];
-      const column = new Float64Array(placed.length);
-      column[m] = 1;
-      return [weighed('wrong-reading', null, m, column)];
+      return [weighed('wrong-reading', null, m, unit(placed.length, m))];
     });
     return [...ofUnknowns, ...ofReadings];
   }

@@ -16,7 +16,11 @@ export async function setPasswordByLink({ token, newPassword }: { token: string;
     await setPassword(trx, person, passwordHash);
     await closeLinks(trx, person);
     const verb = link.purpose === 'invitation' ? 'accepted' : 'reset';
-    await recordActivity(trx, { person, projectId: null }, { verb, subject: link.purpose === 'invitation' ? 'their invitation' : 'their password' });
+    await recordActivity(
+      trx,
+      { person, projectId: null },
+      { verb, subject: link.purpose === 'invitation' ? 'their invitation' : 'their password' },
+    );
   });
   await forgetSignInTries(link.email);
   return { email: link.email };

@@ -16,7 +16,9 @@ interface Asked {
 export async function readActivity(person: Person, { projectId, before, limit = 50 }: Asked): Promise<ActivityPage> {
   const { organizationId } = person;
   const rows = await db()('activity')
-    .leftJoin('projects', (join) => join.on('projects.organization_id', 'activity.organization_id').on('projects.id', 'activity.project_id'))
+    .leftJoin('projects', (join) =>
+      join.on('projects.organization_id', 'activity.organization_id').on('projects.id', 'activity.project_id'),
+    )
     .leftJoin('loops', (join) => join.on('loops.organization_id', 'activity.organization_id').on('loops.id', 'activity.loop_id'))
     .where('activity.organization_id', organizationId)
     .modify((query) => {
@@ -47,5 +49,8 @@ export async function readActivity(person: Person, { projectId, before, limit = 
       loopName: 'loops.name',
       at: 'activity.at',
     });
-  return { rows: rows.slice(0, limit).map((row: ActivityRow & { at: Date }) => ({ ...row, at: row.at.toISOString() })), hasMore: rows.length > limit };
+  return {
+    rows: rows.slice(0, limit).map((row: ActivityRow & { at: Date }) => ({ ...row, at: row.at.toISOString() })),
+    hasMore: rows.length > limit,
+  };
 }

@@ -34,7 +34,8 @@ export function publicRoute<Body>(declaration: Declaration<Body>): PublicRoute {
 }
 
 async function countCall(request: Request): Promise<void> {
-  // The last entry is written by the nearest proxy, or by the server itself; the ones before it are the caller's to invent.
+  // Written by the nearest proxy. Where there is none a caller can invent it, so no route's safety rests on this count alone:
+  // a reset is also counted by address, and a link's token cannot be guessed.
   const caller = request.headers.get('x-forwarded-for')?.split(',').at(-1)?.trim() ?? 'unknown';
   try {
     await byCaller.consume(caller);

@@ -39,27 +39,34 @@ export async function stripsOf(organizationId: string, loopIds: string[]): Promi
     .orderBy([{ column: 'readings.station_id' }, { column: 'readings.taken_at', order: 'desc' }, { column: 'readings.id', order: 'desc' }])
     .select('readings.station_id', 'readings.percent_of_design', 'readings.verdict', 'asked.design_flow_ls');
 
-  const rows: { loopId: string; number: number; tag: string | null; percentOfDesign: number | null; verdict: StripTick['verdict'] }[] = await db()
-    .with('newest', newest)
-    .with('counting', counting)
-    .from('newest')
-    .leftJoin('stations', (join) =>
-      join.on('stations.organization_id', 'newest.organization_id').on('stations.loop_id', 'newest.loop_id').andOnVal('stations.kind', 'terminal'),
-    )
-    .leftJoin('station_designs as design', (join) =>
-      join.on('design.organization_id', 'newest.organization_id').on('design.revision_id', 'newest.id').on('design.station_id', 'stations.id'),
-    )
-    .leftJoin('counting', (join) =>
-      join.on('counting.station_id', 'design.station_id').on('counting.design_flow_ls', 'design.design_flow_ls'),
-    )
-    .orderBy(['newest.loop_id', 'design.walking_order'])
-    .select({
-      loopId: 'newest.loop_id',
-      number: 'newest.number',
-      tag: 'design.tag',
-      percentOfDesign: 'counting.percent_of_design',
-      verdict: 'counting.verdict',
-    });
+  const rows: { loopId: string; number: number; tag: string | null; percentOfDesign: number | null; verdict: StripTick['verdict'] }[] =
+    await db()
+      .with('newest', newest)
+      .with('counting', counting)
+      .from('newest')
+      .leftJoin('stations', (join) =>
+        join
+          .on('stations.organization_id', 'newest.organization_id')
+          .on('stations.loop_id', 'newest.loop_id')
+          .andOnVal('stations.kind', 'terminal'),
+      )
+      .leftJoin('station_designs as design', (join) =>
+        join
+          .on('design.organization_id', 'newest.organization_id')
+          .on('design.revision_id', 'newest.id')
+          .on('design.station_id', 'stations.id'),
+      )
+      .leftJoin('counting', (join) =>
+        join.on('counting.station_id', 'design.station_id').on('counting.design_flow_ls', 'design.design_flow_ls'),
+      )
+      .orderBy(['newest.loop_id', 'design.walking_order'])
+      .select({
+        loopId: 'newest.loop_id',
+        number: 'newest.number',
+        tag: 'design.tag',
+        percentOfDesign: 'counting.percent_of_design',
+        verdict: 'counting.verdict',
+      });
 
   const strips = new Map<string, LoopStrip>();
   for (const { loopId, number, tag, percentOfDesign, verdict } of rows) {

@@ -39,6 +39,7 @@ async function requireAdministrator(trx: Knex.Transaction, organizationId: strin
 
 function verbOf(before: PersonRow, after: PersonRow): string {
   if (before.isActive !== after.isActive) return after.isActive ? 'let back in' : 'shut out';
-  if (before.isAdministrator !== after.isAdministrator) return after.isAdministrator ? 'made an administrator of' : 'took the administrator’s rights of';
+  if (before.isAdministrator !== after.isAdministrator)
+    return after.isAdministrator ? 'made an administrator of' : 'took the administrator’s rights of';
   return 'changed the usual role of';
 }

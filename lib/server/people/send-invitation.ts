@@ -7,7 +7,11 @@ import { sendMail } from '../mail/send-mail';
  * Sends the link with which an invited person sets their password. It runs last in the transaction that invites: a letter
  * that cannot be sent undoes the invitation.
  */
-export async function sendInvitation(trx: Knex.Transaction, by: Person, invited: { id: string; name: string; email: string }): Promise<void> {
+export async function sendInvitation(
+  trx: Knex.Transaction,
+  by: Person,
+  invited: { id: string; name: string; email: string },
+): Promise<void> {
   const link = await makePasswordLink(trx, { organizationId: by.organizationId, id: invited.id }, 'invitation');
   await sendMail({
     to: invited.email,

@@ -18,7 +18,9 @@ export async function changeProject(access: Access, projectId: string, { members
       if (Object.keys(names).length) await trx('projects').where({ organization_id: organizationId, id: projectId }).update(names);
       if (members) await writeMembers(trx, organizationId, projectId, members);
       if (tolerances) await writeTolerances(trx, organizationId, projectId, tolerances);
-      const changed = [Object.keys(names).length && 'the name', members && 'the members', tolerances && 'the tolerance bands'].filter(Boolean);
+      const changed = [Object.keys(names).length && 'the name', members && 'the members', tolerances && 'the tolerance bands'].filter(
+        Boolean,
+      );
       if (changed.length === 0) return;
       await recordActivity(trx, access, {
         verb: `changed ${changed.join(' and ')} of`,

@@ -37,12 +37,19 @@ function projectRows(person: Person, search: string): Promise<ProjectRow[]> {
     .modify((query) => {
       if (!person.isAdministrator) {
         query.whereExists(
-          db()('project_members').where({ organization_id: organizationId, person_id: person.id }).whereRaw('project_id = projects.id').select('role'),
+          db()('project_members')
+            .where({ organization_id: organizationId, person_id: person.id })
+            .whereRaw('project_id = projects.id')
+            .select('role'),
         );
       }
       if (!search) return;
       const like = `%${search.replace(/[\\%_]/g, '\\$&')}%`;
-      const loopsNamed = db()('loops').where('organization_id', organizationId).whereRaw('project_id = projects.id').whereILike('loops.name', like).select('loops.id');
+      const loopsNamed = db()('loops')
+        .where('organization_id', organizationId)
+        .whereRaw('project_id = projects.id')
+        .whereILike('loops.name', like)
+        .select('loops.id');
       query.where((any) =>
         any
           .whereILike('projects.name', like)
@@ -66,18 +73,32 @@ export async function loopsOf(organizationId: string, projectIds: string[]): Pro
     organizationId,
     rows.map(({ id }) => id),
   );
-  return grouped(rows, ({ project_id }) => project_id, ({ id, name, service, state }) => {
-    const strip = strips.get(id);
-    return { id, name, service, state, revisionNumber: strip?.revisionNumber ?? null, strip: strip?.ticks ?? [] };
-  });
+  return grouped(
+    rows,
+    ({ project_id }) => project_id,
+    ({ id, name, service, state }) => {
+      const strip = strips.get(id);
+      return { id, name, service, state, revisionNumber: strip?.revisionNumber ?? null, strip: strip?.ticks ?? [] };
+    },
+  );
 }
 
 async function bandsOf(organizationId: string, projectIds: string[]) {
   const rows = await db()('tolerance_rules')
     .where({ organization_id: organizationId, station_kind: 'terminal' })
     .whereIn('project_id', projectIds)
-    .select({ projectId: 'project_id', stationKind: 'station_kind', lowerPercent: 'lower_percent', upperPercent: 'upper_percent', source: 'source' });
-  return grouped(rows, ({ projectId }) => projectId, (rule) => rule);
+    .select({
+      projectId: 'project_id',
+      stationKind: 'station_kind',
+      lowerPercent: 'lower_percent',
+      upperPercent: 'upper_percent',
+      source: 'source',
+    });
+  return grouped(
+    rows,
+    ({ projectId }) => projectId,
+    (rule) => rule,
+  );
 }
 
 function grouped<Row, Value>(rows: Row[], keyOf: (row: Row) => string, valueOf: (row: Row) => Value): Map<string, Value[]> {

@@ -21,7 +21,9 @@ export async function readProject({ person, roles }: Access, projectId: string):
 
 function readMembers(organizationId: string, projectId: string): Promise<ProjectDetail['members']> {
   return db()('project_members')
-    .join('people', (join) => join.on('people.organization_id', 'project_members.organization_id').on('people.id', 'project_members.person_id'))
+    .join('people', (join) =>
+      join.on('people.organization_id', 'project_members.organization_id').on('people.id', 'project_members.person_id'),
+    )
     .where({ 'project_members.organization_id': organizationId, 'project_members.project_id': projectId })
     .orderBy(['people.name', 'project_members.role'])
     .select({ personId: 'people.id', name: 'people.name', email: 'people.email', role: 'project_members.role' });

@@ -3,7 +3,12 @@ import type { CreateProject } from '@/lib/api/projects';
 import { Problem } from '../problem';
 
 /** Puts these people on a project in the place of those who are on it. All of them must be active people of the organisation. */
-export async function writeMembers(trx: Knex.Transaction, organizationId: string, projectId: string, members: CreateProject['members']): Promise<void> {
+export async function writeMembers(
+  trx: Knex.Transaction,
+  organizationId: string,
+  projectId: string,
+  members: CreateProject['members'],
+): Promise<void> {
   const personIds = [...new Set(members.map(({ personId }) => personId))];
   const found = await trx('people').where({ organization_id: organizationId, is_active: true }).whereIn('id', personIds).select('id');
   const kept = await trx('project_members').where({ organization_id: organizationId, project_id: projectId }).select('person_id');

@@ -2,7 +2,12 @@ import type { Knex } from 'knex';
 import type { ToleranceRule } from '@/lib/api/projects';
 
 /** Sets the tolerance bands of a project, one for each kind of station; a kind that is not named keeps its band. */
-export async function writeTolerances(trx: Knex.Transaction, organizationId: string, projectId: string, rules: ToleranceRule[]): Promise<void> {
+export async function writeTolerances(
+  trx: Knex.Transaction,
+  organizationId: string,
+  projectId: string,
+  rules: ToleranceRule[],
+): Promise<void> {
   for (const { stationKind, lowerPercent, upperPercent, source } of rules) {
     await trx('tolerance_rules')
       .insert({

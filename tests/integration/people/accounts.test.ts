@@ -16,7 +16,11 @@ const suite = withDatabase();
 const change = (person: MadePerson, body: object) => call(changePerson, { method: 'PATCH', params: { personId: person.id }, body });
 
 async function givePassword({ organizationId, id }: MadePerson, password: string): Promise<string> {
-  const [{ email }] = await suite.db('sign_ins').where({ organization_id: organizationId, person_id: id }).update({ password_hash: await hashPassword(password) }).returning('email');
+  const [{ email }] = await suite
+    .db('sign_ins')
+    .where({ organization_id: organizationId, person_id: id })
+    .update({ password_hash: await hashPassword(password) })
+    .returning('email');
   return email;
 }
 
@@ -25,7 +29,10 @@ it('a changed password ends the sessions that began before, and the new one sign
   const email = await givePassword(designer, 'the old long password');
   const signedInAt = Date.now() - 60_000;
   signInAs(designer, signedInAt);
-  const answer = await call(changePassword, { method: 'POST', body: { currentPassword: 'the old long password', newPassword: 'the new long password' } });
+  const answer = await call(changePassword, {
+    method: 'POST',
+    body: { currentPassword: 'the old long password', newPassword: 'the new long password' },
+  });
   expect(answer.status).toBe(200);
 
   expect(await call(listProjects)).toMatchObject({ status: 401, body: { code: 'signed-out' } });
@@ -39,7 +46,10 @@ it('a wrong present password changes nothing and says which field', async () => 
   const { designer } = await makeOrganization(suite.db);
   const email = await givePassword(designer, 'the old long password');
   signInAs(designer);
-  const answer = await call(changePassword, { method: 'POST', body: { currentPassword: 'not the password', newPassword: 'the new long password' } });
+  const answer = await call(changePassword, {
+    method: 'POST',
+    body: { currentPassword: 'not the password', newPassword: 'the new long password' },
+  });
   expect(answer).toMatchObject({ status: 422, body: { code: 'password-wrong', fields: [{ path: 'currentPassword' }] } });
   expect(await checkPassword({ email, password: 'the old long password' })).not.toBeNull();
 });
@@ -82,7 +92,9 @@ it('two administrators who take each other out at once leave one', async () => {
   await change(designer, { isAdministrator: true });
   const answers = await Promise.all([change(administrator, { isActive: false }), change(designer, { isActive: false })]);
   expect(answers.map(({ status }) => status).sort()).toEqual([200, 409]);
-  expect(await suite.db('people').where({ organization_id: organizationId, is_administrator: true, is_active: true }).select('id')).toHaveLength(1);
+  expect(
+    await suite.db('people').where({ organization_id: organizationId, is_administrator: true, is_active: true }).select('id'),
+  ).toHaveLength(1);
 });
 
 it('a person of another organisation is not there to be changed or seen', async () => {
@@ -101,6 +113,9 @@ it('a name, theme and units are kept, and a unit that is none is refused', async
   const save = (body: object) => call(changeAccount, { method: 'PATCH', body });
   expect((await save({ name: 'Tove Lind', theme: 'dark', units: { flow: 'US gpm' } })).status).toBe(200);
   expect(await save({ units: { flow: 'furlongs' } })).toMatchObject({ status: 400, body: { fields: [{ path: 'units' }] } });
-  const row = await suite.db('people').where({ organization_id: technician.organizationId, id: technician.id }).first('name', 'theme', 'units');
+  const row = await suite
+    .db('people')
+    .where({ organization_id: technician.organizationId, id: technician.id })
+    .first('name', 'theme', 'units');
   expect(row).toEqual({ name: 'Tove Lind', theme: 'dark', units: { flow: 'US gpm' } });
 });

@@ -20,7 +20,10 @@ const follow = (token: string | null, password = newPassword) => call(useLink, {
 async function invitePerson(email: string) {
   const organization = await makeOrganization(suite.db);
   signInAs(organization.administrator);
-  const answer = await call(invite, { method: 'POST', body: { name: 'Nia Brook', email, isAdministrator: false, defaultRole: 'technician' } });
+  const answer = await call(invite, {
+    method: 'POST',
+    body: { name: 'Nia Brook', email, isAdministrator: false, defaultRole: 'technician' },
+  });
   expect(answer.status).toBe(200);
   return { ...organization, invitedId: answer.body.id as string };
 }
@@ -28,7 +31,11 @@ async function invitePerson(email: string) {
 async function personWithPassword() {
   const { organizationId, designer } = await makeOrganization(suite.db);
   const password_hash = await hashPassword('the old long password');
-  const [{ email }] = await suite.db('sign_ins').where({ organization_id: organizationId, person_id: designer.id }).update({ password_hash }).returning('email');
+  const [{ email }] = await suite
+    .db('sign_ins')
+    .where({ organization_id: organizationId, person_id: designer.id })
+    .update({ password_hash })
+    .returning('email');
   return { organizationId, designer, email: email as string };
 }
 
@@ -48,7 +55,9 @@ it('of several who follow one link at once, one sets the password', async () => 
   const token = mail.tokenTo('nia-2@test.example');
   const answers = await Promise.all([1, 2, 3, 4].map((n) => follow(token, `long password number ${n}`)));
   expect(answers.map(({ status }) => status).sort()).toEqual([200, 410, 410, 410]);
-  const fits = await Promise.all([1, 2, 3, 4].map((n) => checkPassword({ email: 'nia-2@test.example', password: `long password number ${n}` })));
+  const fits = await Promise.all(
+    [1, 2, 3, 4].map((n) => checkPassword({ email: 'nia-2@test.example', password: `long password number ${n}` })),
+  );
   expect(fits.map(Boolean)).toEqual(answers.map(({ status }) => status === 200));
 });
 
@@ -72,7 +81,10 @@ it('a letter that cannot be sent undoes the invitation', async () => {
   signInAs(administrator);
   const url = process.env.SMTP_URL;
   process.env.SMTP_URL = 'smtp://127.0.0.1:1';
-  const answer = await call(invite, { method: 'POST', body: { name: 'Nia', email: 'nia-5@test.example', isAdministrator: false, defaultRole: 'owner' } });
+  const answer = await call(invite, {
+    method: 'POST',
+    body: { name: 'Nia', email: 'nia-5@test.example', isAdministrator: false, defaultRole: 'owner' },
+  });
   process.env.SMTP_URL = url;
   expect(answer.status).toBe(500);
   expect((await call(listPeople)).body.map(({ email }: { email: string }) => email)).not.toContain('nia-5@test.example');
@@ -80,7 +92,10 @@ it('a letter that cannot be sent undoes the invitation', async () => {
 
 it('an address that signs in already cannot be invited', async () => {
   await invitePerson('nia-6@test.example');
-  const again = await call(invite, { method: 'POST', body: { name: 'Nia', email: 'Nia-6@test.example', isAdministrator: false, defaultRole: 'owner' } });
+  const again = await call(invite, {
+    method: 'POST',
+    body: { name: 'Nia', email: 'Nia-6@test.example', isAdministrator: false, defaultRole: 'owner' },
+  });
   expect(again).toMatchObject({ status: 409, body: { code: 'email-taken', fields: [{ path: 'email' }] } });
 });
 
@@ -111,7 +126,10 @@ it('a reset runs out after an hour', async () => {
   const { expires_at } = await suite.db('password_links').where({ organization_id: organizationId }).first('expires_at');
   expect(Math.abs(expires_at.getTime() - Date.now() - 3_600_000)).toBeLessThan(60_000);
 
-  await suite.db('password_links').where({ organization_id: organizationId }).update({ expires_at: new Date(Date.now() - 1000) });
+  await suite
+    .db('password_links')
+    .where({ organization_id: organizationId })
+    .update({ expires_at: new Date(Date.now() - 1000) });
   expect((await follow(mail.tokenTo(email))).body.code).toBe('link-used');
   expect(await checkPassword({ email, password: 'the old long password' })).not.toBeNull();
 });
@@ -125,6 +143,10 @@ it('a link of a person who was shut out since does not work', async () => {
 });
 
 it('a page of another site cannot follow a link', async () => {
-  const request = new Request('http://127.0.0.1/api/account/password-link', { method: 'POST', headers: { host: '127.0.0.1', origin: 'https://elsewhere.example' }, body: '{}' });
+  const request = new Request('http://127.0.0.1/api/account/password-link', {
+    method: 'POST',
+    headers: { host: '127.0.0.1', origin: 'https://elsewhere.example' },
+    body: '{}',
+  });
   expect((await useLink(request)).status).toBe(403);
 });

@@ -24,7 +24,9 @@ const page = async (query = '') => (await call(GET, { query })).body as Activity
 
 it('says who did what, on which project and loop', async () => {
   signInAs(home.technician);
-  expect((await page()).rows).toMatchObject([{ personName: 'designer', verb: 'made the loop', subject: 'HTG-2', projectName: 'Project', loopName: 'HTG-2' }]);
+  expect((await page()).rows).toMatchObject([
+    { personName: 'designer', verb: 'made the loop', subject: 'HTG-2', projectName: 'Project', loopName: 'HTG-2' },
+  ]);
 });
 
 it('shows the projects one is on, and an administrator everything', async () => {

@@ -49,9 +49,18 @@ async function issueAgain({ organizationId, loopId, designer, stationId }: Place
     issued_by: designer.id,
   });
   const nearer = uuidv7();
-  await suite.db('stations').insert({ organization_id: organizationId, id: nearer, loop_id: loopId, element_id: 'unit-0', kind: 'terminal' });
+  await suite
+    .db('stations')
+    .insert({ organization_id: organizationId, id: nearer, loop_id: loopId, element_id: 'unit-0', kind: 'terminal' });
   await suite.db('station_designs').insert([
-    { organization_id: organizationId, revision_id: revisionId, station_id: stationId, walking_order: 2, tag: 'FC-1', design_flow_ls: designFlowLs },
+    {
+      organization_id: organizationId,
+      revision_id: revisionId,
+      station_id: stationId,
+      walking_order: 2,
+      tag: 'FC-1',
+      design_flow_ls: designFlowLs,
+    },
     { organization_id: organizationId, revision_id: revisionId, station_id: nearer, walking_order: 1, tag: 'FC-0', design_flow_ls: 0.3 },
   ]);
 }

@@ -13,8 +13,10 @@ import { signInAs } from '../../make/session';
 
 const suite = withDatabase();
 
-const make = (name: string, members: object[] = []) => call(createProject, { method: 'POST', body: { name, client: 'Client', building: 'Mill house', members } });
-const makeLoop = (projectId: string, name: string, service = 'hot') => call(createLoop, { method: 'POST', params: { projectId }, body: { name, service } });
+const make = (name: string, members: object[] = []) =>
+  call(createProject, { method: 'POST', body: { name, client: 'Client', building: 'Mill house', members } });
+const makeLoop = (projectId: string, name: string, service = 'hot') =>
+  call(createLoop, { method: 'POST', params: { projectId }, body: { name, service } });
 const listed = async (query = '') => ((await call(listProjects, { query })).body as ProjectSummary[]).map(({ name }) => name);
 
 it('whoever makes a project is its designer, and it starts with the usual bands and no loop', async () => {
@@ -23,10 +25,23 @@ it('whoever makes a project is its designer, and it starts with the usual bands 
   const { status, body } = await make('Harbour baths', [{ personId: technician.id, role: 'technician' }]);
   expect(status).toBe(200);
   const project = (await call(readProject, { params: { projectId: body.id } })).body;
-  expect(project).toMatchObject({ name: 'Harbour baths', client: 'Client', building: 'Mill house', roles: ['designer'], loops: [], band: { lowerPercent: 90, upperPercent: 110 } });
-  expect(project.members.map(({ name, role }: { name: string; role: string }) => [name, role])).toEqual([['designer', 'designer'], ['technician', 'technician']]);
+  expect(project).toMatchObject({
+    name: 'Harbour baths',
+    client: 'Client',
+    building: 'Mill house',
+    roles: ['designer'],
+    loops: [],
+    band: { lowerPercent: 90, upperPercent: 110 },
+  });
+  expect(project.members.map(({ name, role }: { name: string; role: string }) => [name, role])).toEqual([
+    ['designer', 'designer'],
+    ['technician', 'technician'],
+  ]);
   expect(project.tolerances).toHaveLength(3);
-  expect(project.tolerances.find(({ stationKind }: { stationKind: string }) => stationKind === 'pump')).toMatchObject({ lowerPercent: 0, upperPercent: 10 });
+  expect(project.tolerances.find(({ stationKind }: { stationKind: string }) => stationKind === 'pump')).toMatchObject({
+    lowerPercent: 0,
+    upperPercent: 10,
+  });
 });
 
 it('a name that is taken is refused at its field, in one organisation only', async () => {
@@ -73,7 +88,7 @@ it('a search looks in project, client, building and loop names, and takes its si
   expect(await listed('?q=htg_')).toEqual(['100 % fresh air']);
   expect(await listed('?q=htg%25')).toEqual([]);
   expect(await listed('?q=h__')).toEqual([]);
-  expect(await listed("?q=%27%20or%201=1%20--")).toEqual([]);
+  expect(await listed('?q=%27%20or%201=1%20--')).toEqual([]);
 });
 
 it('a new loop starts as a draft with an empty drawing of its service', async () => {
@@ -81,7 +96,13 @@ it('a new loop starts as a draft with an empty drawing of its service', async ()
   signInAs(designer);
   const { status, body } = await makeLoop(projectId, 'HTG-2');
   expect(status).toBe(200);
-  expect((await call(readLoop, { params: { loopId: body.id } })).body).toMatchObject({ name: 'HTG-2', service: 'hot', state: 'draft', revision: null, strip: [] });
+  expect((await call(readLoop, { params: { loopId: body.id } })).body).toMatchObject({
+    name: 'HTG-2',
+    service: 'hot',
+    state: 'draft',
+    revision: null,
+    strip: [],
+  });
   expect((await call(readDraft, { params: { loopId: body.id } })).body).toMatchObject({ version: 1, drawing: emptyDrawing('hot') });
   expect(await makeLoop(projectId, 'HTG-2')).toMatchObject({ status: 409, body: { code: 'name-taken' } });
 });

@@ -38,7 +38,8 @@ export default async function ProjectsPage({ searchParams }: { searchParams: Pro
 }
 
 function NoProjects({ search, mayCreate }: { search: string; mayCreate: boolean }) {
-  if (search) return <Notice title={`Nothing is called “${search}”`}>Looked for in the names of projects, clients, buildings and loops.</Notice>;
+  if (search)
+    return <Notice title={`Nothing is called “${search}”`}>Looked for in the names of projects, clients, buildings and loops.</Notice>;
   return (
     <Notice title="You are on no project yet">
       {mayCreate ? 'Make one, and draw its first loop.' : 'An administrator puts you on one; ask whoever invited you.'}

@@ -2,7 +2,7 @@ import type { Metadata } from 'next';
 import Link from 'next/link';
 import { notFound } from 'next/navigation';
 import { ActivityList } from '@/components/activity/activity-list';
-import { LoopList } from '@/components/projects/loop-row';
+import { LoopList } from '@/components/projects/loop-list';
 import { MemberList } from '@/components/projects/member-list';
 import { NewLoopDialog } from '@/components/projects/new-loop-dialog';
 import { ProjectSettings } from '@/components/projects/project-settings';
@@ -48,17 +48,25 @@ export default async function ProjectPage({ params }: { params: Promise<{ projec
             {project.loops.length ? (
               <LoopList projectId={projectId} loops={project.loops} band={project.band} />
             ) : (
-              <p className="px-4 py-4 text-quiet">{mayDraw ? 'No loop yet. Make one, and draw it.' : 'No loop yet. A designer of the project makes one.'}</p>
+              <p className="text-quiet px-4 py-4">
+                {mayDraw ? 'No loop yet. Make one, and draw it.' : 'No loop yet. A designer of the project makes one.'}
+              </p>
             )}
           </Sheet>
           <Sheet title="Activity" action={<Link href={`/activity?project=${projectId}`}>All of it</Link>} isFlush>
-            {activity.rows.length ? <ActivityList rows={activity.rows} /> : <p className="px-4 py-4 text-quiet">Nothing has been done here yet.</p>}
+            {activity.rows.length ? (
+              <ActivityList rows={activity.rows} />
+            ) : (
+              <p className="text-quiet px-4 py-4">Nothing has been done here yet.</p>
+            )}
           </Sheet>
         </div>
         <div className="flex flex-col gap-5">
           <Sheet
             title="Members"
-            action={mayManage && <ProjectSettings project={project} people={people.filter(({ id, isActive }) => isActive || isMember(id))} />}
+            action={
+              mayManage && <ProjectSettings project={project} people={people.filter(({ id, isActive }) => isActive || isMember(id))} />
+            }
           >
             <MemberList members={project.members} />
           </Sheet>

@@ -10,7 +10,7 @@ export default async function LoopLayout({ children, params }: { children: React
   if (!access || access.projectId !== projectId) notFound();
   const loop = await readLoop(access, loopId);
   return (
-    <div className="flex min-h-dvh flex-col">
+    <div className="flex min-h-dvh flex-col has-data-own-header:[&>header]:hidden">
       <LoopHeader loop={loop} person={{ name: access.person.name, organizationName: access.person.organizationName }} />
       {children}
     </div>

@@ -27,7 +27,7 @@ export default async function SchedulePage({ params }: { params: Promise<{ proje
   const isEmpty = found && Object.values(found.schedule).every((rows) => rows.length === 0);
 
   return (
-    <main className="flex h-[calc(100dvh-7rem)] min-h-[26rem] flex-none flex-col gap-3 px-4 py-4 lg:h-[calc(100dvh-3.6rem)] print:block print:h-auto">
+    <main className="flex h-[calc(100dvh-7rem)] min-h-[26rem] flex-none flex-col gap-3 px-4 py-4 xl:h-[calc(100dvh-3.6rem)] print:block print:h-auto">
       {!found ? (
         <NoSchedule title="No schedule yet" drawingHref={null}>
           The schedule appears when the designer has issued a revision.

@@ -19,21 +19,21 @@ export function LoopList({ projectId, loops, band }: { projectId: string; loops:
 /** One loop of a project: name, service, flow strip, where it stands. The whole row leads to it. */
 function LoopRow({ projectId, loop, band }: { projectId: string; loop: LoopSummary; band: StripBand }) {
   return (
-    <li className="relative grid grid-cols-[minmax(0,1fr)_auto] items-center gap-x-5 gap-y-1.5 px-4 py-2.5 hover:bg-well md:grid-cols-[minmax(0,1fr)_auto_10rem_11rem]">
+    <li className="hover:bg-well relative grid grid-cols-[minmax(0,1fr)_auto] items-center gap-x-5 gap-y-1.5 px-4 py-2.5 md:grid-cols-[minmax(0,1fr)_auto_10rem_11rem]">
       <span className="min-w-0 truncate">
-        <Link href={`/projects/${projectId}/loops/${loop.id}`} className="font-semibold text-ink no-underline after:absolute after:inset-0">
+        <Link href={`/projects/${projectId}/loops/${loop.id}`} className="text-ink font-semibold no-underline after:absolute after:inset-0">
           {loop.name}
         </Link>
-        <span className="ml-3 hidden text-sm text-quiet sm:inline">{serviceWords[loop.service]}</span>
+        <span className="text-quiet ml-3 hidden text-sm sm:inline">{serviceWords[loop.service]}</span>
       </span>
-      <span className="order-last text-right text-sm text-quiet md:order-none">
+      <span className="text-quiet order-last text-right text-sm md:order-none">
         <Within ticks={loop.strip} />
       </span>
       <span className="order-3 md:order-none">
         <FlowStrip ticks={loop.strip} band={band} size="row" />
-        {loop.strip.length === 0 && <span className="text-sm text-quiet sm:hidden">{serviceWords[loop.service]}</span>}
+        {loop.strip.length === 0 && <span className="text-quiet text-sm sm:hidden">{serviceWords[loop.service]}</span>}
       </span>
-      <span className="text-right text-sm whitespace-nowrap text-quiet">
+      <span className="text-quiet text-right text-sm whitespace-nowrap">
         {stateWords[loop.state]}
         {loop.revisionNumber !== null && (
           <>

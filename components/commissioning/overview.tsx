@@ -1,0 +1,56 @@
+'use client';
+
+import { useRouter } from 'next/navigation';
+import { useEffect } from 'react';
+import { byStorey } from '@/lib/commissioning/walking-order';
+import { FlowStrip } from '../strip/flow-strip';
+import { Notice } from '../ui/notice';
+import { Sheet } from '../ui/sheet';
+import { CautionsBox } from './cautions-box';
+import { measuredIn, stripOf, type Commissioning } from './commissioning-context';
+import { KeptLine } from './kept-line';
+import { NotIssued } from './not-issued';
+import { PastRounds } from './past-rounds';
+import { RefusedEntries } from './refused-entries';
+import { RoundHead } from './round-head';
+import { StationTable } from './station-table';
+
+/** A loop's stations: the round that is open, what is left of it, and what came before. */
+export function Overview({ commissioning }: { commissioning: Commissioning }) {
+  const { body, loop, shownRound, mayRecord, keptState } = commissioning;
+  const router = useRouter();
+  const sentAt = keptState.entries.length === 0 ? keptState.lastSentAt : null;
+  useEffect(() => {
+    // The strip at the head of the page is the server's; it is asked again only while there is signal.
+    if (sentAt && navigator.onLine) router.refresh();
+  }, [router, sentAt]);
+  if (!body.revision) return <NotIssued name={loop.name} />;
+  const measured = measuredIn(commissioning);
+  return (
+    <>
+      <main className="mx-auto flex w-full max-w-6xl flex-1 flex-col gap-4 p-4 lg:py-6">
+        <RoundHead commissioning={commissioning} measured={measured} />
+        <RefusedEntries commissioning={commissioning} />
+        {shownRound && (
+          <Sheet title={`Flow strip, round ${shownRound.number}`} action={<span className="text-quiet text-sm">terminals in walking order</span>}>
+            <FlowStrip ticks={stripOf(commissioning)} band={body.band} size="page" />
+          </Sheet>
+        )}
+        {mayRecord && <CautionsBox />}
+        {body.stations.length === 0 ? (
+          <Notice tone="brass" title="No stations">
+            This revision has no terminal, balancing valve or pump with a design flow, so there is nothing to measure.
+          </Notice>
+        ) : (
+          byStorey(body.stations).map(({ storey, stations }) => <StationTable key={storey} storey={storey} stations={stations} commissioning={commissioning} />)
+        )}
+        <PastRounds commissioning={commissioning} />
+      </main>
+      {mayRecord && (
+        <div className="sticky bottom-0 z-10">
+          <KeptLine commissioning={commissioning} />
+        </div>
+      )}
+    </>
+  );
+}

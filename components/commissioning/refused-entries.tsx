@@ -1,0 +1,29 @@
+'use client';
+
+import { Button } from '../ui/button';
+import type { Commissioning } from './commissioning-context';
+import { enteredWords } from './entry-words';
+
+/** Readings of this tablet that the server does not take, of whatever round: never thrown away without the person's word. */
+export function RefusedEntries({ commissioning: { keptState, kept } }: { commissioning: Commissioning }) {
+  const refused = keptState.entries.filter(({ refusal }) => refusal !== null);
+  if (refused.length === 0) return null;
+  return (
+    <section aria-label="Refused readings" className="border-l-high rounded border border-l-4 bg-sheet">
+      <h2 className="px-4 pt-3">▴ Kept on this tablet and refused by the server</h2>
+      <ul className="divide-y">
+        {refused.map(({ reading, tag, refusal }) => (
+          <li key={reading.id} className="flex flex-wrap items-center gap-x-4 gap-y-2 px-4 py-2">
+            <p className="min-w-48 flex-1">
+              <strong>{tag}</strong> <span className="figures">{enteredWords(reading.entered)}</span>
+              <span className="text-quiet block text-sm">{refusal}</span>
+            </p>
+            <Button size="touch" className="!text-base" onClick={() => kept.release(reading.id)}>
+              Throw it away
+            </Button>
+          </li>
+        ))}
+      </ul>
+    </section>
+  );
+}
