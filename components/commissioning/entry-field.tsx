@@ -22,7 +22,12 @@ export function EntryField({ entry, field, onEnter }: EntryFieldProps) {
   const isActive = entry.active === field;
   return (
     <div className="min-w-0 flex-1">
-      <div className={classNames('relative rounded border bg-sheet outline-2 -outline-offset-1', message ? 'outline-high' : isActive ? 'outline-brass' : 'outline-transparent')}>
+      <div
+        className={classNames(
+          'bg-sheet relative rounded border outline-2 -outline-offset-1',
+          message ? 'outline-high' : isActive ? 'outline-brass' : 'outline-transparent',
+        )}
+      >
         <label htmlFor={id} className="text-quiet pointer-events-none absolute top-2 left-4 text-sm">
           {fieldNames[field]}
           <span className="sr-only">, {entry.unitOf(field)}</span>

@@ -3,7 +3,7 @@
 import { useState } from 'react';
 import type { Reading, Station } from '@/lib/api/commissioning';
 import { dropAtDesignKpa } from '@/lib/commissioning/reading-flow';
-import { typedQuantity } from '@/lib/units/format-quantity';
+import { formatQuantity } from '@/lib/units/format-quantity';
 import { Button } from '../ui/button';
 import { Deviation } from '../ui/deviation';
 import { TextArea } from '../ui/field';
@@ -56,7 +56,8 @@ export function EntryForm({ commissioning, station, entry, correcting, onKeep }:
           <span className="text-quiet">Last round </span>
           {last ? (
             <>
-              <Figure quantity="flow" si={last.flowLs} hasUnit className="font-bold" /> <Deviation percent={last.percentOfDesign} verdict={last.verdict} /> %
+              <Figure quantity="flow" si={last.flowLs} hasUnit className="font-bold" />{' '}
+              <Deviation percent={last.percentOfDesign} verdict={last.verdict} /> %
             </>
           ) : (
             <span className="text-quiet">not measured</span>
@@ -83,7 +84,13 @@ export function EntryForm({ commissioning, station, entry, correcting, onKeep }:
           onChange={(event) => entry.type('note', event.target.value)}
         />
       )}
-      <WorkingDialog entry={entry} station={station} densityKgM3={body.densityKgM3!} isOpen={isWorkingOpen} onClose={() => setWorkingOpen(false)} />
+      <WorkingDialog
+        entry={entry}
+        station={station}
+        densityKgM3={body.densityKgM3!}
+        isOpen={isWorkingOpen}
+        onClose={() => setWorkingOpen(false)}
+      />
     </>
   );
 }
@@ -93,7 +100,7 @@ function Target({ station, entry, densityKgM3 }: { station: Station; entry: Entr
   const turns = entry.siOf('setting');
   if (turns === null) {
     if (station.settingTurns === null) return null;
-    const text = typedQuantity('setting', station.settingTurns, 'turns');
+    const text = formatQuantity('setting', station.settingTurns, 'turns');
     return (
       <Button size="touch" look="quiet" className="-my-2 self-start !px-2 !text-base" onClick={() => entry.type('setting', text)}>
         It stands as scheduled, at {text} turns

@@ -36,26 +36,48 @@ export function EntryPad({ entry, message, isSending, hasWaiting, before, next, 
     entry.type(entry.active, `${text}${key === ',' ? '.' : key}`);
   };
   return (
-    <aside aria-label="Enter and go on" className="flex shrink-0 flex-col gap-2 border-t bg-paper p-3 landscape:w-[clamp(16rem,35vw,23.5rem)] landscape:overflow-y-auto landscape:border-t-0 landscape:border-l landscape:bg-sheet landscape:p-4">
-      {entry && <NumberPad into={fieldNames[entry.active]} onKey={type} onErase={() => entry.type(entry.active, entry.typed[entry.active].slice(0, -1))} />}
+    <aside
+      aria-label="Enter and go on"
+      className="bg-paper landscape:bg-sheet flex shrink-0 flex-col gap-2 border-t p-3 landscape:w-[clamp(16rem,35vw,23.5rem)] landscape:overflow-y-auto landscape:border-t-0 landscape:border-l landscape:p-4"
+    >
+      {entry && (
+        <NumberPad
+          into={fieldNames[entry.active]}
+          onKey={type}
+          onErase={() => entry.type(entry.active, entry.typed[entry.active].slice(0, -1))}
+        />
+      )}
       {message && (
         <p role="alert" className="text-high">
           ▴ {message}
         </p>
       )}
       {entry && !isDone ? (
-        <Button size="touch" look="primary" className="min-h-14 !text-xl landscape:min-h-20" isPending={isSending && entry.isBlank} pendingText="Sending…" onClick={onKeep}>
+        <Button
+          size="touch"
+          look="primary"
+          className="min-h-14 !text-xl landscape:min-h-20"
+          isPending={isSending && entry.isBlank}
+          pendingText="Sending…"
+          onClick={onKeep}
+        >
           {entry.isCorrecting ? 'Keep the correction' : next ? `Keep, next ${next.tag}` : 'Keep, back to the list'}
           <ChevronRight aria-hidden />
         </Button>
       ) : (
-        <PlaceLink href={onward.path} className={classNames(buttonClass('primary', 'touch'), 'min-h-14 !text-xl no-underline landscape:min-h-20')}>
+        <PlaceLink
+          href={onward.path}
+          className={classNames(buttonClass('primary', 'touch'), 'min-h-14 !text-xl no-underline landscape:min-h-20')}
+        >
           Next {onward.tag}
           <ChevronRight aria-hidden />
         </PlaceLink>
       )}
       <div className="flex justify-between gap-2">
-        <PlaceLink href={before?.path ?? listPath} className={classNames(buttonClass('secondary', 'touch'), '!px-3 !text-base no-underline')}>
+        <PlaceLink
+          href={before?.path ?? listPath}
+          className={classNames(buttonClass('secondary', 'touch'), '!px-3 !text-base no-underline')}
+        >
           <ChevronLeft size={18} aria-hidden />
           {before?.tag ?? 'List'}
         </PlaceLink>

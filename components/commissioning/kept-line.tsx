@@ -13,9 +13,13 @@ export function KeptLine({ commissioning }: { commissioning: Commissioning }) {
   const refused = entries.filter(({ refusal }) => refusal !== null).length;
   const count = entries.length === 1 ? '1 reading is kept on this tablet only' : `${entries.length} readings are kept on this tablet only`;
   return (
-    <footer className="flex min-h-12 shrink-0 flex-wrap items-center gap-x-3 border-t bg-sheet px-4 py-1 text-sm">
+    <footer className="bg-sheet flex min-h-12 shrink-0 flex-wrap items-center gap-x-3 border-t px-4 py-1 text-sm">
       <p role="status" className="flex min-w-0 items-center gap-2">
-        {isOffline ? <CloudOff size={16} aria-hidden className="text-brass shrink-0" /> : <TabletSmartphone size={16} aria-hidden className="text-quiet shrink-0" />}
+        {isOffline ? (
+          <CloudOff size={16} aria-hidden className="text-brass shrink-0" />
+        ) : (
+          <TabletSmartphone size={16} aria-hidden className="text-quiet shrink-0" />
+        )}
         <span>
           {isOffline && 'No signal. '}
           {entries.length ? <strong>{count}</strong> : 'All readings are sent'}
@@ -25,7 +29,14 @@ export function KeptLine({ commissioning }: { commissioning: Commissioning }) {
         </span>
       </p>
       {entries.length > refused && (
-        <Button size="touch" look="quiet" className="-my-1 !text-sm" isPending={isSending} pendingText="Sending…" onClick={() => void kept.send()}>
+        <Button
+          size="touch"
+          look="quiet"
+          className="-my-1 !text-sm"
+          isPending={isSending}
+          pendingText="Sending…"
+          onClick={() => void kept.send()}
+        >
           Send now
         </Button>
       )}

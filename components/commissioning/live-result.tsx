@@ -10,7 +10,7 @@ const certaintyWords = { yes: 'yes', no: 'no', 'too-near': 'too near to tell' } 
 export function LiveResult({ entry }: { entry: Entry }) {
   const { judgement, band, meter } = entry;
   return (
-    <output aria-live="polite" className="grid grid-cols-2 rounded border bg-sheet sm:grid-cols-[1fr_1fr_1.35fr]">
+    <output aria-live="polite" className="bg-sheet grid grid-cols-2 rounded border sm:grid-cols-[1fr_1fr_1.35fr]">
       <Cell name="Flow">
         <Figure quantity="flow" si={judgement?.flowLs} className="text-2xl font-bold" />
         <span className="text-quiet ml-1.5 text-sm">
@@ -41,7 +41,9 @@ export function LiveResult({ entry }: { entry: Entry }) {
 }
 
 const Cell = ({ name, isLast, children }: { name: string; isLast?: boolean; children: ReactNode }) => (
-  <span className={`block min-w-0 px-4 pt-2 pb-2.5 ${isLast ? 'col-span-2 border-t sm:col-span-1 sm:border-t-0 sm:border-l' : 'not-first:border-l'}`}>
+  <span
+    className={`block min-w-0 px-4 pt-2 pb-2.5 ${isLast ? 'col-span-2 border-t sm:col-span-1 sm:border-t-0 sm:border-l' : 'not-first:border-l'}`}
+  >
     <span className="text-quiet block truncate text-sm">{name}</span>
     <span className="flex min-h-9 items-baseline">{children}</span>
   </span>

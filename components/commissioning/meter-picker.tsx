@@ -1,4 +1,5 @@
 import Link from 'next/link';
+import { useId } from 'react';
 import { isOverdue } from '@/lib/commissioning/calibration';
 import { dayWords } from '../instruments/instrument-words';
 import { useNow } from './use-now';
@@ -8,20 +9,29 @@ import type { Entry } from './use-entry';
 export function MeterPicker({ entry }: { entry: Entry }) {
   const { meters, meter } = entry;
   const now = useNow();
+  const id = useId();
   if (meters.length === 0) {
     return (
       <p className="text-quiet text-sm">
-        No {entry.typed.method === 'valve-drop' ? 'differential pressure' : 'flow'} meter is in the list. <Link href="/instruments">Add it under Instruments</Link>.
+        No {entry.typed.method === 'valve-drop' ? 'differential pressure' : 'flow'} meter is in the list.{' '}
+        <Link href="/instruments">Add it under Instruments</Link>.
       </p>
     );
   }
   return (
-    <label className="flex min-w-0 flex-wrap items-center gap-x-2">
-      <span className="text-quiet">Meter</span>
-      <select value={meter?.id ?? ''} onChange={(event) => entry.chooseMeter(event.target.value)} className="bg-sheet h-12 max-w-full min-w-0 rounded border px-2 font-semibold">
+    <div className="flex min-w-0 flex-wrap items-center gap-x-2">
+      <label htmlFor={id} className="text-quiet">
+        Meter
+      </label>
+      <select
+        id={id}
+        value={meter?.id ?? ''}
+        onChange={(event) => entry.chooseMeter(event.target.value)}
+        className="bg-sheet h-12 max-w-full min-w-0 rounded border px-2 font-semibold"
+      >
         {!meter && <option value="">Choose the meter</option>}
-        {meters.map(({ id, serial, name }) => (
-          <option key={id} value={id}>
+        {meters.map(({ id: meterId, serial, name }) => (
+          <option key={meterId} value={meterId}>
             {serial}, {name}
           </option>
         ))}
@@ -29,8 +39,10 @@ export function MeterPicker({ entry }: { entry: Entry }) {
       {meter && now && isOverdue(meter, now) ? (
         <span className="text-high font-semibold">▴ overdue since {dayWords(meter.calibrationDueOn!)}</span>
       ) : (
-        meter && <span className="text-quiet text-sm">{meter.calibrationDueOn ? `due ${dayWords(meter.calibrationDueOn)}` : 'no due date'}</span>
+        meter && (
+          <span className="text-quiet text-sm">{meter.calibrationDueOn ? `due ${dayWords(meter.calibrationDueOn)}` : 'no due date'}</span>
+        )
       )}
-    </label>
+    </div>
   );
 }

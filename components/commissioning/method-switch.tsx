@@ -12,7 +12,7 @@ interface MethodSwitchProps {
 
 export function MethodSwitch({ method, hasValve, onChoose }: MethodSwitchProps) {
   return (
-    <fieldset className="flex rounded border bg-sheet">
+    <fieldset className="bg-sheet flex rounded border">
       <legend className="sr-only">How the flow is measured</legend>
       {(Object.keys(methodNames) as ReadingMethod[]).map((it) => {
         const isOff = it === 'valve-drop' && !hasValve;
@@ -20,7 +20,7 @@ export function MethodSwitch({ method, hasValve, onChoose }: MethodSwitchProps) 
           <label
             key={it}
             className={classNames(
-              'flex h-12 flex-1 items-center justify-center rounded-[2px] font-semibold has-focus-visible:outline-2 has-focus-visible:outline-brass',
+              'has-focus-visible:outline-brass flex h-12 flex-1 items-center justify-center rounded-[2px] font-semibold has-focus-visible:outline-2',
               it === method ? 'bg-ink text-paper' : isOff ? 'text-quiet opacity-60' : 'cursor-pointer',
             )}
           >

@@ -9,8 +9,8 @@ export const NotIssued = ({ name }: { name: string }) => (
     </svg>
     <h1>{name} has not been issued yet</h1>
     <p className="text-quiet">
-      Stations, design flows and settings come from the issued revision. As soon as the designer issues the first one, the stations stand here in walking order, ready
-      for a round.
+      Stations, design flows and settings come from the issued revision. As soon as the designer issues the first one, the stations stand
+      here in walking order, ready for a round.
     </p>
   </main>
 );

@@ -18,7 +18,14 @@ export function NumberPad({ into, onKey, onErase }: NumberPadProps) {
   return (
     <div role="group" aria-label={`Number pad for ${into}`} className="grid min-h-0 flex-1 grid-cols-3 gap-2">
       {keys.map((key) => (
-        <button key={key} type="button" aria-label={key === ',' ? 'Decimal comma or point' : key} onMouseDown={stay} onClick={() => onKey(key)} className={classNames(keyClass, 'figures')}>
+        <button
+          key={key}
+          type="button"
+          aria-label={key === ',' ? 'Decimal comma or point' : key}
+          onMouseDown={stay}
+          onClick={() => onKey(key)}
+          className={classNames(keyClass, 'figures')}
+        >
           {key === ',' ? '. ,' : key}
         </button>
       ))}

@@ -32,7 +32,10 @@ export function Overview({ commissioning }: { commissioning: Commissioning }) {
         <RoundHead commissioning={commissioning} measured={measured} />
         <RefusedEntries commissioning={commissioning} />
         {shownRound && (
-          <Sheet title={`Flow strip, round ${shownRound.number}`} action={<span className="text-quiet text-sm">terminals in walking order</span>}>
+          <Sheet
+            title={`Flow strip, round ${shownRound.number}`}
+            action={<span className="text-quiet text-sm">terminals in walking order</span>}
+          >
             <FlowStrip ticks={stripOf(commissioning)} band={body.band} size="page" />
           </Sheet>
         )}
@@ -42,7 +45,9 @@ export function Overview({ commissioning }: { commissioning: Commissioning }) {
             This revision has no terminal, balancing valve or pump with a design flow, so there is nothing to measure.
           </Notice>
         ) : (
-          byStorey(body.stations).map(({ storey, stations }) => <StationTable key={storey} storey={storey} stations={stations} commissioning={commissioning} />)
+          byStorey(body.stations).map(({ storey, stations }) => (
+            <StationTable key={storey} storey={storey} stations={stations} commissioning={commissioning} />
+          ))
         )}
         <PastRounds commissioning={commissioning} />
       </main>

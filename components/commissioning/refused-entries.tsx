@@ -9,7 +9,7 @@ export function RefusedEntries({ commissioning: { keptState, kept } }: { commiss
   const refused = keptState.entries.filter(({ refusal }) => refusal !== null);
   if (refused.length === 0) return null;
   return (
-    <section aria-label="Refused readings" className="border-l-high rounded border border-l-4 bg-sheet">
+    <section aria-label="Refused readings" className="border-l-high bg-sheet rounded border border-l-4">
       <h2 className="px-4 pt-3">▴ Kept on this tablet and refused by the server</h2>
       <ul className="divide-y">
         {refused.map(({ reading, tag, refusal }) => (

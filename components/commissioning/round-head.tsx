@@ -30,7 +30,8 @@ export function RoundHead({ commissioning, measured }: { commissioning: Commissi
           {round ? (
             <>
               <span className="figures text-ink font-bold">{measured}</span> of <span className="figures">{total}</span> stations measured,{' '}
-              <span className="figures text-ink font-bold">{total - measured}</span> left. Started by {round.startedBy}, <Moment at={round.startedAt} />.
+              <span className="figures text-ink font-bold">{total - measured}</span> left. Started by {round.startedBy},{' '}
+              <Moment at={round.startedAt} />.
             </>
           ) : (
             standsWords(commissioning)
@@ -56,7 +57,12 @@ export function RoundHead({ commissioning, measured }: { commissioning: Commissi
           )}
         </div>
       )}
-      <Dialog isOpen={isStarting} onClose={() => setStarting(false)} title="Start a round" description="One pass of readings over the stations. Entries go into the round that is open.">
+      <Dialog
+        isOpen={isStarting}
+        onClose={() => setStarting(false)}
+        title="Start a round"
+        description="One pass of readings over the stations. Entries go into the round that is open."
+      >
         <StartRoundDialog loopId={loop.id} onDone={() => setStarting(false)} />
       </Dialog>
       {round && (
@@ -84,9 +90,15 @@ function CloseRound({ commissioning, left, onDone }: { commissioning: Commission
   });
   return (
     <div className="flex flex-col gap-4">
-      <p>No reading enters a closed round any more, and none of its entries can be put right.{left > 0 && ` ${left === 1 ? 'One station has' : `${left} stations have`} no reading in it.`}</p>
+      <p>
+        No reading enters a closed round any more, and none of its entries can be put right.
+        {left > 0 && ` ${left === 1 ? 'One station has' : `${left} stations have`} no reading in it.`}
+      </p>
       {waiting > 0 && (
-        <p className="text-high">▴ {waiting === 1 ? 'One reading is' : `${waiting} readings are`} still on this tablet only and would be refused afterwards. Send first.</p>
+        <p className="text-high">
+          ▴ {waiting === 1 ? 'One reading is' : `${waiting} readings are`} still on this tablet only and would be refused afterwards. Send
+          first.
+        </p>
       )}
       {close.error && (
         <p role="alert" className="text-high">
@@ -97,7 +109,15 @@ function CloseRound({ commissioning, left, onDone }: { commissioning: Commission
         <Button size="touch" className="!text-base" onClick={onDone}>
           Keep it open
         </Button>
-        <Button size="touch" look="primary" className="!text-base" disabled={waiting > 0} isPending={close.isPending} pendingText="Closing…" onClick={() => close.mutate()}>
+        <Button
+          size="touch"
+          look="primary"
+          className="!text-base"
+          disabled={waiting > 0}
+          isPending={close.isPending}
+          pendingText="Closing…"
+          onClick={() => close.mutate()}
+        >
           Close the round
         </Button>
       </div>
@@ -106,8 +126,11 @@ function CloseRound({ commissioning, left, onDone }: { commissioning: Commission
 }
 
 function standsWords({ loop, body, mayRecord }: Commissioning): string {
-  if (loop.state === 'submitted' || loop.state === 'reviewed') return `The report is ${loop.state}. It must be returned before another round is started.`;
+  if (loop.state === 'submitted' || loop.state === 'reviewed')
+    return `The report is ${loop.state}. It must be returned before another round is started.`;
   if (loop.state === 'accepted') return 'The report is accepted. A new revision has to be issued before another round is started.';
   if (!mayRecord) return body.rounds.length ? 'No round is open.' : 'No round has been started yet.';
-  return body.rounds.length ? 'No round is open. Start one to enter readings.' : 'Nothing is measured yet. Start the first round to enter readings.';
+  return body.rounds.length
+    ? 'No round is open. Start one to enter readings.'
+    : 'Nothing is measured yet. Start the first round to enter readings.';
 }

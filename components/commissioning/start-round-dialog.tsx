@@ -31,10 +31,22 @@ export function StartRoundDialog({ loopId, onDone }: { loopId: string; onDone: (
   const { errors } = form.formState;
   return (
     <form onSubmit={form.handleSubmit((round) => start.mutate(round))} noValidate className="flex flex-col gap-4">
-      <TextField label="What is it for?" placeholder="As found" className="!h-12 text-lg" autoComplete="off" error={errors.purpose?.message} {...form.register('purpose')} />
+      <TextField
+        label="What is it for?"
+        placeholder="As found"
+        className="!h-12 text-lg"
+        autoComplete="off"
+        error={errors.purpose?.message}
+        {...form.register('purpose')}
+      />
       <div className="flex flex-wrap gap-2">
         {usual.map((purpose) => (
-          <Button key={purpose} size="touch" className="!text-base" onClick={() => form.setValue('purpose', purpose, { shouldValidate: true })}>
+          <Button
+            key={purpose}
+            size="touch"
+            className="!text-base"
+            onClick={() => form.setValue('purpose', purpose, { shouldValidate: true })}
+          >
             {purpose}
           </Button>
         ))}

@@ -7,7 +7,7 @@ import { PlaceLink } from './place-link';
 export function StationBar({ commissioning }: { commissioning: Commissioning }) {
   const { loop, base, shownRound, body } = commissioning;
   return (
-    <header data-own-header className="flex min-h-14 shrink-0 items-center gap-3 border-b bg-sheet pr-4">
+    <header data-own-header className="bg-sheet flex min-h-14 shrink-0 items-center gap-3 border-b pr-4">
       <PlaceLink href={base} aria-label="All stations" className="text-ink flex size-14 shrink-0 items-center justify-center no-underline">
         <ChevronLeft size={22} aria-hidden />
       </PlaceLink>

@@ -35,7 +35,8 @@ export function StationEntries({ readings, openRoundId, onCorrect }: StationEntr
                   <Outcome reading={reading} />
                 )}
                 <span className="text-quiet text-sm">
-                  Round {reading.roundNumber} · {methodNames[reading.method]} · <span className="figures">{enteredWords(reading.entered)}</span>
+                  Round {reading.roundNumber} · {methodNames[reading.method]} ·{' '}
+                  <span className="figures">{enteredWords(reading.entered)}</span>
                 </span>
               </p>
               <p className="text-quiet text-sm">
@@ -65,7 +66,11 @@ export function StationEntries({ readings, openRoundId, onCorrect }: StationEntr
 const Outcome = ({ reading }: { reading: Reading }) => (
   <span className="whitespace-nowrap">
     <Figure quantity="flow" si={reading.flowLs} hasUnit className="text-lg font-bold" />
-    <Deviation percent={reading.percentOfDesign} verdict={reading.verdict} className={classNames('ml-3 text-lg', reading.isCorrected && 'text-quiet')} />
+    <Deviation
+      percent={reading.percentOfDesign}
+      verdict={reading.verdict}
+      className={classNames('ml-3 text-lg', reading.isCorrected && 'text-quiet')}
+    />
     <span className="text-quiet ml-1 text-sm">%, ±{reading.uncertaintyPercent.toFixed(1)} %</span>
   </span>
 );

@@ -23,7 +23,7 @@ export function StationHead({ commissioning, station }: { commissioning: Commiss
         </div>
       </div>
       {settingTurns !== null && (
-        <p className="border-l-brass rounded-r border-l-4 bg-sheet px-4 py-3">
+        <p className="border-l-brass bg-sheet rounded-r border-l-4 px-4 py-3">
           <strong>
             Set the valve to <span className="figures text-brass">{formatQuantity('setting', settingTurns, 'turns')}</span> turns
           </strong>
@@ -37,7 +37,8 @@ export function StationHead({ commissioning, station }: { commissioning: Commiss
           {expectedDropKpa !== null && (
             <span className="text-quiet">
               {' '}
-              At design flow the meter then shows <Figure quantity="pressure" si={expectedDropKpa} hasUnit className="text-ink font-bold" />.
+              At design flow the meter then shows <Figure quantity="pressure" si={expectedDropKpa} hasUnit className="text-ink font-bold" />
+              .
             </span>
           )}
         </p>

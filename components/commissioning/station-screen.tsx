@@ -1,6 +1,6 @@
 'use client';
 
-import { useState } from 'react';
+import { useEffect, useRef, useState } from 'react';
 import type { RecordReading, Station } from '@/lib/api/commissioning';
 import { neighbours } from '@/lib/commissioning/walking-order';
 import type { Question } from '@/lib/commissioning/suspicion';
@@ -27,6 +27,11 @@ export function StationScreen({ commissioning, station }: { commissioning: Commi
   const ofStation = body.readings.filter(({ stationId }) => stationId === station.id).toReversed();
   const waiting = waitingAt(commissioning, station.id);
 
+  const isBlank = useRef(entry.isBlank);
+  useEffect(() => {
+    isBlank.current = entry.isBlank;
+  }, [entry.isBlank]);
+
   const keep = async (reading: RecordReading) => {
     // Where it is known that there is no signal, nobody is made to wait at each station for an answer that does not come.
     const goesOn = keptState.isOffline;
@@ -35,8 +40,10 @@ export function StationScreen({ commissioning, station }: { commissioning: Commi
     entry.clear();
     const sent = kept.send();
     if (!goesOn) await sent;
-    const isHere = window.location.pathname.endsWith(station.id);
-    if (isHere && (goesOn || !kept.state.entries.some((it) => it.reading.id === reading.id))) goTo(next ? `${base}/stations/${next.id}` : base);
+    // Who has typed on or gone elsewhere while it was sent is not taken away.
+    const isHere = window.location.pathname.endsWith(station.id) && (goesOn || isBlank.current);
+    if (isHere && (goesOn || !kept.state.entries.some((it) => it.reading.id === reading.id)))
+      goTo(next ? `${base}/stations/${next.id}` : base);
   };
   const press = () => {
     const finished = entry.finish();
@@ -73,9 +80,17 @@ export function StationScreen({ commissioning, station }: { commissioning: Commi
               onKeep={press}
             />
           ) : (
-            <Notice>{commissioning.mayRecord ? 'No round is open: readings are entered in a round. Start one on the list of stations.' : 'Technicians of the project enter readings here; you read along.'}</Notice>
+            <Notice>
+              {commissioning.mayRecord
+                ? 'No round is open: readings are entered in a round. Start one on the list of stations.'
+                : 'Technicians of the project enter readings here; you read along.'}
+            </Notice>
           )}
-          <StationEntries readings={ofStation} openRoundId={isEntryOpen ? round!.id : null} onCorrect={(reading) => entry.takeUp(reading, reading.id)} />
+          <StationEntries
+            readings={ofStation}
+            openRoundId={isEntryOpen ? round!.id : null}
+            onCorrect={(reading) => entry.takeUp(reading, reading.id)}
+          />
         </div>
         <EntryPad
           entry={isEntryOpen ? entry : null}
@@ -89,7 +104,11 @@ export function StationScreen({ commissioning, station }: { commissioning: Commi
         />
       </main>
       <KeptLine commissioning={commissioning} />
-      <QuestionsDialog questions={asked?.questions ?? []} onLookAgain={() => setAsked(null)} onKeep={() => asked && void keep(asked.reading)} />
+      <QuestionsDialog
+        questions={asked?.questions ?? []}
+        onLookAgain={() => setAsked(null)}
+        onKeep={() => asked && void keep(asked.reading)}
+      />
     </div>
   );
 }

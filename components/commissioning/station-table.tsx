@@ -18,17 +18,26 @@ export function StationTable({ storey, stations, commissioning }: StationTablePr
   const left = stations.filter(({ id }) => !standing.has(id) && waitingAt(commissioning, id).length === 0).length;
   const name = storey || 'Without a storey';
   return (
-    <section aria-label={name} className="rounded border bg-sheet">
+    <section aria-label={name} className="bg-sheet rounded border">
       <div className="flex min-h-12 items-center justify-between gap-3 border-b px-4">
         <h2>{name}</h2>
         {shownRound && (
           <span className="text-quiet text-sm">
-            {left === 0 ? 'all measured' : <><span className="figures">{left}</span> of <span className="figures">{stations.length}</span> left</>}
+            {left === 0 ? (
+              'all measured'
+            ) : (
+              <>
+                <span className="figures">{left}</span> of <span className="figures">{stations.length}</span> left
+              </>
+            )}
           </span>
         )}
       </div>
       <div role="table" aria-label={`Stations, ${name}`}>
-        <div role="row" className="text-quiet hidden gap-x-4 border-b px-4 py-1.5 text-sm sm:grid sm:grid-cols-[minmax(7rem,1.2fr)_minmax(0,1.6fr)_5.5rem_6.5rem_6.5rem_6.5rem]">
+        <div
+          role="row"
+          className="text-quiet hidden gap-x-4 border-b px-4 py-1.5 text-sm sm:grid sm:grid-cols-[minmax(7rem,1.2fr)_minmax(0,1.6fr)_5.5rem_6.5rem_6.5rem_6.5rem]"
+        >
           <span role="columnheader">Station</span>
           <span role="columnheader">Room</span>
           <span role="columnheader" className="text-right">
@@ -68,7 +77,11 @@ export function StationTable({ storey, stations, commissioning }: StationTablePr
               <Figure quantity="flow" si={standing.get(station.id)?.flowLs} className="text-sm sm:text-base" />
             </span>
             <span role="cell" className="text-right text-lg">
-              {waitingAt(commissioning, station.id).length > 0 ? <span className="text-brass text-sm font-semibold">on this tablet</span> : <PerCent reading={standing.get(station.id)} isLeft={Boolean(shownRound)} />}
+              {waitingAt(commissioning, station.id).length > 0 ? (
+                <span className="text-brass text-sm font-semibold">on this tablet</span>
+              ) : (
+                <PerCent reading={standing.get(station.id)} isLeft={Boolean(shownRound)} />
+              )}
             </span>
           </PlaceLink>
         ))}
@@ -78,4 +91,8 @@ export function StationTable({ storey, stations, commissioning }: StationTablePr
 }
 
 const PerCent = ({ reading, isLeft }: { reading?: Reading; isLeft?: boolean }) =>
-  reading ? <Deviation percent={reading.percentOfDesign} verdict={reading.verdict} /> : <span className="text-quiet text-sm">{isLeft ? 'left' : '–'}</span>;
+  reading ? (
+    <Deviation percent={reading.percentOfDesign} verdict={reading.verdict} />
+  ) : (
+    <span className="text-quiet text-sm">{isLeft ? 'left' : '–'}</span>
+  );

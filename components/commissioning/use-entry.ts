@@ -3,7 +3,15 @@
 import { useState } from 'react';
 import { z } from 'zod';
 import { v7 as uuidv7 } from 'uuid';
-import { methods, recordReadingSchema, type Instrument, type Reading, type ReadingMethod, type RecordReading, type Station } from '@/lib/api/commissioning';
+import {
+  methods,
+  recordReadingSchema,
+  type Instrument,
+  type Reading,
+  type ReadingMethod,
+  type RecordReading,
+  type Station,
+} from '@/lib/api/commissioning';
 import { isOverdue } from '@/lib/commissioning/calibration';
 import { judgeReading, type Judgement, type Measured } from '@/lib/commissioning/judge-reading';
 import { questionsAbout, type Question } from '@/lib/commissioning/suspicion';
@@ -53,7 +61,9 @@ export function useEntry(commissioning: Commissioning, station: Station) {
     return unitFor(quantityOf[field], own ? { [quantityOf[field]]: own } : choice);
   };
   const read = Object.fromEntries(
-    fields.filter((field) => typed[field].trim() !== '').map((field) => [field, parseQuantity(quantityOf[field], typed[field], unitOf(field))]),
+    fields
+      .filter((field) => typed[field].trim() !== '')
+      .map((field) => [field, parseQuantity(quantityOf[field], typed[field], unitOf(field))]),
   ) as Partial<Record<Field, ReturnType<typeof parseQuantity>>>;
   const siOf = (field: Field): number | null => {
     const found = read[field];
@@ -61,12 +71,18 @@ export function useEntry(commissioning: Commissioning, station: Station) {
   };
 
   const meters = body.instruments.filter(({ kind, isRetired }) => kind === kindFor[typed.method] && !isRetired);
-  const meter: Instrument | null = meters.find(({ id }) => id === device.instruments[typed.method]) ?? (meters.length === 1 ? meters[0]! : null);
+  const meter: Instrument | null =
+    meters.find(({ id }) => id === device.instruments[typed.method]) ?? (meters.length === 1 ? meters[0]! : null);
   const measured = measuredOf(typed.method, siOf('setting'), siOf('drop'), siOf('flow'));
   const band = bandOf(body.tolerances, station);
   const judgement =
     measured && body.densityKgM3 !== null
-      ? judgeReading(measured, { ...station, densityKgM3: body.densityKgM3, accuracy: meter ?? { accuracyPercent: 0, accuracyAbsolute: 0 }, band })
+      ? judgeReading(measured, {
+          ...station,
+          densityKgM3: body.densityKgM3,
+          accuracy: meter ?? { accuracyPercent: 0, accuracyAbsolute: 0 },
+          band,
+        })
       : null;
 
   return {
@@ -74,7 +90,7 @@ export function useEntry(commissioning: Commissioning, station: Station) {
     isBlank: stored === null,
     isCorrecting: typed.correctsReadingId !== null,
     fields,
-    active: active !== null && fields.includes(active) ? active : fields.find((field) => typed[field] === '') ?? fields.at(-1)!,
+    active: active !== null && fields.includes(active) ? active : (fields.find((field) => typed[field] === '') ?? fields.at(-1)!),
     setActive,
     unitOf,
     siOf,
@@ -104,7 +120,10 @@ export function useEntry(commissioning: Commissioning, station: Station) {
     finish: (): { reading: RecordReading; questions: Question[] } | { message: string } => {
       const unread = fields.find((field) => read[field]?.ok !== true);
       if (unread) return { message: (read[unread] as { message?: string } | undefined)?.message ?? missing[unread] };
-      if (!meter) return { message: meters.length ? 'Choose the meter that you read.' : 'No meter of this kind is in the list. Add it under Instruments.' };
+      if (!meter)
+        return {
+          message: meters.length ? 'Choose the meter that you read.' : 'No meter of this kind is in the list. Add it under Instruments.',
+        };
       if (!measured || !judgement) return { message: 'The loop’s fluid is not known.' };
       if (!judgement.ok) return { message: judgement.message };
       const at = new Date();

@@ -12,7 +12,10 @@ interface WaitingEntryProps {
 /** An entry that the server has not acknowledged: it stands here until it has, or until the person takes it back. */
 export function WaitingEntry({ entry: { reading, refusal }, isSending, onSend, onTakeBack }: WaitingEntryProps) {
   return (
-    <div role={refusal ? 'alert' : 'status'} className={`flex flex-wrap items-center gap-x-4 gap-y-2 rounded border border-l-4 bg-sheet px-4 py-2 ${refusal ? 'border-l-high' : 'border-l-brass'}`}>
+    <div
+      role={refusal ? 'alert' : 'status'}
+      className={`bg-sheet flex flex-wrap items-center gap-x-4 gap-y-2 rounded border border-l-4 px-4 py-2 ${refusal ? 'border-l-high' : 'border-l-brass'}`}
+    >
       <p className="min-w-48 flex-1">
         <span className="figures text-lg font-bold">{enteredWords(reading.entered)}</span>
         <span className="block text-sm">

@@ -22,7 +22,11 @@ export function WorkingDialog({ entry, station, densityKgM3, isOpen, onClose }: 
         <dl className="flex flex-col gap-4">
           {measured.method === 'valve-drop' ? (
             <>
-              <Line name="Kv" formula={`Kv at ${exact(measured.settingTurns)} turns, straight between the points of the table`} value={`${figure(judgement.kv!, 3)} m³/h at 1 bar`}>
+              <Line
+                name="Kv"
+                formula={`Kv at ${exact(measured.settingTurns)} turns, straight between the points of the table`}
+                value={`${figure(judgement.kv!, 3)} m³/h at 1 bar`}
+              >
                 Valve: {station.valveName || 'as drawn'}. {pointsAround(station, measured.settingTurns)}
               </Line>
               <Line
@@ -30,7 +34,8 @@ export function WorkingDialog({ entry, station, densityKgM3, isOpen, onClose }: 
                 formula={`q = Kv √(dp / SG) / 36 = ${figure(judgement.kv!, 3)} × √(${figure(measured.dropKpa, 3)} kPa / ${figure(densityKgM3 / 1000, 4)}) / 36`}
                 value={`${figure(judgement.flowLs, 4)} L/s`}
               >
-                The valve law of IEC 60534-2-1, turbulent; SG = density / 1000, {figure(densityKgM3, 1)} kg/m³ at the loop’s mean temperature.
+                The valve law of IEC 60534-2-1, turbulent; SG = density / 1000, {figure(densityKgM3, 1)} kg/m³ at the loop’s mean
+                temperature.
               </Line>
             </>
           ) : (
@@ -49,11 +54,16 @@ export function WorkingDialog({ entry, station, densityKgM3, isOpen, onClose }: 
               formula={`u(q) = √(u(Kv)² + (u(dp) / (2 dp))²) = √(${kvAssumption.percent}² + (100 × ${figure(instrumentError(measured.dropKpa, meter), 3)} / (2 × ${figure(measured.dropKpa, 3)}))²)`}
               value={`±${figure(judgement.uncertaintyPercent, 1)} %`}
             >
-              {kvAssumption.source}. Meter {meter.serial}: ±({exact(meter.accuracyPercent)} % of reading + {exact(meter.accuracyAbsolute)} kPa). Combined as uncorrelated inputs, JCGM 100:2008, 5.1.2.
+              {kvAssumption.source}. Meter {meter.serial}: ±({exact(meter.accuracyPercent)} % of reading + {exact(meter.accuracyAbsolute)}{' '}
+              kPa). Combined as uncorrelated inputs, JCGM 100:2008, 5.1.2.
             </Line>
           )}
           {meter && measured.method === 'direct-flow' && (
-            <Line name="Uncertainty" formula={`100 × ${figure(instrumentError(measured.flowLs, meter), 4)} / ${figure(measured.flowLs, 4)}`} value={`±${figure(judgement.uncertaintyPercent, 1)} %`}>
+            <Line
+              name="Uncertainty"
+              formula={`100 × ${figure(instrumentError(measured.flowLs, meter), 4)} / ${figure(measured.flowLs, 4)}`}
+              value={`±${figure(judgement.uncertaintyPercent, 1)} %`}
+            >
               Meter {meter.serial}: ±({exact(meter.accuracyPercent)} % of reading + {exact(meter.accuracyAbsolute)} L/s).
             </Line>
           )}

@@ -50,5 +50,9 @@ export function CommissioningWorkspace({ loop, personId, mayRecord, initial }: W
 
   const stationId = pathname.startsWith(`${base}/stations/`) ? pathname.slice(`${base}/stations/`.length) : null;
   const station = body.stations.find(({ id }) => id === stationId);
-  return station ? <StationScreen key={station.id} commissioning={commissioning} station={station} /> : <Overview commissioning={commissioning} />;
+  return station ? (
+    <StationScreen key={station.id} commissioning={commissioning} station={station} />
+  ) : (
+    <Overview commissioning={commissioning} />
+  );
 }

@@ -3,7 +3,7 @@ import { useStore } from 'reactflow';
 export type Detail = 'far' | 'middle' | 'near';
 
 /** How much can be read at this distance; labels thin out as one goes away. */
-export const useDetail = (): Detail => useStore(({ transform: [, , zoom] }) => (zoom < 0.28 ? 'far' : zoom < 0.42 ? 'middle' : 'near'));
+export const useDetail = (): Detail => useStore(({ transform: [, , zoom] }) => (zoom < 0.28 ? 'far' : zoom < 0.52 ? 'middle' : 'near'));
 
 const steps = (value: number) => Math.round(value * 20) / 20;
 

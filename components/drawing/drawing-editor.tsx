@@ -45,7 +45,7 @@ export function DrawingEditor(props: DrawingEditorProps) {
   );
 }
 
-function Editing({ loop, personId, loaded, issued, editor }: DrawingEditorProps & { editor: Editor }) {
+function Editing({ loop, personId, loaded, issued: issuedBefore, editor }: DrawingEditorProps & { editor: Editor }) {
   const { drawingStore, canvasStore } = editor;
   const router = useRouter();
   const drawing = useStore(drawingStore, (state) => state.drawing);
@@ -66,6 +66,8 @@ function Editing({ loop, personId, loaded, issued, editor }: DrawingEditorProps 
       index: new Set(solved?.indexCircuit.map(({ id }) => id)),
     };
   }, [answer, settled, basis, isOld]);
+  const [issuedHere, setIssuedHere] = useState<DrawingEditorProps['issued']>(null);
+  const issued = (issuedHere?.number ?? 0) > (issuedBefore?.number ?? 0) ? issuedHere : issuedBefore;
   const isAhead = useMemo(() => issued === null || !same(issued.drawing, drawing), [issued, drawing]);
   const revisionWords = issued === null ? 'Never issued' : isAhead ? `Draft, differs from revision ${issued.number}` : `Same as revision ${issued.number}`;
 
@@ -103,7 +105,8 @@ function Editing({ loop, personId, loaded, issued, editor }: DrawingEditorProps 
           nextNumber={(issued?.number ?? 0) + 1}
           saveFirst={saveFirst}
           onClose={() => canvasStore.setState({ open: null })}
-          onIssued={() => {
+          onIssued={(number) => {
+            setIssuedHere({ number, drawing });
             canvasStore.setState({ open: null });
             router.refresh();
           }}

@@ -30,14 +30,12 @@ export function PieceLabels({ piece, detail, isFaulty, isSelected }: PieceLabels
       <>
         <Column className={isUpright ? classNames('top-1/2 -translate-y-1/2', side) : 'top-full left-1/2 mt-0.5 -translate-x-1/2 items-center'}>
           {figure}
-          {(detail === 'near' || isFaulty) && <span className="text-[calc(11px*var(--words))] text-quiet">{fault}{tag}</span>}
+          {(detail === 'near' || isFaulty || isSelected) && <span className="text-[calc(11px*var(--words))] text-quiet">{fault}{tag}</span>}
         </Column>
         <IndexName piece={piece} />
-        {detail === 'near' && (
-          <Column className={isUpright ? classNames('top-[calc(50%+33px)] -translate-y-1/2', piece.isMirrored ? 'right-1/2 mr-3.5' : 'left-1/2 ml-3.5') : 'top-1/2 left-full ml-1'}>
-            <SettingFigure piece={piece} />
-          </Column>
-        )}
+        <Column className={isUpright ? classNames('top-[calc(50%+33px)] -translate-y-1/2', piece.isMirrored ? 'right-1/2 mr-3.5' : 'left-1/2 ml-3.5') : 'top-1/2 left-full ml-1'}>
+          <SettingFigure piece={piece} />
+        </Column>
       </>
     );
   }

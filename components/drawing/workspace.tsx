@@ -27,7 +27,7 @@ export function Workspace({ bar, status, hasBothBases }: WorkspaceProps) {
   const open = useCanvas((state) => state.open);
   const isEmpty = useDrawing((drawing) => drawing.equipment.length === 0);
   return (
-    <div className="flex min-h-0 flex-1 flex-col" data-drawing-keys>
+    <div className="flex flex-col" data-drawing-keys>
       <PageBar actions={actions}>{bar}</PageBar>
       <div className="relative flex min-h-0 flex-1 max-md:pb-12">
         {canEdit && <ToolRail />}

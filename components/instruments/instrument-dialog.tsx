@@ -3,7 +3,7 @@
 import { zodResolver } from '@hookform/resolvers/zod';
 import { useMutation } from '@tanstack/react-query';
 import { useRouter } from 'next/navigation';
-import { useForm } from 'react-hook-form';
+import { useForm, useWatch } from 'react-hook-form';
 import { toast } from 'sonner';
 import { instrumentKinds, instrumentSchema, type Instrument, type InstrumentInput } from '@/lib/api/commissioning';
 import { addInstrument, changeInstrument } from '@/lib/client/instruments';
@@ -59,13 +59,13 @@ function InstrumentForm({ instrument, onDone }: { instrument: Instrument | null;
     onError: (error) => showRefusal(error, form),
   });
   const { errors } = form.formState;
-  const unit = unitOfKind[form.watch('kind')];
+  const unit = unitOfKind[useWatch({ control: form.control, name: 'kind' })];
   const day = { setValueAs: (text: string | null) => text || null };
   return (
     <form onSubmit={form.handleSubmit((input) => save.mutate(input))} noValidate className="flex flex-col gap-4">
       <TextField label="Name" placeholder="Differential pressure meter" error={errors.name?.message} {...form.register('name')} />
       <div className="grid gap-4 sm:grid-cols-2">
-        <SelectField label="Reads" error={errors.kind?.message} disabled={Boolean(instrument)} {...form.register('kind', { disabled: false })}>
+        <SelectField label="Reads" error={errors.kind?.message} {...form.register('kind')}>
           {instrumentKinds.map((kind) => (
             <option key={kind} value={kind}>
               {kindWords[kind]}
@@ -78,7 +78,12 @@ function InstrumentForm({ instrument, onDone }: { instrument: Instrument | null;
         <NumberField control={form.control} name="accuracyPercent" label="Accuracy" hint="± % of reading" />
         <NumberField control={form.control} name="accuracyAbsolute" label="and a fixed part" hint={`± ${unit}`} />
         <TextField type="date" label="Calibrated on" error={errors.calibratedOn?.message} {...form.register('calibratedOn', day)} />
-        <TextField type="date" label="Calibration due" error={errors.calibrationDueOn?.message} {...form.register('calibrationDueOn', day)} />
+        <TextField
+          type="date"
+          label="Calibration due"
+          error={errors.calibrationDueOn?.message}
+          {...form.register('calibrationDueOn', day)}
+        />
       </div>
       <FormTrouble message={errors.root?.message} />
       <div className="flex justify-end gap-2">

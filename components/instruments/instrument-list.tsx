@@ -22,7 +22,12 @@ export function InstrumentList({ instruments, mayManage, now }: InstrumentListPr
   const overdue = inUse.filter((instrument) => isOverdue(instrument, new Date(now))).length;
   const rows = (shown: Instrument[]) =>
     shown.map((instrument) => (
-      <InstrumentRow key={instrument.id} instrument={instrument} isOverdue={isOverdue(instrument, new Date(now))} onChange={mayManage ? () => setOpen({ instrument }) : null} />
+      <InstrumentRow
+        key={instrument.id}
+        instrument={instrument}
+        isOverdue={isOverdue(instrument, new Date(now))}
+        onChange={mayManage ? () => setOpen({ instrument }) : null}
+      />
     ));
   return (
     <>
@@ -44,18 +49,19 @@ export function InstrumentList({ instruments, mayManage, now }: InstrumentListPr
         <div className="rounded border border-dashed px-6 py-12 text-center">
           <h2>No meters yet</h2>
           <p className="text-quiet mx-auto mt-1 max-w-md">
-            Every reading names the meter it was taken with, its accuracy and its calibration. {mayManage ? 'Add the first one.' : 'Technicians and administrators add them.'}
+            Every reading names the meter it was taken with, its accuracy and its calibration.{' '}
+            {mayManage ? 'Add the first one.' : 'Technicians and administrators add them.'}
           </p>
         </div>
       ) : (
-        <ul className="divide-y rounded border bg-sheet">{rows(inUse)}</ul>
+        <ul className="bg-sheet divide-y rounded border">{rows(inUse)}</ul>
       )}
       {retired.length > 0 && (
         <section aria-labelledby="retired" className="mt-8">
           <h2 id="retired" className="mb-2">
             Retired
           </h2>
-          <ul className="divide-y rounded border bg-sheet opacity-80">{rows(retired)}</ul>
+          <ul className="bg-sheet divide-y rounded border opacity-80">{rows(retired)}</ul>
         </section>
       )}
       <InstrumentDialog instrument={open?.instrument ?? null} isOpen={open !== null} onClose={() => setOpen(null)} />

@@ -58,7 +58,12 @@ export function InstrumentRow({ instrument, isOverdue, onChange }: InstrumentRow
           <Button look="quiet" onClick={onChange} aria-label={`Change ${serial}`}>
             Change
           </Button>
-          <Button look="quiet" onClick={() => retire.mutate()} isPending={retire.isPending} aria-label={isRetired ? `Take ${serial} back into use` : `Retire ${serial}`}>
+          <Button
+            look="quiet"
+            onClick={() => retire.mutate()}
+            isPending={retire.isPending}
+            aria-label={isRetired ? `Take ${serial} back into use` : `Retire ${serial}`}
+          >
             {isRetired ? 'Take back' : 'Retire'}
           </Button>
         </div>
@@ -67,7 +72,10 @@ export function InstrumentRow({ instrument, isOverdue, onChange }: InstrumentRow
   );
 }
 
-const rangeWords = ({ rangeLow, rangeHigh }: Instrument): string => (rangeLow === null && rangeHigh === null ? 'no range recorded,' : `${rangeLow ?? 0} to ${rangeHigh ?? '…'}`);
+const rangeWords = ({ rangeLow, rangeHigh }: Instrument): string =>
+  rangeLow === null && rangeHigh === null ? 'no range recorded,' : `${rangeLow ?? 0} to ${rangeHigh ?? '…'}`;
 
 const accuracyWords = ({ accuracyPercent, accuracyAbsolute, kind }: Instrument): string =>
-  [accuracyPercent > 0 && `${accuracyPercent} % of reading`, accuracyAbsolute > 0 && `${accuracyAbsolute} ${unitOfKind[kind]}`].filter(Boolean).join(' + ') || '0';
+  [accuracyPercent > 0 && `${accuracyPercent} % of reading`, accuracyAbsolute > 0 && `${accuracyAbsolute} ${unitOfKind[kind]}`]
+    .filter(Boolean)
+    .join(' + ') || '0';

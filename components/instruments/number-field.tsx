@@ -17,14 +17,17 @@ interface NumberFieldProps {
 
 /** A number with comma or point; empty is no number, and what cannot be read says so and is not taken for one. */
 export function NumberField({ control, name, label, hint }: NumberFieldProps) {
-  const { field, fieldState } = useController({ control, name });
-  const [text, setText] = useState(field.value === null ? '' : String(field.value));
+  const {
+    field: { value, onChange, onBlur, ref },
+    fieldState: { error },
+  } = useController({ control, name });
+  const [text, setText] = useState(value === null ? '' : String(value));
   const [trouble, setTrouble] = useState<string>();
   const take = (typed: string) => {
     setText(typed);
     const read = typed.trim() === '' ? null : readNumber(typed);
     setTrouble(read && !read.ok ? read.message : undefined);
-    field.onChange(read === null ? null : read.ok ? read.value : Number.NaN);
+    onChange(read === null ? null : read.ok ? read.value : Number.NaN);
   };
   return (
     <TextField
@@ -35,9 +38,9 @@ export function NumberField({ control, name, label, hint }: NumberFieldProps) {
       className="figures text-right"
       value={text}
       onChange={(event) => take(event.target.value)}
-      onBlur={field.onBlur}
-      ref={field.ref}
-      error={trouble ?? (fieldState.error && (text.trim() === '' ? 'A number is needed.' : fieldState.error.message))}
+      onBlur={onBlur}
+      ref={ref}
+      error={trouble ?? (error && (text.trim() === '' ? 'A number is needed.' : error.message))}
     />
   );
 }

@@ -1,5 +1,5 @@
 import type { NetworkDocument } from '@/lib/hydraulics/types';
-import { Gaussian } from './fit/gaussian';
+import { activeColumns, Gaussian, gramOf } from './fit/gaussian';
 import { linearWithin, mostLikely } from './fit/most-likely';
 import { ReadingModel } from './fit/reading-model';
 import { type Cause, faultDeviation, FaultSearch, type Suspicion } from './fit/suspicions';
@@ -81,7 +81,7 @@ export function fitLoop(document: NetworkDocument, rounds: ReadingRound[], prior
     return { cause, link: wrong.link, round, logOdds, factor: wrong.value / expected };
   });
   const scaledRows = fit.rows.map((row) => row.map((each, j) => each * deviations[j]));
-  const posterior = new Gaussian(scaledRows, noise);
+  const posterior = new Gaussian(scaledRows, noise, 0, gramOf(activeColumns(fit.rows, deviations)));
   return { document, rounds, unknowns, values: fit.values, deviations, readings, faults, converged: fit.converged, posterior, search };
 }
 

@@ -10,7 +10,8 @@ export const commissioningQuery = (loopId: string) =>
 
 export const startRound = (loopId: string, round: StartRound): Promise<Round> => send('POST', `/api/loops/${loopId}/rounds`, round);
 export const closeRound = (roundId: string): Promise<Round> => send('PATCH', `/api/rounds/${roundId}`, { isClosed: true });
-export const recordReading = (roundId: string, reading: RecordReading): Promise<Reading> => send('POST', `/api/rounds/${roundId}/readings`, reading);
+export const recordReading = (roundId: string, reading: RecordReading): Promise<Reading> =>
+  send('POST', `/api/rounds/${roundId}/readings`, reading);
 
 /** What was known of the loop, with an entry that the server has just acknowledged. */
 export function withReading(body: CommissioningBody, reading: Reading): CommissioningBody {

@@ -7,7 +7,8 @@ export interface ValvePoint {
   kv: number;
 }
 
-export type ValveFlow = { ok: true; kv: number; flowLs: number } | { ok: false; path: 'settingTurns' | 'dropKpa' | 'method'; message: string };
+export type ValveFlow =
+  { ok: true; kv: number; flowLs: number } | { ok: false; path: 'settingTurns' | 'dropKpa' | 'method'; message: string };
 
 interface DropRead {
   kvTable: readonly ValvePoint[] | null;
@@ -25,11 +26,16 @@ interface DropRead {
  * beyond its ends is refused, because a Kv read there would be invented.
  */
 export function flowFromDrop({ kvTable, settingTurns, dropKpa, densityKgM3 }: DropRead): ValveFlow {
-  if (!kvTable || kvTable.length === 0) return { ok: false, path: 'method', message: 'This station has no valve with a Kv table: enter a flow.' };
+  if (!kvTable || kvTable.length === 0)
+    return { ok: false, path: 'method', message: 'This station has no valve with a Kv table: enter a flow.' };
   const lowest = kvTable[0]!.setting;
   const highest = kvTable[kvTable.length - 1]!.setting;
   if (!(settingTurns >= lowest && settingTurns <= highest)) {
-    return { ok: false, path: 'settingTurns', message: `The valve’s table goes from ${lowest} to ${highest} turns; ${settingTurns} is not in it.` };
+    return {
+      ok: false,
+      path: 'settingTurns',
+      message: `The valve’s table goes from ${lowest} to ${highest} turns; ${settingTurns} is not in it.`,
+    };
   }
   if (!(dropKpa >= 0)) return { ok: false, path: 'dropKpa', message: 'A drop cannot be negative: check the hoses.' };
   const kv = kvAtSetting([...kvTable], settingTurns);

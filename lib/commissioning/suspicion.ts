@@ -54,12 +54,16 @@ export function questionsAbout({ measured, flowLs, designFlowLs, pumpShutOffKpa,
   const questions: Question[] = [];
   const ratio = flowLs / designFlowLs;
   const slip = nearestSlip(ratio, measured.method === 'valve-drop' ? dropSlips : flowSlips);
-  if (slip) questions.push({ code: 'unit', message: `${ratio >= 1 ? ratio.toPrecision(3) : ratio.toFixed(3)} times design. ${slip.message}` });
+  if (slip)
+    questions.push({ code: 'unit', message: `${ratio >= 1 ? ratio.toPrecision(3) : ratio.toFixed(3)} times design. ${slip.message}` });
 
   if (measured.method === 'valve-drop') {
     const { dropKpa } = measured;
     if (pumpShutOffKpa !== null && dropKpa > pumpShutOffKpa) {
-      questions.push({ code: 'above-shut-off', message: `More than the pumps give at no flow (${pumpShutOffKpa.toFixed(0)} kPa). Check the unit and the zero.` });
+      questions.push({
+        code: 'above-shut-off',
+        message: `More than the pumps give at no flow (${pumpShutOffKpa.toFixed(0)} kPa). Check the unit and the zero.`,
+      });
     }
     if (dropKpa < signalFloors.unreliableKpa) {
       questions.push({ code: 'unreliable-signal', message: 'A signal under 1 kPa is unreliable. Can it be read at a smaller setting?' });
@@ -68,13 +72,19 @@ export function questionsAbout({ measured, flowLs, designFlowLs, pumpShutOffKpa,
     }
   }
   // Flows that equal design to the hundredth are known as the mark of data that nobody measured.
-  if (Math.abs(ratio - 1) < 0.00005) questions.push({ code: 'equal-to-design', message: 'Exactly the design flow. Is this what the meter shows?' });
+  if (Math.abs(ratio - 1) < 0.00005)
+    questions.push({ code: 'equal-to-design', message: 'Exactly the design flow. Is this what the meter shows?' });
 
   const read = measured.method === 'valve-drop' ? measured.dropKpa : measured.flowLs;
-  if (instrument.isOverdue) questions.push({ code: 'overdue', message: `The meter’s calibration was due on ${instrument.calibrationDueOn}. Is another at hand?` });
-  if (instrument.calibrationDueOn === null) questions.push({ code: 'no-certificate', message: 'No calibration date is recorded for this meter.' });
+  if (instrument.isOverdue)
+    questions.push({ code: 'overdue', message: `The meter’s calibration was due on ${instrument.calibrationDueOn}. Is another at hand?` });
+  if (instrument.calibrationDueOn === null)
+    questions.push({ code: 'no-certificate', message: 'No calibration date is recorded for this meter.' });
   if ((instrument.rangeLow !== null && read < instrument.rangeLow) || (instrument.rangeHigh !== null && read > instrument.rangeHigh)) {
-    questions.push({ code: 'out-of-range', message: `Outside the meter’s range (${instrument.rangeLow ?? 0} to ${instrument.rangeHigh ?? '…'} ${measured.method === 'valve-drop' ? 'kPa' : 'L/s'}).` });
+    questions.push({
+      code: 'out-of-range',
+      message: `Outside the meter’s range (${instrument.rangeLow ?? 0} to ${instrument.rangeHigh ?? '…'} ${measured.method === 'valve-drop' ? 'kPa' : 'L/s'}).`,
+    });
   }
   return questions;
 }

@@ -36,6 +36,12 @@ export class NetworkState {
     for (const { kind, first, last } of kinds) if (kind === 'dpController') for (let i = first; i < last; i++) this.controllers.push(i);
   }
 
+  /** Every controller wide open, as before a solution. */
+  openControllers(): void {
+    this.throttledHead.fill(0);
+    this.shut.fill(0);
+  }
+
   /** Losses and slopes of all links and chains at the chains' present flows. */
   evaluate(): void {
     this.spreadFlows();
@@ -133,14 +139,17 @@ export class NetworkState {
   private shareDesignFlows(): void {
     const { chains, kinds } = this.network;
     const { linkFlow } = this;
-    const shared = new Map<number, number>();
+    const shared = new Float64Array(chains.count).fill(Infinity);
     for (const name of ['terminal', 'flowLimiter'] as const) {
       const range = kinds.find(({ kind }) => kind === name);
       for (let i = range?.first ?? 0; i < (range?.last ?? 0); i++) {
         const c = chains.chainOf[i];
-        if (c >= 0) shared.set(c, Math.min(linkFlow[i], shared.get(c) ?? Infinity));
+        if (c >= 0 && linkFlow[i] < shared[c]) shared[c] = linkFlow[i];
       }
     }
-    for (const [c, flow] of shared) for (let p = chains.start[c]; p < chains.start[c + 1]; p++) linkFlow[chains.member[p]] = flow;
+    for (let c = 0; c < chains.count; c++) {
+      if (shared[c] === Infinity) continue;
+      for (let p = chains.start[c]; p < chains.start[c + 1]; p++) linkFlow[chains.member[p]] = shared[c];
+    }
   }
 }

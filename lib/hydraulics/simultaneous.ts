@@ -35,10 +35,11 @@ export class SimultaneousIteration {
     evaluate: (part) => this.evaluateAlong(part),
   };
 
+  private control: DpControl | null = null;
+
   constructor(
-    private readonly state: NetworkState,
-    private readonly loops: Loops,
-    private readonly control: DpControl | null,
+    readonly state: NetworkState,
+    readonly loops: Loops,
   ) {
     const chains = state.chainFlow.length;
     this.solver = loopSolver(loops, chains);
@@ -62,8 +63,9 @@ export class SimultaneousIteration {
   }
 
   /** Iterates from the state's present flows until it is closed and settled. */
-  run(): IterationOutcome {
-    const { state, control } = this;
+  run(control: DpControl | null): IterationOutcome {
+    const { state } = this;
+    this.control = control;
     state.evaluate();
     let change = Infinity;
     let shrinking = 1;

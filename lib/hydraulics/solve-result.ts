@@ -24,9 +24,10 @@ export function solveResult(network: PreparedNetwork, solution: Solution): Solve
   const nodes = document.nodes.map((node, v): NodeResult => {
     return { id: node.id, pressureKpa: (heads[v] - (node.elevationM ?? 0)) * kpaPerM, headM: heads[v] };
   });
-  const pumps = document.links.flatMap((link, at) =>
-    link.kind === 'pump' ? [pumpResult(link, links[at].flowLs, -links[at].dropKpa / kpaPerM, fluid.densityKgM3)] : [],
-  );
+  const pumps: PumpResult[] = [];
+  document.links.forEach((link, at) => {
+    if (link.kind === 'pump') pumps.push(pumpResult(link, links[at].flowLs, -links[at].dropKpa / kpaPerM, fluid.densityKgM3));
+  });
 
   const imbalance = nodeImbalance(network, state.linkFlow);
   const loopHeads = headsAroundLoops(solution);
@@ -90,8 +91,11 @@ function linkResult(
 ): LinkResult {
   const { numberOf, nodeIndex, fluid } = network;
   const i = numberOf[at];
-  const flowLs = i < 0 ? 0 : state.linkFlow[i];
-  const dropKpa = (heads[nodeIndex.get(link.from)!] - heads[nodeIndex.get(link.to)!]) * kpaPerM;
+  const isOpen = i >= 0;
+  const flowLs = isOpen ? state.linkFlow[i] : 0;
+  const from = isOpen ? network.from[i] : nodeIndex.get(link.from)!;
+  const to = isOpen ? network.to[i] : nodeIndex.get(link.to)!;
+  const dropKpa = (heads[from] - heads[to]) * kpaPerM;
   if (link.kind !== 'pipe') return { id: link.id, flowLs, dropKpa };
   const reynolds = Math.abs(flowLs) * reynoldsPerLs(link.boreMm, fluid);
   return {
@@ -137,7 +141,8 @@ export function pumpHeadAt(link: PumpLink, flowLs: number, speed: number): numbe
 }
 
 function nodeImbalance({ document, from, to }: PreparedNetwork, linkFlow: Float64Array): Float64Array {
-  const imbalance = Float64Array.from(document.nodes, (node) => node.inflowLs ?? 0);
+  const imbalance = new Float64Array(document.nodes.length);
+  for (let v = 0; v < imbalance.length; v++) imbalance[v] = document.nodes[v].inflowLs ?? 0;
   for (let i = 0; i < linkFlow.length; i++) {
     imbalance[from[i]] -= linkFlow[i];
     imbalance[to[i]] += linkFlow[i];
@@ -154,7 +159,7 @@ function headsAroundLoops({ loops, state }: Solution): Float64Array {
 
 function largest(values: Float64Array): number {
   let worst = 0;
-  for (const value of values) worst = Math.max(worst, Math.abs(value));
+  for (let k = 0; k < values.length; k++) worst = Math.max(worst, Math.abs(values[k]));
   return worst;
 }
 

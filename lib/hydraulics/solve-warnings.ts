@@ -67,15 +67,17 @@ function partWarnings({ document, nodeIndex, forest }: PreparedNetwork): Warning
 
 /** Between Re 2000 and 4000 no law is sure: the pipes there are named together. */
 function transitionWarnings(links: LinkResult[]): Warning[] {
-  const ids = links.flatMap((link) => (link.regime === 'transition' ? [link.id] : []));
+  const ids = links.filter((link) => link.regime === 'transition').map((link) => link.id);
   if (!ids.length) return [];
   const message = `Flow is between laminar and turbulent in ${listed(ids)}: the friction there is uncertain.`;
   return [{ code: 'transition-flow', id: ids[0], message }];
 }
 
-function pumpWarnings({ document }: PreparedNetwork, links: LinkResult[]): Warning[] {
-  return document.links.flatMap((link, at): Warning[] => {
-    if (link.kind !== 'pump' || pumpSpeed(link) <= 0) return [];
+function pumpWarnings({ document, kinds, position }: PreparedNetwork, links: LinkResult[]): Warning[] {
+  const pumps = kinds.find(({ kind }) => kind === 'pump');
+  return Array.from(position.subarray(pumps?.first ?? 0, pumps?.last ?? 0)).flatMap((at): Warning[] => {
+    const link = document.links[at] as LinkOf<'pump'>;
+    if (pumpSpeed(link) <= 0) return [];
     const last = link.curve[link.curve.length - 1].flowLs * pumpSpeed(link);
     if (links[at].flowLs <= last) return [];
     const message = `${link.id} runs at ${links[at].flowLs.toFixed(3)} L/s, past the last point of its curve (${last.toFixed(3)} L/s at this speed); the curve is drawn straight on.`;

@@ -42,16 +42,28 @@ export interface Solution {
   history: LoopCorrection[] | null;
 }
 
-/** The iteration alone, without the result's tables. */
+/** One iteration a prepared network, so that solving it again finds its loops and factors' pattern ready. */
+const iterations = new WeakMap<PreparedNetwork, SimultaneousIteration>();
+
+/** The simultaneous iteration of a network at its first flows, or, solved before, at those it has. */
+export function startIteration(network: PreparedNetwork, startFlows?: Float64Array): SimultaneousIteration {
+  const known = iterations.get(network);
+  const iteration = known ?? new SimultaneousIteration(new NetworkState(network), shortLoops(network.document.nodes.length, network.chains));
+  iterations.set(network, iteration);
+  iteration.state.openControllers();
+  // The first flows are also what the least slopes come from.
+  if (!known || !startFlows) iteration.start();
+  if (startFlows) takeFlows(iteration.state, startFlows);
+  return iteration;
+}
+
+/** The flows alone, without the result's tables. The state belongs to the network and changes when it is solved again. */
 export function findFlows(network: PreparedNetwork, { startFlows }: SolveOptions = {}): Solution {
   const { document, chains } = network;
-  const state = new NetworkState(network);
+  const simultaneous = startIteration(network, startFlows);
+  const { state, loops } = simultaneous;
   const control = DpControl.of(network);
-  const loops = shortLoops(document.nodes.length, chains);
-  const simultaneous = new SimultaneousIteration(state, loops, control);
   const warnings: Warning[] = [];
-  simultaneous.start();
-  if (startFlows) takeFlows(state, startFlows);
 
   if (document.options?.method === 'hardy-cross') {
     // Slopes at the first flows: a valve that these hold shut is a wall, and wants a loop of its own.
@@ -59,11 +71,12 @@ export function findFlows(network: PreparedNetwork, { startFlows }: SolveOptions
     const cross = treeLoops(document.nodes.length, chains, state.chainSlope, MOST_TREE_LOOP_CHAINS) ?? loops;
     const history: LoopCorrection[] | null = document.options.history ? [] : null;
     const outcome = balanceHeads(state, cross, control, history);
-    if (outcome.closed) return { state, loops: cross, method: 'hardy-cross', ...outcome, control, warnings, history: history?.slice(0, MOST_HISTORY) ?? null };
+    const kept = history?.slice(0, MOST_HISTORY) ?? null;
+    if (outcome.closed) return { state, loops: cross, method: 'hardy-cross', ...outcome, control, warnings, history: kept };
     const message = `Correcting one loop after another had not closed after ${outcome.iterations} sweeps; all loops were corrected together from there.`;
     warnings.push({ code: 'hardy-cross-slow', message });
   }
-  const outcome = simultaneous.run();
+  const outcome = simultaneous.run(control);
   return { state, loops, method: 'simultaneous', ...outcome, control, warnings, history: null };
 }
 

@@ -1,5 +1,5 @@
 import type { Drawing, Place } from './drawing';
-import { kindNames } from './drawing-faults';
+import { pieceNames } from './piece-names';
 
 export interface Difference {
   message: string;
@@ -81,28 +81,11 @@ function choose(before: Item | undefined, mine: Item | undefined, theirs: Item |
   return { item: mine ?? theirs ?? null, isConflict: true };
 }
 
+/** Names from the first drawing that still has the thing. */
 function namer(drawings: Drawing[]) {
-  return ({ kind, id }: Place): string => {
-    for (const drawing of drawings) {
-      if (kind === 'storey') {
-        const storey = drawing.storeys.find((it) => it.id === id);
-        if (storey) return `Storey ${storey.name}`;
-      } else if (kind === 'equipment') {
-        const piece = drawing.equipment.find((it) => it.id === id);
-        if (piece) return piece.tag || kindNames[piece.kind];
-      } else {
-        const pipe = drawing.pipes.find((it) => it.id === id);
-        if (pipe) return `Pipe ${tagOf(drawing, pipe.from.equipmentId)} to ${tagOf(drawing, pipe.to.equipmentId)}`;
-      }
-    }
-    return id;
-  };
+  const names = drawings.map(pieceNames);
+  return ({ id }: Place): string => names.find((known) => known.has(id))?.get(id) ?? id;
 }
-
-const tagOf = (drawing: Drawing, equipmentId: string) => {
-  const piece = drawing.equipment.find((it) => it.id === equipmentId);
-  return piece ? piece.tag || kindNames[piece.kind].toLowerCase() : '?';
-};
 
 function told(name: string, before: Item | undefined, after: Item | undefined): string {
   if (!before) return `${name} added`;

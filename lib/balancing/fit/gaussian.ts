@@ -78,6 +78,13 @@ export function transposeTimes(rows: Float64Array[], weights: ArrayLike<number>,
   return sum;
 }
 
+/** The columns that are not held at zero, each in units of its deviation: the others cost time and add nothing. */
+export function activeColumns(rows: Float64Array[], deviations: ArrayLike<number>): Float64Array[] {
+  const active: number[] = [];
+  for (let j = 0; j < deviations.length; j++) if (deviations[j] > 0) active.push(j);
+  return rows.map((row) => Float64Array.from(active, (j) => row[j] * deviations[j]));
+}
+
 /** Lower half of A Aᵀ. */
 export function gramOf(rows: Float64Array[]): Float64Array[] {
   return rows.map((row, m) => {

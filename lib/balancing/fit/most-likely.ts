@@ -1,4 +1,4 @@
-import { Gaussian, gramOf, transposeTimes } from './gaussian';
+import { activeColumns, Gaussian, gramOf, transposeTimes } from './gaussian';
 import type { ReadingModel } from './reading-model';
 
 const MOST_STEPS = 25;
@@ -63,7 +63,7 @@ export function mostLikely(model: ReadingModel, deviations: ArrayLike<number>, n
     const scaledRows = rows.map((row) => row.map((each, j) => each * deviations[j]));
     const pull = transposeTimes(scaledRows, here.misfit.map((each, m) => each / noise[m]), here.values.length);
     const downhill = pull.map((each, j) => each - (deviations[j] > 0 ? here.values[j] / deviations[j] : 0));
-    const gram = gramOf(scaledRows);
+    const gram = gramOf(activeColumns(rows, deviations));
     for (;;) {
       const move = new Gaussian(scaledRows, noise, damping, gram).covarianceTimes(downhill);
       const next = evaluate(here.values.map((value, j) => clamp(value + deviations[j] * move[j])));

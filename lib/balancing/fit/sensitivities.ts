@@ -37,8 +37,18 @@ export function linkAnswers(network: PreparedNetwork, solution: Solution, unknow
   const { linkLoss } = state;
   const lossBefore = linkLoss.slice();
 
+  /** The unknown solved last, by position. */
+  let solved = -1;
   unknowns.forEach((unknown, j) => {
     if (!unknown.links.length || !acts(unknown)) return;
+    if (solved >= 0 && isAlike(unknown, unknowns[solved])) {
+      for (const answer of answers) {
+        answer.flowPerUnknown[j] = answer.flowPerUnknown[solved];
+        answer.dropPerUnknown[j] = answer.dropPerUnknown[solved];
+      }
+      return;
+    }
+    solved = j;
     heads.fill(0);
     let isMoved = false;
     for (const at of unknown.links) {
@@ -72,6 +82,9 @@ export function linkAnswers(network: PreparedNetwork, solution: Solution, unknow
 }
 
 const perUnit = ({ kind }: Unknown) => (kind === 'chart' || kind === 'setting' ? -2 : 1);
+
+/** A valve's chart and its setting act in the same way. */
+const isAlike = (a: Unknown, b: Unknown) => a.links.length === 1 && b.links.length === 1 && a.links[0] === b.links[0] && perUnit(a) === perUnit(b);
 
 function signsInChains({ chains, from }: PreparedNetwork): Int8Array {
   const signOf = new Int8Array(from.length);

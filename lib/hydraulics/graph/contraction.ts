@@ -1,3 +1,4 @@
+import { DegreeBuckets } from '../sparse/degree-buckets';
 import { EdgeTable } from './edge-table';
 
 /** A chain (chord) that closes a loop with another one (partner) between the same two groups of nodes. */
@@ -82,8 +83,10 @@ export function contract(nodeCount: number, from: Int32Array, to: Int32Array): L
     place(e);
   }
 
-  const waiting = new DegreeQueue(nodeCount, degree);
-  for (let v = waiting.take(); v >= 0; v = waiting.take()) {
+  const waiting = new DegreeBuckets(nodeCount);
+  for (let v = 0; v < nodeCount; v++) waiting.add(v, Math.min(degree[v], nodeCount));
+  for (let left = nodeCount; left > 0; left--) {
+    const v = waiting.takeLeast();
     let shortest = -1;
     for (let half = head[v]; half >= 0; half = next[half]) {
       const shorter = shortest < 0 ? -1 : length[half >> 1] - length[shortest >> 1];
@@ -103,49 +106,9 @@ export function contract(nodeCount: number, from: Int32Array, to: Int32Array): L
       length[moved] += length[e];
       const w = end[half ^ 1];
       place(moved);
-      waiting.changed(w);
+      waiting.move(w, Math.min(degree[w], nodeCount));
     }
-    waiting.changed(u);
+    waiting.move(u, Math.min(degree[u], nodeCount));
   }
   return { tree, chord: Int32Array.from(chords), partner: Int32Array.from(partners), alike: Int8Array.from(alike) };
-}
-
-/** Nodes by degree, least first and then first come; entries that have become stale are skipped when met. */
-class DegreeQueue {
-  private readonly waiting: number[][] = [];
-  private readonly served: number[] = [];
-  private readonly taken: Uint8Array;
-  private least = 0;
-
-  constructor(
-    nodeCount: number,
-    private readonly degree: Int32Array,
-  ) {
-    this.taken = new Uint8Array(nodeCount);
-    for (let v = 0; v < nodeCount; v++) this.changed(v);
-  }
-
-  changed(v: number): void {
-    const d = this.degree[v];
-    while (this.waiting.length <= d) {
-      this.waiting.push([]);
-      this.served.push(0);
-    }
-    this.waiting[d].push(v);
-    if (d < this.least) this.least = d;
-  }
-
-  /** The next node, never given twice; -1 when none is left. */
-  take(): number {
-    for (; this.least < this.waiting.length; this.least++) {
-      const queue = this.waiting[this.least];
-      while (this.served[this.least] < queue.length) {
-        const v = queue[this.served[this.least]++];
-        if (this.taken[v] || this.degree[v] !== this.least) continue;
-        this.taken[v] = 1;
-        return v;
-      }
-    }
-    return -1;
-  }
 }

@@ -16,9 +16,16 @@ class TerminalBatch implements LinkBatch {
     private readonly first: number,
     fluid: FluidProperties,
   ) {
-    this.designHead = Float64Array.from(links, (link) => link.designDropKpa * metresPerKpa(fluid.densityKgM3));
-    this.designFlow = Float64Array.from(links, (link) => link.designFlowLs);
-    this.exponent = Float64Array.from(links, (link) => link.exponent ?? 2);
+    const count = links.length;
+    const head = metresPerKpa(fluid.densityKgM3);
+    this.designHead = new Float64Array(count);
+    this.designFlow = new Float64Array(count);
+    this.exponent = new Float64Array(count);
+    for (let k = 0; k < count; k++) {
+      this.designHead[k] = links[k].designDropKpa * head;
+      this.designFlow[k] = links[k].designFlowLs;
+      this.exponent[k] = links[k].exponent ?? 2;
+    }
   }
 
   evaluate(flow: Float64Array, loss: Float64Array, slope: Float64Array, a: number, b: number): void {

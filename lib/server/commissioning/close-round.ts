@@ -10,7 +10,10 @@ export async function closeRound(access: Access, roundId: string): Promise<Round
   const { organizationId } = access.person;
   return db().transaction(async (trx) => {
     // The lock waits for readings that are on their way into the round.
-    const row = await trx('rounds').where({ organization_id: organizationId, id: roundId }).forUpdate().first('loop_id', 'number', 'closed_at');
+    const row = await trx('rounds')
+      .where({ organization_id: organizationId, id: roundId })
+      .forUpdate()
+      .first('loop_id', 'number', 'closed_at');
     if (!row) throw notFound();
     if (!row.closed_at) {
       await trx('rounds').where({ organization_id: organizationId, id: roundId }).update({ closed_at: trx.fn.now() });

@@ -34,28 +34,42 @@ interface InstrumentContext {
 
 /** The round and what its revision and project say; its row is held shared until the transaction ends. */
 export async function readRound(trx: Knex.Transaction, organizationId: string, roundId: string): Promise<RoundContext> {
-  const row: { loopId: string; loopName: string; projectId: string; number: number; closedAt: Date | null; revisionId: string; fluid: FluidSpecification } | undefined =
-    await trx('rounds')
-      .join('loops', (join) => join.on('loops.organization_id', 'rounds.organization_id').on('loops.id', 'rounds.loop_id'))
-      .join('revisions', (join) => join.on('revisions.organization_id', 'rounds.organization_id').on('revisions.id', 'rounds.revision_id'))
-      .where({ 'rounds.organization_id': organizationId, 'rounds.id': roundId })
-      .forShare('rounds')
-      .first({
-        loopId: 'rounds.loop_id',
-        loopName: 'loops.name',
-        projectId: 'loops.project_id',
-        number: 'rounds.number',
-        closedAt: 'rounds.closed_at',
-        revisionId: 'rounds.revision_id',
-        fluid: trx.raw("revisions.network_document -> 'fluid'"),
-      });
+  const row:
+    | {
+        loopId: string;
+        loopName: string;
+        projectId: string;
+        number: number;
+        closedAt: Date | null;
+        revisionId: string;
+        fluid: FluidSpecification;
+      }
+    | undefined = await trx('rounds')
+    .join('loops', (join) => join.on('loops.organization_id', 'rounds.organization_id').on('loops.id', 'rounds.loop_id'))
+    .join('revisions', (join) => join.on('revisions.organization_id', 'rounds.organization_id').on('revisions.id', 'rounds.revision_id'))
+    .where({ 'rounds.organization_id': organizationId, 'rounds.id': roundId })
+    .forShare('rounds')
+    .first({
+      loopId: 'rounds.loop_id',
+      loopName: 'loops.name',
+      projectId: 'loops.project_id',
+      number: 'rounds.number',
+      closedAt: 'rounds.closed_at',
+      revisionId: 'rounds.revision_id',
+      fluid: trx.raw("revisions.network_document -> 'fluid'"),
+    });
   if (!row) throw notFound();
   const tolerances = await readTolerances(organizationId, row.projectId, trx);
   return { ...row, isClosed: row.closedAt !== null, densityKgM3: densityOf(row.fluid), tolerances };
 }
 
 /** The station as the round's revision asks it; one of another loop, revision or organisation is not there. */
-export async function readStation(trx: Knex.Transaction, organizationId: string, round: RoundContext, stationId: string): Promise<StationContext> {
+export async function readStation(
+  trx: Knex.Transaction,
+  organizationId: string,
+  round: RoundContext,
+  stationId: string,
+): Promise<StationContext> {
   const station = await trx('station_designs as design')
     .join('stations', (join) => join.on('stations.organization_id', 'design.organization_id').on('stations.id', 'design.station_id'))
     .where({
@@ -73,7 +87,11 @@ const kindFor: Record<RecordReading['method'], InstrumentKind> = { 'valve-drop':
 const refusedInstrument = (message: string) => new Problem('input-invalid', message, { fields: [{ path: 'instrumentId', message }] });
 
 /** The meter that was read, fit for what was read. */
-export async function readInstrument(trx: Knex.Transaction, organizationId: string, { instrumentId, method }: RecordReading): Promise<InstrumentContext> {
+export async function readInstrument(
+  trx: Knex.Transaction,
+  organizationId: string,
+  { instrumentId, method }: RecordReading,
+): Promise<InstrumentContext> {
   const row: (InstrumentContext & { kind: InstrumentKind; isRetired: boolean }) | undefined = await trx('instruments')
     .where({ organization_id: organizationId, id: instrumentId })
     .first({
@@ -86,12 +104,18 @@ export async function readInstrument(trx: Knex.Transaction, organizationId: stri
     });
   if (!row) throw refusedInstrument('This meter is not known. Choose another.');
   if (row.isRetired) throw refusedInstrument('This meter is retired. Choose another.');
-  if (row.kind !== kindFor[method]) throw refusedInstrument(method === 'valve-drop' ? 'Choose a differential pressure meter.' : 'Choose a flow meter.');
+  if (row.kind !== kindFor[method])
+    throw refusedInstrument(method === 'valve-drop' ? 'Choose a differential pressure meter.' : 'Choose a flow meter.');
   return row;
 }
 
 /** What the reading says of the station, worked out by the rules that the tablet uses too. */
-export function judgeAtStation(input: RecordReading, station: StationContext, instrument: InstrumentContext, round: RoundContext): Judgement {
+export function judgeAtStation(
+  input: RecordReading,
+  station: StationContext,
+  instrument: InstrumentContext,
+  round: RoundContext,
+): Judgement {
   const { method, settingTurns, dropKpa, flowLs } = input;
   const band = [...round.tolerances, ...defaultTolerances].find(({ stationKind }) => stationKind === station.kind)!;
   const judged = judgeReading(

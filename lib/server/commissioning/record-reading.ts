@@ -21,11 +21,13 @@ export async function recordReading(access: Access, roundId: string, input: Reco
   return db().transaction(async (trx) => {
     const round = await readRound(trx, organizationId, roundId);
     if (!(await isStored(trx, access, roundId, input))) {
-      if (round.isClosed) throw new Problem('round-closed', `Round ${round.number} is closed. Keep this reading in the round that is open now.`);
+      if (round.isClosed)
+        throw new Problem('round-closed', `Round ${round.number} is closed. Keep this reading in the round that is open now.`);
       refuseFuture(input.takenAt);
       const station = await readStation(trx, organizationId, round, input.stationId);
       const instrument = await readInstrument(trx, organizationId, input);
-      if (input.correctsReadingId !== null) await refuseUncorrectable(trx, organizationId, roundId, input.stationId, input.correctsReadingId);
+      if (input.correctsReadingId !== null)
+        await refuseUncorrectable(trx, organizationId, roundId, input.stationId, input.correctsReadingId);
       const judged = judgeAtStation(input, station, instrument, round);
       const isNew = await insert(trx, {
         organization_id: organizationId,
@@ -51,7 +53,11 @@ export async function recordReading(access: Access, roundId: string, input: Reco
       });
       if (isNew) {
         const verb = input.correctsReadingId === null ? 'recorded a reading at' : 'corrected a reading at';
-        await recordActivity(trx, access, { verb, subject: `${station.tag}, round ${round.number} of ${round.loopName}`, loopId: round.loopId });
+        await recordActivity(trx, access, {
+          verb,
+          subject: `${station.tag}, round ${round.number} of ${round.loopName}`,
+          loopId: round.loopId,
+        });
       } else {
         // Another request with the same id was faster; what it stored must be this.
         await isStored(trx, access, roundId, input);
@@ -100,8 +106,16 @@ function refuseFuture(takenAt: string): void {
 }
 
 /** Anyone on the project may put right what stands at this station in this round, once. */
-async function refuseUncorrectable(trx: Knex.Transaction, organizationId: string, roundId: string, stationId: string, readingId: string): Promise<void> {
-  const reading = await trx('readings').where({ organization_id: organizationId, id: readingId, round_id: roundId, station_id: stationId }).first('id');
+async function refuseUncorrectable(
+  trx: Knex.Transaction,
+  organizationId: string,
+  roundId: string,
+  stationId: string,
+  readingId: string,
+): Promise<void> {
+  const reading = await trx('readings')
+    .where({ organization_id: organizationId, id: readingId, round_id: roundId, station_id: stationId })
+    .first('id');
   if (!reading) throw notFound();
   const later = await trx('readings').where({ organization_id: organizationId, corrects_reading_id: readingId }).first('id');
   if (later) throw corrected();

@@ -27,7 +27,8 @@ export async function startRound(access: Access, loopId: string, { id, purpose }
       const open = await trx('rounds').where({ organization_id: organizationId, loop_id: loopId }).whereNull('closed_at').first('number');
       if (open) throw new Problem('round-open', `Round ${open.number} of this loop is still open. Close it before another is started.`);
       const number = await insertRound(trx, access, loopId, { id, purpose });
-      if (loop.state === 'issued') await trx('loops').where({ organization_id: organizationId, id: loopId }).update({ state: 'in-commissioning' });
+      if (loop.state === 'issued')
+        await trx('loops').where({ organization_id: organizationId, id: loopId }).update({ state: 'in-commissioning' });
       await recordActivity(trx, access, { verb: 'started', subject: `round ${number} of ${loop.name}: ${purpose}`, loopId });
     }
     const [round] = await readRounds(trx, organizationId, { 'rounds.id': id });

@@ -12,7 +12,10 @@ export async function changeInstrument(access: Access, instrumentId: string, inp
   if (!isUuid(instrumentId)) throw notFound();
   await unlessSerialTaken(
     db().transaction(async (trx) => {
-      const known = await trx('instruments').where({ organization_id: organizationId, id: instrumentId }).forUpdate().first('kind', 'is_retired');
+      const known = await trx('instruments')
+        .where({ organization_id: organizationId, id: instrumentId })
+        .forUpdate()
+        .first('kind', 'is_retired');
       if (!known) throw notFound();
       if (known.kind !== input.kind) {
         const message = 'What a meter reads does not change. Add another.';

@@ -4,6 +4,7 @@ import { parseNetworkDocument } from '@/lib/network/document';
 import type { Drawing, Place } from '@/lib/network/drawing';
 import type { Fault } from '@/lib/network/drawing-faults';
 import { drawingToDocument, placeOfLink } from '@/lib/network/drawing-to-document';
+import { inDrawingWords, pieceNames } from '@/lib/network/piece-names';
 import { cachedSolution, documentKey, keepSolution } from './solution-cache';
 import { solveDocument, type SolvedDocument } from './solve-document';
 import { solveOffThread } from './solve-pool';
@@ -58,7 +59,8 @@ const documentFaults = (drawing: Drawing, issues: { path: string; id?: string; m
 /** The engine's warnings, each once: solving and balancing may both find it. */
 function warningFaults(drawing: Drawing, warnings: Warning[]): Fault[] {
   const once = new Map(warnings.map((warning) => [`${warning.code} ${warning.id}`, warning]));
-  return [...once.values()].map(({ code, id, message }) => ({ code, severity: 'warning', message, place: placeOfId(drawing, id) }));
+  const names = pieceNames(drawing);
+  return [...once.values()].map(({ code, id, message }) => ({ code, severity: 'warning', message: inDrawingWords(message, names), place: placeOfId(drawing, id) }));
 }
 
 /** A node's id is its piece's, with the port behind a dot; a link's has its part behind a colon. */

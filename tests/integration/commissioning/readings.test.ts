@@ -41,7 +41,14 @@ describe('a reading', () => {
     expect(answer.flowLs).toBeCloseTo(flowLs, 9);
     expect(answer.percentOfDesign).toBeCloseTo((100 * flowLs) / 0.5, 9);
     expect(answer.uncertaintyPercent).toBeCloseTo(Math.hypot(5, (100 * 0.26) / 16 / 2), 9);
-    expect(answer).toMatchObject({ verdict: 'low', kv: 4, takenBy: 'technician', roundNumber: 1, isInstrumentOverdue: false, isCorrected: false });
+    expect(answer).toMatchObject({
+      verdict: 'low',
+      kv: 4,
+      takenBy: 'technician',
+      roundNumber: 1,
+      isInstrumentOverdue: false,
+      isCorrected: false,
+    });
     expect(answer.entered[1]).toEqual({ quantity: 'pressure', text: '160', unit: 'mbar' });
   });
 
@@ -58,7 +65,9 @@ describe('a reading', () => {
   it('sent twenty times at once is stored once', async () => {
     const sent = reading(home);
     signInAs(home.technician);
-    const answers = await Promise.all(Array.from({ length: 20 }, () => call(postReading, { method: 'POST', params: { roundId: home.roundId }, body: sent })));
+    const answers = await Promise.all(
+      Array.from({ length: 20 }, () => call(postReading, { method: 'POST', params: { roundId: home.roundId }, body: sent })),
+    );
     expect(answers.map(({ status }) => status)).toEqual(Array(20).fill(200));
     expect(new Set(answers.map(({ body }) => JSON.stringify(body))).size).toBe(1);
     expect(await stored(sent.id)).toBe(1);
@@ -87,14 +96,20 @@ describe('a reading', () => {
 
     const { readings } = (await call(getCommissioning, { params: { loopId: home.loopId } })).body as CommissioningBody;
     expect(readings.find(({ id }) => id === first.id)).toMatchObject({ isCorrected: true, dropKpa: 30 });
-    expect(readings.find(({ id }) => id === second.id)).toMatchObject({ isCorrected: false, correctsReadingId: first.id, note: 'Hoses were not bled.' });
+    expect(readings.find(({ id }) => id === second.id)).toMatchObject({
+      isCorrected: false,
+      correctsReadingId: first.id,
+      note: 'Hoses were not bled.',
+    });
   });
 
   it('corrected by two at once is corrected by one', async () => {
     const first = reading(home);
     await send(first);
     const corrections = [20, 21].map((dropKpa) => reading(home, { dropKpa, correctsReadingId: first.id, note: 'Misread.' }));
-    const answers = await Promise.all(corrections.map((body) => call(postReading, { method: 'POST', params: { roundId: home.roundId }, body })));
+    const answers = await Promise.all(
+      corrections.map((body) => call(postReading, { method: 'POST', params: { roundId: home.roundId }, body })),
+    );
     expect(answers.map(({ status }) => status).sort()).toEqual([200, 409]);
   });
 

@@ -29,7 +29,8 @@ const meter: InstrumentInput = {
   isRetired: false,
 };
 const add = (given: Partial<InstrumentInput> = {}) => call(postInstrument, { method: 'POST', body: { ...meter, ...given } });
-const change = (instrumentId: string, given: Partial<InstrumentInput>) => call(patchInstrument, { method: 'PATCH', params: { instrumentId }, body: { ...meter, ...given } });
+const change = (instrumentId: string, given: Partial<InstrumentInput>) =>
+  call(patchInstrument, { method: 'PATCH', params: { instrumentId }, body: { ...meter, ...given } });
 
 describe('the meters of an organisation', () => {
   it('are added by a technician and read, to the day, as they were typed', async () => {
@@ -55,7 +56,12 @@ describe('the meters of an organisation', () => {
     expect((await change(id, { serial: 'DP-03', isRetired: false })).body.isRetired).toBe(false);
     const other = await change(id, { serial: 'DP-03', kind: 'flow' });
     expect([other.status, other.body.fields[0].path]).toEqual([400, 'kind']);
-    const verbs = await suite.db('activity').where({ organization_id: home.organizationId }).whereLike('subject', '%DP-03').orderBy('at').pluck('verb');
+    const verbs = await suite
+      .db('activity')
+      .where({ organization_id: home.organizationId })
+      .whereLike('subject', '%DP-03')
+      .orderBy('at')
+      .pluck('verb');
     expect(verbs).toEqual(['added', 'retired', 'took back into use']);
   });
 

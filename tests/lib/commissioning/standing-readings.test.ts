@@ -38,7 +38,14 @@ describe('the entry that counts', () => {
   it('is never a corrected one, and is there wherever an uncorrected one is', () => {
     const entries = fc
       .array(fc.record({ minute: fc.integer({ min: 0, max: 59 }), corrects: fc.option(fc.nat(20)) }), { maxLength: 20 })
-      .map((made) => made.map(({ minute, corrects }, i) => entry(`${i}`.padStart(2, '0'), { minute, correctsReadingId: corrects !== null && corrects < i ? `${corrects}`.padStart(2, '0') : null })));
+      .map((made) =>
+        made.map(({ minute, corrects }, i) =>
+          entry(`${i}`.padStart(2, '0'), {
+            minute,
+            correctsReadingId: corrects !== null && corrects < i ? `${corrects}`.padStart(2, '0') : null,
+          }),
+        ),
+      );
     fc.assert(
       fc.property(entries, (all) => {
         const standing = standingReadings(all, 'one').get('FC-1');

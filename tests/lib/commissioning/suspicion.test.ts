@@ -6,7 +6,8 @@ const meter = { rangeLow: 0, rangeHigh: 200, calibrationDueOn: '2027-03-14', isO
 const base = { designFlowLs: 0.2, pumpShutOffKpa: 120, instrument: meter };
 const codes = (questions: Question[]) => questions.map(({ code }) => code);
 const aboutFlow = (flowLs: number) => questionsAbout({ ...base, flowLs, measured: { method: 'direct-flow', flowLs } });
-const aboutDrop = (dropKpa: number, flowLs = 0.21) => questionsAbout({ ...base, flowLs, measured: { method: 'valve-drop', settingTurns: 2, dropKpa } });
+const aboutDrop = (dropKpa: number, flowLs = 0.21) =>
+  questionsAbout({ ...base, flowLs, measured: { method: 'valve-drop', settingTurns: 2, dropKpa } });
 
 describe('the questions before a reading is kept', () => {
   it('are none for a plausible reading', () => {

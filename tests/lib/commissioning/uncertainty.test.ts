@@ -30,7 +30,10 @@ describe('the uncertainty of a reading', () => {
 
   it('never falls below the share of Kv, and falls as the signal rises', () => {
     const drop = fc.double({ min: 0.01, max: 1000, noNaN: true });
-    const accuracy = fc.record({ accuracyPercent: fc.double({ min: 0, max: 50, noNaN: true }), accuracyAbsolute: fc.double({ min: 0, max: 5, noNaN: true }) });
+    const accuracy = fc.record({
+      accuracyPercent: fc.double({ min: 0, max: 50, noNaN: true }),
+      accuracyAbsolute: fc.double({ min: 0, max: 5, noNaN: true }),
+    });
     fc.assert(
       fc.property(drop, accuracy, (dropKpa, it) => {
         expect(dropUncertaintyPercent(dropKpa, it)).toBeGreaterThanOrEqual(kvAssumption.percent);

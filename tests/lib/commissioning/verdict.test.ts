@@ -6,11 +6,13 @@ const ten = { lowerPercent: -10, upperPercent: 10 };
 
 describe('the verdict on a flow', () => {
   it('gives the ratios 120, 137.5 and 150 % of the training module’s example 3 (domain facts, case V8)', () => {
-    expect([[1.2, 1], [1.1, 0.8], [0.9, 0.6]].map(([flow, design]) => percentOfDesign(flow!, design!))).toEqual([
-      expect.closeTo(120, 9),
-      expect.closeTo(137.5, 9),
-      expect.closeTo(150, 9),
-    ]);
+    expect(
+      [
+        [1.2, 1],
+        [1.1, 0.8],
+        [0.9, 0.6],
+      ].map(([flow, design]) => percentOfDesign(flow!, design!)),
+    ).toEqual([expect.closeTo(120, 9), expect.closeTo(137.5, 9), expect.closeTo(150, 9)]);
   });
 
   it('counts the limits themselves as within and rounds nothing into the band', () => {

@@ -6,7 +6,7 @@ export default function LoadingStations() {
         Opening the stations…
       </p>
       {[12, 6, 18].map((rem) => (
-        <div key={rem} className="animate-pulse rounded border bg-sheet" style={{ height: `${rem}rem` }} />
+        <div key={rem} className="bg-sheet animate-pulse rounded border" style={{ height: `${rem}rem` }} />
       ))}
     </main>
   );

@@ -20,7 +20,8 @@ export default async function DrawingPage({ params }: { params: Promise<{ projec
   const revision = loop.revision ? await readRevision(organizationId, loopId, loop.revision.number) : null;
 
   return (
-    <main className="flex h-[calc(100dvh-102px)] min-h-96 flex-none flex-col lg:h-[calc(100dvh-54px)]">
+    // What is drawn takes the room that the header leaves, and never makes the page longer.
+    <main className="relative min-h-96 flex-1 *:absolute *:inset-0">
       <h1 className="sr-only">Drawing of {loop.name}</h1>
       {may(access.roles, 'drawing.edit') ? (
         <DrawingEditor
