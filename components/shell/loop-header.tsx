@@ -41,7 +41,7 @@ export function LoopHeader({ loop, person }: { loop: LoopDetail; person: { name:
         {pages.map(([path, name, isShown]) => isShown && <NavLink key={path} href={`${base}/${path}`}>{name}</NavLink>)}
       </nav>
       <div className="ml-auto flex min-h-14 items-center gap-4">
-        <div className="hidden md:block">
+        <div className="hidden xl:block">
           <FlowStrip ticks={loop.strip} band={loop.band} />
         </div>
         <span className="hidden text-sm whitespace-nowrap text-quiet sm:inline">

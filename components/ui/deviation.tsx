@@ -11,7 +11,7 @@ export function Deviation({ percent, verdict, className }: { percent: number; ve
   const mark = marks[verdict];
   return (
     <span className={classNames('figures whitespace-nowrap', mark.tone, className)}>
-      <span aria-hidden className="mr-1 text-[0.8em]">
+      <span aria-hidden className="mr-1 text-[1.05em]">
         {mark.sign}
       </span>
       <span className="sr-only">{mark.says} </span>

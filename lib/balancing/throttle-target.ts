@@ -2,7 +2,7 @@ import { kvAtSetting, largestSetting, settingAtKv } from '@/lib/hydraulics/links
 import type { BalancingValveLink } from '@/lib/hydraulics/types';
 
 /** Answer of a flow ratio to the Kv, both as logarithms, that two readings may tell: less or more is measuring error. */
-const LEAST_ANSWER = 0.1;
+const LEAST_ANSWER = 0.2;
 const MOST_ANSWER = 1.2;
 
 /** Where a valve should be set so that its ratio is multiplied by `factor`. */

@@ -55,7 +55,7 @@ export function mostLikely(model: ReadingModel, deviations: ArrayLike<number>, n
     return { values, solved, misfit, cost };
   };
 
-  let here = evaluate(start);
+  let here = evaluate(start); if (process.env.STEPS) console.log("  start", here.cost.toFixed(2));
   let rows = model.jacobian(here.solved);
   let damping = 0;
   let converged = false;
@@ -80,7 +80,7 @@ export function mostLikely(model: ReadingModel, deviations: ArrayLike<number>, n
         break;
       }
     }
-    rows = model.jacobian(here.solved);
+    rows = model.jacobian(here.solved); if (process.env.STEPS) console.log("   step", step, here.cost.toFixed(2), damping);
   }
   return { values: here.values, cost: here.cost, converged: converged && here.solved.closed, shown: here.solved.shown, misfit: here.misfit, rows };
 }
