@@ -37,7 +37,12 @@ export function EntryField({ entry, field, onEnter }: EntryFieldProps) {
           value={entry.typed[field]}
           onChange={(event) => entry.type(field, event.target.value)}
           onFocus={() => entry.setActive(field)}
-          onKeyDown={(event) => event.key === 'Enter' && onEnter()}
+          onKeyDown={(event) => {
+            if (event.key !== 'Enter') return;
+            // Else the same key presses the button that the question puts the focus on.
+            event.preventDefault();
+            onEnter();
+          }}
           inputMode="none"
           enterKeyHint="next"
           autoComplete="off"

@@ -51,7 +51,7 @@ export function EntryForm({ commissioning, station, entry, correcting, onKeep }:
       </div>
       {entry.typed.method === 'valve-drop' && <Target station={station} entry={entry} densityKgM3={body.densityKgM3!} />}
       <LiveResult entry={entry} />
-      <div className="flex flex-wrap items-center gap-x-6 gap-y-1">
+      <div className="-my-1.5 flex flex-wrap items-center gap-x-6">
         <p>
           <span className="text-quiet">Last round </span>
           {last ? (
@@ -63,7 +63,6 @@ export function EntryForm({ commissioning, station, entry, correcting, onKeep }:
             <span className="text-quiet">not measured</span>
           )}
         </p>
-        <MeterPicker entry={entry} />
         <span className="ml-auto flex">
           {!isNoteShown && (
             <Button size="touch" look="quiet" className="!px-3 !text-base" onClick={() => setNote(true)}>
@@ -75,6 +74,7 @@ export function EntryForm({ commissioning, station, entry, correcting, onKeep }:
           </Button>
         </span>
       </div>
+      <MeterPicker entry={entry} />
       {isNoteShown && (
         <TextArea
           label={entry.isCorrecting ? 'Why was the earlier entry wrong?' : 'Note'}

@@ -79,8 +79,8 @@ const Line = ({ name, formula, value, children }: { name: string; formula: strin
   <div className="border-t pt-3 first:border-t-0 first:pt-0">
     <dt className="font-semibold">{name}</dt>
     <dd>
-      <span className="figures block break-words">
-        {formula} = <strong className="whitespace-nowrap">{value}</strong>
+      <span className="block break-words tabular-nums">
+        {formula} = <strong className="figures whitespace-nowrap">{value}</strong>
       </span>
       {children && <span className="text-quiet mt-1 block text-sm">{children}</span>}
     </dd>

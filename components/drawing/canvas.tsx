@@ -98,7 +98,9 @@ export function Canvas() {
   /** A box selects the pieces in it and the pipes among them, not those that lead out of it. */
   const keepInnerPipes = () => {
     const { pieces: chosen } = canvasStore.getState();
-    const inner = drawingStore.getState().drawing.pipes.filter(({ from, to }) => chosen.has(from.equipmentId) && chosen.has(to.equipmentId));
+    const inner = drawingStore
+      .getState()
+      .drawing.pipes.filter(({ from, to }) => chosen.has(from.equipmentId) && chosen.has(to.equipmentId));
     canvasStore.setState({ pipes: new Set(inner.map(({ id }) => id)) });
   };
 

@@ -69,7 +69,8 @@ function Editing({ loop, personId, loaded, issued: issuedBefore, editor }: Drawi
   const [issuedHere, setIssuedHere] = useState<DrawingEditorProps['issued']>(null);
   const issued = (issuedHere?.number ?? 0) > (issuedBefore?.number ?? 0) ? issuedHere : issuedBefore;
   const isAhead = useMemo(() => issued === null || !same(issued.drawing, drawing), [issued, drawing]);
-  const revisionWords = issued === null ? 'Never issued' : isAhead ? `Draft, differs from revision ${issued.number}` : `Same as revision ${issued.number}`;
+  const revisionWords =
+    issued === null ? 'Never issued' : isAhead ? `Draft, differs from revision ${issued.number}` : `Same as revision ${issued.number}`;
 
   /** What the other person saved, once its comparison was put off. */
   const [later, setLater] = useState<DraftBody | null>(null);
@@ -88,16 +89,29 @@ function Editing({ loop, personId, loaded, issued: issuedBefore, editor }: Drawi
         hasBothBases={Boolean(results.solved?.balance)}
         bar={
           <>
-            <span className="hidden text-sm text-quiet sm:inline">{revisionWords}</span>
+            <span className="text-quiet hidden text-sm sm:inline">{revisionWords}</span>
             <Button look="primary" size="small" disabled={!isAhead} onClick={() => canvasStore.setState({ open: 'issue' })}>
               Issue revision
             </Button>
           </>
         }
-        status={<StatusBar saving={savingWords(saving)} onCompare={saving.kind === 'conflict' ? () => setLater(null) : undefined} solveError={error?.message ?? null} revision={revisionWords} />}
+        status={
+          <StatusBar
+            saving={savingWords(saving)}
+            onCompare={saving.kind === 'conflict' ? () => setLater(null) : undefined}
+            solveError={error?.message ?? null}
+            revision={revisionWords}
+          />
+        }
       />
       {saving.kind === 'conflict' && later !== saving.theirs && (
-        <ConflictDialog base={saving.base} mine={drawing} theirs={saving.theirs} onResolve={resolve} onLater={() => setLater(saving.theirs)} />
+        <ConflictDialog
+          base={saving.base}
+          mine={drawing}
+          theirs={saving.theirs}
+          onResolve={resolve}
+          onLater={() => setLater(saving.theirs)}
+        />
       )}
       {open === 'issue' && (
         <IssueDialog

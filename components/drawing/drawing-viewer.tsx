@@ -30,14 +30,16 @@ export function DrawingViewer({ drawing, band, revision }: DrawingViewerProps) {
     band,
   }));
   const results = useMemo(() => (revision ? resultsOfRevision(drawing, revision.balance) : noResults), [drawing, revision]);
-  const issued = revision && `Revision ${revision.number}, issued by ${revision.issuedBy} on ${new Date(revision.issuedAt).toLocaleDateString('en-GB', { day: 'numeric', month: 'long', year: 'numeric' })}`;
+  const issued =
+    revision &&
+    `Revision ${revision.number}, issued by ${revision.issuedBy} on ${new Date(revision.issuedAt).toLocaleDateString('en-GB', { day: 'numeric', month: 'long', year: 'numeric' })}`;
   return (
     <EditorContext value={editor}>
       <ResultsContext value={results}>
         <ReactFlowProvider>
           <Workspace
             hasBothBases={false}
-            bar={<span className="px-2 text-sm text-quiet">{issued ?? 'Draft, never issued'}</span>}
+            bar={<span className="text-quiet px-2 text-sm">{issued ?? 'Draft, never issued'}</span>}
             status={<StatusBar saving={null} solveError={null} revision={revision ? 'To be read only' : 'Draft, to be read only'} />}
           />
         </ReactFlowProvider>

@@ -31,7 +31,7 @@ export const useCanvas = <T>(pick: (state: CanvasState) => T): T => useStore(use
 
 /** The last good answer of the solver as the page shows it. */
 export interface Results {
-  solved: Omit<SolvedBody, 'solve'> & { solve: SolvedBody['solve'] | null } | null;
+  solved: (Omit<SolvedBody, 'solve'> & { solve: SolvedBody['solve'] | null }) | null;
   figures: DrawnFigures | null;
   faults: Fault[];
   /** Ids of the pieces and pipes that an error stands at. */
@@ -45,4 +45,5 @@ export const noResults: Results = { solved: null, figures: null, faults: [], fau
 export const ResultsContext = createContext<Results>(noResults);
 export const useResults = (): Results => useContext(ResultsContext);
 
-export const faultyOf = (faults: Fault[]): ReadonlySet<string> => new Set(faults.filter(({ severity }) => severity === 'error').map(({ place }) => place.id));
+export const faultyOf = (faults: Fault[]): ReadonlySet<string> =>
+  new Set(faults.filter(({ severity }) => severity === 'error').map(({ place }) => place.id));

@@ -9,11 +9,11 @@ export function FaultsList() {
   const { faults } = useResults();
   const { canvasStore } = useEditor();
   const show = useShowPlace();
-  if (faults.length === 0) return <p className="py-4 text-sm text-quiet">● No faults: the drawing can be solved as it stands.</p>;
+  if (faults.length === 0) return <p className="text-quiet py-4 text-sm">● No faults: the drawing can be solved as it stands.</p>;
   const errors = faults.filter(({ severity }) => severity === 'error').length;
   return (
     <>
-      <p className="pb-2 text-sm text-quiet">
+      <p className="text-quiet pb-2 text-sm">
         {errors ? `${errors} to be put right before the loop can be solved.` : 'The loop can be solved; look at these.'}
       </p>
       <ul className="border-t">
@@ -21,7 +21,7 @@ export function FaultsList() {
           <li key={`${code}${place.id}${i}`} className="border-b">
             <button
               type="button"
-              className="flex w-full gap-2 px-1 py-2 text-left text-sm hover:bg-well"
+              className="hover:bg-well flex w-full gap-2 px-1 py-2 text-left text-sm"
               onClick={() => {
                 show(place);
                 canvasStore.setState({ isSheetOpen: false });
@@ -31,7 +31,9 @@ export function FaultsList() {
                 {severity === 'error' ? '▴' : '△'}
               </span>
               <span>
-                <span className={classNames('font-semibold', severity === 'error' ? 'text-high' : 'text-brass')}>{severity === 'error' ? 'Fault' : 'Warning'}: </span>
+                <span className={classNames('font-semibold', severity === 'error' ? 'text-high' : 'text-brass')}>
+                  {severity === 'error' ? 'Fault' : 'Warning'}:{' '}
+                </span>
                 {message}
               </span>
             </button>

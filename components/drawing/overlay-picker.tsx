@@ -30,7 +30,7 @@ export function OverlayPicker() {
       aria-label="Figures on the drawing"
       value={overlay}
       onValueChange={(value) => value && canvasStore.setState({ overlay: value as Overlay })}
-      className="flex max-w-full gap-0.5 overflow-x-auto rounded border bg-sheet p-1"
+      className="bg-sheet flex max-w-full gap-0.5 overflow-x-auto rounded border p-1"
     >
       {Object.entries(overlayWords).map(([id, { label }]) => (
         <ToggleGroup.Item key={id} value={id} className={item}>
@@ -48,21 +48,27 @@ export function Legend({ hasBothBases }: { hasBothBases: boolean }) {
   const { isOld, figures } = useResults();
   const { title, quantity } = overlayWords[overlay];
   return (
-    <section aria-label="Legend" className="rounded border bg-sheet px-3 py-2 text-xs">
+    <section aria-label="Legend" className="bg-sheet rounded border px-3 py-2 text-xs">
       <p className="font-bold">
         {title}
         {quantity && (
-          <span className="ml-1 font-normal text-quiet">
+          <span className="text-quiet ml-1 font-normal">
             <UnitName quantity={quantity} />
           </span>
         )}
-        {isOld && figures && <span className="ml-2 font-normal text-quiet">earlier figures</span>}
+        {isOld && figures && <span className="text-quiet ml-2 font-normal">earlier figures</span>}
       </p>
       {overlay === 'percent' && (
         <p className="mt-1 flex gap-3 whitespace-nowrap">
-          <span className={tones.low}>{signs.low} under {band.lowerPercent}</span>
-          <span>{signs.within} {band.lowerPercent} to {band.upperPercent}</span>
-          <span className={tones.high}>{signs.high} over {band.upperPercent}</span>
+          <span className={tones.low}>
+            {signs.low} under {band.lowerPercent}
+          </span>
+          <span>
+            {signs.within} {band.lowerPercent} to {band.upperPercent}
+          </span>
+          <span className={tones.high}>
+            {signs.high} over {band.upperPercent}
+          </span>
         </p>
       )}
       {hasBothBases && (
@@ -73,8 +79,12 @@ export function Legend({ hasBothBases }: { hasBothBases: boolean }) {
           onValueChange={(value) => value && canvasStore.setState({ basis: value as typeof basis })}
           className="mt-1.5 flex rounded border"
         >
-          <ToggleGroup.Item value="drawn" className={basisItem}>Valves as drawn</ToggleGroup.Item>
-          <ToggleGroup.Item value="balanced" className={classNames(basisItem, 'border-l')}>As balanced</ToggleGroup.Item>
+          <ToggleGroup.Item value="drawn" className={basisItem}>
+            Valves as drawn
+          </ToggleGroup.Item>
+          <ToggleGroup.Item value="balanced" className={classNames(basisItem, 'border-l')}>
+            As balanced
+          </ToggleGroup.Item>
         </ToggleGroup.Root>
       )}
     </section>

@@ -16,16 +16,37 @@ export function PageBar({ actions, children }: { actions: Record<ActionId, () =>
   const canRedo = useStore(drawingStore.temporal, ({ futureStates }) => futureStates.length > 0);
   const hasSelection = useCanvas(({ pieces, pipes }) => pieces.size + pipes.size > 0);
   return (
-    <div className="flex min-h-11 flex-wrap items-center gap-1 border-b bg-sheet px-2">
+    <div className="bg-sheet flex min-h-11 flex-wrap items-center gap-1 border-b px-2">
       {canEdit && (
         <>
-          <button type="button" className={icon} aria-label="Undo (Ctrl Z)" title="Undo (Ctrl Z)" disabled={!canUndo} onClick={actions.undo}>
+          <button
+            type="button"
+            className={icon}
+            aria-label="Undo (Ctrl Z)"
+            title="Undo (Ctrl Z)"
+            disabled={!canUndo}
+            onClick={actions.undo}
+          >
             <Undo2 size={18} />
           </button>
-          <button type="button" className={icon} aria-label="Redo (Ctrl Shift Z)" title="Redo (Ctrl Shift Z)" disabled={!canRedo} onClick={actions.redo}>
+          <button
+            type="button"
+            className={icon}
+            aria-label="Redo (Ctrl Shift Z)"
+            title="Redo (Ctrl Shift Z)"
+            disabled={!canRedo}
+            onClick={actions.redo}
+          >
             <Redo2 size={18} />
           </button>
-          <button type="button" className={icon} aria-label="Delete (Delete)" title="Delete (Delete)" disabled={!hasSelection} onClick={actions.delete}>
+          <button
+            type="button"
+            className={icon}
+            aria-label="Delete (Delete)"
+            title="Delete (Delete)"
+            disabled={!hasSelection}
+            onClick={actions.delete}
+          >
             <Trash2 size={18} />
           </button>
         </>

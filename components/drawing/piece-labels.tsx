@@ -22,18 +22,35 @@ export function PieceLabels({ piece, detail, isFaulty, isSelected }: PieceLabels
   const isUpright = piece.kind === 'terminalUnit' ? height > width : piece.rotation === 90 || piece.rotation === 270;
   const figure = <OverlayFigure piece={piece} />;
   const tag = piece.kind === 'tee' ? (isSelected || isFaulty) && piece.tag : piece.tag;
-  const fault = isFaulty && <span className="text-high" title="Faults: see the list">▴ </span>;
+  const fault = isFaulty && (
+    <span className="text-high" title="Faults: see the list">
+      ▴{' '}
+    </span>
+  );
 
   if (piece.kind === 'terminalUnit') {
     const side = piece.isMirrored && isUpright ? 'right-1/2 mr-5 items-end' : 'left-1/2 ml-5';
     return (
       <>
-        <Column className={isUpright ? classNames('top-1/2 -translate-y-1/2', side) : 'top-full left-1/2 mt-0.5 -translate-x-1/2 items-center'}>
+        <Column
+          className={isUpright ? classNames('top-1/2 -translate-y-1/2', side) : 'top-full left-1/2 mt-0.5 -translate-x-1/2 items-center'}
+        >
           {figure}
-          {(detail === 'near' || isFaulty || isSelected) && <span className="text-[calc(11px*var(--words))] text-quiet">{fault}{tag}</span>}
+          {(detail === 'near' || isFaulty || isSelected) && (
+            <span className="text-quiet text-[calc(11px*var(--words))]">
+              {fault}
+              {tag}
+            </span>
+          )}
         </Column>
         <IndexName piece={piece} />
-        <Column className={isUpright ? classNames('top-[calc(50%+33px)] -translate-y-1/2', piece.isMirrored ? 'right-1/2 mr-3.5' : 'left-1/2 ml-3.5') : 'top-1/2 left-full ml-1'}>
+        <Column
+          className={
+            isUpright
+              ? classNames('top-[calc(50%+33px)] -translate-y-1/2', piece.isMirrored ? 'right-1/2 mr-3.5' : 'left-1/2 ml-3.5')
+              : 'top-1/2 left-full ml-1'
+          }
+        >
           <SettingFigure piece={piece} />
         </Column>
       </>
@@ -43,17 +60,32 @@ export function PieceLabels({ piece, detail, isFaulty, isSelected }: PieceLabels
   const isBrass = piece.kind === 'balancingValve';
   return isUpright ? (
     <Column className="top-1/2 left-full ml-1 -translate-y-1/2">
-      <span className={classNames('text-[calc(12px*var(--words))] font-semibold', isBrass && 'text-brass')}>{fault}{tag} <SettingFigure piece={piece} /></span>
+      <span className={classNames('text-[calc(12px*var(--words))] font-semibold', isBrass && 'text-brass')}>
+        {fault}
+        {tag} <SettingFigure piece={piece} />
+      </span>
       {figure}
     </Column>
   ) : (
     <>
       {tag && (
-        <Column className={classNames('left-1/2 -translate-x-1/2', piece.kind === 'tee' ? 'bottom-full' : isBrass ? 'top-[calc(50%+10px)]' : 'bottom-[calc(50%+17px)]')}>
-          <span className={classNames('text-[calc(12px*var(--words))] font-semibold', isBrass && 'text-brass')}>{fault}{tag} <SettingFigure piece={piece} /></span>
+        <Column
+          className={classNames(
+            'left-1/2 -translate-x-1/2',
+            piece.kind === 'tee' ? 'bottom-full' : isBrass ? 'top-[calc(50%+10px)]' : 'bottom-[calc(50%+17px)]',
+          )}
+        >
+          <span className={classNames('text-[calc(12px*var(--words))] font-semibold', isBrass && 'text-brass')}>
+            {fault}
+            {tag} <SettingFigure piece={piece} />
+          </span>
         </Column>
       )}
-      <Column className={classNames('left-1/2 -translate-x-1/2 items-center', isBrass ? 'bottom-[calc(50%+12px)]' : 'top-[calc(50%+17px)]')}>{figure}</Column>
+      <Column
+        className={classNames('left-1/2 -translate-x-1/2 items-center', isBrass ? 'bottom-[calc(50%+12px)]' : 'top-[calc(50%+17px)]')}
+      >
+        {figure}
+      </Column>
     </>
   );
 }
@@ -65,7 +97,7 @@ const Column = ({ className, children }: { className: string; children: ReactNod
 function IndexName({ piece }: { piece: Equipment }) {
   const { figures } = useResults();
   if (!figures?.pieces.get(piece.id)?.isIndex) return null;
-  return <Column className="top-1.5 left-full ml-1 text-[calc(11px*var(--words))] font-semibold text-petrol">index</Column>;
+  return <Column className="text-petrol top-1.5 left-full ml-1 text-[calc(11px*var(--words))] font-semibold">index</Column>;
 }
 
 /** The setting that the balance found; where it has none, the one that the valve stands at. */
@@ -74,7 +106,9 @@ function SettingFigure({ piece }: { piece: Equipment }) {
   const chosen = piece.kind === 'balancingValve' ? piece.valve : piece.kind === 'terminalUnit' ? piece.balancingValve : null;
   if (!chosen) return null;
   const setting = figures?.pieces.get(piece.id)?.valve?.setting ?? chosen.settingTurns;
-  return setting === null || setting === undefined ? null : <span className="figures ml-1 text-[calc(12px*var(--words))] text-brass">{setting.toFixed(1)}</span>;
+  return setting === null || setting === undefined ? null : (
+    <span className="figures text-brass ml-1 text-[calc(12px*var(--words))]">{setting.toFixed(1)}</span>
+  );
 }
 
 function OverlayFigure({ piece }: { piece: Equipment }) {
@@ -86,19 +120,40 @@ function OverlayFigure({ piece }: { piece: Equipment }) {
   const figureClass = 'text-[calc(13px*var(--words))] font-bold';
   if (piece.kind === 'pump' && solution.pump && overlay !== 'pressure') {
     return (
-      <span className="text-[calc(12px*var(--words))] text-quiet">
+      <span className="text-quiet text-[calc(12px*var(--words))]">
         <Figure quantity="flow" si={solution.flowLs} hasUnit />, <Figure quantity="head" si={solution.pump.headM} hasUnit />
       </span>
     );
   }
-  if (overlay === 'pressure') return solution.inletKpa === null ? null : <Figure quantity="pressure" si={solution.inletKpa} className="text-[calc(11px*var(--words))]" />;
+  if (overlay === 'pressure')
+    return solution.inletKpa === null ? null : (
+      <Figure quantity="pressure" si={solution.inletKpa} className="text-[calc(11px*var(--words))]" />
+    );
   if (piece.kind === 'tee' || solution.flowLs === null) return null;
   if (overlay === 'percent') {
     if (piece.kind !== 'terminalUnit' || solution.percentOfDesign === null) return null;
     const verdict = verdictOf(solution.percentOfDesign, band);
-    return <span className={classNames('figures', figureClass, tones[verdict])}><span className="font-sans font-normal">{signs[verdict]}</span> {solution.percentOfDesign.toFixed(0)}</span>;
+    return (
+      <span className={classNames('figures', figureClass, tones[verdict])}>
+        <span className="font-sans font-normal">{signs[verdict]}</span> {solution.percentOfDesign.toFixed(0)}
+      </span>
+    );
   }
-  if (overlay === 'flow') return <Figure quantity="flow" si={Math.abs(solution.flowLs)} className={piece.kind === 'terminalUnit' ? figureClass : 'text-[calc(11px*var(--words))]'} />;
-  if (overlay === 'drop') return <Figure quantity="pressure" si={Math.abs(solution.dropKpa ?? 0)} className={piece.kind === 'terminalUnit' ? figureClass : 'text-[calc(11px*var(--words))]'} />;
+  if (overlay === 'flow')
+    return (
+      <Figure
+        quantity="flow"
+        si={Math.abs(solution.flowLs)}
+        className={piece.kind === 'terminalUnit' ? figureClass : 'text-[calc(11px*var(--words))]'}
+      />
+    );
+  if (overlay === 'drop')
+    return (
+      <Figure
+        quantity="pressure"
+        si={Math.abs(solution.dropKpa ?? 0)}
+        className={piece.kind === 'terminalUnit' ? figureClass : 'text-[calc(11px*var(--words))]'}
+      />
+    );
   return null;
 }

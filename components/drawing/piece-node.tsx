@@ -29,9 +29,15 @@ export const PieceNode = memo(function PieceNode({ id, data, selected, isConnect
 
   return (
     <div style={{ width, height }} className="relative">
-      {selected && piece.kind !== 'tee' && <div className="absolute -inset-1.5 rounded border-2 border-brass" />}
-      {selected && piece.kind === 'tee' && <div className="absolute inset-0.5 rounded-full border-2 border-brass" />}
-      <svg viewBox={`${-width / 2} ${-height / 2} ${width} ${height}`} width={width} height={height} className="absolute inset-0 overflow-visible" aria-hidden>
+      {selected && piece.kind !== 'tee' && <div className="border-brass absolute -inset-1.5 rounded border-2" />}
+      {selected && piece.kind === 'tee' && <div className="border-brass absolute inset-0.5 rounded-full border-2" />}
+      <svg
+        viewBox={`${-width / 2} ${-height / 2} ${width} ${height}`}
+        width={width}
+        height={height}
+        className="absolute inset-0 overflow-visible"
+        aria-hidden
+      >
         {index.has(piece.id) && piece.kind !== 'tee' && <IndexUnderlay piece={piece} />}
         <g transform={`rotate(${piece.rotation})${piece.isMirrored ? ' scale(-1 1)' : ''}`} color={inkOf(piece)}>
           <PieceSymbol piece={piece} />

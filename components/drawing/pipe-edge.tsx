@@ -39,9 +39,18 @@ export const PipeEdge = memo(function PipeEdge({ data, selected }: EdgeProps<Pip
     <>
       {index.has(pipe.id) && <path {...underlay} d={d} />}
       <path d={d} fill="none" stroke="transparent" strokeWidth={20} />
-      <path className="pipe-line" d={d} fill="none" stroke={colour} style={{ strokeWidth: `calc(${selected ? 2.5 : 1.5}px * var(--lines, 1))` }} strokeDasharray={pipe.circuit === 'return' ? '6 4' : undefined} />
+      <path
+        className="pipe-line"
+        d={d}
+        fill="none"
+        stroke={colour}
+        style={{ strokeWidth: `calc(${selected ? 2.5 : 1.5}px * var(--lines, 1))` }}
+        strokeDasharray={pipe.circuit === 'return' ? '6 4' : undefined}
+      />
       {detail !== 'far' && place.length >= SHORT && <FlowArrow at={place} flowLs={solution?.flowLs ?? 1} colour={colour} />}
-      {detail === 'near' && solution && place.length >= SHORT && <PipeFigure overlay={overlay} solution={solution} at={place} />}
+      {solution && place.length >= (detail === 'near' ? SHORT : 2 * SHORT) && detail !== 'far' && (
+        <PipeFigure overlay={overlay} solution={solution} at={place} />
+      )}
     </>
   );
 });
@@ -49,7 +58,13 @@ export const PipeEdge = memo(function PipeEdge({ data, selected }: EdgeProps<Pip
 function FlowArrow({ at, flowLs, colour }: { at: ReturnType<typeof labelPlace>; flowLs: number; colour: string }) {
   if (flowLs === 0) return null;
   const turn = (Math.atan2(at.along.y, at.along.x) * 180) / Math.PI + (flowLs < 0 ? 180 : 0);
-  return <path d="M5 0L-4 -3.5V3.5Z" fill={colour} style={{ transform: `translate(${at.x}px, ${at.y}px) rotate(${turn}deg) scale(var(--lines, 1))` }} />;
+  return (
+    <path
+      d="M5 0L-4 -3.5V3.5Z"
+      fill={colour}
+      style={{ transform: `translate(${at.x}px, ${at.y}px) rotate(${turn}deg) scale(var(--lines, 1))` }}
+    />
+  );
 }
 
 const pipeFigures: Partial<Record<Overlay, { quantity: Quantity; of: (solution: PipeSolution) => number }>> = {
@@ -70,7 +85,7 @@ function PipeFigure({ overlay, solution, at }: { overlay: Overlay; solution: Pip
       x={at.x + (isUpright ? 8 : 0)}
       y={at.y + (isUpright ? 4 : -8)}
       textAnchor={isUpright ? 'start' : 'middle'}
-      className="figures pointer-events-none fill-ink"
+      className="figures fill-ink pointer-events-none"
       style={{ paintOrder: 'stroke', stroke: 'var(--paper)', strokeWidth: 4, fontSize: 'calc(11px * var(--words, 1))' }}
     >
       {text}

@@ -12,7 +12,9 @@ import type { Editor } from './editor-context';
 export const ON_PIPE_PX = 14;
 
 const tellSplit = (what: string, pipe: DrawingPipe) =>
-  toast(`${what} put on the pipe. ${pipe.lengthM === null ? 'The pipe has no length yet.' : `Its ${pipe.lengthM} m are shared evenly: ${pipe.lengthM / 2} m each.`}`);
+  toast(
+    `${what} put on the pipe. ${pipe.lengthM === null ? 'The pipe has no length yet.' : `Its ${pipe.lengthM} m are shared evenly: ${pipe.lengthM / 2} m each.`}`,
+  );
 
 /** A new piece at a point of the sheet; on a pipe it goes between its two halves. One step of the history. */
 export function placePiece({ drawingStore, canvasStore }: Editor, kind: EquipmentKind, at: Point, withinUnits: number): void {
@@ -52,9 +54,19 @@ export function joinEnds({ drawingStore, canvasStore }: Editor, a: PipeEnd, b: P
 }
 
 /** Ends a pipe in the middle of another one: a tee there, and the pipe to it, in one step. */
-export function joinToPipe({ drawingStore, canvasStore }: Editor, start: PipeEnd, at: Point, withinUnits: number, bends: Point[] = []): boolean {
+export function joinToPipe(
+  { drawingStore, canvasStore }: Editor,
+  start: PipeEnd,
+  at: Point,
+  withinUnits: number,
+  bends: Point[] = [],
+): boolean {
   const { drawing, change } = drawingStore.getState();
-  const own = new Set(drawing.pipes.filter(({ from, to }) => from.equipmentId === start.equipmentId || to.equipmentId === start.equipmentId).map(({ id }) => id));
+  const own = new Set(
+    drawing.pipes
+      .filter(({ from, to }) => from.equipmentId === start.equipmentId || to.equipmentId === start.equipmentId)
+      .map(({ id }) => id),
+  );
   const found = pipeAt(drawing, at, withinUnits, own);
   if (!found) return false;
   const { drawing: withTee, tee } = insertTee(drawing, found);

@@ -10,7 +10,12 @@ import type { BalancedValve } from '@/lib/hydraulics/types';
 import { useDrawing, useEditor, useResults } from './editor-context';
 import { useShowPlace } from './show-place';
 
-const stateWords: Record<BalancedValve['state'], string> = { open: 'open', throttled: 'throttled', 'too-small': '▴ too small', 'too-large': '▾ too large' };
+const stateWords: Record<BalancedValve['state'], string> = {
+  open: 'open',
+  throttled: 'throttled',
+  'too-small': '▴ too small',
+  'too-large': '▾ too large',
+};
 const head = 'py-1 pl-2 text-right align-bottom text-xs font-semibold';
 const cell = 'py-1 pl-2 text-right';
 
@@ -21,11 +26,16 @@ export function SettingsTable() {
   const drawing = useDrawing((it) => it);
   const show = useShowPlace();
   const balance = solved?.balance;
-  if (!balance) return <p className="py-4 text-sm text-quiet">{solved?.balanceMissing ?? 'Settings appear here once the drawing can be solved.'}</p>;
+  if (!balance)
+    return <p className="text-quiet py-4 text-sm">{solved?.balanceMissing ?? 'Settings appear here once the drawing can be solved.'}</p>;
   const adopt = () => {
     const { drawing: adopted, count } = adoptSettings(drawingStore.getState().drawing, balance.valves);
     if (count) drawingStore.getState().change(() => adopted);
-    toast(count ? `${count} ${count === 1 ? 'valve takes its setting' : 'valves take their settings'} of the balance. Ctrl Z takes it back.` : 'The valves already stand so.');
+    toast(
+      count
+        ? `${count} ${count === 1 ? 'valve takes its setting' : 'valves take their settings'} of the balance. Ctrl Z takes it back.`
+        : 'The valves already stand so.',
+    );
   };
   return (
     <div className="flex flex-col gap-4">
@@ -33,19 +43,29 @@ export function SettingsTable() {
         <h3>Pump duty</h3>
         <table className="mt-1 w-full text-sm">
           <thead>
-            <tr className="border-b text-quiet">
+            <tr className="text-quiet border-b">
               <th className="py-1 text-left text-xs font-semibold">Pump</th>
-              <th className={head}>Flow <UnitName quantity="flow" /></th>
-              <th className={head}>Head <UnitName quantity="head" /></th>
+              <th className={head}>
+                Flow <UnitName quantity="flow" />
+              </th>
+              <th className={head}>
+                Head <UnitName quantity="head" />
+              </th>
               <th className={head}>Speed %</th>
             </tr>
           </thead>
           <tbody>
             {balance.pumps.map((pump) => (
               <tr key={pump.id} className="border-b">
-                <th scope="row" className="py-1 text-left font-normal"><PlaceButton id={pump.id} drawing={drawing} onPress={show} /></th>
-                <td className={cell}><Figure quantity="flow" si={pump.flowLs} /></td>
-                <td className={cell}><Figure quantity="head" si={pump.requiredHeadM} /></td>
+                <th scope="row" className="py-1 text-left font-normal">
+                  <PlaceButton id={pump.id} drawing={drawing} onPress={show} />
+                </th>
+                <td className={cell}>
+                  <Figure quantity="flow" si={pump.flowLs} />
+                </td>
+                <td className={cell}>
+                  <Figure quantity="head" si={pump.requiredHeadM} />
+                </td>
                 <td className={`${cell} figures`}>{(pump.speed * 100).toFixed(1)}</td>
               </tr>
             ))}
@@ -63,11 +83,17 @@ export function SettingsTable() {
         </div>
         <table className="mt-1 w-full text-sm">
           <thead>
-            <tr className="border-b text-quiet">
+            <tr className="text-quiet border-b">
               <th className="py-1 text-left text-xs font-semibold">Valve</th>
-              <th className={head}>Setting <UnitName quantity="setting" /></th>
-              <th className={head}><UnitName quantity="valveCoefficient" /></th>
-              <th className={head}>Drop <UnitName quantity="pressure" /></th>
+              <th className={head}>
+                Setting <UnitName quantity="setting" />
+              </th>
+              <th className={head}>
+                <UnitName quantity="valveCoefficient" />
+              </th>
+              <th className={head}>
+                Drop <UnitName quantity="pressure" />
+              </th>
             </tr>
           </thead>
           <tbody>
@@ -75,11 +101,17 @@ export function SettingsTable() {
               <tr key={valve.id} className="border-b">
                 <th scope="row" className="py-1 text-left font-normal">
                   <PlaceButton id={valve.id} drawing={drawing} onPress={show} />
-                  <span className={`block text-xs ${valve.state.startsWith('too') ? 'text-high' : 'text-quiet'}`}>{stateWords[valve.state]}</span>
+                  <span className={`block text-xs ${valve.state.startsWith('too') ? 'text-high' : 'text-quiet'}`}>
+                    {stateWords[valve.state]}
+                  </span>
                 </th>
-                <td className={`${cell} figures font-bold text-brass`}>{valve.setting.toFixed(2)}</td>
-                <td className={cell}><Figure quantity="valveCoefficient" si={valve.kv} /></td>
-                <td className={cell}><Figure quantity="pressure" si={valve.dropKpa} /></td>
+                <td className={`${cell} figures text-brass font-bold`}>{valve.setting.toFixed(2)}</td>
+                <td className={cell}>
+                  <Figure quantity="valveCoefficient" si={valve.kv} />
+                </td>
+                <td className={cell}>
+                  <Figure quantity="pressure" si={valve.dropKpa} />
+                </td>
               </tr>
             ))}
           </tbody>

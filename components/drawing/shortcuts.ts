@@ -2,9 +2,30 @@ import type { Tool } from './canvas-state';
 
 /** Everything that can be done on the canvas, by name. Each has a key and an entry in the Edit menu. */
 export const actionIds = [
-  'undo', 'redo', 'cut', 'copy', 'paste', 'duplicate', 'delete', 'select-all', 'rotate', 'mirror', 'join',
-  'nudge-left', 'nudge-right', 'nudge-up', 'nudge-down', 'place', 'find', 'fit', 'zoom-in', 'zoom-out', 'next-overlay', 'escape', 'shortcuts',
-] as const; // prettier-ignore
+  'undo',
+  'redo',
+  'cut',
+  'copy',
+  'paste',
+  'duplicate',
+  'delete',
+  'select-all',
+  'rotate',
+  'mirror',
+  'join',
+  'nudge-left',
+  'nudge-right',
+  'nudge-up',
+  'nudge-down',
+  'place',
+  'find',
+  'fit',
+  'zoom-in',
+  'zoom-out',
+  'next-overlay',
+  'escape',
+  'shortcuts',
+] as const;
 export type ActionId = (typeof actionIds)[number];
 
 export interface Shortcut<Id extends string = string> {
@@ -73,7 +94,8 @@ export function shortcutFor(press: Press): { action: ActionId } | { tool: Tool }
   const mod = press.ctrlKey || press.metaKey;
   // A sign such as "?" or "+" needs Shift on many keyboards: there it says nothing.
   const isSign = key.length === 1 && !/[a-z]/.test(key);
-  const fits = (it: Shortcut) => it.key === key && Boolean(it.mod) === mod && (isSign || key.startsWith('arrow') || Boolean(it.shift) === press.shiftKey);
+  const fits = (it: Shortcut) =>
+    it.key === key && Boolean(it.mod) === mod && (isSign || key.startsWith('arrow') || Boolean(it.shift) === press.shiftKey);
   const action = [...editShortcuts, ...viewShortcuts].find(fits);
   if (action) return { action: action.id };
   const tool = toolShortcuts.find(fits);

@@ -12,9 +12,15 @@ export function showAll(view: ReactFlowInstance, { equipment, storeys }: Drawing
     const room = Math.max(height * HEAD_ROOM, 60);
     // A drawing of few pieces is not blown up to fill the view.
     const least = { width: Math.max(width, 700), height: Math.max(height, 420) };
-    view.fitBounds({ x: left - (least.width - width) / 2, y: top - room - (least.height - height) / 2, width: least.width, height: least.height + room }, { padding: 0.06, duration });
+    view.fitBounds(
+      { x: left - (least.width - width) / 2, y: top - room - (least.height - height) / 2, width: least.width, height: least.height + room },
+      { padding: 0.06, duration },
+    );
   } else if (storeys.length > 0) {
     const top = Math.min(...storeys.map((it) => it.top));
-    view.fitBounds({ x: -80, y: top, width: 900, height: Math.max(...storeys.map((it) => it.top + it.height)) - top }, { padding: 0.02, duration });
+    view.fitBounds(
+      { x: -80, y: top, width: 900, height: Math.max(...storeys.map((it) => it.top + it.height)) - top },
+      { padding: 0.02, duration },
+    );
   }
 }

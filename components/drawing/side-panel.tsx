@@ -9,7 +9,8 @@ import { FaultsList } from './faults-list';
 import { Inspector } from './inspector/inspector';
 import { SettingsTable } from './settings-table';
 
-const tab = 'min-h-10 border-b-2 border-transparent px-1 text-sm font-semibold text-quiet data-[state=active]:border-brass data-[state=active]:text-ink pointer-coarse:min-h-11';
+const tab =
+  'min-h-10 border-b-2 border-transparent px-1 text-sm font-semibold text-quiet data-[state=active]:border-brass data-[state=active]:text-ink pointer-coarse:min-h-11';
 
 /** Beside the canvas, on narrow screens a sheet from below: properties, settings, faults. */
 export function SidePanel() {
@@ -21,12 +22,16 @@ export function SidePanel() {
     <aside
       aria-label="Figures"
       className={classNames(
-        'z-20 flex shrink-0 flex-col border-t bg-sheet md:w-[21rem] md:border-t-0 md:border-l',
+        'bg-sheet z-20 flex shrink-0 flex-col border-t md:w-[21rem] md:border-t-0 md:border-l',
         'max-md:absolute max-md:inset-x-0 max-md:bottom-0 max-md:shadow-[0_-4px_16px_rgb(0_0_0/0.12)]',
         isOpen ? 'max-md:max-h-[62dvh]' : 'max-md:max-h-12',
       )}
     >
-      <Tabs.Root value={page} onValueChange={(value) => canvasStore.setState({ page: value as PanelPage, isSheetOpen: true })} className="flex min-h-0 flex-1 flex-col">
+      <Tabs.Root
+        value={page}
+        onValueChange={(value) => canvasStore.setState({ page: value as PanelPage, isSheetOpen: true })}
+        className="flex min-h-0 flex-1 flex-col"
+      >
         <div className="flex shrink-0 items-center border-b px-4">
           <Tabs.List aria-label="Figures" className="flex flex-1 gap-4">
             <Tabs.Trigger value="properties" className={tab}>
@@ -43,14 +48,18 @@ export function SidePanel() {
             type="button"
             aria-expanded={isOpen}
             aria-label={isOpen ? 'Close the sheet' : 'Open the sheet'}
-            className="-mr-2 inline-flex size-11 items-center justify-center text-quiet md:hidden"
+            className="text-quiet -mr-2 inline-flex size-11 items-center justify-center md:hidden"
             onClick={() => canvasStore.setState({ isSheetOpen: !isOpen })}
           >
             {isOpen ? <ChevronDown size={20} /> : <ChevronUp size={20} />}
           </button>
         </div>
         {(['properties', 'settings', 'faults'] as const).map((value) => (
-          <Tabs.Content key={value} value={value} className={classNames('min-h-0 flex-1 overflow-y-auto px-4 py-3', !isOpen && 'max-md:hidden')}>
+          <Tabs.Content
+            key={value}
+            value={value}
+            className={classNames('min-h-0 flex-1 overflow-y-auto px-4 py-3', !isOpen && 'max-md:hidden')}
+          >
             {value === 'properties' ? <Inspector /> : value === 'settings' ? <SettingsTable /> : <FaultsList />}
           </Tabs.Content>
         ))}

@@ -21,10 +21,25 @@ export function StatusBar({ saving, onCompare, solveError, revision }: StatusBar
   const zoom = useStore(({ transform }) => Math.round(transform[2] * 100));
   const errors = faults.filter(({ severity }) => severity === 'error').length;
   const warnings = faults.length - errors;
-  const parts = [errors && `${errors} ${errors === 1 ? 'fault' : 'faults'}`, warnings && `${warnings} ${warnings === 1 ? 'warning' : 'warnings'}`].filter(Boolean).join(', ');
+  const parts = [
+    errors && `${errors} ${errors === 1 ? 'fault' : 'faults'}`,
+    warnings && `${warnings} ${warnings === 1 ? 'warning' : 'warnings'}`,
+  ]
+    .filter(Boolean)
+    .join(', ');
   return (
-    <footer className="flex min-h-8 flex-wrap items-center gap-x-5 border-t bg-sheet px-4 py-1 text-xs">
-      <span role="status">{solved || solveError ? <SolveWords error={solveError} /> : errors ? 'Not solved: faults stand in the drawing' : isOld ? '○ Solving…' : 'Nothing to solve yet'}</span>
+    <footer className="bg-sheet flex min-h-8 flex-wrap items-center gap-x-5 border-t px-4 py-1 text-xs">
+      <span role="status">
+        {solved || solveError ? (
+          <SolveWords error={solveError} />
+        ) : errors ? (
+          'Not solved: faults stand in the drawing'
+        ) : isOld ? (
+          '○ Solving…'
+        ) : (
+          'Nothing to solve yet'
+        )}
+      </span>
       {faults.length > 0 && (
         <button
           type="button"
@@ -34,14 +49,20 @@ export function StatusBar({ saving, onCompare, solveError, revision }: StatusBar
           {errors ? '▴' : '△'} {parts}: {faults[0].message}
         </button>
       )}
-      <span className="ml-auto text-quiet">{revision}</span>
-      {saving && <span role="status" className={saving.startsWith('▴') ? 'text-high' : 'text-quiet'}>{saving}</span>}
+      <span className="text-quiet ml-auto">{revision}</span>
+      {saving && (
+        <span role="status" className={saving.startsWith('▴') ? 'text-high' : 'text-quiet'}>
+          {saving}
+        </span>
+      )}
       {onCompare && (
-        <button type="button" className="min-h-6 font-semibold text-petrol hover:underline" onClick={onCompare}>
+        <button type="button" className="text-petrol min-h-6 font-semibold hover:underline" onClick={onCompare}>
           Compare and save
         </button>
       )}
-      <span className="figures text-quiet" aria-label="Scale">{zoom} %</span>
+      <span className="figures text-quiet" aria-label="Scale">
+        {zoom} %
+      </span>
     </footer>
   );
 }
@@ -51,7 +72,12 @@ function SolveWords({ error }: { error: string | null }) {
   if (error) return <span className="text-high">▴ Not solved: {error}</span>;
   if (!solved?.solve) return <>Settings as issued</>;
   const { converged, iterations, residuals } = solved.solve;
-  if (!converged) return <span className="text-high">▴ No converged solution after {iterations} iterations, worst loop {digits(residuals.loopPa)} Pa</span>;
+  if (!converged)
+    return (
+      <span className="text-high">
+        ▴ No converged solution after {iterations} iterations, worst loop {digits(residuals.loopPa)} Pa
+      </span>
+    );
   const words = `Solved in ${solved.solveMs < 10 ? solved.solveMs.toFixed(1) : solved.solveMs.toFixed(0)} ms, ${iterations} iterations, worst loop ${residuals.loopPa < 0.001 ? 'under 0.001' : residuals.loopPa.toFixed(3)} Pa`;
   return <>{isOld ? `○ Solving… (before: ${words})` : `● ${words}`}</>;
 }
@@ -65,7 +91,9 @@ export function savingWords(state: SaveState): string {
     case 'saving':
       return 'Saving…';
     case 'offline':
-      return state.isKept ? 'Not saved: no connection, keeping it here' : '▴ Not saved: no connection, and this browser has no room to keep it. Leave the page open.';
+      return state.isKept
+        ? 'Not saved: no connection, keeping it here'
+        : '▴ Not saved: no connection, and this browser has no room to keep it. Leave the page open.';
     case 'refused':
       return `▴ Not saved: ${state.message}`;
     case 'conflict':

@@ -16,9 +16,9 @@ export function StoreyBands() {
         const top = storey.top * zoom + y;
         const bottom = (storey.top + storey.height) * zoom + y;
         return (
-          <div key={storey.id} className="absolute inset-x-0 border-b-2 border-rule" style={{ top, height: bottom - top }}>
+          <div key={storey.id} className="border-rule absolute inset-x-0 border-b-2" style={{ top, height: bottom - top }}>
             {bottom - top > 2 * NAME_AT && (
-              <p className="absolute bottom-1 left-3 text-xs font-semibold text-quiet">
+              <p className="text-quiet absolute bottom-1 left-3 text-xs font-semibold">
                 {storey.name} <Figure quantity="length" si={storey.elevationM} hasUnit className="ml-1 font-normal" />
               </p>
             )}

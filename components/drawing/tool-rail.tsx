@@ -15,7 +15,12 @@ export function ToolRail() {
   const chosen = useCanvas((state) => state.tool);
   return (
     <Tooltip.Provider delayDuration={250}>
-      <div role="toolbar" aria-label="Tools" aria-orientation="vertical" className="hidden w-14 shrink-0 flex-col items-center gap-0.5 overflow-y-auto border-r bg-sheet py-2 md:flex pointer-coarse:w-16">
+      <div
+        role="toolbar"
+        aria-label="Tools"
+        aria-orientation="vertical"
+        className="bg-sheet hidden w-14 shrink-0 flex-col items-center gap-0.5 overflow-y-auto border-r py-2 md:flex pointer-coarse:w-16"
+      >
         {toolShortcuts.map(({ id, label, keys }) => (
           <Tooltip.Root key={id}>
             <Tooltip.Trigger asChild>
@@ -27,7 +32,7 @@ export function ToolRail() {
                 onDragStart={(event) => event.dataTransfer.setData(draggedKind, id)}
                 onClick={() => canvasStore.setState({ tool: id, pipeStart: null })}
                 className={classNames(
-                  'flex size-11 shrink-0 items-center justify-center rounded border hover:bg-well pointer-coarse:size-12',
+                  'hover:bg-well flex size-11 shrink-0 items-center justify-center rounded border pointer-coarse:size-12',
                   chosen === id ? 'border-brass bg-well' : 'border-transparent',
                 )}
               >
@@ -35,8 +40,8 @@ export function ToolRail() {
               </button>
             </Tooltip.Trigger>
             <Tooltip.Portal>
-              <Tooltip.Content side="right" sideOffset={6} className="z-50 rounded border bg-sheet px-2 py-1 text-sm shadow">
-                {label} <kbd className="ml-1 text-quiet">{keys}</kbd>
+              <Tooltip.Content side="right" sideOffset={6} className="bg-sheet z-50 rounded border px-2 py-1 text-sm shadow">
+                {label} <kbd className="text-quiet ml-1">{keys}</kbd>
               </Tooltip.Content>
             </Tooltip.Portal>
           </Tooltip.Root>

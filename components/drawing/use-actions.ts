@@ -42,7 +42,11 @@ function viewing({ canvasStore, drawingStore }: Editor, view: ReactFlowInstance)
     },
     'select-all': () => {
       const { equipment, pipes } = drawingStore.getState().drawing;
-      selectOnly(canvasStore, equipment.map(({ id }) => id), pipes.map(({ id }) => id)); // prettier-ignore
+      selectOnly(
+        canvasStore,
+        equipment.map(({ id }) => id),
+        pipes.map(({ id }) => id),
+      );
     },
     copy: () => {
       const { pieces } = canvasStore.getState();
@@ -70,7 +74,11 @@ function editing(editor: Editor, view: ReactFlowInstance): Omit<Actions, ViewAct
   const addCopy = (made: ReturnType<typeof addPart>) => {
     if (made.added.equipment.length === 0) return;
     change(() => made.drawing);
-    selectOnly(canvasStore, made.added.equipment.map(({ id }) => id), made.added.pipes.map(({ id }) => id)); // prettier-ignore
+    selectOnly(
+      canvasStore,
+      made.added.equipment.map(({ id }) => id),
+      made.added.pipes.map(({ id }) => id),
+    );
   };
   const actions: Omit<Actions, ViewAction> = {
     undo: () => drawingStore.temporal.getState().undo(),

@@ -33,7 +33,7 @@ export function Workspace({ bar, status, hasBothBases }: WorkspaceProps) {
         {canEdit && <ToolRail />}
         <div className="relative min-w-0 flex-1">
           <Canvas />
-          <div className="pointer-events-none absolute inset-x-3 top-3 z-10 flex items-start justify-between gap-2 max-lg:flex-col-reverse *:pointer-events-auto">
+          <div className="pointer-events-none absolute inset-x-3 top-3 z-10 flex items-start justify-between gap-2 *:pointer-events-auto max-lg:flex-col-reverse">
             <Legend hasBothBases={hasBothBases} />
             <OverlayPicker />
           </div>
@@ -50,14 +50,15 @@ export function Workspace({ bar, status, hasBothBases }: WorkspaceProps) {
 
 const EmptyDrawing = ({ canEdit }: { canEdit: boolean }) => (
   <div className="pointer-events-none absolute inset-0 flex items-center justify-center p-6">
-    <div className="max-w-sm rounded border bg-sheet px-5 py-4">
+    <div className="bg-sheet max-w-sm rounded border px-5 py-4">
       <h2>Nothing drawn yet</h2>
       {canEdit ? (
-        <p className="mt-1 text-sm text-quiet">
-          Choose a pump at the left and press on the canvas. Drag from the end of one piece to the end of another to join them with a pipe. Press ? for all keys.
+        <p className="text-quiet mt-1 text-sm">
+          Choose a pump at the left and press on the canvas. Drag from the end of one piece to the end of another to join them with a pipe.
+          Press ? for all keys.
         </p>
       ) : (
-        <p className="mt-1 text-sm text-quiet">The designer has not drawn this loop.</p>
+        <p className="text-quiet mt-1 text-sm">The designer has not drawn this loop.</p>
       )}
     </div>
   </div>

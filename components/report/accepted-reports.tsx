@@ -13,12 +13,12 @@ export function AcceptedReports({ accepted, loopId }: { accepted: ReportBody['ac
           <li key={number} className="flex break-inside-avoid flex-col gap-2 py-3">
             <div>
               <span className="font-semibold">Report {number}</span>
-              <span className="block text-sm text-quiet">
+              <span className="text-quiet block text-sm">
                 accepted <Moment at={acceptedAt} />
               </span>
             </div>
             <DownloadButton loopId={loopId} number={number} />
-            <p className="text-xs text-quiet">
+            <p className="text-quiet text-xs">
               SHA-256 of the file <span className="figures block break-all">{sha256}</span>
             </p>
           </li>

@@ -16,9 +16,12 @@ export function CorrectedEntries({ content: { readings } }: { content: ReportCon
       <ul className="divide-y">
         {corrections.map(({ wrong, right }) => (
           <li key={wrong.id} className="break-inside-avoid py-2">
-            <span className="font-semibold">{right.tag}</span> <s className="text-quiet"><Figure quantity="flow" si={wrong.flowLs} hasUnit /></s>{' '}
+            <span className="font-semibold">{right.tag}</span>{' '}
+            <s className="text-quiet">
+              <Figure quantity="flow" si={wrong.flowLs} hasUnit />
+            </s>{' '}
             <span aria-hidden>→</span> <Figure quantity="flow" si={right.flowLs} hasUnit />
-            <span className="block text-sm text-quiet">
+            <span className="text-quiet block text-sm">
               {right.note}. {right.takenBy}, <Moment at={right.takenAt} />
             </span>
           </li>

@@ -10,11 +10,16 @@ export function DownloadButton({ loopId, number }: { loopId: string; number?: nu
   const download = useMutation({ mutationFn: () => downloadWorkbook(loopId, number) });
   return (
     <div className="flex flex-col gap-1 print:hidden">
-      <Button size={number ? 'small' : 'medium'} isPending={download.isPending} pendingText="Making the workbook…" onClick={() => download.mutate()}>
+      <Button
+        size={number ? 'small' : 'medium'}
+        isPending={download.isPending}
+        pendingText="Making the workbook…"
+        onClick={() => download.mutate()}
+      >
         <Download size={16} aria-hidden /> {number ? `Download report ${number}` : 'Download workbook'}
       </Button>
       {download.error && (
-        <p role="alert" className="max-w-xs text-sm text-high">
+        <p role="alert" className="text-high max-w-xs text-sm">
           ▴ {download.error.message}
         </p>
       )}

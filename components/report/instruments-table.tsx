@@ -24,12 +24,12 @@ export function InstrumentsTable({ content: { instruments, readings } }: { conte
               <tr key={instrument.id}>
                 <RowName className="whitespace-normal!">
                   {instrument.serial}
-                  <span className="block text-xs font-normal text-quiet">{instrument.name}</span>
+                  <span className="text-quiet block text-xs font-normal">{instrument.name}</span>
                 </RowName>
                 <Words className="figures whitespace-nowrap">{instrument.calibratedOn ?? '–'}</Words>
                 <Words>
                   <span className="figures whitespace-nowrap">{instrument.calibrationDueOn ?? '–'}</span>
-                  {overdue > 0 && <span className="block text-xs whitespace-nowrap text-high">▴ overdue for {overdue}</span>}
+                  {overdue > 0 && <span className="text-high block text-xs whitespace-nowrap">▴ overdue for {overdue}</span>}
                 </Words>
                 <Figures>{entries.length}</Figures>
               </tr>

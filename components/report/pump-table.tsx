@@ -15,24 +15,46 @@ export function PumpTable({ content }: { content: ReportContent }) {
         <thead>
           <tr>
             <Head>Pump</Head>
-            <Head isFigure unit={<UnitName quantity="flow" />}>Design</Head>
-            <Head isFigure unit={<UnitName quantity="head" />}>Head</Head>
-            <Head isFigure unit="% of full">Speed</Head>
-            <Head isFigure unit={<UnitName quantity="power" />} className={onlyWide}>Shaft</Head>
-            <Head isFigure unit={<UnitName quantity="flow" />}>Measured</Head>
-            <Head isFigure unit="%">Of design</Head>
+            <Head isFigure unit={<UnitName quantity="flow" />}>
+              Design
+            </Head>
+            <Head isFigure unit={<UnitName quantity="head" />}>
+              Head
+            </Head>
+            <Head isFigure unit="% of full">
+              Speed
+            </Head>
+            <Head isFigure unit={<UnitName quantity="power" />} className={onlyWide}>
+              Shaft
+            </Head>
+            <Head isFigure unit={<UnitName quantity="flow" />}>
+              Measured
+            </Head>
+            <Head isFigure unit="%">
+              Of design
+            </Head>
           </tr>
         </thead>
         <tbody>
           {pumps.map(({ station, duty }) => (
             <tr key={station.id}>
               <RowName>{station.tag}</RowName>
-              <Figures><Figure quantity="flow" si={duty.flowLs} /></Figures>
-              <Figures><Figure quantity="head" si={duty.requiredHeadM} /></Figures>
+              <Figures>
+                <Figure quantity="flow" si={duty.flowLs} />
+              </Figures>
+              <Figures>
+                <Figure quantity="head" si={duty.requiredHeadM} />
+              </Figures>
               <Figures>{(duty.speed * 100).toFixed(1)}</Figures>
-              <Figures className={onlyWide}><Figure quantity="power" si={duty.shaftKw} /></Figures>
-              <Figures><Figure quantity="flow" si={station.reading?.flowLs} /></Figures>
-              <Figures><OfDesign content={content} station={station} /></Figures>
+              <Figures className={onlyWide}>
+                <Figure quantity="power" si={duty.shaftKw} />
+              </Figures>
+              <Figures>
+                <Figure quantity="flow" si={station.reading?.flowLs} />
+              </Figures>
+              <Figures>
+                <OfDesign content={content} station={station} />
+              </Figures>
             </tr>
           ))}
         </tbody>

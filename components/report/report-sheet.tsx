@@ -24,7 +24,11 @@ interface ReportSheetProps {
   commissioningHref: string;
 }
 
-const mediumWords: Record<string, string> = { water: 'water', 'propylene-glycol': 'propylene glycol', 'ethylene-glycol': 'ethylene glycol' };
+const mediumWords: Record<string, string> = {
+  water: 'water',
+  'propylene-glycol': 'propylene glycol',
+  'ethylene-glycol': 'ethylene glycol',
+};
 
 /** What will be handed over, as a sheet that reads on a phone and on paper. */
 export function ReportSheet({ report, loopId, commissioningHref }: ReportSheetProps) {
@@ -41,7 +45,10 @@ export function ReportSheet({ report, loopId, commissioningHref }: ReportSheetPr
       </div>
       {content.readings.length === 0 && (
         <Notice tone="brass" title="Nothing is measured yet">
-          Terminals and settings below are those of the design. What is measured appears here entry by entry. <Link href={commissioningHref}>To the stations</Link>
+          Below is what the design asks. What is measured appears here entry by entry.{' '}
+          <Link href={commissioningHref} className="underline">
+            To the stations
+          </Link>
         </Notice>
       )}
       <Summary content={content} strip={report.strip} band={report.band} />
@@ -53,7 +60,7 @@ export function ReportSheet({ report, loopId, commissioningHref }: ReportSheetPr
             <ToleranceTable tolerances={content.tolerances} />
           </Sheet>
         </div>
-        <div className="flex min-w-0 flex-col gap-5 lg:order-1 print:space-y-5 print:block">
+        <div className="flex min-w-0 flex-col gap-5 lg:order-1 print:block print:space-y-5">
           <TerminalsTable content={content} />
           <BranchValvesTable content={content} />
           <PumpTable content={content} />
@@ -62,8 +69,8 @@ export function ReportSheet({ report, loopId, commissioningHref }: ReportSheetPr
           <InstrumentsTable content={content} />
         </div>
       </div>
-      <p className="max-w-prose text-sm text-quiet">{cautionSentence}</p>
-      <p className="text-xs text-quiet">
+      <p className="text-quiet max-w-prose text-sm">{cautionSentence}</p>
+      <p className="text-quiet text-xs">
         SHA-256 of this content <span className="figures break-all">{contentSha256}</span>
       </p>
     </div>
@@ -76,9 +83,14 @@ function ReportTitle({ content: { loop, project, revision, fluid, organization }
     <div className="min-w-0">
       <h1>Commissioning report, {loop.name}</h1>
       <p className="text-quiet">{[project.name, project.building, project.client || organization].filter(Boolean).join(' · ')}</p>
-      <p className="text-sm text-quiet">
-        Revision {revision.number}, issued by {revision.issuedBy} <Moment at={revision.issuedAt} />. {loop.service === 'chilled' ? 'Chilled' : 'Hot'} water loop, {mediumWords[fluid.medium] ?? fluid.medium}
-        {mixture} <span className="figures">{fluid.supplyC}/{fluid.returnC}</span> °C.
+      <p className="text-quiet text-sm">
+        Revision {revision.number}, issued by {revision.issuedBy} <Moment at={revision.issuedAt} />.{' '}
+        {loop.service === 'chilled' ? 'Chilled' : 'Hot'} water loop, {mediumWords[fluid.medium] ?? fluid.medium}
+        {mixture}{' '}
+        <span className="figures">
+          {fluid.supplyC}/{fluid.returnC}
+        </span>{' '}
+        °C.
       </p>
     </div>
   );

@@ -25,7 +25,9 @@ export function RoundsTable({ content: { rounds, readings } }: { content: Report
               </RowName>
               <Figures>{readings.filter(({ roundId }) => roundId === round.id).length}</Figures>
               <Words>{round.startedBy}</Words>
-              <Words className="whitespace-nowrap"><Moment at={round.startedAt} /></Words>
+              <Words className="whitespace-nowrap">
+                <Moment at={round.startedAt} />
+              </Words>
             </tr>
           ))}
         </tbody>

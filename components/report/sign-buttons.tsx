@@ -21,7 +21,12 @@ export function SignButtons({ loopId, maySign, contentSha256, notMeasured }: Sig
   return (
     <>
       {maySign.map((meaning) => (
-        <Button key={meaning} look={meaning === 'returned' ? 'danger' : 'primary'} className="print:hidden" onClick={() => setOpen(meaning)}>
+        <Button
+          key={meaning}
+          look={meaning === 'returned' ? 'danger' : 'primary'}
+          className="print:hidden"
+          onClick={() => setOpen(meaning)}
+        >
           {signingWords[meaning].action}
         </Button>
       ))}

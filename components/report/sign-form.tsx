@@ -58,8 +58,12 @@ export function SignForm({ loopId, meaning, contentSha256, notMeasured, note, on
           {notMeasured.length > 12 && ` and ${notMeasured.length - 12} more`}. Say in the note why.
         </Notice>
       )}
-      <TextArea label={meaning === 'returned' || asksWhy ? 'Note' : 'Note, if there is something to say'} error={errors.note?.message} {...form.register('note', { onChange: (event: { target: { value: string } }) => onNote(event.target.value) })} />
-      <p className="text-sm text-quiet">
+      <TextArea
+        label={meaning === 'returned' || asksWhy ? 'Note' : 'Note, if there is something to say'}
+        error={errors.note?.message}
+        {...form.register('note', { onChange: (event: { target: { value: string } }) => onNote(event.target.value) })}
+      />
+      <p className="text-quiet text-sm">
         SHA-256 of what you sign: <ShortSha256 sha256={contentSha256} />
       </p>
       <FormTrouble message={errors.root?.message} />

@@ -36,7 +36,12 @@ export const signingWords: Record<Meaning, SigningWords> = {
   },
 };
 
-export const meaningWords: Record<Meaning, string> = { submitted: 'Submitted', reviewed: 'Reviewed', returned: 'Returned', accepted: 'Accepted' };
+export const meaningWords: Record<Meaning, string> = {
+  submitted: 'Submitted',
+  reviewed: 'Reviewed',
+  returned: 'Returned',
+  accepted: 'Accepted',
+};
 
 /** Who is next, for whoever reads the page. */
 export const nextWords: Record<LoopState, string> = {

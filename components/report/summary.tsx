@@ -15,8 +15,8 @@ export function Summary({ content, strip, band }: { content: ReportContent } & P
   const { worst, notMeasured, terminals } = summary;
   const verdict = worst && verdictOf(content, worst);
   return (
-    <section aria-label="Summary" className="break-inside-avoid rounded border bg-sheet px-4 pt-4 pb-3">
-      <div className="flex items-baseline justify-between text-xs text-quiet">
+    <section aria-label="Summary" className="bg-sheet break-inside-avoid rounded border px-4 pt-4 pb-3">
+      <div className="text-quiet flex items-baseline justify-between text-xs">
         <span>Per cent of design flow, one mark a terminal</span>
         <span>
           band <span className="figures">{`${band.lowerPercent.toFixed(0)}–${band.upperPercent.toFixed(0)}`}</span> %
@@ -25,14 +25,14 @@ export function Summary({ content, strip, band }: { content: ReportContent } & P
       <div className="py-2">
         <FlowStrip ticks={strip} band={band} size="page" />
       </div>
-      <div className="flex justify-between text-xs text-quiet">
+      <div className="text-quiet flex justify-between text-xs">
         <span>{strip[0]?.tag}</span>
         <span>{strip.at(-1)?.tag}</span>
       </div>
       <dl className="mt-3 flex flex-wrap items-end gap-x-8 gap-y-3 border-t pt-3">
         {counts.map(({ key, sign, says, tone }) => (
           <div key={key}>
-            <dt className="text-xs text-quiet">{says}</dt>
+            <dt className="text-quiet text-xs">{says}</dt>
             <dd className={`figures text-2xl ${tone}`}>
               <span aria-hidden className="mr-1.5 text-[0.7em]">
                 {sign}
@@ -42,16 +42,16 @@ export function Summary({ content, strip, band }: { content: ReportContent } & P
           </div>
         ))}
         <div>
-          <dt className="text-xs text-quiet">not measured</dt>
-          <dd className="figures text-2xl text-quiet">{notMeasured.length}</dd>
+          <dt className="text-quiet text-xs">not measured</dt>
+          <dd className="figures text-quiet text-2xl">{notMeasured.length}</dd>
         </div>
         <div>
-          <dt className="text-xs text-quiet">terminals</dt>
+          <dt className="text-quiet text-xs">terminals</dt>
           <dd className="figures text-2xl">{terminals}</dd>
         </div>
         {worst?.reading && verdict && (
           <div className="sm:ml-auto">
-            <dt className="text-xs text-quiet">furthest from design, %</dt>
+            <dt className="text-quiet text-xs">furthest from design, %</dt>
             <dd className="text-lg">
               <span className="font-semibold">{worst.tag}</span> <Deviation percent={worst.reading.percentOfDesign} verdict={verdict} />
             </dd>

@@ -15,14 +15,28 @@ export function TerminalsTable({ content }: { content: ReportContent }) {
           <tr>
             <Head>Terminal</Head>
             <Head className={onlyWide}>Room</Head>
-            <Head isFigure unit={<UnitName quantity="flow" />}>Design</Head>
-            <Head isFigure unit={<UnitName quantity="flow" />}>Measured</Head>
-            <Head isFigure unit="%">Of design</Head>
-            <Head isFigure unit="± %" className={onlyWide}>Uncertainty</Head>
-            <Head isFigure unit={<UnitName quantity="setting" />} className={onlyWide}>Setting</Head>
-            <Head isFigure unit={<UnitName quantity="pressure" />} className={onlyWide}>Drop</Head>
+            <Head isFigure unit={<UnitName quantity="flow" />}>
+              Design
+            </Head>
+            <Head isFigure unit={<UnitName quantity="flow" />}>
+              Measured
+            </Head>
+            <Head isFigure unit="%">
+              Of design
+            </Head>
+            <Head isFigure unit="± %" className={onlyWide}>
+              Uncertainty
+            </Head>
+            <Head isFigure unit={<UnitName quantity="setting" />} className={onlyWide}>
+              Setting
+            </Head>
+            <Head isFigure unit={<UnitName quantity="pressure" />} className={onlyWide}>
+              Drop
+            </Head>
             <Head className={onlyWide}>Instrument</Head>
-            <Head isFigure className={onlyWide}>Round</Head>
+            <Head isFigure className={onlyWide}>
+              Round
+            </Head>
           </tr>
         </thead>
         <tbody>
@@ -32,20 +46,32 @@ export function TerminalsTable({ content }: { content: ReportContent }) {
               <tr key={station.id} className="break-inside-avoid">
                 <RowName>
                   {station.tag}
-                  <span className="block text-xs font-normal text-quiet md:hidden print:hidden">{[station.storey, station.room].filter(Boolean).join(', ')}</span>
+                  <span className="text-quiet block text-xs font-normal md:hidden print:hidden">
+                    {[station.storey, station.room].filter(Boolean).join(', ')}
+                  </span>
                 </RowName>
                 <Words className={onlyWide}>{[station.storey, station.room].filter(Boolean).join(', ')}</Words>
-                <Figures><Figure quantity="flow" si={station.designFlowLs} /></Figures>
-                <Figures><Figure quantity="flow" si={reading?.flowLs} /></Figures>
-                <Figures><OfDesign content={content} station={station} /></Figures>
+                <Figures>
+                  <Figure quantity="flow" si={station.designFlowLs} />
+                </Figures>
+                <Figures>
+                  <Figure quantity="flow" si={reading?.flowLs} />
+                </Figures>
+                <Figures>
+                  <OfDesign content={content} station={station} />
+                </Figures>
                 <Figures className={`${onlyWide} text-quiet`}>{reading ? reading.uncertaintyPercent.toFixed(1) : '–'}</Figures>
-                <Figures className={onlyWide}><Figure quantity="setting" si={reading?.settingTurns} /></Figures>
-                <Figures className={onlyWide}><Figure quantity="pressure" si={reading?.dropKpa} /></Figures>
+                <Figures className={onlyWide}>
+                  <Figure quantity="setting" si={reading?.settingTurns} />
+                </Figures>
+                <Figures className={onlyWide}>
+                  <Figure quantity="pressure" si={reading?.dropKpa} />
+                </Figures>
                 <Words className={onlyWide}>
                   {reading ? (
                     <>
                       {serialOf.get(reading.instrumentId)}
-                      {reading.isInstrumentOverdue && <span className="ml-1 whitespace-nowrap text-high">▴ overdue</span>}
+                      {reading.isInstrumentOverdue && <span className="text-high ml-1 whitespace-nowrap">▴ overdue</span>}
                     </>
                   ) : (
                     <span className="text-quiet">not measured</span>

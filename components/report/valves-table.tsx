@@ -16,12 +16,24 @@ export function BranchValvesTable({ content }: { content: ReportContent }) {
         <thead>
           <tr>
             <Head>Valve</Head>
-            <Head isFigure unit={<UnitName quantity="flow" />}>Design</Head>
-            <Head isFigure unit={<UnitName quantity="flow" />}>Measured</Head>
-            <Head isFigure unit="%">Of design</Head>
-            <Head isFigure unit={<UnitName quantity="setting" />} className={onlyWide}>Setting by design</Head>
-            <Head isFigure unit={<UnitName quantity="setting" />} className={onlyWide}>Setting read</Head>
-            <Head isFigure unit={<UnitName quantity="pressure" />} className={onlyWide}>Drop by design</Head>
+            <Head isFigure unit={<UnitName quantity="flow" />}>
+              Design
+            </Head>
+            <Head isFigure unit={<UnitName quantity="flow" />}>
+              Measured
+            </Head>
+            <Head isFigure unit="%">
+              Of design
+            </Head>
+            <Head isFigure unit={<UnitName quantity="setting" />} className={onlyWide}>
+              Setting by design
+            </Head>
+            <Head isFigure unit={<UnitName quantity="setting" />} className={onlyWide}>
+              Setting read
+            </Head>
+            <Head isFigure unit={<UnitName quantity="pressure" />} className={onlyWide}>
+              Drop by design
+            </Head>
             <Head className={onlyWide}>State</Head>
           </tr>
         </thead>
@@ -30,14 +42,26 @@ export function BranchValvesTable({ content }: { content: ReportContent }) {
             <tr key={station.id} className="break-inside-avoid">
               <RowName>
                 {station.tag}
-                <span className="block text-xs font-normal text-quiet">{station.valveName}</span>
+                <span className="text-quiet block text-xs font-normal">{station.valveName}</span>
               </RowName>
-              <Figures><Figure quantity="flow" si={station.designFlowLs} /></Figures>
-              <Figures><Figure quantity="flow" si={station.reading?.flowLs} /></Figures>
-              <Figures><OfDesign content={content} station={station} /></Figures>
-              <Figures className={onlyWide}><Figure quantity="setting" si={valve.setting} /></Figures>
-              <Figures className={onlyWide}><Figure quantity="setting" si={station.reading?.settingTurns} /></Figures>
-              <Figures className={onlyWide}><Figure quantity="pressure" si={valve.dropKpa} /></Figures>
+              <Figures>
+                <Figure quantity="flow" si={station.designFlowLs} />
+              </Figures>
+              <Figures>
+                <Figure quantity="flow" si={station.reading?.flowLs} />
+              </Figures>
+              <Figures>
+                <OfDesign content={content} station={station} />
+              </Figures>
+              <Figures className={onlyWide}>
+                <Figure quantity="setting" si={valve.setting} />
+              </Figures>
+              <Figures className={onlyWide}>
+                <Figure quantity="setting" si={station.reading?.settingTurns} />
+              </Figures>
+              <Figures className={onlyWide}>
+                <Figure quantity="pressure" si={valve.dropKpa} />
+              </Figures>
               <Words className={onlyWide}>{valveStateWords[valve.state]}</Words>
             </tr>
           ))}

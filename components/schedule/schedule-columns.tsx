@@ -18,7 +18,13 @@ const figure = <Row,>(key: string, head: string, quantity: Quantity, value: (row
   show: (row) => <Figure quantity={quantity} si={value(row)} />,
 });
 
-const plain = <Row,>(key: string, head: string, unit: ReactNode, decimals: number, value: (row: Row) => number | null): ScheduleColumn<Row> => ({
+const plain = <Row,>(
+  key: string,
+  head: string,
+  unit: ReactNode,
+  decimals: number,
+  value: (row: Row) => number | null,
+): ScheduleColumn<Row> => ({
   key,
   head,
   unit,
@@ -27,7 +33,12 @@ const plain = <Row,>(key: string, head: string, unit: ReactNode, decimals: numbe
   show: (row) => value(row)?.toFixed(decimals) ?? missing,
 });
 
-const text = <Row,>(key: string, head: string, value: (row: Row) => string): ScheduleColumn<Row> => ({ key, head, sortBy: value, show: value });
+const text = <Row,>(key: string, head: string, value: (row: Row) => string): ScheduleColumn<Row> => ({
+  key,
+  head,
+  sortBy: value,
+  show: value,
+});
 
 const ofDesign = <Row extends { percentOfDesign: number | null }>(band: StripBand): ScheduleColumn<Row> => ({
   key: 'percent',
@@ -36,14 +47,23 @@ const ofDesign = <Row extends { percentOfDesign: number | null }>(band: StripBan
   isFigure: true,
   sortBy: ({ percentOfDesign }) => percentOfDesign,
   show: ({ percentOfDesign: percent }) =>
-    percent === null ? missing : <Deviation percent={percent} verdict={percent < band.lowerPercent ? 'low' : percent > band.upperPercent ? 'high' : 'within'} />,
+    percent === null ? (
+      missing
+    ) : (
+      <Deviation percent={percent} verdict={percent < band.lowerPercent ? 'low' : percent > band.upperPercent ? 'high' : 'within'} />
+    ),
 });
 
 const settings = <Row extends ScheduledSetting>(): ScheduleColumn<Row>[] => [
   text('valve', 'Balancing valve', ({ valveName }) => valveName),
   {
     ...figure<Row>('stands', 'Stands at', 'setting', ({ standsTurns }) => standsTurns),
-    show: ({ standsTurns, valveName }) => (standsTurns === null ? <span className="font-sans text-quiet">{valveName ? 'open' : '–'}</span> : <Figure quantity="setting" si={standsTurns} />),
+    show: ({ standsTurns, valveName }) =>
+      standsTurns === null ? (
+        <span className="text-quiet font-sans">{valveName ? 'open' : '–'}</span>
+      ) : (
+        <Figure quantity="setting" si={standsTurns} />
+      ),
   },
   figure('setting', 'Setting', 'setting', ({ settingTurns }) => settingTurns),
   figure('valveDrop', 'Valve drop', 'pressure', ({ dropKpa }) => dropKpa),

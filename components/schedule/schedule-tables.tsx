@@ -30,7 +30,7 @@ export function ScheduleTables({ schedule, bands, drawingHref }: ScheduleTablesP
   const show = (key: string) => window.history.replaceState(null, '', `?table=${key}`);
 
   return (
-    <div className="flex min-h-0 flex-1 flex-col rounded border bg-sheet print:border-0">
+    <div className="bg-sheet flex min-h-0 flex-1 flex-col rounded border print:border-0">
       <div role="group" aria-label="Tables" className="flex gap-5 overflow-x-auto border-b px-4 print:hidden">
         {tables.map(([key, name]) => (
           <button
@@ -38,14 +38,17 @@ export function ScheduleTables({ schedule, bands, drawingHref }: ScheduleTablesP
             type="button"
             aria-pressed={open === key}
             onClick={() => show(key)}
-            className={classNames('min-h-11 border-b-2 font-semibold whitespace-nowrap', open === key ? 'border-brass' : 'border-transparent text-quiet hover:text-ink')}
+            className={classNames(
+              'min-h-11 border-b-2 font-semibold whitespace-nowrap',
+              open === key ? 'border-brass' : 'text-quiet hover:text-ink border-transparent',
+            )}
           >
-            {name} <span className="figures ml-1 text-xs font-normal text-quiet">{schedule[key].length}</span>
+            {name} <span className="figures text-quiet ml-1 text-xs font-normal">{schedule[key].length}</span>
           </button>
         ))}
       </div>
       {schedule[open].length === 0 ? (
-        <p className="p-6 text-quiet">None on this drawing.</p>
+        <p className="text-quiet p-6">None on this drawing.</p>
       ) : (
         <>
           {open === 'terminals' && (
@@ -58,10 +61,24 @@ export function ScheduleTables({ schedule, bands, drawingHref }: ScheduleTablesP
               drawingHref={drawingHref}
             />
           )}
-          {open === 'valves' && <SortableTable label="Balancing valves" nameHead="Valve" columns={columns.valves} rows={schedule.valves} drawingHref={drawingHref} />}
-          {open === 'pipes' && <SortableTable label="Pipes" nameHead="From – to" columns={pipeColumns} rows={schedule.pipes} drawingHref={drawingHref} />}
-          {open === 'pumps' && <SortableTable label="Pumps" nameHead="Pump" columns={pumpColumns} rows={schedule.pumps} drawingHref={drawingHref} />}
-          {open === 'sources' && <SortableTable label="Source" nameHead="Source" columns={sourceColumns} rows={schedule.sources} drawingHref={drawingHref} />}
+          {open === 'valves' && (
+            <SortableTable
+              label="Balancing valves"
+              nameHead="Valve"
+              columns={columns.valves}
+              rows={schedule.valves}
+              drawingHref={drawingHref}
+            />
+          )}
+          {open === 'pipes' && (
+            <SortableTable label="Pipes" nameHead="From – to" columns={pipeColumns} rows={schedule.pipes} drawingHref={drawingHref} />
+          )}
+          {open === 'pumps' && (
+            <SortableTable label="Pumps" nameHead="Pump" columns={pumpColumns} rows={schedule.pumps} drawingHref={drawingHref} />
+          )}
+          {open === 'sources' && (
+            <SortableTable label="Source" nameHead="Source" columns={sourceColumns} rows={schedule.sources} drawingHref={drawingHref} />
+          )}
         </>
       )}
     </div>

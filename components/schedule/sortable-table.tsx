@@ -19,7 +19,14 @@ interface SortableTableProps<Row> {
   drawingHref: string;
 }
 
-export function SortableTable<Row extends { id: string; tag: string }>({ label, nameHead, columns, rows, mark, drawingHref }: SortableTableProps<Row>) {
+export function SortableTable<Row extends { id: string; tag: string }>({
+  label,
+  nameHead,
+  columns,
+  rows,
+  mark,
+  drawingHref,
+}: SortableTableProps<Row>) {
   const [sorting, setSorting] = useState<Sorting | null>({ key: 'tag', isDescending: false });
   const [showsAll, setShowsAll] = useState(false);
   const sorted = useMemo(() => {
@@ -49,14 +56,22 @@ export function SortableTable<Row extends { id: string; tag: string }>({ label, 
       </thead>
       <tbody>
         {shown.map((row) => (
-          <tr key={row.id} className="break-inside-avoid hover:bg-well">
-            <RowName className="sticky left-0 bg-sheet">
+          <tr key={row.id} className="hover:bg-well break-inside-avoid">
+            <RowName className="bg-sheet sticky left-0">
               <Link href={`${drawingHref}?select=${encodeURIComponent(row.id)}`} prefetch={false} className="no-underline hover:underline">
                 {row.tag}
               </Link>
-              {mark?.(row) && <span className="ml-2 rounded border border-brass px-1 text-xs font-semibold text-brass">{mark(row)}</span>}
+              {mark?.(row) && <span className="border-brass text-brass ml-2 rounded border px-1 text-xs font-semibold">{mark(row)}</span>}
             </RowName>
-            {columns.map(({ key, isFigure, show }) => (isFigure ? <Figures key={key}>{show(row)}</Figures> : <Words key={key} className="whitespace-nowrap">{show(row)}</Words>))}
+            {columns.map(({ key, isFigure, show }) =>
+              isFigure ? (
+                <Figures key={key}>{show(row)}</Figures>
+              ) : (
+                <Words key={key} className="whitespace-nowrap">
+                  {show(row)}
+                </Words>
+              ),
+            )}
           </tr>
         ))}
         {shown.length < sorted.length && (
@@ -73,7 +88,12 @@ export function SortableTable<Row extends { id: string; tag: string }>({ label, 
 
 function SortButton({ head, sorting, onPress }: { head: string; sorting: Sorting | null; onPress: () => void }) {
   return (
-    <button type="button" onClick={onPress} className="min-h-6 text-[inherit] font-semibold hover:text-ink hover:underline" title={`Sort by ${head.toLowerCase()}`}>
+    <button
+      type="button"
+      onClick={onPress}
+      className="hover:text-ink min-h-6 font-semibold text-[inherit] hover:underline"
+      title={`Sort by ${head.toLowerCase()}`}
+    >
       {head}
       <span aria-hidden className="text-brass">
         {sorting && (sorting.isDescending ? ' ↓' : ' ↑')}

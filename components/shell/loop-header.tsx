@@ -26,7 +26,7 @@ export function LoopHeader({ loop, person }: { loop: LoopDetail; person: { name:
     ['report', 'Report', true],
   ];
   return (
-    <header className="sticky top-0 z-30 flex flex-wrap items-stretch gap-x-6 border-b bg-sheet px-4 print:hidden">
+    <header className="sticky top-0 z-30 grid grid-cols-[minmax(0,1fr)_auto] items-stretch gap-x-6 border-b bg-sheet px-4 lg:grid-cols-[minmax(0,auto)_auto_1fr] print:hidden">
       <div className="flex min-h-14 min-w-0 items-center gap-4">
         <Mark />
         <div className="min-w-0 truncate">
@@ -37,10 +37,10 @@ export function LoopHeader({ loop, person }: { loop: LoopDetail; person: { name:
           <span className="font-bold">{loop.name}</span>
         </div>
       </div>
-      <nav aria-label="Pages of the loop" className="order-3 flex w-full items-stretch gap-5 overflow-x-auto lg:order-none lg:w-auto">
+      <nav aria-label="Pages of the loop" className="col-span-2 row-start-2 flex items-stretch gap-5 overflow-x-auto lg:col-span-1 lg:col-start-2 lg:row-start-1">
         {pages.map(([path, name, isShown]) => isShown && <NavLink key={path} href={`${base}/${path}`}>{name}</NavLink>)}
       </nav>
-      <div className="ml-auto flex min-h-14 items-center gap-4">
+      <div className="flex min-h-14 items-center gap-4 justify-self-end">
         <div className="hidden xl:block">
           <FlowStrip ticks={loop.strip} band={loop.band} />
         </div>

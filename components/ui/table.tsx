@@ -24,8 +24,8 @@ export function Head({ unit, isFigure, className, children, ...rest }: HeadProps
     <th
       scope="col"
       className={classNames(
-        'sticky top-0 z-10 bg-sheet px-1.5 py-2 sm:px-2 align-bottom text-xs leading-tight font-semibold text-quiet first:pl-4 last:pr-4',
-        'shadow-[inset_0_-1px_0_var(--ink)] print:static print:border-b print:border-ink print:shadow-none',
+        'bg-sheet text-quiet sticky top-0 z-10 px-1.5 py-2 align-bottom text-xs leading-tight font-semibold first:pl-4 last:pr-4 sm:px-2',
+        'print:border-ink shadow-[inset_0_-1px_0_var(--ink)] print:static print:border-b print:shadow-none',
         isFigure ? 'text-right' : 'text-left',
         className,
       )}
@@ -43,7 +43,9 @@ export const Figures = ({ className, ...rest }: TdHTMLAttributes<HTMLTableCellEl
   <td className={classNames(cell, 'figures text-right whitespace-nowrap', className)} {...rest} />
 );
 
-export const Words = ({ className, ...rest }: TdHTMLAttributes<HTMLTableCellElement>) => <td className={classNames(cell, 'text-left', className)} {...rest} />;
+export const Words = ({ className, ...rest }: TdHTMLAttributes<HTMLTableCellElement>) => (
+  <td className={classNames(cell, 'text-left', className)} {...rest} />
+);
 
 /** The cell that names its row. */
 export const RowName = ({ className, ...rest }: ThHTMLAttributes<HTMLTableCellElement>) => (

@@ -13,7 +13,9 @@ export const signNoteSchema = z.object({ note: z.string().trim().max(2000) });
 export const returnNoteSchema = z.object({ note: signNoteSchema.shape.note.min(1, 'Say what has to be put right.') });
 
 /** `contentSha256` is that of the report as the signer saw it: nobody signs what they have not seen. */
-const signedSchema = signNoteSchema.extend({ contentSha256: z.string().regex(/^[0-9a-f]{64}$/, 'The SHA-256 of the report that you saw.') });
+const signedSchema = signNoteSchema.extend({
+  contentSha256: z.string().regex(/^[0-9a-f]{64}$/, 'The SHA-256 of the report that you saw.'),
+});
 
 /** POST /api/loops/:loopId/submission */
 export const submitReportSchema = signedSchema;

@@ -48,11 +48,15 @@ export function expectCentred(document: NetworkDocument, settings: LoopSettings,
 
 const toStep = (speed: number) => Number((Math.round(speed / SPEED_STEP) * SPEED_STEP).toPrecision(12));
 
-/** Mean of the logarithms. */
-function meanOf(logRatios: Float64Array): number {
-  const sorted = logRatios.slice().sort();
-  if (!sorted.length) return 0;
-  return sorted.reduce((sum, each) => sum + each, 0) / sorted.length;
+/** Part of the ratios left out at either end, so that a few that cannot be helped do not pull the rest. */
+const TRIMMED = 0.2;
+
+/** Trimmed mean of the logarithms. */
+export function meanOf(logRatios: Float64Array): number {
+  if (!logRatios.length) return 0;
+  const cut = Math.floor(TRIMMED * logRatios.length);
+  const kept = logRatios.slice().sort().subarray(cut, logRatios.length - cut);
+  return kept.reduce((sum, each) => sum + each, 0) / kept.length;
 }
 
 /** Flow (and loss, kPa) answers of links at an expected loop to the fit's unknowns, as valves newly set would stand. */
@@ -60,9 +64,9 @@ export function answersAt(fitted: FittedLoop, { network, solution }: ExpectedLoo
   return linkAnswers(network, solution, fitted.unknowns, ({ kind }) => kind !== 'setting', watched);
 }
 
-/** Direction of a quantity's logarithm in the fit's unknowns, each in units of its prior deviation. */
+/** Direction of a quantity's logarithm in the fit's active unknowns, each in units of its prior deviation. */
 export function direction(fitted: FittedLoop, perUnknown: Float64Array, value: number): Float64Array {
-  return perUnknown.map((each, j) => (value === 0 ? 0 : (each / value) * fitted.deviations[j]));
+  return Float64Array.from(fitted.active, (j) => (value === 0 ? 0 : (perUnknown[j] / value) * fitted.deviations[j]));
 }
 
 /** One standard deviation of a quantity with this direction, after the readings. */

@@ -1,5 +1,5 @@
 import type { NetworkDocument } from '@/lib/hydraulics/types';
-import { activeColumns, Gaussian, gramOf } from './fit/gaussian';
+import { activeColumns, activeUnknowns, Gaussian } from './fit/gaussian';
 import { linearWithin, mostLikely } from './fit/most-likely';
 import { ReadingModel } from './fit/reading-model';
 import { type Cause, faultDeviation, FaultSearch, type Suspicion } from './fit/suspicions';
@@ -38,7 +38,11 @@ export interface FittedLoop {
   readings: FittedReading[];
   faults: SuspectedFault[];
   converged: boolean;
-  /** The linear model at the fit, its unknowns in units of `deviations`. */
+  /** The same faults by position among the unknowns and readings. */
+  accepted: Suspicion[];
+  /** Unknowns that are not held at their design, by position. */
+  active: Int32Array;
+  /** The linear model at the fit, of the active unknowns in units of `deviations`. */
   posterior: Gaussian;
   /** How all single faults weigh at the fit; see `diagnose`. */
   search: FaultSearch;
@@ -49,14 +53,14 @@ const MOST_PASSES = 12;
 /**
  * Fits the loop's resistances, charts, pump heads and meters to readings: maximum a posteriori with log-normal priors about the
  * design, each reading by its own error. A reading or unknown that would be beyond its spread is freed where a fault there is likelier than
- * none. Throws a RangeError for a reading at a link that is not in the document.
+ * none. `before`, the fit to the earlier rounds alone, saves steps. Throws a RangeError for a reading at a link that is not in the document.
  */
-export function fitLoop(document: NetworkDocument, rounds: ReadingRound[], priors: Priors = usualPriors): FittedLoop {
+export function fitLoop(document: NetworkDocument, rounds: ReadingRound[], priors: Priors = usualPriors, before?: FittedLoop): FittedLoop {
   const unknowns = unknownsOf(document, rounds, priors);
   const model = new ReadingModel(document, rounds, unknowns);
-  let accepted: Suspicion[] = [];
+  let accepted = before ? clearFaults(before, unknowns, model) : [];
   let { deviations, noise } = spreadsWith(accepted, unknowns, model.placed.length);
-  let fit = mostLikely(model, deviations, noise, new Float64Array(unknowns.length));
+  let fit = mostLikely(model, deviations, noise, startValues(unknowns, deviations, before));
   const searchNow = () => new FaultSearch(document, rounds, unknowns, model.placed, linearWithin(model, deviations, fit), deviations, noise);
   let search = searchNow();
   for (let pass = 0; pass < MOST_PASSES; pass++) {
@@ -80,9 +84,9 @@ export function fitLoop(document: NetworkDocument, rounds: ReadingRound[], prior
     const { reading: wrong, round, expected } = readings[reading!];
     return { cause, link: wrong.link, round, logOdds, factor: wrong.value / expected };
   });
-  const scaledRows = fit.rows.map((row) => row.map((each, j) => each * deviations[j]));
-  const posterior = new Gaussian(scaledRows, noise, 0, gramOf(activeColumns(fit.rows, deviations)));
-  return { document, rounds, unknowns, values: fit.values, deviations, readings, faults, converged: fit.converged, posterior, search };
+  const active = activeUnknowns(deviations);
+  const posterior = new Gaussian(activeColumns(fit.rows, deviations, active), noise);
+  return { document, rounds, unknowns, values: fit.values, deviations, readings, faults, accepted, converged: fit.converged, active, posterior, search };
 }
 
 /** Prior deviations and variances of the readings, widened where a fault is suspected. */
@@ -95,4 +99,28 @@ function spreadsWith(accepted: Suspicion[], unknowns: Unknown[], readings: numbe
     else noise[reading!] += deviation ** 2;
   }
   return { deviations, noise };
+}
+
+/** Odds, as a logarithm, beyond which a fault of an earlier fit needs no second search. */
+const CLEAR_ODDS = 15;
+
+const keyOf = ({ kind, id, rounds }: Unknown) => `${kind} ${id} ${rounds.indexOf(true)}`;
+
+function startValues(unknowns: Unknown[], deviations: Float64Array, before?: FittedLoop): Float64Array {
+  const known = new Map(before?.unknowns.map((unknown, j) => [keyOf(unknown), before.values[j]]));
+  return Float64Array.from(unknowns, (unknown, j) => (deviations[j] > 0 ? (known.get(keyOf(unknown)) ?? 0) : 0));
+}
+
+function clearFaults(before: FittedLoop, unknowns: Unknown[], { placed }: ReadingModel): Suspicion[] {
+  const places = new Map(unknowns.map((unknown, j) => [keyOf(unknown), j]));
+  return before.accepted.flatMap((fault): Suspicion[] => {
+    if (fault.logOdds < CLEAR_ODDS) return [];
+    if (fault.unknown !== null) {
+      const unknown = places.get(keyOf(before.unknowns[fault.unknown]));
+      return unknown === undefined ? [] : [{ ...fault, unknown }];
+    }
+    const { reading, round } = before.readings[fault.reading!];
+    const at = placed.findIndex((each) => each.reading === reading && each.round === round);
+    return at < 0 ? [] : [{ ...fault, reading: at }];
+  });
 }

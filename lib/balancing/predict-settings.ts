@@ -83,7 +83,8 @@ function predictedSettings(fitted: FittedLoop, document: NetworkDocument, expect
     const { flowLs, dropKpa, flowPerUnknown, dropPerUnknown } = answers[w];
     const meter = fitted.unknowns.findIndex(({ kind, id }) => kind === 'meter' && id === meterOf.get(link.id));
     const alongDrop = direction(fitted, dropPerUnknown, dropKpa);
-    if (meter >= 0) alongDrop[meter] = 2 * fitted.deviations[meter];
+    const active = fitted.active.indexOf(meter);
+    if (active >= 0) alongDrop[active] = 2 * fitted.deviations[meter];
     return {
       link: link.id,
       kind: link.kind,

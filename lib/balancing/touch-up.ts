@@ -1,6 +1,6 @@
 import { kvAtSetting, largestSetting, settingAtKv } from '@/lib/hydraulics/links/balancing-valve';
 import type { BalancingValveLink, NetworkDocument } from '@/lib/hydraulics/types';
-import { type ExpectedLoop, expectCentred } from './expected-loop';
+import { type ExpectedLoop, expectCentred, meanOf } from './expected-loop';
 import { linkAnswers } from './fit/sensitivities';
 import type { Unknown } from './fit/unknowns';
 import { outsideTolerance } from './normal';
@@ -89,7 +89,7 @@ function bestMove(valve: BalancingValveLink, setting: number, column: Float64Arr
 }
 
 function centred(logRatios: Float64Array, pump: Float64Array): Float64Array {
-  const sum = logRatios.reduce((total, each) => total + each, 0);
-  const answer = pump.reduce((total, each) => total + each, 0);
-  return answer > 1e-9 ? logRatios.map((each, t) => each - (pump[t] * sum) / answer) : logRatios;
+  const answer = meanOf(pump);
+  const off = meanOf(logRatios);
+  return answer > 1e-9 ? logRatios.map((each, t) => each - (pump[t] / answer) * off) : logRatios;
 }

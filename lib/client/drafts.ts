@@ -1,10 +1,6 @@
-import { queryOptions } from '@tanstack/react-query';
-import type { DraftBody, SavedDraft } from '@/lib/api/loops';
+import type { SavedDraft } from '@/lib/api/loops';
 import type { Drawing } from '@/lib/network/drawing';
 import { send } from './http';
-
-export const draftQuery = (loopId: string) =>
-  queryOptions({ queryKey: ['draft', loopId], queryFn: ({ signal }) => send<DraftBody>('GET', `/api/loops/${loopId}/draft`, undefined, signal) });
 
 /** Saves over the version the drawing was made from; 409 `draft-changed` carries what the other person saved. */
 export const saveDraft = (loopId: string, baseVersion: number, drawing: Drawing): Promise<SavedDraft> =>

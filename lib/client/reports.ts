@@ -19,7 +19,12 @@ export async function downloadWorkbook(loopId: string, number?: number): Promise
   }
   if (!response.ok) {
     const { data } = problemSchema.safeParse(await response.json().catch(() => null));
-    throw new RequestError(data?.code ?? 'unexpected', data?.title ?? `The server answered ${response.status}. Try again.`, response.status, data ?? null);
+    throw new RequestError(
+      data?.code ?? 'unexpected',
+      data?.title ?? `The server answered ${response.status}. Try again.`,
+      response.status,
+      data ?? null,
+    );
   }
   const link = document.createElement('a');
   link.href = URL.createObjectURL(await response.blob());

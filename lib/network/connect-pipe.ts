@@ -8,14 +8,24 @@ export interface Refusal {
   refused: string;
 }
 
-export const isPortTaken = (drawing: Drawing, end: PipeEnd): boolean => drawing.pipes.some((pipe) => [pipe.from, pipe.to].some((it) => it.equipmentId === end.equipmentId && it.port === end.port));
+export const isPortTaken = (drawing: Drawing, end: PipeEnd): boolean =>
+  drawing.pipes.some((pipe) => [pipe.from, pipe.to].some((it) => it.equipmentId === end.equipmentId && it.port === end.port));
 
 /** A new pipe between two ends. It runs the way of the water where an end tells: out of an outlet, into an inlet. */
-export function connect(drawing: Drawing, a: PipeEnd, b: PipeEnd, figures: PipeFigures, bends: Point[] = []): { drawing: Drawing; pipe: DrawingPipe } | Refusal {
+export function connect(
+  drawing: Drawing,
+  a: PipeEnd,
+  b: PipeEnd,
+  figures: PipeFigures,
+  bends: Point[] = [],
+): { drawing: Drawing; pipe: DrawingPipe } | Refusal {
   const [pieceA, pieceB] = [pieceOf(drawing, a.equipmentId), pieceOf(drawing, b.equipmentId)];
   if (!pieceA || !pieceB) return { refused: 'One end of the pipe is no longer on the drawing.' };
   if (pieceA.id === pieceB.id) return { refused: 'A pipe joins two different pieces.' };
-  for (const [piece, end] of [[pieceA, a], [pieceB, b]] as const) {
+  for (const [piece, end] of [
+    [pieceA, a],
+    [pieceB, b],
+  ] as const) {
     if (piece.kind !== 'tee' && isPortTaken(drawing, end)) {
       return { refused: `${piece.tag || 'This piece'} already has a pipe there. Drop the end on that pipe to branch off it with a tee.` };
     }
@@ -38,9 +48,12 @@ export function circuitOf(drawing: Drawing, from: PipeEnd, to: PipeEnd): Drawing
   const [start, goal] = [pieceOf(drawing, from.equipmentId), pieceOf(drawing, to.equipmentId)];
   if (start?.kind === 'terminalUnit') return 'return';
   if (goal?.kind === 'terminalUnit') return 'supply';
-  const near = drawing.pipes.filter((pipe) => [pipe.from, pipe.to].some((end) => end.equipmentId === from.equipmentId || end.equipmentId === to.equipmentId));
+  const near = drawing.pipes.filter((pipe) =>
+    [pipe.from, pipe.to].some((end) => end.equipmentId === from.equipmentId || end.equipmentId === to.equipmentId),
+  );
   if (start?.kind === 'source' && from.port === 'out') return 'supply';
-  if (goal?.kind === 'source' && to.port === 'in') return near.find((pipe) => pipe.to.equipmentId === from.equipmentId)?.circuit ?? 'return';
+  if (goal?.kind === 'source' && to.port === 'in')
+    return near.find((pipe) => pipe.to.equipmentId === from.equipmentId)?.circuit ?? 'return';
   if (goal?.kind === 'expansionVessel' || start?.kind === 'expansionVessel') return 'return';
   return near.find((pipe) => pipe.to.equipmentId === from.equipmentId)?.circuit ?? near[0]?.circuit ?? 'supply';
 }

@@ -67,9 +67,15 @@ export function figuresOfDrawing(drawing: Drawing, { solve, balance }: Solved, b
     const link = linkOf.get(pipe.id);
     if (!link) continue;
     const ends = { fromKpa: pressureOf.get(nodeIdOf(pipe.from)) ?? null, toKpa: pressureOf.get(nodeIdOf(pipe.to)) ?? null };
-    pipes.set(pipe.id, { ...pipeFigures(pipe, link, result.fluid.densityKgM3), ...ends, percentOfDesign: percent(link.flowLs, design?.get(pipe.id)) });
+    pipes.set(pipe.id, {
+      ...pipeFigures(pipe, link, result.fluid.densityKgM3),
+      ...ends,
+      percentOfDesign: percent(link.flowLs, design?.get(pipe.id)),
+    });
   }
-  const pieces = new Map(drawing.equipment.map((piece) => [piece.id, pieceFigures(piece, { result, linkOf, pressureOf, design, balance })]));
+  const pieces = new Map(
+    drawing.equipment.map((piece) => [piece.id, pieceFigures(piece, { result, linkOf, pressureOf, design, balance })]),
+  );
   return { basis, fluid: result.fluid, pieces, pipes };
 }
 
@@ -85,7 +91,14 @@ function pipeFigures(pipe: DrawingPipe, link: LinkResult, densityKgM3: number) {
   const velocityMs = link.velocityMs ?? 0;
   const frictionFactor = link.frictionFactor ?? null;
   const paPerM = frictionFactor && pipe.boreMm ? (frictionFactor * densityKgM3 * velocityMs ** 2) / (2 * (pipe.boreMm / 1000)) : 0;
-  return { flowLs: link.flowLs, velocityMs: Math.abs(velocityMs), paPerM, dropKpa: link.dropKpa, reynolds: link.reynolds ?? null, frictionFactor };
+  return {
+    flowLs: link.flowLs,
+    velocityMs: Math.abs(velocityMs),
+    paPerM,
+    dropKpa: link.dropKpa,
+    reynolds: link.reynolds ?? null,
+    frictionFactor,
+  };
 }
 
 interface Results {
@@ -117,7 +130,9 @@ function pieceFigures(piece: Equipment, { result, linkOf, pressureOf, design, ba
     authority: terminal?.authority ?? null,
     circuitDropKpa: terminal?.circuitDropKpa ?? null,
     isIndex: balance?.indexTerminal === unitLinkId(piece.id, 'coil'),
-    pump: pump ? { headM: pump.headM, shaftKw: pump.shaftKw, requiredHeadM: duty?.requiredHeadM ?? null, requiredSpeed: duty?.speed ?? null } : null,
+    pump: pump
+      ? { headM: pump.headM, shaftKw: pump.shaftKw, requiredHeadM: duty?.requiredHeadM ?? null, requiredSpeed: duty?.speed ?? null }
+      : null,
     parts: isUnit ? Object.fromEntries(unitLinks.flatMap((part, i) => (links[i] ? [[part, links[i]]] : []))) : {},
   };
 }

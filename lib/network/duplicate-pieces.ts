@@ -37,7 +37,10 @@ export function addPart(drawing: Drawing, part: DrawingPart, by: Point): { drawi
     to: { ...pipe.to, equipmentId: idOf.get(pipe.to.equipmentId)! },
     bends: pipe.bends.map((bend) => ({ x: bend.x + by.x, y: bend.y + by.y })),
   }));
-  return { drawing: { ...drawing, equipment: [...drawing.equipment, ...equipment], pipes: [...drawing.pipes, ...pipes] }, added: { equipment, pipes } };
+  return {
+    drawing: { ...drawing, equipment: [...drawing.equipment, ...equipment], pipes: [...drawing.pipes, ...pipes] },
+    added: { equipment, pipes },
+  };
 }
 
 /** Duplicates pieces to the right of themselves, clear of the originals. */

@@ -29,7 +29,8 @@ export function nudgePieces(drawing: Drawing, ids: Set<string>, by: Point): Draw
 export const rotatePieces = (drawing: Drawing, ids: Set<string>): Drawing =>
   mapPieces(drawing, ids, (piece) => ({ ...piece, rotation: ((piece.rotation + 90) % 360) as Equipment['rotation'] }));
 
-export const mirrorPieces = (drawing: Drawing, ids: Set<string>): Drawing => mapPieces(drawing, ids, (piece) => ({ ...piece, isMirrored: !piece.isMirrored }));
+export const mirrorPieces = (drawing: Drawing, ids: Set<string>): Drawing =>
+  mapPieces(drawing, ids, (piece) => ({ ...piece, isMirrored: !piece.isMirrored }));
 
 export const mapPieces = (drawing: Drawing, ids: Set<string>, change: (piece: Equipment) => Equipment): Drawing => ({
   ...drawing,

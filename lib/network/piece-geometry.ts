@@ -1,4 +1,4 @@
-import type { Drawing, Equipment, EquipmentKind, PipeEnd, Port } from './drawing';
+import type { Drawing, Equipment, EquipmentKind, Port } from './drawing';
 
 /**
  * Where a piece and its ends lie on the drawing. `x` and `y` of a piece are its centre, in drawing units (y grows
@@ -40,7 +40,8 @@ function unturnedPort(kind: EquipmentKind, port: Port): { at: Point; leaves: Poi
   const sides = { n: { x: 0, y: -1 }, e: { x: 1, y: 0 }, s: { x: 0, y: 1 }, w: { x: -1, y: 0 } };
   if (kind === 'tee') return { at: { x: 0, y: 0 }, leaves: sides[port as keyof typeof sides] };
   if (kind === 'expansionVessel') return { at: { x: 0, y: height / 2 }, leaves: sides.s };
-  if (kind === 'terminalUnit') return port === 'in' ? { at: { x: 0, y: -height / 2 }, leaves: sides.n } : { at: { x: 0, y: height / 2 }, leaves: sides.s };
+  if (kind === 'terminalUnit')
+    return port === 'in' ? { at: { x: 0, y: -height / 2 }, leaves: sides.n } : { at: { x: 0, y: height / 2 }, leaves: sides.s };
   return port === 'in' ? { at: { x: -width / 2, y: 0 }, leaves: sides.w } : { at: { x: width / 2, y: 0 }, leaves: sides.e };
 }
 
@@ -83,8 +84,6 @@ export const snap = (value: number): number => Math.round(value / GRID) * GRID;
 export const snapPoint = ({ x, y }: Point): Point => ({ x: snap(x), y: snap(y) });
 
 export const pieceOf = (drawing: Drawing, id: string): Equipment | undefined => drawing.equipment.find((piece) => piece.id === id);
-
-export const sameEnd = (a: PipeEnd, b: PipeEnd): boolean => a.equipmentId === b.equipmentId && a.port === b.port;
 
 /** The box around some pieces. */
 export function boundsOf(pieces: Equipment[]): { left: number; top: number; width: number; height: number } {

@@ -9,7 +9,10 @@ export const seriesIds = Object.keys(pipeSeries) as PipeSeriesId[];
 export const isSeriesId = (series: string | null): series is PipeSeriesId => series !== null && Object.hasOwn(pipeSeries, series);
 
 /** Bore and roughness of a size of a published series; a free bore where `series` is null. */
-export function chosenSize(series: PipeSeriesId | null, nominal: string | null): Pick<PipeFigures, 'series' | 'nominal' | 'boreMm' | 'roughnessMm'> | null {
+export function chosenSize(
+  series: PipeSeriesId | null,
+  nominal: string | null,
+): Pick<PipeFigures, 'series' | 'nominal' | 'boreMm' | 'roughnessMm'> | null {
   if (series === null) return null;
   const { sizes, roughnessMm } = pipeSeries[series];
   const size = sizes.find((it) => it.nominal === nominal);

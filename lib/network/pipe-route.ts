@@ -39,20 +39,58 @@ function leg(a: End, b: End): Point[] {
 
 function candidates(a: End, b: End): Point[][] {
   const middle = (from: number, to: number) => Math.round((from + to) / 20) * 10;
-  const columns = [middle(a.x, b.x), Math.min(a.x, b.x) - STUB * 1.5, Math.max(a.x, b.x) + STUB * 1.5, a.x + STUB, a.x - STUB, b.x + STUB, b.x - STUB];
-  const rows = [middle(a.y, b.y), Math.min(a.y, b.y) - STUB * 1.5, Math.max(a.y, b.y) + STUB * 1.5, a.y + STUB, a.y - STUB, b.y + STUB, b.y - STUB];
+  const columns = [
+    middle(a.x, b.x),
+    Math.min(a.x, b.x) - STUB * 1.5,
+    Math.max(a.x, b.x) + STUB * 1.5,
+    a.x + STUB,
+    a.x - STUB,
+    b.x + STUB,
+    b.x - STUB,
+  ];
+  const rows = [
+    middle(a.y, b.y),
+    Math.min(a.y, b.y) - STUB * 1.5,
+    Math.max(a.y, b.y) + STUB * 1.5,
+    a.y + STUB,
+    a.y - STUB,
+    b.y + STUB,
+    b.y - STUB,
+  ];
   const ways: Point[][] = a.x === b.x || a.y === b.y ? [[]] : [];
   ways.push([{ x: b.x, y: a.y }], [{ x: a.x, y: b.y }]);
-  for (const x of columns) ways.push([{ x, y: a.y }, { x, y: b.y }]);
-  for (const y of rows) ways.push([{ x: a.x, y }, { x: b.x, y }]);
+  for (const x of columns)
+    ways.push([
+      { x, y: a.y },
+      { x, y: b.y },
+    ]);
+  for (const y of rows)
+    ways.push([
+      { x: a.x, y },
+      { x: b.x, y },
+    ]);
   // Around a corner: out of one end, along, and into the other from its own side.
-  for (const x of columns.slice(3)) for (const y of rows.slice(3)) {
-    ways.push([{ x, y: a.y }, { x, y }, { x: b.x, y }], [{ x: a.x, y }, { x, y }, { x, y: b.y }]);
-  }
+  for (const x of columns.slice(3))
+    for (const y of rows.slice(3)) {
+      ways.push(
+        [
+          { x, y: a.y },
+          { x, y },
+          { x: b.x, y },
+        ],
+        [
+          { x: a.x, y },
+          { x, y },
+          { x, y: b.y },
+        ],
+      );
+    }
   // Back around both pieces, where their ends look away from each other.
   const [out, into] = [stubOf(a), stubOf(b)];
-  for (const y of [...rows.slice(0, 1), Math.min(a.y, b.y) - 2 * STUB, Math.max(a.y, b.y) + 2 * STUB]) ways.push([out, { x: out.x, y }, { x: into.x, y }, into]);
-  for (const x of [...columns.slice(0, 1), Math.min(a.x, b.x) - 2 * STUB, Math.max(a.x, b.x) + 2 * STUB]) ways.push([out, { x, y: out.y }, { x, y: into.y }, into]);
+  for (const y of [...rows.slice(0, 1), Math.min(a.y, b.y) - 2 * STUB, Math.max(a.y, b.y) + 2 * STUB])
+    ways.push([out, { x: out.x, y }, { x: into.x, y }, into]);
+  for (const x of [...columns.slice(0, 1), Math.min(a.x, b.x) - 2 * STUB, Math.max(a.x, b.x) + 2 * STUB])
+    ways.push([out, { x, y: out.y }, { x, y: into.y }, into]);
   return ways;
 }
 
@@ -79,7 +117,10 @@ function withoutStraightCorners(path: Point[]): Point[] {
     const [before, last] = [kept.at(-2), kept.at(-1)];
     if (last && last.x === point.x && last.y === point.y) continue;
     const isStraight =
-      before && last && ((before.x === last.x && last.x === point.x && between(before.y, last.y, point.y)) || (before.y === last.y && last.y === point.y && between(before.x, last.x, point.x)));
+      before &&
+      last &&
+      ((before.x === last.x && last.x === point.x && between(before.y, last.y, point.y)) ||
+        (before.y === last.y && last.y === point.y && between(before.x, last.x, point.x)));
     if (isStraight) kept.pop();
     kept.push(point);
   }
@@ -115,7 +156,8 @@ export function labelPlace(path: Point[]): Point & { along: Point; length: numbe
   for (let i = 1; i < path.length; i++) {
     const [a, b] = [path[i - 1], path[i]];
     const length = Math.abs(b.x - a.x) + Math.abs(b.y - a.y);
-    if (length > best.length) best = { x: (a.x + b.x) / 2, y: (a.y + b.y) / 2, along: { x: Math.sign(b.x - a.x), y: Math.sign(b.y - a.y) }, length };
+    if (length > best.length)
+      best = { x: (a.x + b.x) / 2, y: (a.y + b.y) / 2, along: { x: Math.sign(b.x - a.x), y: Math.sign(b.y - a.y) }, length };
   }
   return best;
 }

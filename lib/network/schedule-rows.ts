@@ -79,8 +79,13 @@ export function scheduleOf(drawing: Drawing, solved: { solve: SolveResult | null
   const drawn = figuresOfDrawing(drawing, solved, 'drawn');
   const balanced = figuresOfDrawing(drawing, solved, 'balanced');
   const storeyOf = new Map(drawing.storeys.map(({ id, name }) => [id, name]));
-  const base = (piece: Equipment): Row => ({ id: piece.id, tag: piece.tag || piece.id, storey: (piece.storeyId && storeyOf.get(piece.storeyId)) || '' });
-  const ofKind = <K extends Equipment['kind']>(kind: K) => drawing.equipment.filter((piece): piece is EquipmentOf<K> => piece.kind === kind);
+  const base = (piece: Equipment): Row => ({
+    id: piece.id,
+    tag: piece.tag || piece.id,
+    storey: (piece.storeyId && storeyOf.get(piece.storeyId)) || '',
+  });
+  const ofKind = <K extends Equipment['kind']>(kind: K) =>
+    drawing.equipment.filter((piece): piece is EquipmentOf<K> => piece.kind === kind);
   const now = (id: string) => drawn?.pieces.get(id);
   const atDesign = (id: string) => balanced?.pieces.get(id);
 
@@ -124,7 +129,8 @@ export function scheduleOf(drawing: Drawing, solved: { solve: SolveResult | null
   };
 }
 
-const ratio = (flowLs: number | null | undefined, designLs: number | null) => (flowLs == null || !designLs ? null : (100 * flowLs) / designLs);
+const ratio = (flowLs: number | null | undefined, designLs: number | null) =>
+  flowLs == null || !designLs ? null : (100 * flowLs) / designLs;
 
 const flowsNow = (piece: PieceSolution | undefined) => ({ flowLs: piece?.flowLs ?? null, percentOfDesign: piece?.percentOfDesign ?? null });
 

@@ -46,7 +46,9 @@ function sharedBends(drawing: Drawing, pipe: DrawingPipe, pieceId: string, part?
   const piece = pieces.get(pieceId);
   if (!path || !piece || pipe.bends.length === 0) return { before: [], after: [] };
   const cut = part ?? nearestOnRoute(path, piece).part;
-  const isBefore = (bend: Point) => path.slice(1).findIndex((corner) => corner.x === bend.x && corner.y === bend.y) < cut && path.some((corner) => corner.x === bend.x && corner.y === bend.y);
+  const isBefore = (bend: Point) =>
+    path.slice(1).findIndex((corner) => corner.x === bend.x && corner.y === bend.y) < cut &&
+    path.some((corner) => corner.x === bend.x && corner.y === bend.y);
   const firstAfter = pipe.bends.findIndex((bend) => !isBefore(bend));
   const at = firstAfter < 0 ? pipe.bends.length : firstAfter;
   return { before: pipe.bends.slice(0, at), after: pipe.bends.slice(at) };
@@ -69,10 +71,14 @@ export function insertOnPipe(drawing: Drawing, pieceId: string, { pipe, at }: Fo
   if (!piece || piece.kind === 'expansionVessel') return drawing;
   const place = at.along.x === 0 ? { x: at.x, y: snap(at.y) } : { x: snap(at.x), y: at.y };
   const isTee = piece.kind === 'tee';
-  const rotation = isTee ? piece.rotation : quarterTurns.find((turn) => looksAlong(portPlace({ ...piece, rotation: turn }, 'out'), at.along));
+  const rotation = isTee
+    ? piece.rotation
+    : quarterTurns.find((turn) => looksAlong(portPlace({ ...piece, rotation: turn }, 'out'), at.along));
   const turned: Equipment = { ...piece, ...place, rotation: rotation ?? piece.rotation };
   const moved = { ...drawing, equipment: drawing.equipment.map((it) => (it.id === pieceId ? turned : it)) };
-  const ends = isTee ? { into: sideTowards(at.along, { x: 0, y: 0 }), outOf: sideTowards({ x: 0, y: 0 }, at.along) } : { into: 'in' as const, outOf: 'out' as const };
+  const ends = isTee
+    ? { into: sideTowards(at.along, { x: 0, y: 0 }), outOf: sideTowards({ x: 0, y: 0 }, at.along) }
+    : { into: 'in' as const, outOf: 'out' as const };
   return splitPipe(moved, pipe.id, pieceId, ends, at.part);
 }
 

@@ -31,16 +31,23 @@ export function withStoreysByPlace(drawing: Drawing, only?: Set<string>): Drawin
 /** A storey on top of all or below all, a usual storey height away. */
 export function addStorey(drawing: Drawing, where: 'above' | 'below'): Drawing {
   const { storeys } = drawing;
-  const top = storeys.length === 0 ? 0 : where === 'above' ? Math.min(...storeys.map((it) => it.top)) - HEIGHT : Math.max(...storeys.map((it) => it.top + it.height));
+  const top =
+    storeys.length === 0
+      ? 0
+      : where === 'above'
+        ? Math.min(...storeys.map((it) => it.top)) - HEIGHT
+        : Math.max(...storeys.map((it) => it.top + it.height));
   const elevations = storeys.map((it) => it.elevationM);
-  const elevationM = storeys.length === 0 ? 0 : where === 'above' ? Math.max(...elevations) + USUAL_RISE_M : Math.min(...elevations) - USUAL_RISE_M;
+  const elevationM =
+    storeys.length === 0 ? 0 : where === 'above' ? Math.max(...elevations) + USUAL_RISE_M : Math.min(...elevations) - USUAL_RISE_M;
   const used = new Set(storeys.map((it) => it.name));
   let number = storeys.length;
   while (used.has(`Level ${number}`)) number++;
   return { ...drawing, storeys: [...storeys, { id: newId(), name: `Level ${number}`, elevationM, top, height: HEIGHT }] };
 }
 
-export const isStoreyEmpty = (drawing: Drawing, storeyId: string): boolean => !drawing.equipment.some((piece) => piece.storeyId === storeyId);
+export const isStoreyEmpty = (drawing: Drawing, storeyId: string): boolean =>
+  !drawing.equipment.some((piece) => piece.storeyId === storeyId);
 
 /** Takes an empty storey away and closes the gap: what is drawn above it comes down by its height. */
 export function removeStorey(drawing: Drawing, storeyId: string): Drawing {

@@ -39,5 +39,10 @@ function storeyNumber(drawing: Drawing, storeyId: string): string {
   const inName = storey?.name.match(/-?\d+/)?.[0];
   if (inName) return inName;
   const rising = [...drawing.storeys].sort((a, b) => a.elevationM - b.elevationM);
-  return String(Math.max(0, rising.findIndex(({ id }) => id === storeyId)));
+  return String(
+    Math.max(
+      0,
+      rising.findIndex(({ id }) => id === storeyId),
+    ),
+  );
 }

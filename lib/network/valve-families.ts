@@ -15,7 +15,8 @@ export interface GenericValve {
   kvTable: KvPoint[];
 }
 
-export const genericValveSource = 'Generic data of Evenhead, no maker’s: loss coefficient 9 fully open. Replace it by the chart of the valve that is bought.';
+export const genericValveSource =
+  'Generic data of Evenhead, no maker’s: loss coefficient 9 fully open. Replace it by the chart of the valve that is bought.';
 
 const OPEN_LOSS_COEFFICIENT = 9;
 const FIRST_TURN = 0.5;

@@ -1,4 +1,5 @@
-import { fitLoop } from '@/lib/balancing/fit-loop';
+import { type FittedLoop, fitLoop } from '@/lib/balancing/fit-loop';
+import { usualPriors } from '@/lib/balancing/fit/unknowns';
 import { predictSettings } from '@/lib/balancing/predict-settings';
 import type { LoopSettings, ReadingRound } from '@/lib/balancing/readings';
 import type { NetworkDocument } from '@/lib/hydraulics/types';
@@ -14,9 +15,10 @@ export function visitAsPredicted(document: NetworkDocument, site: CountedSite): 
   const rounds: ReadingRound[] = [];
   let settings: LoopSettings = {};
   let toRead = stations;
+  let fitted: FittedLoop | undefined;
   for (let round = 0; round < MOST_ROUNDS; round++) {
     rounds.push({ settings, readings: toRead.map((station) => site.read(station)) });
-    const fitted = fitLoop(document, rounds);
+    fitted = fitLoop(document, rounds, usualPriors, fitted);
     for (const fault of fitted.faults) named.add(fault.link.startsWith('T') ? valveOf(fault.link) : fault.link);
     if (process.env.SHOW) console.log(round, fitted.faults.map((f) => `${f.cause} ${f.link} r${f.round} ${f.logOdds.toFixed(1)} ×${f.factor.toFixed(2)}`).join('; '));
     const prediction = predictSettings(fitted);

@@ -4,12 +4,26 @@ import { joinPieces } from '@/lib/network/connect-pipe';
 import { newPiece } from '@/lib/network/new-piece';
 import { firstPipeFigures } from '@/lib/network/pipe-choice';
 
-const kinds: EquipmentKind[] = ['pump', 'source', 'terminalUnit', 'balancingValve', 'controlValve', 'checkValve', 'isolatingValve', 'strainer', 'tee', 'expansionVessel'];
+const kinds: EquipmentKind[] = [
+  'pump',
+  'source',
+  'terminalUnit',
+  'balancingValve',
+  'controlValve',
+  'checkValve',
+  'isolatingValve',
+  'strainer',
+  'tee',
+  'expansionVessel',
+];
 
 /** Drawings as a designer makes them: pieces put down anywhere, some joined; whatever refuses to be joined stays apart. */
 export const anyDrawing: fc.Arbitrary<Drawing> = fc
   .record({
-    pieces: fc.array(fc.record({ kind: fc.constantFrom(...kinds), x: fc.integer({ min: -50, max: 150 }), y: fc.integer({ min: -20, max: 120 }) }), { minLength: 2, maxLength: 12 }),
+    pieces: fc.array(
+      fc.record({ kind: fc.constantFrom(...kinds), x: fc.integer({ min: -50, max: 150 }), y: fc.integer({ min: -20, max: 120 }) }),
+      { minLength: 2, maxLength: 12 },
+    ),
     joins: fc.array(fc.record({ a: fc.nat(11), b: fc.nat(11), lengthM: fc.integer({ min: 1, max: 400 }) }), { maxLength: 14 }),
   })
   .map(({ pieces, joins }) => {

@@ -37,13 +37,33 @@ export async function makeMeasuredLoop(db: Knex, name?: string): Promise<Measure
     calibrated_on: '2026-03-14',
     calibration_due_on: '2027-03-14',
   });
-  await db('rounds').insert({ organization_id: organizationId, id: roundId, loop_id: loopId, revision_id: revisionId, number: 1, purpose: 'As found', started_by: technician.id });
+  await db('rounds').insert({
+    organization_id: organizationId,
+    id: roundId,
+    loop_id: loopId,
+    revision_id: revisionId,
+    number: 1,
+    purpose: 'As found',
+    started_by: technician.id,
+  });
   await db('loops').where({ organization_id: organizationId, id: loopId }).update({ state: 'in-commissioning' });
-  return { ...organization, revisionId, roundId, instrumentId, stations: Object.fromEntries(rows.map(({ tag, station_id: id }) => [tag, id])) };
+  return {
+    ...organization,
+    revisionId,
+    roundId,
+    instrumentId,
+    stations: Object.fromEntries(rows.map(({ tag, station_id: id }) => [tag, id])),
+  };
 }
 
 /** One entry at a station, at its per cent of design. */
-export async function measure(db: Knex, loop: MeasuredLoop, tag: string, percentOfDesign: number, corrects?: { id: string; why: string }): Promise<string> {
+export async function measure(
+  db: Knex,
+  loop: MeasuredLoop,
+  tag: string,
+  percentOfDesign: number,
+  corrects?: { id: string; why: string },
+): Promise<string> {
   const id = uuidv7();
   const where = { organization_id: loop.organizationId, revision_id: loop.revisionId, station_id: loop.stations[tag] };
   const { design_flow_ls: designFlowLs } = await db('station_designs').where(where).first('design_flow_ls');

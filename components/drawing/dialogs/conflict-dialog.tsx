@@ -40,12 +40,22 @@ export function ConflictDialog({ base, mine, theirs, onResolve, onLater }: Confl
         <fieldset className="mb-4">
           <legend className="font-semibold">Changed by both</legend>
           <div className="mt-1 flex gap-2 pb-2">
-            <Button size="small" onClick={() => setTakenTheirs(new Set())}>All mine</Button>
-            <Button size="small" onClick={() => setTakenTheirs(new Set(merge.conflicts))}>All theirs</Button>
+            <Button size="small" onClick={() => setTakenTheirs(new Set())}>
+              All mine
+            </Button>
+            <Button size="small" onClick={() => setTakenTheirs(new Set(merge.conflicts))}>
+              All theirs
+            </Button>
           </div>
           <ul className="border-t">
             {merge.conflicts.map((conflict) => (
-              <ConflictRow key={`${conflict.place.kind}${conflict.place.id}`} conflict={conflict} theirName={theirs.savedBy} isTheirs={takenTheirs.has(conflict)} onChoose={(isTheirs) => choose(conflict, isTheirs)} />
+              <ConflictRow
+                key={`${conflict.place.kind}${conflict.place.id}`}
+                conflict={conflict}
+                theirName={theirs.savedBy}
+                isTheirs={takenTheirs.has(conflict)}
+                onChoose={(isTheirs) => choose(conflict, isTheirs)}
+              />
             ))}
           </ul>
         </fieldset>
@@ -64,7 +74,17 @@ export function ConflictDialog({ base, mine, theirs, onResolve, onLater }: Confl
   );
 }
 
-function ConflictRow({ conflict, theirName, isTheirs, onChoose }: { conflict: Conflict; theirName: string; isTheirs: boolean; onChoose: (isTheirs: boolean) => void }) {
+function ConflictRow({
+  conflict,
+  theirName,
+  isTheirs,
+  onChoose,
+}: {
+  conflict: Conflict;
+  theirName: string;
+  isTheirs: boolean;
+  onChoose: (isTheirs: boolean) => void;
+}) {
   const name = useId();
   const option = 'flex min-h-11 cursor-pointer items-center gap-2 px-2';
   const [mine, other] = differingFields(conflict.mine, conflict.theirs);
@@ -72,15 +92,15 @@ function ConflictRow({ conflict, theirName, isTheirs, onChoose }: { conflict: Co
     <li className="grid gap-x-4 border-b py-1 text-sm sm:grid-cols-[1fr_1fr_1fr]">
       <span className="self-center font-semibold">{conflict.name}</span>
       <label className={option}>
-        <input type="radio" name={name} checked={!isTheirs} onChange={() => onChoose(false)} className="size-4 accent-petrol" />
+        <input type="radio" name={name} checked={!isTheirs} onChange={() => onChoose(false)} className="accent-petrol size-4" />
         <span>
-          Mine <span className="block text-xs break-all text-quiet">{mine}</span>
+          Mine <span className="text-quiet block text-xs break-all">{mine}</span>
         </span>
       </label>
       <label className={option}>
-        <input type="radio" name={name} checked={isTheirs} onChange={() => onChoose(true)} className="size-4 accent-petrol" />
+        <input type="radio" name={name} checked={isTheirs} onChange={() => onChoose(true)} className="accent-petrol size-4" />
         <span>
-          {theirName} <span className="block text-xs break-all text-quiet">{other}</span>
+          {theirName} <span className="text-quiet block text-xs break-all">{other}</span>
         </span>
       </label>
     </li>

@@ -33,7 +33,8 @@ export function IssueDialog({ loopId, nextNumber, saveFirst, onClose, onIssued }
   const issue = useMutation({
     mutationFn: async (note: string) => {
       const version = await saveFirst();
-      if (version === null) throw new Error('The drawing could not be saved, so it cannot be issued yet. See the line at the foot of the page.');
+      if (version === null)
+        throw new Error('The drawing could not be saved, so it cannot be issued yet. See the line at the foot of the page.');
       return issueRevision(loopId, version, note);
     },
     onSuccess: ({ number }) => {
@@ -42,14 +43,23 @@ export function IssueDialog({ loopId, nextNumber, saveFirst, onClose, onIssued }
     },
   });
   return (
-    <Dialog isOpen onClose={onClose} title={`Issue revision ${nextNumber}`} description="Freezes drawing, schedule, settings and pump duty as they stand. Technicians work from the issued revision.">
+    <Dialog
+      isOpen
+      onClose={onClose}
+      title={`Issue revision ${nextNumber}`}
+      description="Freezes drawing, schedule, settings and pump duty as they stand. Technicians work from the issued revision."
+    >
       <form className="flex flex-col gap-4" onSubmit={form.handleSubmit(({ note }) => issue.mutate(note))}>
         {blocking.length > 0 && (
           <Notice tone="high" title={`${blocking.length} ${blocking.length === 1 ? 'fault forbids' : 'faults forbid'} it`}>
             <FaultLines messages={blocking.map(({ message }) => message)} />
           </Notice>
         )}
-        {blocking.length === 0 && isUnbalanced && <Notice tone="high" title="There are no settings yet">{solved?.balanceMissing ?? 'The loop has not been solved and balanced.'}</Notice>}
+        {blocking.length === 0 && isUnbalanced && (
+          <Notice tone="high" title="There are no settings yet">
+            {solved?.balanceMissing ?? 'The loop has not been solved and balanced.'}
+          </Notice>
+        )}
         {warnings.length > 0 && (
           <Notice tone="brass" title={`${warnings.length} ${warnings.length === 1 ? 'warning' : 'warnings'} to look at`}>
             <FaultLines messages={warnings.map(({ message }) => message)} />
@@ -59,7 +69,13 @@ export function IssueDialog({ loopId, nextNumber, saveFirst, onClose, onIssued }
         {issue.error && <Notice tone="high">{issue.error.message}</Notice>}
         <div className="flex justify-end gap-2">
           <Button onClick={onClose}>Not yet</Button>
-          <Button look="primary" type="submit" isPending={issue.isPending} pendingText="Issuing…" disabled={blocking.length > 0 || isUnbalanced || isOld}>
+          <Button
+            look="primary"
+            type="submit"
+            isPending={issue.isPending}
+            pendingText="Issuing…"
+            disabled={blocking.length > 0 || isUnbalanced || isOld}
+          >
             Issue revision {nextNumber}
           </Button>
         </div>

@@ -18,7 +18,13 @@ const hands = [
 
 export function ShortcutsDialog({ isOpen, onClose }: { isOpen: boolean; onClose: () => void }) {
   return (
-    <Dialog isOpen={isOpen} onClose={onClose} title="Keys of the drawing" description="Letters work while the canvas or the bars around it have the focus." isWide>
+    <Dialog
+      isOpen={isOpen}
+      onClose={onClose}
+      title="Keys of the drawing"
+      description="Letters work while the canvas or the bars around it have the focus."
+      isWide
+    >
       <div className="grid gap-x-8 gap-y-5 md:grid-cols-3">
         {groups.map(([title, shortcuts]) => (
           <section key={title}>
@@ -28,7 +34,7 @@ export function ShortcutsDialog({ isOpen, onClose }: { isOpen: boolean; onClose:
                 <div key={keys} className="flex justify-between gap-4 border-b py-1 text-sm">
                   <dt>{label}</dt>
                   <dd>
-                    <kbd className="font-sans whitespace-nowrap text-quiet">{keys}</kbd>
+                    <kbd className="text-quiet font-sans whitespace-nowrap">{keys}</kbd>
                   </dd>
                 </div>
               ))}

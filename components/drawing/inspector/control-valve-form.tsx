@@ -28,7 +28,13 @@ export function ControlValveForm({ valves }: { valves: ControlValve[] }) {
   const { values, mixed } = commonValues(valves.map(({ kvs, characteristic, opening }) => ({ kvs, characteristic, opening })));
   return (
     <Section title="Control valve">
-      <CommitForm schema={schema} values={values} label="Control valve" disabled={!canEdit} onCommit={(changed) => editPieces(valves, (valve) => ({ ...valve, ...changed }) as ControlValve)}>
+      <CommitForm
+        schema={schema}
+        values={values}
+        label="Control valve"
+        disabled={!canEdit}
+        onCommit={(changed) => editPieces(valves, (valve) => ({ ...valve, ...changed }) as ControlValve)}
+      >
         <QuantityRow name="kvs" label="Fully open, Kvs" quantity="valveCoefficient" isMixed={mixed.has('kvs')} />
         <SelectRow name="characteristic" label="Characteristic" options={characteristicWords} isMixed={mixed.has('characteristic')} />
         <NumberRow name="opening" label="Opening" isPercent isMixed={mixed.has('opening')} />

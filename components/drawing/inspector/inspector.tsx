@@ -50,7 +50,11 @@ function OnePipe({ pipe }: { pipe: DrawingPipe }) {
   const tagOf = (id: string) => pieces.find((piece) => piece.id === id)?.tag || '?';
   return (
     <>
-      <Heading title={`${tagOf(pipe.from.equipmentId)} to ${tagOf(pipe.to.equipmentId)}`} kind="pipe" under={pipe.circuit === 'supply' ? 'Supply' : 'Return'} />
+      <Heading
+        title={`${tagOf(pipe.from.equipmentId)} to ${tagOf(pipe.to.equipmentId)}`}
+        kind="pipe"
+        under={pipe.circuit === 'supply' ? 'Supply' : 'Return'}
+      />
       <PieceFaults id={pipe.id} />
       <PipeForm pipes={[pipe]} />
       <PipeResults pipe={pipe} />
@@ -61,7 +65,10 @@ function OnePipe({ pipe }: { pipe: DrawingPipe }) {
 /** Many at once: their common fields, a group a kind. */
 function Many({ pieces, pipes }: { pieces: Equipment[]; pipes: DrawingPipe[] }) {
   const kinds = [...new Set(pieces.map(({ kind }) => kind))].filter((kind) => kind !== 'tee' && kind !== 'expansionVessel');
-  const words = [pieces.length && `${pieces.length} ${pieces.length === 1 ? 'piece' : 'pieces'}`, pipes.length && `${pipes.length} ${pipes.length === 1 ? 'pipe' : 'pipes'}`];
+  const words = [
+    pieces.length && `${pieces.length} ${pieces.length === 1 ? 'piece' : 'pieces'}`,
+    pipes.length && `${pipes.length} ${pipes.length === 1 ? 'pipe' : 'pipes'}`,
+  ];
   return (
     <>
       <Heading title={words.filter(Boolean).join(' and ')} kind="selected" under="What you type here goes to all of them." />
@@ -98,7 +105,11 @@ function KindForm({ pieces }: { pieces: Equipment[] }): ReactNode {
     case 'source':
       return <SourceForm sources={as('source')} />;
     case 'pump':
-      return pieces.length === 1 ? <PumpForm pump={as('pump')[0]} /> : <p className="text-sm text-quiet">Select one pump to edit its curve.</p>;
+      return pieces.length === 1 ? (
+        <PumpForm pump={as('pump')[0]} />
+      ) : (
+        <p className="text-quiet text-sm">Select one pump to edit its curve.</p>
+      );
     case 'expansionVessel':
       return <VesselForm vessel={as('expansionVessel')[0]} />;
     case 'checkValve':
@@ -114,8 +125,8 @@ const Heading = ({ title, kind, under }: { title: string; kind: string; under?: 
   <div className="mb-2">
     <div className="flex items-baseline justify-between gap-3">
       <h2 className="truncate">{title}</h2>
-      <span className="shrink-0 text-sm text-quiet">{kind}</span>
+      <span className="text-quiet shrink-0 text-sm">{kind}</span>
     </div>
-    {under && <p className="text-sm text-quiet">{under}</p>}
+    {under && <p className="text-quiet text-sm">{under}</p>}
   </div>
 );

@@ -28,8 +28,14 @@ export function LoopForm() {
   return (
     <>
       <h2>Loop</h2>
-      <p className="text-sm text-quiet">Select a piece or a pipe to see and edit its figures.</p>
-      <CommitForm schema={fluidSchema} values={fluid} label="Fluid" disabled={!canEdit} onCommit={(changed) => change((drawing) => ({ ...drawing, fluid: { ...drawing.fluid, ...changed } }))}>
+      <p className="text-quiet text-sm">Select a piece or a pipe to see and edit its figures.</p>
+      <CommitForm
+        schema={fluidSchema}
+        values={fluid}
+        label="Fluid"
+        disabled={!canEdit}
+        onCommit={(changed) => change((drawing) => ({ ...drawing, fluid: { ...drawing.fluid, ...changed } }))}
+      >
         <Section title="Fluid">
           <SelectRow
             name="medium"
@@ -45,7 +51,13 @@ export function LoopForm() {
           <QuantityRow name="returnC" label="Return" quantity="temperature" />
         </Section>
       </CommitForm>
-      <CommitForm schema={balanceSchema} values={{ pumpExcess }} label="Balance" disabled={!canEdit} onCommit={(changed) => change((drawing) => ({ ...drawing, ...changed }))}>
+      <CommitForm
+        schema={balanceSchema}
+        values={{ pumpExcess }}
+        label="Balance"
+        disabled={!canEdit}
+        onCommit={(changed) => change((drawing) => ({ ...drawing, ...changed }))}
+      >
         <Section title="Balance">
           <SelectRow
             name="pumpExcess"
@@ -71,7 +83,13 @@ export function LoopForm() {
 function LikeLast({ onChange }: { onChange: (isLikeLast: boolean) => void }) {
   const { canvasStore } = useEditor();
   return (
-    <CommitForm schema={placingSchema} values={{ isLikeLast: canvasStore.getState().isLikeLast }} label="New pieces" disabled={false} onCommit={({ isLikeLast }) => onChange(isLikeLast ?? true)}>
+    <CommitForm
+      schema={placingSchema}
+      values={{ isLikeLast: canvasStore.getState().isLikeLast }}
+      label="New pieces"
+      disabled={false}
+      onCommit={({ isLikeLast }) => onChange(isLikeLast ?? true)}
+    >
       <Section title="New pieces">
         <CheckRow name="isLikeLast" label="Take the figures of the last of their kind" />
       </Section>

@@ -5,16 +5,21 @@ import { useCanvas, useEditor } from '../editor-context';
 import { changedPipe, PipeFields } from './pipe-form';
 
 /** What the next pipe will have; it follows the pipe that was last edited. */
-export function NewPipes({ isOpen }: { isOpen?: boolean }) {
+export function NewPipes() {
   const { canvasStore } = useEditor();
   const newPipe = useCanvas((state) => state.newPipe);
   return (
-    <details className="mt-4 text-sm" open={isOpen}>
+    <details className="mt-4 text-sm">
       <summary className="min-h-6">
-        <span className="text-xs font-semibold text-quiet">New pipes: </span>
+        <span className="text-quiet text-xs font-semibold">New pipes: </span>
         {pipeWords(newPipe)}
       </summary>
-      <PipeFields figures={[newPipe]} label="New pipes" disabled={false} onCommit={(changed) => canvasStore.setState({ newPipe: changedPipe(newPipe, changed) })} />
+      <PipeFields
+        figures={[newPipe]}
+        label="New pipes"
+        disabled={false}
+        onCommit={(changed) => canvasStore.setState({ newPipe: changedPipe(newPipe, changed) })}
+      />
     </details>
   );
 }

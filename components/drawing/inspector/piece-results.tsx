@@ -22,7 +22,8 @@ export function PieceResults({ piece }: { piece: Equipment }) {
       {valve && (
         <Section title="Balanced">
           <FigureRow label="Setting">
-            <span className="figures font-bold text-brass">{valve.setting.toFixed(2)}</span> <span className="text-xs text-quiet">turns</span>
+            <span className="figures text-brass font-bold">{valve.setting.toFixed(2)}</span>{' '}
+            <span className="text-quiet text-xs">turns</span>
           </FigureRow>
           <FigureRow label="At that setting" quantity="valveCoefficient" si={valve.kv} />
           <FigureRow label="Drop at design" quantity="pressure" si={valve.dropKpa} />
@@ -33,23 +34,33 @@ export function PieceResults({ piece }: { piece: Equipment }) {
         {solution.flowLs !== null && <FigureRow label="Flow" quantity="flow" si={solution.flowLs} />}
         {solution.percentOfDesign !== null && (
           <FigureRow label="Of design">
-            <Deviation percent={solution.percentOfDesign} verdict={verdictOf(solution.percentOfDesign, band)} /> <span className="text-xs text-quiet">%</span>
+            <Deviation percent={solution.percentOfDesign} verdict={verdictOf(solution.percentOfDesign, band)} />{' '}
+            <span className="text-quiet text-xs">%</span>
           </FigureRow>
         )}
         {solution.pump && (
           <>
             <FigureRow label="Head" quantity="head" si={solution.pump.headM} />
             {solution.pump.shaftKw !== null && <FigureRow label="Shaft power" quantity="power" si={solution.pump.shaftKw} />}
-            {solution.pump.requiredHeadM !== null && <FigureRow label="Head needed for design" quantity="head" si={solution.pump.requiredHeadM} />}
+            {solution.pump.requiredHeadM !== null && (
+              <FigureRow label="Head needed for design" quantity="head" si={solution.pump.requiredHeadM} />
+            )}
             {solution.pump.requiredSpeed !== null && (
               <FigureRow label="Speed for design">
-                <span className="figures">{(solution.pump.requiredSpeed * 100).toFixed(1)}</span> <span className="text-xs text-quiet">%</span>
+                <span className="figures">{(solution.pump.requiredSpeed * 100).toFixed(1)}</span>{' '}
+                <span className="text-quiet text-xs">%</span>
               </FigureRow>
             )}
           </>
         )}
         {solution.dropKpa !== null && !solution.pump && <FigureRow label="Drop" quantity="pressure" si={Math.abs(solution.dropKpa)} />}
-        {solution.inletKpa !== null && <FigureRow label={solution.outletKpa === null ? 'Gauge pressure' : 'Gauge pressure in'} quantity="pressure" si={solution.inletKpa} />}
+        {solution.inletKpa !== null && (
+          <FigureRow
+            label={solution.outletKpa === null ? 'Gauge pressure' : 'Gauge pressure in'}
+            quantity="pressure"
+            si={solution.inletKpa}
+          />
+        )}
         {solution.outletKpa !== null && <FigureRow label="Gauge pressure out" quantity="pressure" si={solution.outletKpa} />}
         {solution.authority !== null && (
           <FigureRow label="Authority of the control valve">
@@ -65,7 +76,9 @@ export function PieceResults({ piece }: { piece: Equipment }) {
 
 function workingsOf(piece: Equipment, { flowLs, valve, parts, pump }: PieceSolution, densityKgM3: number): Working[] {
   if (flowLs === null) return [];
-  const balancing = valve ? [valveWorking('Balancing valve, drop at its balanced setting and design flow', valve.kv, valve.flowLs, densityKgM3)] : [];
+  const balancing = valve
+    ? [valveWorking('Balancing valve, drop at its balanced setting and design flow', valve.kv, valve.flowLs, densityKgM3)]
+    : [];
   switch (piece.kind) {
     case 'terminalUnit': {
       const { controlValve, designFlowLs, coilDropKpa, strainerKv } = piece;
@@ -84,7 +97,9 @@ function workingsOf(piece: Equipment, { flowLs, valve, parts, pump }: PieceSolut
       return kv ? [valveWorking('Drop', kv, flowLs, densityKgM3)] : [];
     }
     case 'source':
-      return piece.designFlowLs && piece.designDropKpa ? [designPairWorking('Drop', { designFlowLs: piece.designFlowLs, designDropKpa: piece.designDropKpa }, flowLs)] : [];
+      return piece.designFlowLs && piece.designDropKpa
+        ? [designPairWorking('Drop', { designFlowLs: piece.designFlowLs, designDropKpa: piece.designDropKpa }, flowLs)]
+        : [];
     case 'pump':
       return pump ? [pumpWorking(flowLs, pump.headM, densityKgM3)] : [];
     case 'checkValve':

@@ -28,7 +28,9 @@ const seriesWords: [string, string][] = [...seriesIds.map((id): [string, string]
 /** What a change in the form means for a pipe: a size of a series brings its bore and roughness. */
 export function changedPipe<P extends PipeFigures>(pipe: P, changed: Partial<PipeValues>): P {
   const { series, nominal, ...rest } = changed;
-  const plain = Object.fromEntries(Object.entries(rest).filter(([key, value]) => value !== null || key === 'lengthM' || key === 'boreMm' || key === 'roughnessMm'));
+  const plain = Object.fromEntries(
+    Object.entries(rest).filter(([key, value]) => value !== null || key === 'lengthM' || key === 'boreMm' || key === 'roughnessMm'),
+  );
   const next = { ...pipe, ...plain };
   if (series === FREE) return { ...next, series: null, nominal: null };
   if (series === undefined && nominal === undefined) return next;
@@ -47,8 +49,20 @@ export function PipeForm({ pipes }: { pipes: DrawingPipe[] }) {
     canvasStore.setState({ newPipe: { lengthM: length, series, nominal, boreMm: bore, roughnessMm: roughness, minorK } });
   };
   const circuit = commonValues(pipes.map((pipe) => ({ circuit: pipe.circuit })));
+  const bent = pipes.filter(({ bends }) => bends.length > 0);
   return (
-    <PipeFields figures={pipes} label="Pipe" disabled={!canEdit} onCommit={commit} circuit={circuit} />
+    <>
+      <PipeFields figures={pipes} label="Pipe" disabled={!canEdit} onCommit={commit} circuit={circuit} />
+      {canEdit && bent.length > 0 && (
+        <button
+          type="button"
+          className="text-petrol min-h-8 text-sm font-semibold hover:underline"
+          onClick={() => editPipes(bent, (pipe) => ({ ...pipe, bends: [] }))}
+        >
+          Let it find its own way again
+        </button>
+      )}
+    </>
   );
 }
 
@@ -74,12 +88,23 @@ export function PipeFields({ figures, label, disabled, onCommit, circuit }: Pipe
   const series = values.series;
   const sizes = isSeriesId(series) ? pipeSeries[series].sizes : [];
   return (
-    <CommitForm schema={schema} values={{ ...values, circuit: circuit?.values.circuit ?? null }} label={label} disabled={disabled} onCommit={onCommit}>
+    <CommitForm
+      schema={schema}
+      values={{ ...values, circuit: circuit?.values.circuit ?? null }}
+      label={label}
+      disabled={disabled}
+      onCommit={onCommit}
+    >
       <Section title={label}>
         <QuantityRow name="lengthM" label="Length" quantity="length" isMixed={mixed.has('lengthM')} />
         <SelectRow name="series" label="Series" options={seriesWords} isMixed={mixed.has('series')} />
         {sizes.length > 0 && (
-          <SelectRow name="nominal" label="Size" options={sizes.map((size) => [size.nominal, `${size.nominal}, bore ${size.boreMm} mm`])} isMixed={mixed.has('nominal') || values.nominal === null} />
+          <SelectRow
+            name="nominal"
+            label="Size"
+            options={sizes.map((size) => [size.nominal, `${size.nominal}, bore ${size.boreMm} mm`])}
+            isMixed={mixed.has('nominal') || values.nominal === null}
+          />
         )}
         {series === FREE && (
           <>
@@ -101,7 +126,7 @@ export function PipeFields({ figures, label, disabled, onCommit, circuit }: Pipe
         )}
       </Section>
       {isSeriesId(series) && (
-        <p className="pt-1 text-xs text-quiet">
+        <p className="text-quiet pt-1 text-xs">
           {values.boreMm !== null && `Bore ${values.boreMm} mm, roughness ${values.roughnessMm} mm. `}
           {sizeSource({ series })}
         </p>

@@ -17,7 +17,7 @@ export function PipeResults({ pipe }: { pipe: DrawingPipe }) {
         <FigureRow label="Flow" quantity="flow" si={solution.flowLs} />
         {solution.percentOfDesign !== null && (
           <FigureRow label="Of design">
-            <span className="figures">{solution.percentOfDesign.toFixed(1)}</span> <span className="text-xs text-quiet">%</span>
+            <span className="figures">{solution.percentOfDesign.toFixed(1)}</span> <span className="text-quiet text-xs">%</span>
           </FigureRow>
         )}
         <FigureRow label="Velocity" quantity="velocity" si={solution.velocityMs} />

@@ -44,7 +44,8 @@ export function PointTable({ label, columns, points, onCommit, disabled }: Point
     take(pasted);
     toast(`${pasted.length} points pasted`);
   };
-  const set = (index: number, key: string, value: number | null) => setRows(rows.map((row, i) => (i === index ? { ...row, [key]: value } : row)));
+  const set = (index: number, key: string, value: number | null) =>
+    setRows(rows.map((row, i) => (i === index ? { ...row, [key]: value } : row)));
 
   return (
     <div onPaste={disabled ? undefined : paste} onBlur={() => take(rows)}>
@@ -55,7 +56,7 @@ export function PointTable({ label, columns, points, onCommit, disabled }: Point
             <tr>
               {units.map(({ key, label: head, unit }) => (
                 <th key={key} className="px-1 py-1 text-right text-xs font-semibold">
-                  {head} <span className="font-normal text-quiet">{unit}</span>
+                  {head} <span className="text-quiet font-normal">{unit}</span>
                 </th>
               ))}
               <th className="w-8">
@@ -68,12 +69,23 @@ export function PointTable({ label, columns, points, onCommit, disabled }: Point
               <tr key={index}>
                 {columns.map(({ key, label: head, quantity }) => (
                   <td key={key} className="p-0.5">
-                    <Cell label={`${head}, point ${index + 1}`} quantity={quantity} value={row[key]} disabled={disabled} onChange={(value) => set(index, key, value)} />
+                    <Cell
+                      label={`${head}, point ${index + 1}`}
+                      quantity={quantity}
+                      value={row[key]}
+                      disabled={disabled}
+                      onChange={(value) => set(index, key, value)}
+                    />
                   </td>
                 ))}
                 <td>
                   {!disabled && (
-                    <button type="button" aria-label={`Remove point ${index + 1}`} className="p-1.5 text-quiet hover:text-ink" onClick={() => take(rows.filter((_, i) => i !== index))}>
+                    <button
+                      type="button"
+                      aria-label={`Remove point ${index + 1}`}
+                      className="text-quiet hover:text-ink p-1.5"
+                      onClick={() => take(rows.filter((_, i) => i !== index))}
+                    >
                       <X size={14} />
                     </button>
                   )}
@@ -85,10 +97,21 @@ export function PointTable({ label, columns, points, onCommit, disabled }: Point
       )}
       {!disabled && (
         <div className="flex items-center gap-3 py-1.5 text-sm">
-          <button type="button" className="inline-flex min-h-8 items-center gap-1 font-semibold text-petrol" onClick={() => setRows([...rows, Object.fromEntries(columns.map(({ key }) => [key, null]))])}>
+          <button
+            type="button"
+            className="text-petrol inline-flex min-h-8 items-center gap-1 font-semibold"
+            onClick={() => setRows([...rows, Object.fromEntries(columns.map(({ key }) => [key, null]))])}
+          >
             <Plus size={14} aria-hidden /> Add point
           </button>
-          <textarea aria-label={`Paste ${label.toLowerCase()} from a spreadsheet`} placeholder="or paste rows here" rows={1} value="" onChange={() => undefined} className={classNames(inputClass, 'h-8 flex-1 resize-none py-1')} />
+          <textarea
+            aria-label={`Paste ${label.toLowerCase()} from a spreadsheet`}
+            placeholder="or paste rows here"
+            rows={1}
+            value=""
+            onChange={() => undefined}
+            className={classNames(inputClass, 'h-8 flex-1 resize-none py-1')}
+          />
         </div>
       )}
     </div>

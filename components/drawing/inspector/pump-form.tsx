@@ -10,7 +10,10 @@ import { useEdit } from './use-edit';
 
 type Pump = EquipmentOf<'pump'>;
 
-const schema = z.object({ speed: z.number('Give a speed.').min(0, 'From 0 to 200 %.').max(2, 'From 0 to 200 %.'), hasNonReturn: z.boolean() });
+const schema = z.object({
+  speed: z.number('Give a speed.').min(0, 'From 0 to 200 %.').max(2, 'From 0 to 200 %.'),
+  hasNonReturn: z.boolean(),
+});
 
 /** Speed, non-return and curves of a pump; the curves are those at full speed. */
 export function PumpForm({ pump }: { pump: Pump }) {
@@ -51,7 +54,12 @@ export function PumpForm({ pump }: { pump: Pump }) {
           ]}
           points={pump.efficiency}
           disabled={!canEdit}
-          onCommit={(points) => editPieces([pump], (piece) => ({ ...piece, efficiency: (points as Pump['efficiency']).map((point) => ({ ...point, fraction: Math.min(1, Math.max(0, point.fraction)) })) }))}
+          onCommit={(points) =>
+            editPieces([pump], (piece) => ({
+              ...piece,
+              efficiency: (points as Pump['efficiency']).map((point) => ({ ...point, fraction: Math.min(1, Math.max(0, point.fraction)) })),
+            }))
+          }
         />
       </Section>
     </>

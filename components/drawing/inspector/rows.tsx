@@ -18,7 +18,7 @@ const several = 'several';
 export const Section = ({ title, action, children }: { title: string; action?: ReactNode; children: ReactNode }) => (
   <section className="mt-4">
     <div className="flex items-baseline justify-between">
-      <h3 className="text-xs font-semibold text-quiet">{title}</h3>
+      <h3 className="text-quiet text-xs font-semibold">{title}</h3>
       {action}
     </div>
     {children}
@@ -91,10 +91,12 @@ export function NumberRow({ name, label, isMixed, isPercent, unit }: FieldRowPro
           value={isOwn ? typed.text : shown}
           onChange={(event) => take(event.target.value)}
         />
-        <span className="pointer-events-none absolute inset-y-0 right-2.5 flex items-center text-sm text-quiet">{isPercent ? '%' : unit}</span>
+        <span className="text-quiet pointer-events-none absolute inset-y-0 right-2.5 flex items-center text-sm">
+          {isPercent ? '%' : unit}
+        </span>
       </div>
       {error && (
-        <p id={`${id}-error`} role="alert" className="col-span-2 text-right text-xs text-high">
+        <p id={`${id}-error`} role="alert" className="text-high col-span-2 text-right text-xs">
           ▴ {error}
         </p>
       )}
@@ -109,8 +111,19 @@ export function TextRow({ name, label, placeholder }: FieldRowProps & { placehol
   return (
     <div className={rowClass}>
       <label htmlFor={id}>{label}</label>
-      <input id={id} placeholder={placeholder} aria-invalid={Boolean(error)} autoComplete="off" className={classNames(inputClass, compact)} {...register(name)} />
-      {error && <p role="alert" className="col-span-2 text-right text-xs text-high">{error}</p>}
+      <input
+        id={id}
+        placeholder={placeholder}
+        aria-invalid={Boolean(error)}
+        autoComplete="off"
+        className={classNames(inputClass, compact)}
+        {...register(name)}
+      />
+      {error && (
+        <p role="alert" className="text-high col-span-2 text-right text-xs">
+          {error}
+        </p>
+      )}
     </div>
   );
 }
@@ -152,7 +165,7 @@ export function CheckRow({ name, label }: FieldRowProps) {
       <input
         id={id}
         type="checkbox"
-        className="size-5 justify-self-end accent-petrol"
+        className="accent-petrol size-5 justify-self-end"
         checked={Boolean(field.value)}
         onChange={(event) => {
           field.onChange(event.target.checked);
@@ -164,7 +177,17 @@ export function CheckRow({ name, label }: FieldRowProps) {
 }
 
 /** A figure that was computed: nothing to type. */
-export function FigureRow({ label, quantity, si, children }: { label: string; quantity?: Quantity; si?: number | null; children?: ReactNode }) {
+export function FigureRow({
+  label,
+  quantity,
+  si,
+  children,
+}: {
+  label: string;
+  quantity?: Quantity;
+  si?: number | null;
+  children?: ReactNode;
+}) {
   return (
     <div className={classNames(rowClass, 'min-h-9')}>
       <span>{label}</span>

@@ -16,7 +16,9 @@ type SingleKv = EquipmentOf<'checkValve' | 'isolatingValve' | 'strainer'>;
 export function SingleKvForm({ pieces }: { pieces: SingleKv[] }) {
   const { canEdit } = useEditor();
   const { editPieces } = useEdit();
-  const { values, mixed } = commonValues(pieces.map((piece) => ({ kv: piece.kv, isClosed: piece.kind === 'isolatingValve' ? piece.isClosed : false })));
+  const { values, mixed } = commonValues(
+    pieces.map((piece) => ({ kv: piece.kv, isClosed: piece.kind === 'isolatingValve' ? piece.isClosed : false })),
+  );
   return (
     <Section title="Figures">
       <CommitForm
@@ -25,7 +27,15 @@ export function SingleKvForm({ pieces }: { pieces: SingleKv[] }) {
         label="Figures"
         disabled={!canEdit}
         onCommit={({ isClosed, ...changed }) =>
-          editPieces(pieces, (piece) => ({ ...piece, ...changed, ...(piece.kind === 'isolatingValve' && typeof isClosed === 'boolean' ? { isClosed } : {}) }) as SingleKv)
+          editPieces(
+            pieces,
+            (piece) =>
+              ({
+                ...piece,
+                ...changed,
+                ...(piece.kind === 'isolatingValve' && typeof isClosed === 'boolean' ? { isClosed } : {}),
+              }) as SingleKv,
+          )
         }
       >
         <QuantityRow name="kv" label="Flow coefficient" quantity="valveCoefficient" isMixed={mixed.has('kv')} />

@@ -22,10 +22,18 @@ type Source = EquipmentOf<'source'>;
 export function SourceForm({ sources }: { sources: Source[] }) {
   const { canEdit } = useEditor();
   const { editPieces } = useEdit();
-  const { values, mixed } = commonValues(sources.map((source) => ({ sourceKind: source.sourceKind, designFlowLs: source.designFlowLs, designDropKpa: source.designDropKpa })));
+  const { values, mixed } = commonValues(
+    sources.map((source) => ({ sourceKind: source.sourceKind, designFlowLs: source.designFlowLs, designDropKpa: source.designDropKpa })),
+  );
   return (
     <Section title="Design">
-      <CommitForm schema={schema} values={values} label="Source" disabled={!canEdit} onCommit={(changed) => editPieces(sources, (source) => ({ ...source, ...changed }) as Source)}>
+      <CommitForm
+        schema={schema}
+        values={values}
+        label="Source"
+        disabled={!canEdit}
+        onCommit={(changed) => editPieces(sources, (source) => ({ ...source, ...changed }) as Source)}
+      >
         <SelectRow name="sourceKind" label="Kind" options={kindWords} isMixed={mixed.has('sourceKind')} />
         <QuantityRow name="designFlowLs" label="Design flow" quantity="flow" isMixed={mixed.has('designFlowLs')} />
         <QuantityRow name="designDropKpa" label="Drop at design" quantity="pressure" isMixed={mixed.has('designDropKpa')} />

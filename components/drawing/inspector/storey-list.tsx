@@ -69,7 +69,7 @@ function StoreyForm({ storey }: { storey: Storey }) {
             type="button"
             disabled={!isEmpty}
             onClick={() => change((drawing) => withStoreysByPlace(removeStorey(drawing, storey.id)))}
-            className="mt-1 inline-flex min-h-8 items-center gap-1 font-semibold text-high disabled:text-quiet"
+            className="text-high disabled:text-quiet mt-1 inline-flex min-h-8 items-center gap-1 font-semibold"
           >
             <X size={14} aria-hidden /> {isEmpty ? 'Remove' : 'Not empty: move its pieces before you remove it'}
           </button>

@@ -14,7 +14,13 @@ export function TagForm({ piece }: { piece: Equipment }) {
   const { canEdit } = useEditor();
   const { editPieces } = useEdit();
   return (
-    <CommitForm schema={schema} values={{ tag: piece.tag }} label="Tag" disabled={!canEdit} onCommit={(changed) => editPieces([piece], (it) => ({ ...it, ...changed }))}>
+    <CommitForm
+      schema={schema}
+      values={{ tag: piece.tag }}
+      label="Tag"
+      disabled={!canEdit}
+      onCommit={(changed) => editPieces([piece], (it) => ({ ...it, ...changed }))}
+    >
       <TextRow name="tag" label="Tag" />
     </CommitForm>
   );

@@ -34,7 +34,15 @@ export function UnitForm({ units }: { units: TerminalUnit[] }) {
   const { editPieces } = useEdit();
   const flowUnit = unitFor('flow', useUnitChoice());
   const isSingle = units.length === 1;
-  const coil = commonValues(units.map((unit) => ({ room: unit.room, loadKw: unit.loadKw, designFlowLs: unit.designFlowLs, coilDropKpa: unit.coilDropKpa, strainerKv: unit.strainerKv })));
+  const coil = commonValues(
+    units.map((unit) => ({
+      room: unit.room,
+      loadKw: unit.loadKw,
+      designFlowLs: unit.designFlowLs,
+      coilDropKpa: unit.coilDropKpa,
+      strainerKv: unit.strainerKv,
+    })),
+  );
   const loaded = units.filter((unit) => unit.loadKw !== null);
   const asked = isSingle && loaded.length ? designFlowOfLoad(loaded[0].loadKw!, fluid) : null;
 
@@ -55,14 +63,20 @@ export function UnitForm({ units }: { units: TerminalUnit[] }) {
 
   return (
     <>
-      <CommitForm schema={schema} values={coil.values} label="Coil" disabled={!canEdit} onCommit={(changed) => editPieces(units, (unit) => ({ ...unit, ...changed }) as TerminalUnit)}>
+      <CommitForm
+        schema={schema}
+        values={coil.values}
+        label="Coil"
+        disabled={!canEdit}
+        onCommit={(changed) => editPieces(units, (unit) => ({ ...unit, ...changed }) as TerminalUnit)}
+      >
         {isSingle && <TextRow name="room" label="Room" />}
         <Section
           title="Design"
           action={
             canEdit &&
             loaded.length > 0 && (
-              <button type="button" className="min-h-6 text-xs font-semibold text-petrol hover:underline" onClick={takeFromLoad}>
+              <button type="button" className="text-petrol min-h-6 text-xs font-semibold hover:underline" onClick={takeFromLoad}>
                 Design flow from load
               </button>
             )
@@ -71,11 +85,16 @@ export function UnitForm({ units }: { units: TerminalUnit[] }) {
           <QuantityRow name="loadKw" label="Load" quantity="power" isMixed={coil.mixed.has('loadKw')} />
           <QuantityRow name="designFlowLs" label="Design flow" quantity="flow" isMixed={coil.mixed.has('designFlowLs')} />
           <QuantityRow name="coilDropKpa" label="Coil drop at design" quantity="pressure" isMixed={coil.mixed.has('coilDropKpa')} />
-          <QuantityRow name="strainerKv" label="Strainer, none if empty" quantity="valveCoefficient" isMixed={coil.mixed.has('strainerKv')} />
+          <QuantityRow
+            name="strainerKv"
+            label="Strainer, none if empty"
+            quantity="valveCoefficient"
+            isMixed={coil.mixed.has('strainerKv')}
+          />
         </Section>
       </CommitForm>
       {asked && !('refused' in asked) && <WorkingList workings={[asked.working]} title={`From the load: ${asked.working.result}`} />}
-      {asked && 'refused' in asked && <p className="pt-1 text-xs text-high">▴ {asked.refused}</p>}
+      {asked && 'refused' in asked && <p className="text-high pt-1 text-xs">▴ {asked.refused}</p>}
       <ControlPart units={units} />
       <BalancingPart units={units} />
     </>
@@ -84,7 +103,12 @@ export function UnitForm({ units }: { units: TerminalUnit[] }) {
 
 /** A part that a unit has or has not, with the way to the other. */
 const Fitted = ({ has, onChange, what }: { has: boolean; onChange: () => void; what: string }) => (
-  <button type="button" className="min-h-6 text-xs font-semibold text-petrol hover:underline" onClick={onChange} aria-label={`${has ? 'Take out' : 'Fit'} the ${what}`}>
+  <button
+    type="button"
+    className="text-petrol min-h-6 text-xs font-semibold hover:underline"
+    onClick={onChange}
+    aria-label={`${has ? 'Take out' : 'Fit'} the ${what}`}
+  >
     {has ? 'Take out' : 'Fit one'}
   </button>
 );
@@ -103,10 +127,17 @@ function ControlPart({ units }: { units: TerminalUnit[] }) {
           values={common.values}
           label="Control valve"
           disabled={!canEdit}
-          onCommit={(changed) => editPieces(fitted, (unit) => ({ ...unit, controlValve: { ...unit.controlValve, ...changed } as TerminalUnit['controlValve'] }))}
+          onCommit={(changed) =>
+            editPieces(fitted, (unit) => ({ ...unit, controlValve: { ...unit.controlValve, ...changed } as TerminalUnit['controlValve'] }))
+          }
         >
           <QuantityRow name="kvs" label="Fully open, Kvs" quantity="valveCoefficient" isMixed={common.mixed.has('kvs')} />
-          <SelectRow name="characteristic" label="Characteristic" options={characteristicWords} isMixed={common.mixed.has('characteristic')} />
+          <SelectRow
+            name="characteristic"
+            label="Characteristic"
+            options={characteristicWords}
+            isMixed={common.mixed.has('characteristic')}
+          />
           <NumberRow name="opening" label="Opening" isPercent isMixed={common.mixed.has('opening')} />
         </CommitForm>
       )}
@@ -124,7 +155,9 @@ function BalancingPart({ units }: { units: TerminalUnit[] }) {
       {fitted.length > 0 && (
         <ValveChoice
           valve={fitted[0].balancingValve!}
-          isMixed={commonValues(fitted.map((unit) => ({ name: unit.balancingValve!.name, kvTable: unit.balancingValve!.kvTable }))).mixed.size > 0}
+          isMixed={
+            commonValues(fitted.map((unit) => ({ name: unit.balancingValve!.name, kvTable: unit.balancingValve!.kvTable }))).mixed.size > 0
+          }
           disabled={!canEdit}
           onCommit={(change) => editPieces(fitted, (unit) => ({ ...unit, balancingValve: { ...unit.balancingValve!, ...change } }))}
         />

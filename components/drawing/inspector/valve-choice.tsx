@@ -52,7 +52,7 @@ export function ValveChoice({ valve, isMixed, disabled, onCommit }: ValveChoiceP
           <option value={OWN}>Own table</option>
         </select>
       </div>
-      {!isMixed && generic && <p className="pt-1 text-xs text-quiet">{genericValveSource}</p>}
+      {!isMixed && generic && <p className="text-quiet pt-1 text-xs">{genericValveSource}</p>}
       {!isMixed && !generic && valve.name !== '' && (
         <>
           <div className={rowClass}>
@@ -81,7 +81,13 @@ export function ValveChoice({ valve, isMixed, disabled, onCommit }: ValveChoiceP
       )}
       {(valve.kvTable.length > 1 || isMixed) && (
         <>
-          <StandsAt key={`${valve.settingTurns}`} valve={valve} range={first === undefined ? '' : `${first} to ${last}`} disabled={disabled} onCommit={onCommit} />
+          <StandsAt
+            key={`${valve.settingTurns}`}
+            valve={valve}
+            range={first === undefined ? '' : `${first} to ${last}`}
+            disabled={disabled}
+            onCommit={onCommit}
+          />
           <div className={rowClass}>
             <label htmlFor={`${id}-locked`}>Stays so in the balance</label>
             <input
@@ -90,7 +96,7 @@ export function ValveChoice({ valve, isMixed, disabled, onCommit }: ValveChoiceP
               disabled={disabled}
               checked={valve.isLocked}
               onChange={(event) => onCommit({ isLocked: event.target.checked })}
-              className="size-5 justify-self-end accent-petrol"
+              className="accent-petrol size-5 justify-self-end"
             />
           </div>
         </>
@@ -104,7 +110,7 @@ function StandsAt({ valve, range, disabled, onCommit }: ValveChoiceProps & { ran
   return (
     <div className={rowClass}>
       <span aria-hidden>
-        {label} <span className="text-xs text-quiet">{range}</span>
+        {label} <span className="text-quiet text-xs">{range}</span>
       </span>
       <SettingField label={label} valve={valve} disabled={disabled} onCommit={onCommit} />
     </div>

@@ -5,9 +5,9 @@ export function WorkingList({ workings, title = 'Show working' }: { workings: Wo
   if (workings.length === 0) return null;
   return (
     <details className="mt-3 text-sm">
-      <summary className="min-h-6 w-fit font-semibold text-petrol">{title}</summary>
+      <summary className="text-petrol min-h-6 w-fit font-semibold">{title}</summary>
       {workings.map((working) => (
-        <article key={working.title} className="mt-2 rounded border bg-paper p-3">
+        <article key={working.title} className="bg-paper mt-2 rounded border p-3">
           <h4 className="font-semibold">{working.title}</h4>
           <p className="mt-1">{working.formula}</p>
           <p className="figures mt-1 text-xs break-words">
@@ -22,7 +22,7 @@ export function WorkingList({ workings, title = 'Show working' }: { workings: Wo
               </div>
             ))}
           </dl>
-          <p className="mt-2 text-xs text-quiet">{working.source}</p>
+          <p className="text-quiet mt-2 text-xs">{working.source}</p>
         </article>
       ))}
     </details>

@@ -3,7 +3,13 @@
  * right, unturned. The sheet shows through no body, so that pipes end at it.
  */
 
-const body = { fill: 'var(--symbol-fill, var(--paper))', stroke: 'currentColor', strokeWidth: 'calc(1.5px * var(--lines, 1))', strokeLinejoin: 'round', strokeLinecap: 'round' } as const;
+const body = {
+  fill: 'var(--symbol-fill, var(--paper))',
+  stroke: 'currentColor',
+  strokeWidth: 'calc(1.5px * var(--lines, 1))',
+  strokeLinejoin: 'round',
+  strokeLinecap: 'round',
+} as const;
 const line = { ...body, fill: 'none' } as const;
 
 const valve = 'M-12 -8V8L12 -8V8Z';
@@ -80,7 +86,15 @@ export const ExpansionVessel = () => (
 );
 
 /** Control valve, coil and balancing valve in one piece, from the top down in the order of flow. */
-export function TerminalUnit({ hasControl = true, hasBalancing = true, hasStrainer = false }: { hasControl?: boolean; hasBalancing?: boolean; hasStrainer?: boolean }) {
+export function TerminalUnit({
+  hasControl = true,
+  hasBalancing = true,
+  hasStrainer = false,
+}: {
+  hasControl?: boolean;
+  hasBalancing?: boolean;
+  hasStrainer?: boolean;
+}) {
   return (
     <>
       <path {...line} d="M0 -60V60" />

@@ -1,5 +1,16 @@
 import type { Equipment, EquipmentKind } from '@/lib/network/drawing';
-import { BalancingValve, CheckValve, ControlValve, ExpansionVessel, IsolatingValve, Pump, Source, Strainer, Tee, TerminalUnit } from './shapes';
+import {
+  BalancingValve,
+  CheckValve,
+  ControlValve,
+  ExpansionVessel,
+  IsolatingValve,
+  Pump,
+  Source,
+  Strainer,
+  Tee,
+  TerminalUnit,
+} from './shapes';
 
 const shapes = {
   pump: Pump,
@@ -17,7 +28,13 @@ const shapes = {
 /** The symbol of a piece as it is fitted out; to be drawn inside an svg about its centre. */
 export function PieceSymbol({ piece }: { piece: Equipment }) {
   if (piece.kind === 'terminalUnit') {
-    return <TerminalUnit hasControl={piece.controlValve !== null} hasBalancing={piece.balancingValve !== null} hasStrainer={piece.strainerKv !== null} />;
+    return (
+      <TerminalUnit
+        hasControl={piece.controlValve !== null}
+        hasBalancing={piece.balancingValve !== null}
+        hasStrainer={piece.strainerKv !== null}
+      />
+    );
   }
   if (piece.kind === 'isolatingValve') return <IsolatingValve isClosed={piece.isClosed} />;
   const Shape = shapes[piece.kind];

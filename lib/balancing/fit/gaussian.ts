@@ -78,11 +78,20 @@ export function transposeTimes(rows: Float64Array[], weights: ArrayLike<number>,
   return sum;
 }
 
-/** The columns that are not held at zero, each in units of its deviation: the others cost time and add nothing. */
-export function activeColumns(rows: Float64Array[], deviations: ArrayLike<number>): Float64Array[] {
+/** Unknowns that are not held at zero. */
+export function activeUnknowns(deviations: ArrayLike<number>): Int32Array {
   const active: number[] = [];
   for (let j = 0; j < deviations.length; j++) if (deviations[j] > 0) active.push(j);
-  return rows.map((row) => Float64Array.from(active, (j) => row[j] * deviations[j]));
+  return Int32Array.from(active);
+}
+
+/** Their columns, each in units of its deviation. */
+export function activeColumns(rows: Float64Array[], deviations: ArrayLike<number>, active: Int32Array): Float64Array[] {
+  return rows.map((row) => {
+    const columns = new Float64Array(active.length);
+    for (let k = 0; k < active.length; k++) columns[k] = row[active[k]] * deviations[active[k]];
+    return columns;
+  });
 }
 
 /** Lower half of A Aᵀ. */

@@ -1,4 +1,4 @@
-import { activeColumns, Gaussian, gramOf, transposeTimes } from './gaussian';
+import { activeColumns, activeUnknowns, Gaussian, gramOf, transposeTimes } from './gaussian';
 import type { ReadingModel } from './reading-model';
 
 const MOST_STEPS = 25;
@@ -55,18 +55,21 @@ export function mostLikely(model: ReadingModel, deviations: ArrayLike<number>, n
     return { values, solved, misfit, cost };
   };
 
-  let here = evaluate(start); if (process.env.STEPS) console.log("  start", here.cost.toFixed(2));
+  let here = evaluate(start);
   let rows = model.jacobian(here.solved);
   let damping = 0;
   let converged = false;
   for (let step = 0; step < MOST_STEPS && !converged; step++) {
-    const scaledRows = rows.map((row) => row.map((each, j) => each * deviations[j]));
-    const pull = transposeTimes(scaledRows, here.misfit.map((each, m) => each / noise[m]), here.values.length);
-    const downhill = pull.map((each, j) => each - (deviations[j] > 0 ? here.values[j] / deviations[j] : 0));
-    const gram = gramOf(activeColumns(rows, deviations));
+    const active = activeUnknowns(deviations);
+    const columns = activeColumns(rows, deviations, active);
+    const pull = transposeTimes(columns, here.misfit.map((each, m) => each / noise[m]), active.length);
+    const downhill = pull.map((each, k) => each - here.values[active[k]] / deviations[active[k]]);
+    const gram = gramOf(columns);
     for (;;) {
-      const move = new Gaussian(scaledRows, noise, damping, gram).covarianceTimes(downhill);
-      const next = evaluate(here.values.map((value, j) => clamp(value + deviations[j] * move[j])));
+      const move = new Gaussian(columns, noise, damping, gram).covarianceTimes(downhill);
+      const values = here.values.slice();
+      active.forEach((j, k) => (values[j] = clamp(values[j] + deviations[j] * move[k])));
+      const next = evaluate(values);
       const gained = here.cost - next.cost;
       if (gained >= 0) {
         here = next;
@@ -80,7 +83,7 @@ export function mostLikely(model: ReadingModel, deviations: ArrayLike<number>, n
         break;
       }
     }
-    rows = model.jacobian(here.solved); if (process.env.STEPS) console.log("   step", step, here.cost.toFixed(2), damping);
+    rows = model.jacobian(here.solved);
   }
   return { values: here.values, cost: here.cost, converged: converged && here.solved.closed, shown: here.solved.shown, misfit: here.misfit, rows };
 }

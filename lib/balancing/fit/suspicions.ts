@@ -1,7 +1,7 @@
 import { kvAtSetting } from '@/lib/hydraulics/links/balancing-valve';
 import type { NetworkDocument } from '@/lib/hydraulics/types';
 import { type ReadingRound, settingIn } from '../readings';
-import { activeColumns, dot, Gaussian, gramOf } from './gaussian';
+import { activeColumns, activeUnknowns, dot, Gaussian, gramOf } from './gaussian';
 import type { LinearModel } from './most-likely';
 import type { PlacedReading } from './reading-model';
 import type { Unknown } from './unknowns';
@@ -74,7 +74,7 @@ export class FaultSearch {
     noise: Float64Array,
   ) {
     this.noise = noise.slice();
-    this.gram = gramOf(activeColumns(fit.rows, deviations));
+    this.gram = gramOf(activeColumns(fit.rows, deviations, activeUnknowns(deviations)));
     // Readings less what the prior expects, on the linear model.
     this.innovation = fit.misfit.map((each, m) => each + dot(fit.rows[m], fit.values));
   }

@@ -11,12 +11,24 @@ import { makeOrganization, type MadeOrganization, type MadePerson } from '../../
 const suite = withDatabase();
 
 const accessOf = (person: MadePerson, role: Role, { projectId }: MadeOrganization): Access => ({
-  person: { ...person, organizationName: '', email: '', isAdministrator: role === 'administrator', defaultRole: 'owner', theme: 'system', units: {} },
+  person: {
+    ...person,
+    organizationName: '',
+    email: '',
+    isAdministrator: role === 'administrator',
+    defaultRole: 'owner',
+    theme: 'system',
+    units: {},
+  },
   roles: [role],
   projectId,
 });
 
-const saveDraft = (loopId: string, drawing: Drawing) => suite.db('drafts').where({ loop_id: loopId }).update({ drawing: JSON.stringify(drawing), version: 2 });
+const saveDraft = (loopId: string, drawing: Drawing) =>
+  suite
+    .db('drafts')
+    .where({ loop_id: loopId })
+    .update({ drawing: JSON.stringify(drawing), version: 2 });
 
 it('a designer and an administrator read the draft, a technician and an owner the revision that was issued', async () => {
   const loop = await makeMeasuredLoop(suite.db);

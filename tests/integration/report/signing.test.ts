@@ -32,7 +32,8 @@ const returned = (loop: MeasuredLoop, note = 'FC-2 is low: open it') => sign(loo
 const accepted = (loop: MeasuredLoop) => sign(loop, 'owner', accept);
 
 const stateOf = async (loop: MeasuredLoop) => (await suite.db('loops').where({ id: loop.loopId }).first('state')).state;
-const signaturesOf = (loop: MeasuredLoop) => suite.db('signatures').where({ loop_id: loop.loopId }).orderBy('signed_at').select('meaning', 'submission', 'person_role');
+const signaturesOf = (loop: MeasuredLoop) =>
+  suite.db('signatures').where({ loop_id: loop.loopId }).orderBy('signed_at').select('meaning', 'submission', 'person_role');
 
 async function fullyMeasured(): Promise<MeasuredLoop> {
   const loop = await makeMeasuredLoop(suite.db);
@@ -59,7 +60,12 @@ it('goes from submitted over reviewed to accepted, each signed by its own role, 
     { meaning: 'reviewed', submission: 1, person_role: 'designer' },
     { meaning: 'accepted', submission: 1, person_role: 'owner' },
   ]);
-  const done = await suite.db('activity').where({ loop_id: loop.loopId }).whereIn('verb', ['submitted', 'reviewed', 'accepted']).orderBy('at').pluck('verb');
+  const done = await suite
+    .db('activity')
+    .where({ loop_id: loop.loopId })
+    .whereIn('verb', ['submitted', 'reviewed', 'accepted'])
+    .orderBy('at')
+    .pluck('verb');
   expect(done).toEqual(['submitted', 'reviewed', 'accepted']);
 });
 
@@ -74,7 +80,10 @@ it('submitting closes the open round and leaves the report that was signed as it
 it('what is returned needs a reason, goes back to commissioning, and counts as a new submission the next time', async () => {
   const loop = await fullyMeasured();
   await submitted(loop);
-  expect((await returned(loop, ' ')).body).toMatchObject({ code: 'input-invalid', fields: [{ path: 'note', message: 'Say what has to be put right.' }] });
+  expect((await returned(loop, ' ')).body).toMatchObject({
+    code: 'input-invalid',
+    fields: [{ path: 'note', message: 'Say what has to be put right.' }],
+  });
   expect((await returned(loop)).status).toBe(200);
   expect(await stateOf(loop)).toBe('in-commissioning');
   expect((await submitted(loop)).body).toEqual({ submission: 2 });
@@ -97,7 +106,8 @@ it('no step can be taken before its turn or twice', async () => {
 it('nobody signs one submission under two roles', async () => {
   const loop = await fullyMeasured();
   const { organizationId, projectId, technician } = loop;
-  for (const role of ['designer', 'owner']) await suite.db('project_members').insert({ organization_id: organizationId, project_id: projectId, person_id: technician.id, role });
+  for (const role of ['designer', 'owner'])
+    await suite.db('project_members').insert({ organization_id: organizationId, project_id: projectId, person_id: technician.id, role });
   await submitted(loop);
   expect((await reportFor(loop, 'technician')).maySign).toEqual([]);
   expect(await sign(loop, 'technician', review, { meaning: 'reviewed' })).toMatchObject({ status: 409, body: { code: 'already-signed' } });
@@ -179,7 +189,11 @@ it('an accepted workbook is the stored bytes, whatever is measured later, and it
   await workbook.xlsx.load(after.buffer as ArrayBuffer);
   const cover = workbook.getWorksheet('Cover')!;
   const texts = cover.getColumn(1).values.map(String);
-  expect(texts.filter((text) => text.endsWith(', submission 1'))).toEqual(['Submitted, submission 1', 'Reviewed, submission 1', 'Accepted, submission 1']);
+  expect(texts.filter((text) => text.endsWith(', submission 1'))).toEqual([
+    'Submitted, submission 1',
+    'Reviewed, submission 1',
+    'Accepted, submission 1',
+  ]);
 });
 
 it('the workbook of the report as it stands comes as a file with a harmless name and its digest', async () => {

@@ -31,7 +31,12 @@ it('before anything is measured there is no worst terminal', () => {
 
 it('the strip has one mark a terminal in walking order and the terminals’ band', () => {
   const { strip, band } = stripOfReport(content);
-  expect(strip.map(({ tag, verdict }) => [tag, verdict])).toEqual([['FC-1', 'within'], ['FC-2', 'low'], ['FC-3', 'high'], ['FC-4', null]]);
+  expect(strip.map(({ tag, verdict }) => [tag, verdict])).toEqual([
+    ['FC-1', 'within'],
+    ['FC-2', 'low'],
+    ['FC-3', 'high'],
+    ['FC-4', null],
+  ]);
   expect(band).toEqual({ lowerPercent: 90, upperPercent: 110 });
 });
 

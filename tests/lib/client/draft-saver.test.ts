@@ -31,7 +31,8 @@ const offline = new RequestError('offline', 'No answer.', 0);
 
 let shelf: Shelf;
 let server: Server;
-const openPage = (page = 'page-1', from = loaded) => new DraftSaver({ loaded: from, keeper: draftKeeper(shelf, 'mara', 'loop-1', page), save: server.save });
+const openPage = (page = 'page-1', from = loaded) =>
+  new DraftSaver({ loaded: from, keeper: draftKeeper(shelf, 'mara', 'loop-1', page), save: server.save });
 
 beforeEach(() => {
   vi.useFakeTimers();

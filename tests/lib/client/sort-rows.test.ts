@@ -1,7 +1,7 @@
 import { expect, it } from 'vitest';
 import { nextSorting, sortRows } from '@/lib/client/sort-rows';
 
-const own = <Value,>(value: Value) => value;
+const own = <Value>(value: Value) => value;
 
 it('numbers inside a tag are sorted as numbers', () => {
   expect(sortRows(['FC-10', 'FC-2', 'fc-1'], own, false)).toEqual(['fc-1', 'FC-2', 'FC-10']);
@@ -16,7 +16,11 @@ it('what is missing comes last whichever way, and rows that are equal keep their
   expect(sortRows([null, 2, null, 1], own, false)).toEqual([1, 2, null, null]);
   expect(sortRows([null, 2, null, 1], own, true)).toEqual([2, 1, null, null]);
   expect(sortRows(['', 'b', 'a'], own, true)).toEqual(['b', 'a', '']);
-  const rows = [{ id: 1, v: 5 }, { id: 2, v: 5 }, { id: 3, v: 4 }];
+  const rows = [
+    { id: 1, v: 5 },
+    { id: 2, v: 5 },
+    { id: 3, v: 4 },
+  ];
   expect(sortRows(rows, ({ v }) => v, true).map(({ id }) => id)).toEqual([1, 2, 3]);
 });
 

@@ -62,7 +62,14 @@ describe('the history of a drawing', () => {
   });
 
   it('keeps no step of a drag that came to nothing', () => {
-    const store = createDrawingStore({ format: 'drawing/1', fluid: { medium: 'water', massFraction: 0, supplyC: 6, returnC: 12 }, pumpExcess: 'speed', storeys: [], equipment: [], pipes: [] });
+    const store = createDrawingStore({
+      format: 'drawing/1',
+      fluid: { medium: 'water', massFraction: 0, supplyC: 6, returnC: 12 },
+      pumpExcess: 'speed',
+      storeys: [],
+      equipment: [],
+      pipes: [],
+    });
     beginGesture(store)();
     expect(store.temporal.getState().pastStates).toEqual([]);
   });
@@ -95,7 +102,9 @@ describe('the keys', () => {
   });
 
   it('are one a thing, and every action has one', () => {
-    const all = [...editShortcuts, ...viewShortcuts, ...toolShortcuts].map(({ key, mod, shift }) => `${key} ${Boolean(mod)} ${Boolean(shift)}`);
+    const all = [...editShortcuts, ...viewShortcuts, ...toolShortcuts].map(
+      ({ key, mod, shift }) => `${key} ${Boolean(mod)} ${Boolean(shift)}`,
+    );
     expect(new Set(all).size).toBe(all.length);
     expect(new Set([...editShortcuts, ...viewShortcuts].map(({ id }) => id))).toEqual(new Set(actionIds));
   });

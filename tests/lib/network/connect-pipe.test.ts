@@ -14,18 +14,30 @@ const made = (result: ReturnType<typeof connect>) => {
 describe('joining two ends', () => {
   it('runs the pipe out of an outlet and into an inlet, whichever was pressed first', () => {
     const loop = drawing([pump('P'), source('CH')], []);
-    expect(made(connect(loop, end('CH.in'), end('P.out'), figures, [{ x: 1, y: 1 }, { x: 2, y: 2 }]))).toMatchObject({
+    expect(
+      made(
+        connect(loop, end('CH.in'), end('P.out'), figures, [
+          { x: 1, y: 1 },
+          { x: 2, y: 2 },
+        ]),
+      ),
+    ).toMatchObject({
       from: end('P.out'),
       to: end('CH.in'),
       lengthM: 5,
       nominal: 'DN25',
-      bends: [{ x: 2, y: 2 }, { x: 1, y: 1 }],
+      bends: [
+        { x: 2, y: 2 },
+        { x: 1, y: 1 },
+      ],
     });
   });
 
   it('refuses an end that is taken, and a piece joined to itself; a tee takes many', () => {
     const loop = drawing([pump('P'), source('CH'), tee('T')], [pipe('p', 'P.out', 'CH.in'), pipe('q', 'T.e', 'P.in')]);
-    expect(connect(loop, end('T.n'), end('CH.in'), figures)).toMatchObject({ refused: expect.stringContaining('CH already has a pipe there') });
+    expect(connect(loop, end('T.n'), end('CH.in'), figures)).toMatchObject({
+      refused: expect.stringContaining('CH already has a pipe there'),
+    });
     expect(connect(loop, end('T.n'), end('T.s'), figures)).toMatchObject({ refused: expect.stringContaining('two different pieces') });
     expect('pipe' in connect(loop, end('CH.out'), end('T.e'), figures)).toBe(true);
   });
@@ -53,7 +65,12 @@ describe('joining two ends', () => {
 
 describe('the size of a pipe', () => {
   it('brings bore and roughness of its series, with their sources', () => {
-    expect(chosenSize('steel-en10255-medium', 'DN25')).toEqual({ series: 'steel-en10255-medium', nominal: 'DN25', boreMm: 27.3, roughnessMm: 0.045 });
+    expect(chosenSize('steel-en10255-medium', 'DN25')).toEqual({
+      series: 'steel-en10255-medium',
+      nominal: 'DN25',
+      boreMm: 27.3,
+      roughnessMm: 0.045,
+    });
     expect(chosenSize('copper-en1057', 'DN25')).toMatchObject({ nominal: null, boreMm: null });
     expect(sizeSource({ series: 'copper-en1057' })).toContain('EN 1057');
     expect(sizeSource({ series: null })).toBe('Bore and roughness as typed.');

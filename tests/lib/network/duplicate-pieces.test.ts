@@ -8,7 +8,11 @@ import { drawing, pipe, tee, unit } from '../../make/drawing';
 describe('duplicating', () => {
   it('copies the chosen pieces with the pipes among them, not those that lead away', () => {
     const before = drawing(
-      [{ ...tee('S'), x: 0, y: 0 }, { ...unit('FC-1', 0.3), x: 0, y: 100 }, { ...tee('R'), x: 0, y: 200 }],
+      [
+        { ...tee('S'), x: 0, y: 0 },
+        { ...unit('FC-1', 0.3), x: 0, y: 100 },
+        { ...tee('R'), x: 0, y: 200 },
+      ],
       [pipe('a', 'S.s', 'FC-1.in', 2), pipe('b', 'FC-1.out', 'R.n', 3)],
     );
     const { drawing: after, added } = duplicatePieces(before, new Set(['S', 'FC-1']));

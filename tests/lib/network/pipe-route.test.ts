@@ -25,14 +25,20 @@ describe('the route of a pipe', () => {
   it('is straight where it can be, and leaves a piece the way its end looks', () => {
     const left = { ...source('A'), x: 0, y: 0 };
     const right = { ...source('B'), x: 200, y: 0 };
-    expect(route(portPlace(left, 'out'), portPlace(right, 'in'))).toEqual([{ x: 30, y: 0 }, { x: 170, y: 0 }]);
+    expect(route(portPlace(left, 'out'), portPlace(right, 'in'))).toEqual([
+      { x: 30, y: 0 },
+      { x: 170, y: 0 },
+    ]);
     const around = route(portPlace(right, 'out'), portPlace(left, 'in'));
     expect(around[1].x).toBeGreaterThan(around[0].x);
     expect(around.at(-2)!.x).toBeLessThan(around.at(-1)!.x);
   });
 
   it('goes through its bends in turn', () => {
-    const bends = [{ x: 50, y: 90 }, { x: 120, y: -40 }];
+    const bends = [
+      { x: 50, y: 90 },
+      { x: 120, y: -40 },
+    ];
     const path = route({ x: 0, y: 0 }, { x: 200, y: 0 }, bends);
     for (const bend of bends) expect(nearestOnRoute(path, bend).distance).toBe(0);
   });

@@ -19,17 +19,26 @@ describe('taking pieces off a drawing', () => {
   });
 
   it('joins up through a chain of pieces that go together', () => {
-    const before = drawing([tee('A'), source('X'), source('Y'), tee('B')], [pipe('a', 'A.e', 'X.in', 1), pipe('b', 'X.out', 'Y.in', 2), pipe('c', 'Y.out', 'B.w', 4)]);
+    const before = drawing(
+      [tee('A'), source('X'), source('Y'), tee('B')],
+      [pipe('a', 'A.e', 'X.in', 1), pipe('b', 'X.out', 'Y.in', 2), pipe('c', 'Y.out', 'B.w', 4)],
+    );
     expect(removeFromDrawing(before, new Set(['X', 'Y']), new Set()).pipes).toMatchObject([{ lengthM: 7 }]);
   });
 
   it('has no length where one of the two had none', () => {
-    const before = drawing([tee('A'), source('X'), tee('B')], [pipe('a', 'A.e', 'X.in', 1), { ...pipe('b', 'X.out', 'B.w'), lengthM: null }]);
+    const before = drawing(
+      [tee('A'), source('X'), tee('B')],
+      [pipe('a', 'A.e', 'X.in', 1), { ...pipe('b', 'X.out', 'B.w'), lengthM: null }],
+    );
     expect(removeFromDrawing(before, new Set(['X']), new Set()).pipes[0].lengthM).toBeNull();
   });
 
   it('takes the pipes along where three meet, or where they would come back to the same piece', () => {
-    const three = drawing([tee('M'), tee('A'), tee('B'), unit('C')], [pipe('a', 'A.e', 'M.w'), pipe('b', 'M.e', 'B.w'), pipe('c', 'M.s', 'C.in')]);
+    const three = drawing(
+      [tee('M'), tee('A'), tee('B'), unit('C')],
+      [pipe('a', 'A.e', 'M.w'), pipe('b', 'M.e', 'B.w'), pipe('c', 'M.s', 'C.in')],
+    );
     expect(removeFromDrawing(three, new Set(['M']), new Set()).pipes).toEqual([]);
     const ring = drawing([tee('M'), tee('A')], [pipe('a', 'A.e', 'M.w'), pipe('b', 'M.e', 'A.w')]);
     expect(removeFromDrawing(ring, new Set(['M']), new Set()).pipes).toEqual([]);

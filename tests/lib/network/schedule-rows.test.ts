@@ -42,6 +42,10 @@ it('a pipe is named from where to where, its flow without a sign', () => {
 
 it('a drawing that cannot be solved is listed all the same, without figures', () => {
   const bare = scheduleOf(drawn, { solve: null, balance: null });
-  expect(bare.terminals).toMatchObject([{ designFlowLs: 0.2, flowLs: null, percentOfDesign: null, settingTurns: null, isIndex: false }, {}, {}]);
+  expect(bare.terminals).toMatchObject([
+    { designFlowLs: 0.2, flowLs: null, percentOfDesign: null, settingTurns: null, isIndex: false },
+    {},
+    {},
+  ]);
   expect(bare.pipes[0]).toMatchObject({ flowLs: null, dropKpa: null });
 });

@@ -10,7 +10,14 @@ import { anyDrawing } from '../../make/any-drawing';
 import { drawing, pipe, tee } from '../../make/drawing';
 
 const sumOf = (values: (number | null)[]) => values.reduce<number>((sum, value) => sum + (value ?? 0), 0);
-const twoTees = () => drawing([{ ...tee('A'), x: 0, y: 0 }, { ...tee('B'), x: 200, y: 0 }], [pipe('p', 'A.e', 'B.w', 10)]);
+const twoTees = () =>
+  drawing(
+    [
+      { ...tee('A'), x: 0, y: 0 },
+      { ...tee('B'), x: 200, y: 0 },
+    ],
+    [pipe('p', 'A.e', 'B.w', 10)],
+  );
 
 describe('splitting a pipe', () => {
   it('puts a tee where the pipe was pressed and shares length and local losses evenly', () => {
@@ -25,8 +32,19 @@ describe('splitting a pipe', () => {
   });
 
   it('turns a piece that is put on a pipe so that its outlet looks the way the pipe runs', () => {
-    const before = drawing([{ ...tee('A'), x: 0, y: 0 }, { ...tee('B'), x: 0, y: 200 }], [pipe('p', 'A.s', 'B.n', 10)]);
-    for (const [kind, isMirrored] of [['balancingValve', false], ['balancingValve', true], ['terminalUnit', false], ['pump', true]] as const) {
+    const before = drawing(
+      [
+        { ...tee('A'), x: 0, y: 0 },
+        { ...tee('B'), x: 0, y: 200 },
+      ],
+      [pipe('p', 'A.s', 'B.n', 10)],
+    );
+    for (const [kind, isMirrored] of [
+      ['balancingValve', false],
+      ['balancingValve', true],
+      ['terminalUnit', false],
+      ['pump', true],
+    ] as const) {
       const piece = { ...newPiece(before, kind, { x: 7, y: 104 }), isMirrored };
       const after = insertOnPipe({ ...before, equipment: [...before.equipment, piece] }, piece.id, pipeAt(before, piece, 20)!);
       const placed = after.equipment.find(({ id }) => id === piece.id)!;
@@ -41,7 +59,18 @@ describe('splitting a pipe', () => {
   });
 
   it('lets each bend stay with the half that runs through it', () => {
-    const bent = { ...twoTees(), pipes: [{ ...pipe('p', 'A.e', 'B.w', 10), bends: [{ x: 60, y: 80 }, { x: 140, y: 80 }] }] };
+    const bent = {
+      ...twoTees(),
+      pipes: [
+        {
+          ...pipe('p', 'A.e', 'B.w', 10),
+          bends: [
+            { x: 60, y: 80 },
+            { x: 140, y: 80 },
+          ],
+        },
+      ],
+    };
     const { drawing: after } = insertTee(bent, pipeAt(bent, { x: 100, y: 80 }, 5)!);
     expect(after.pipes.map(({ bends }) => bends)).toEqual([[{ x: 60, y: 80 }], [{ x: 140, y: 80 }]]);
   });

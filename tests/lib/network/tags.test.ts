@@ -9,7 +9,13 @@ const empty = emptyDrawing('chilled');
 describe('the next free tag', () => {
   it('counts terminal units through their storey and everything else through the loop', () => {
     let drawing = empty;
-    for (const [kind, y] of [['terminalUnit', 100], ['terminalUnit', 110], ['terminalUnit', 400], ['pump', 700], ['pump', 100]] as const) {
+    for (const [kind, y] of [
+      ['terminalUnit', 100],
+      ['terminalUnit', 110],
+      ['terminalUnit', 400],
+      ['pump', 700],
+      ['pump', 100],
+    ] as const) {
       drawing = { ...drawing, equipment: [...drawing.equipment, newPiece(drawing, kind, { x: 0, y })] };
     }
     expect(drawing.equipment.map(({ tag }) => tag)).toEqual(['FC-2.01', 'FC-2.02', 'FC-1.01', 'P-1', 'P-2']);

@@ -72,7 +72,10 @@ describe('the figures of a drawing', () => {
     const { drawing, balance: balanced } = solvedLadder([0.2, 0.3, 0.25]);
     const { drawing: adopted, count } = adoptSettings(drawing, balanced.valves);
     expect(count).toBe(3);
-    const slowed = { ...adopted, equipment: adopted.equipment.map((piece) => (piece.kind === 'pump' ? { ...piece, speed: balanced.pumps[0].speed } : piece)) };
+    const slowed = {
+      ...adopted,
+      equipment: adopted.equipment.map((piece) => (piece.kind === 'pump' ? { ...piece, speed: balanced.pumps[0].speed } : piece)),
+    };
     const result = solve(drawingToDocument(slowed, '').document!);
     for (const terminal of balanced.terminals) {
       const flowLs = result.links.find(({ id }) => id === terminal.id)!.flowLs;
@@ -86,7 +89,9 @@ describe('the figures of a drawing', () => {
     const locked = {
       ...drawing,
       equipment: drawing.equipment.map((piece) =>
-        piece.kind === 'terminalUnit' && piece.balancingValve ? { ...piece, balancingValve: { ...piece.balancingValve, isLocked: true, settingTurns: 2 } } : piece,
+        piece.kind === 'terminalUnit' && piece.balancingValve
+          ? { ...piece, balancingValve: { ...piece.balancingValve, isLocked: true, settingTurns: 2 } }
+          : piece,
       ),
     };
     expect(adoptSettings(locked, balanced.valves)).toEqual({ drawing: locked, count: 0 });
@@ -96,10 +101,16 @@ describe('the figures of a drawing', () => {
 describe('what a calculation depends on', () => {
   it('is untouched by layout, and touched by every length and elevation', () => {
     const drawing = ladder([0.2]);
-    const moved = { ...drawing, equipment: drawing.equipment.map((piece) => ({ ...piece, x: 7, y: 9, rotation: 90 as const, isMirrored: true })), pipes: drawing.pipes.map((pipe) => ({ ...pipe, bends: [{ x: 1, y: 1 }] })) };
+    const moved = {
+      ...drawing,
+      equipment: drawing.equipment.map((piece) => ({ ...piece, x: 7, y: 9, rotation: 90 as const, isMirrored: true })),
+      pipes: drawing.pipes.map((pipe) => ({ ...pipe, bends: [{ x: 1, y: 1 }] })),
+    };
     expect(calculatedPart(moved)).toBe(calculatedPart(drawing));
     expect(calculatedPart({ ...drawing, pipes: drawing.pipes.map((pipe) => ({ ...pipe, lengthM: 6 })) })).not.toBe(calculatedPart(drawing));
-    expect(calculatedPart({ ...drawing, storeys: [{ id: 's', name: '', elevationM: 3, top: 0, height: 1 }] })).not.toBe(calculatedPart(drawing));
+    expect(calculatedPart({ ...drawing, storeys: [{ id: 's', name: '', elevationM: 3, top: 0, height: 1 }] })).not.toBe(
+      calculatedPart(drawing),
+    );
   });
 });
 
@@ -114,6 +125,18 @@ describe('the generic balancing valves', () => {
     );
     const kvs = genericValves.map((valve) => valve.kvs);
     expect(kvs).toEqual([...kvs].sort((a, b) => a - b));
-    expect(genericValves.map(({ nominal }) => nominal)).toEqual(['DN15', 'DN20', 'DN25', 'DN32', 'DN40', 'DN50', 'DN65', 'DN80', 'DN100', 'DN125', 'DN150']);
+    expect(genericValves.map(({ nominal }) => nominal)).toEqual([
+      'DN15',
+      'DN20',
+      'DN25',
+      'DN32',
+      'DN40',
+      'DN50',
+      'DN65',
+      'DN80',
+      'DN100',
+      'DN125',
+      'DN150',
+    ]);
   });
 });

@@ -40,11 +40,25 @@ export default async function SchedulePage({ params }: { params: Promise<{ proje
         <>
           <ScheduleTitle of={found.of} />
           {found.errors.length > 0 && (
-            <Notice tone="brass" title={found.errors.length === 1 ? 'One fault keeps the drawing from being solved' : `${found.errors.length} faults keep the drawing from being solved`}>
-              {found.errors[0].message} <Link href={drawingHref}>Open the drawing</Link>
+            <Notice
+              tone="brass"
+              title={
+                found.errors.length === 1
+                  ? 'One fault keeps the drawing from being solved'
+                  : `${found.errors.length} faults keep the drawing from being solved`
+              }
+            >
+              {found.errors[0].message}{' '}
+              <Link href={drawingHref} className="underline">
+                Open the drawing
+              </Link>
             </Notice>
           )}
-          <ScheduleTables schedule={found.schedule} bands={{ terminal: bandOf('terminal'), branch: bandOf('branch') }} drawingHref={drawingHref} />
+          <ScheduleTables
+            schedule={found.schedule}
+            bands={{ terminal: bandOf('terminal'), branch: bandOf('branch') }}
+            drawingHref={drawingHref}
+          />
         </>
       )}
     </main>
@@ -55,9 +69,10 @@ function ScheduleTitle({ of }: { of: LoopSchedule['of'] }) {
   return (
     <div className="flex flex-wrap items-baseline gap-x-4 gap-y-1">
       <h1>{of.kind === 'draft' ? 'Schedule of the draft' : `Schedule of revision ${of.number}`}</h1>
-      <p className="text-sm text-quiet">
+      <p className="text-quiet text-sm">
         {of.kind === 'draft' ? `Saved by ${of.savedBy} ` : `Issued by ${of.issuedBy} `}
-        <Moment at={of.kind === 'draft' ? of.savedAt : of.issuedAt} />. Flow now is with the valves as they stand; settings, drops and authorities are those of the balance at design flow.
+        <Moment at={of.kind === 'draft' ? of.savedAt : of.issuedAt} />. Flow now is with the valves as they stand; settings, drops and
+        authorities are those of the balance at design flow.
       </p>
     </div>
   );
