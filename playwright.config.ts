@@ -31,5 +31,9 @@ export default defineConfig({
       ],
     },
   },
-  projects: [{ name: 'desktop', use: { viewport: { width: 1440, height: 900 } } }],
+  projects: [
+    { name: 'desktop', testIgnore: 'pictures.spec.ts', use: { viewport: { width: 1440, height: 900 } } },
+    // The pictures of README.md: `npm run pictures`, on the demo as `npm run dev` or BASE_URL has it.
+    { name: 'pictures', testMatch: 'pictures.spec.ts' },
+  ],
 });

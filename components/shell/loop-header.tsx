@@ -29,12 +29,12 @@ export function LoopHeader({ loop, person }: { loop: LoopDetail; person: { name:
     <header className="sticky top-0 z-30 grid grid-cols-[minmax(0,1fr)_auto] items-stretch gap-x-6 border-b bg-sheet px-4 lg:grid-cols-[minmax(0,auto)_auto_1fr] print:hidden">
       <div className="flex min-h-14 min-w-0 items-center gap-4">
         <Mark />
-        <div className="min-w-0 truncate">
-          <Link href={`/projects/${loop.project.id}`} className="text-quiet no-underline hover:underline">
+        <div className="flex min-w-0">
+          <Link href={`/projects/${loop.project.id}`} className="truncate text-quiet no-underline hover:underline">
             {loop.project.name}
           </Link>
           <span className="mx-1.5 text-quiet">/</span>
-          <span className="font-bold">{loop.name}</span>
+          <span className="max-w-[60vw] shrink-0 truncate font-bold">{loop.name}</span>
         </div>
       </div>
       <nav aria-label="Pages of the loop" className="col-span-2 row-start-2 flex items-stretch gap-5 overflow-x-auto lg:col-span-1 lg:col-start-2 lg:row-start-1">

@@ -58,10 +58,10 @@ const MOST_PASSES = 12;
 export function fitLoop(document: NetworkDocument, rounds: ReadingRound[], priors: Priors = usualPriors, before?: FittedLoop): FittedLoop {
   const unknowns = unknownsOf(document, rounds, priors);
   const model = new ReadingModel(document, rounds, unknowns);
-  let accepted = before ? clearFaults(before, unknowns, model) : [];
+  let accepted = before ? clearFaults(before, unknowns) : [];
   let { deviations, noise } = spreadsWith(accepted, unknowns, model.placed.length);
   let fit = mostLikely(model, deviations, noise, startValues(unknowns, deviations, before));
-  const searchNow = () => new FaultSearch(document, rounds, unknowns, model.placed, linearWithin(model, deviations, fit), deviations, noise);
+  const searchNow = () => new FaultSearch(document, rounds, unknowns, model, linearWithin(model, deviations, fit), deviations, noise);
   let search = searchNow();
   for (let pass = 0; pass < MOST_PASSES; pass++) {
     const gone = search.unlikely(accepted);
@@ -101,7 +101,10 @@ function spreadsWith(accepted: Suspicion[], unknowns: Unknown[], readings: numbe
   return { deviations, noise };
 }
 
-/** Odds, as a logarithm, beyond which a fault of an earlier fit needs no second search. */
+/**
+ * Odds, as a logarithm, beyond which a mis-set valve of an earlier fit needs no second search. Other faults are told from each other by
+ * the later rounds and are searched again.
+ */
 const CLEAR_ODDS = 15;
 
 const keyOf = ({ kind, id, rounds }: Unknown) => `${kind} ${id} ${rounds.indexOf(true)}`;
@@ -111,16 +114,11 @@ function startValues(unknowns: Unknown[], deviations: Float64Array, before?: Fit
   return Float64Array.from(unknowns, (unknown, j) => (deviations[j] > 0 ? (known.get(keyOf(unknown)) ?? 0) : 0));
 }
 
-function clearFaults(before: FittedLoop, unknowns: Unknown[], { placed }: ReadingModel): Suspicion[] {
+function clearFaults(before: FittedLoop, unknowns: Unknown[]): Suspicion[] {
   const places = new Map(unknowns.map((unknown, j) => [keyOf(unknown), j]));
   return before.accepted.flatMap((fault): Suspicion[] => {
-    if (fault.logOdds < CLEAR_ODDS) return [];
-    if (fault.unknown !== null) {
-      const unknown = places.get(keyOf(before.unknowns[fault.unknown]));
-      return unknown === undefined ? [] : [{ ...fault, unknown }];
-    }
-    const { reading, round } = before.readings[fault.reading!];
-    const at = placed.findIndex((each) => each.reading === reading && each.round === round);
-    return at < 0 ? [] : [{ ...fault, reading: at }];
+    if (fault.cause !== 'mis-set' || fault.logOdds < CLEAR_ODDS || fault.unknown === null) return [];
+    const unknown = places.get(keyOf(before.unknowns[fault.unknown]));
+    return unknown === undefined ? [] : [{ ...fault, unknown }];
   });
 }

@@ -26,14 +26,26 @@ export const valvesOffCircuit = (network: PreparedNetwork, circuits: PumpCircuit
 export function upstreamFirst(network: PreparedNetwork, circuits: PumpCircuits, flow: Float64Array): number[] {
   const near = linksFromPump(network, circuits);
   const carried = (i: number) => Number(Math.abs(flow[i]).toPrecision(9));
-  return freeValves(network, circuits).sort((i, j) => carried(j) - carried(i) || near[i] - near[j] || network.position[i] - network.position[j]);
+  return freeValves(network, circuits).sort(
+    (i, j) => carried(j) - carried(i) || near[i] - near[j] || network.position[i] - network.position[j],
+  );
 }
 
 /** Links between each link and the nearest pump connection, up or down the flow. */
 function linksFromPump({ document, from }: PreparedNetwork, { groups, stretches, stretchOf }: PumpCircuits): Float64Array {
-  const down = walk(document.nodes.length, groups.map(({ circuits }) => circuits.discharge), stretches.map(({ a, b }) => [a, b]));
-  const up = walk(document.nodes.length, groups.map(({ circuits }) => circuits.suction), stretches.map(({ a, b }) => [b, a]));
-  return Float64Array.from(from, (_, i) => (stretchOf[i] < 0 ? Infinity : Math.min(down[stretches[stretchOf[i]].a], up[stretches[stretchOf[i]].b])));
+  const down = walk(
+    document.nodes.length,
+    groups.map(({ circuits }) => circuits.discharge),
+    stretches.map(({ a, b }) => [a, b]),
+  );
+  const up = walk(
+    document.nodes.length,
+    groups.map(({ circuits }) => circuits.suction),
+    stretches.map(({ a, b }) => [b, a]),
+  );
+  return Float64Array.from(from, (_, i) =>
+    stretchOf[i] < 0 ? Infinity : Math.min(down[stretches[stretchOf[i]].a], up[stretches[stretchOf[i]].b]),
+  );
 }
 
 function walk(nodeCount: number, starts: number[], steps: [number, number][]): Float64Array {
@@ -76,15 +88,30 @@ export function balancedValves(
     const taken = stretches[k].head - Math.abs(loss[i]);
     const wantedKv = taken > 0 ? kvForFlow(Math.abs(flow[i]), wantedDropKpa, fluid.densityKgM3) : largest;
     const missing = groups.some(
-      (group, g) => group.circuits.through(k) > group.circuits.requiredHead - shortfallFor(g) + MISSING_M && shortfallFor(g) > MISSING_M && taken < MISSING_M,
+      (group, g) =>
+        group.circuits.through(k) > group.circuits.requiredHead - shortfallFor(g) + MISSING_M &&
+        shortfallFor(g) > MISSING_M &&
+        taken < MISSING_M,
     );
     const state = stateOf(wantedKv, table[0].kv, largest, missing);
     const setting = roundedSetting(link, state === 'open' ? largestSetting(table) : settingAtKv(table, wantedKv));
     const kv = state === 'throttled' && !link.settingStep ? wantedKv : kvAtSetting(table, setting);
     settings.set(link.id, setting);
-    found.set(link.id, { id: link.id, flowLs: flow[i], dropKpa: Math.abs(dropAcrossValveKpa(kv, flow[i], fluid.densityKgM3)), kv, setting, state, wantedKv });
+    found.set(link.id, {
+      id: link.id,
+      flowLs: flow[i],
+      dropKpa: Math.abs(dropAcrossValveKpa(kv, flow[i], fluid.densityKgM3)),
+      kv,
+      setting,
+      state,
+      wantedKv,
+    });
     if (state === 'too-large')
-      warnings.push({ code: 'valve-too-large', id: link.id, message: `${link.id} at its smallest setting still passes more than is wanted (Kv ${kv.toFixed(2)}, wanted ${wantedKv.toFixed(2)}).` });
+      warnings.push({
+        code: 'valve-too-large',
+        id: link.id,
+        message: `${link.id} at its smallest setting still passes more than is wanted (Kv ${kv.toFixed(2)}, wanted ${wantedKv.toFixed(2)}).`,
+      });
     if (state === 'too-small')
       warnings.push({ code: 'valve-too-small', id: link.id, message: `${link.id} fully open costs more than its circuit has to spare.` });
   }

@@ -67,7 +67,9 @@ function findDuty(given: NetworkDocument) {
     const keep = (link: NetworkLink) => (idle.has(link.id) && link.kind === 'balancingValve' ? { ...link, locked: true } : link);
     document = { ...document, links: document.links.map(keep) };
     const next = { ...document, links: document.links.map((link) => set(link, NO_SETTINGS, pumps.speeds)) };
-    const isSettled = next.links.every((link, at) => link.kind !== 'pump' || Math.abs(pumpSpeed(link) - pumpSpeed(atSpeeds.links[at] as PumpLink)) < SETTLED_SPEED);
+    const isSettled = next.links.every(
+      (link, at) => link.kind !== 'pump' || Math.abs(pumpSpeed(link) - pumpSpeed(atSpeeds.links[at] as PumpLink)) < SETTLED_SPEED,
+    );
     if (!idle.size && isSettled) return found;
     atSpeeds = next;
   }
@@ -75,7 +77,9 @@ function findDuty(given: NetworkDocument) {
 
 /** Most head of any circuit through each stretch, over all pumps, m. */
 function mostHeads({ groups, stretches }: PumpCircuits): Float64Array {
-  return Float64Array.from(stretches, (_, k) => groups.reduce((most, group) => Math.max(most, group.circuits.through(k) + group.headBetween), -Infinity));
+  return Float64Array.from(stretches, (_, k) =>
+    groups.reduce((most, group) => Math.max(most, group.circuits.through(k) + group.headBetween), -Infinity),
+  );
 }
 
 /**

@@ -70,7 +70,7 @@ export function readVitestReport(file) {
 export async function runPlaywright(env) {
   const file = freshReport('e2e.json');
   const program = join(root, 'node_modules/@playwright/test/cli.js');
-  const good = await passes([program, 'test', '--reporter=list,json'], { ...env, PLAYWRIGHT_JSON_OUTPUT_FILE: file });
+  const good = await passes([program, 'test', '--project=desktop', '--reporter=list,json'], { ...env, PLAYWRIGHT_JSON_OUTPUT_FILE: file });
   return atLeastOneFailureUnless(good, readPlaywrightReport(file));
 }
 

@@ -3,7 +3,7 @@ import type { NetworkDocument } from '@/lib/hydraulics/types';
 import { type ReadingRound, settingIn } from '../readings';
 import { activeColumns, activeUnknowns, dot, Gaussian, gramOf } from './gaussian';
 import type { LinearModel } from './most-likely';
-import type { PlacedReading } from './reading-model';
+import type { ReadingModel } from './reading-model';
 import type { Unknown } from './unknowns';
 
 export type Cause = 'blocked' | 'mis-set' | 'wrong-chart' | 'pump-off-curve' | 'wrong-reading';
@@ -38,6 +38,9 @@ const TABLE_ERROR = 0.05;
 const WORTH_A_SECOND_LOOK = -2;
 /** Faults that look this much alike to the readings (squared cosine) are not taken in one go: the first may explain what speaks for the next. */
 const ALIKE = 0.1;
+const MOST_RIVALS = 5;
+const CHORDS = 3;
+const FURTHEST_CHORD = 4;
 
 export const faultDeviation = (cause: Cause) => faults[cause].deviation;
 
@@ -68,7 +71,7 @@ export class FaultSearch {
     private readonly document: NetworkDocument,
     private readonly rounds: ReadingRound[],
     private readonly unknowns: Unknown[],
-    private readonly placed: PlacedReading[],
+    private readonly model: ReadingModel,
     private readonly fit: LinearModel,
     private readonly deviations: Float64Array,
     noise: Float64Array,
@@ -85,13 +88,34 @@ export class FaultSearch {
     let candidates = this.weigh(this.candidates());
     for (;;) {
       candidates = candidates.filter((each) => each.logOdds > WORTH_A_SECOND_LOOK).sort((a, b) => b.logOdds - a.logOdds);
-      const best = candidates.shift();
-      if (!best || best.logOdds <= 0) return found;
+      const first = candidates.at(0);
+      if (!first || first.logOdds <= 0) return found;
+      const rivals = candidates.filter((each) => squaredCosine(each.whitened, first.whitened) >= ALIKE);
+      candidates = candidates.filter((each) => !rivals.includes(each));
+      const best = rivals
+        .slice(0, MOST_RIVALS)
+        .map((each) => this.followed(each))
+        .reduce((a, b) => (b.logOdds > a.logOdds ? b : a));
+      if (best.logOdds <= 0) continue;
       found.push(best);
-      const unlike = candidates.filter((each) => squaredCosine(each.whitened, best.whitened) < ALIKE);
       this.accept(best);
-      candidates = this.weigh(unlike);
+      candidates = this.weigh(candidates);
     }
+  }
+
+  /** The same fault weighed along the chord to where it takes its unknown: the tangent is misleading for a valve nearly shut. */
+  private followed(fault: Weighed): Weighed {
+    let here = fault;
+    for (let round = 0; round < CHORDS && here.unknown !== null && here.shift !== 0; round++) {
+      const shift = Math.min(Math.max(here.shift, -FURTHEST_CHORD), FURTHEST_CHORD);
+      const values = this.fit.values.slice();
+      values[here.unknown] += shift;
+      const solved = this.model.solve(values);
+      if (!solved.closed) return here;
+      const column = solved.scaled.map((each, m) => (each - (this.model.placed[m].scaled - this.fit.misfit[m])) / shift);
+      [here] = this.weigh([{ ...here, column }]);
+    }
+    return here;
   }
 
   /** Of faults taken as true already, those that are no longer likelier than none, all others being kept. */
@@ -100,7 +124,7 @@ export class FaultSearch {
     const innovation = gaussian.whiten(this.innovation);
     return accepted.filter(({ cause, unknown, reading }) => {
       const { deviation, odds } = faults[cause];
-      const whitened = gaussian.whiten(unknown !== null ? Float64Array.from(this.fit.rows, (row) => row[unknown]) : unit(this.placed.length, reading!));
+      const whitened = gaussian.whiten(unknown !== null ? Float64Array.from(this.fit.rows, (row) => row[unknown]) : unit(this.model.placed.length, reading!));
       // S holds the fault's own variance; taken out of it, k·S⁻¹k and k·S⁻¹r both grow by 1 / (1 - Δ k·S⁻¹k).
       const shrinkage = Math.max(1 - deviation ** 2 * dot(whitened, whitened), 1e-12);
       return Math.log(odds) + 0.5 * Math.log(shrinkage) + (0.5 * deviation ** 2 * dot(whitened, innovation) ** 2) / shrinkage <= 0;
@@ -118,7 +142,8 @@ export class FaultSearch {
   }
 
   private candidates(): Weighed[] {
-    const { unknowns, placed, fit, deviations, noise } = this;
+    const { unknowns, fit, deviations, noise } = this;
+    const { placed } = this.model;
     const weighed = (cause: Cause, unknown: number | null, reading: number | null, column: Float64Array): Weighed => {
       return { cause, unknown, reading, column, whitened: column, variance: faults[cause].deviation ** 2, logOdds: -Infinity, shift: 0 };
     };
