@@ -28,7 +28,7 @@ export function EntryField({ entry, field, onEnter }: EntryFieldProps) {
           message ? 'outline-high' : isActive ? 'outline-brass' : 'outline-transparent',
         )}
       >
-        <label htmlFor={id} className="text-quiet pointer-events-none absolute top-2 left-4 text-sm">
+        <label htmlFor={id} className="text-quiet pointer-events-none absolute top-2 left-3 sm:left-4 text-sm">
           {fieldNames[field]}
           <span className="sr-only">, {entry.unitOf(field)}</span>
         </label>
@@ -49,14 +49,14 @@ export function EntryField({ entry, field, onEnter }: EntryFieldProps) {
           maxLength={24}
           aria-invalid={Boolean(message)}
           aria-describedby={message ? `${id}-error` : undefined}
-          className="figures h-[4.75rem] w-full bg-transparent pt-6 pr-24 pl-4 text-[1.75rem] outline-none"
+          className="figures h-[4.75rem] w-full bg-transparent pt-6 pr-18 pl-3 text-2xl sm:pr-24 sm:pl-4 sm:text-[1.75rem] outline-none"
         />
         {units.length > 1 ? (
           <select
             aria-label={`Unit of the ${fieldNames[field].toLowerCase()}`}
             value={entry.unitOf(field)}
             onChange={(event) => entry.chooseUnit(field, event.target.value)}
-            className="text-quiet absolute right-1 bottom-1 h-12 max-w-24 rounded bg-transparent px-2 text-right"
+            className="text-quiet absolute right-1 bottom-1 h-12 max-w-20 rounded bg-transparent px-2 text-right"
           >
             {units.map((unit) => (
               <option key={unit} className="text-ink bg-sheet">

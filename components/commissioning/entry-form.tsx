@@ -30,7 +30,7 @@ export function EntryForm({ commissioning, station, entry, correcting, onKeep }:
   const [hasNote, setNote] = useState(false);
   const { body } = commissioning;
   const last = commissioning.lastStanding.get(station.id);
-  const isNoteShown = hasNote || entry.isCorrecting || entry.typed.note !== '';
+  const isNoteShown = hasNote || entry.typed.note !== '';
   return (
     <>
       {correcting && (
@@ -43,8 +43,9 @@ export function EntryForm({ commissioning, station, entry, correcting, onKeep }:
           </Button>
         </div>
       )}
+      {entry.isCorrecting && <NoteField label="Why was the earlier entry wrong?" entry={entry} />}
       <MethodSwitch method={entry.typed.method} hasValve={station.kvTable !== null} onChoose={entry.chooseMethod} />
-      <div className="flex gap-3 max-sm:flex-col">
+      <div className="flex gap-2 sm:gap-3">
         {entry.fields.map((field) => (
           <EntryField key={field} entry={entry} field={field} onEnter={onKeep} />
         ))}
@@ -64,7 +65,7 @@ export function EntryForm({ commissioning, station, entry, correcting, onKeep }:
           )}
         </p>
         <span className="ml-auto flex">
-          {!isNoteShown && (
+          {!isNoteShown && !entry.isCorrecting && (
             <Button size="touch" look="quiet" className="!px-3 !text-base" onClick={() => setNote(true)}>
               Note
             </Button>
@@ -75,15 +76,7 @@ export function EntryForm({ commissioning, station, entry, correcting, onKeep }:
         </span>
       </div>
       <MeterPicker entry={entry} />
-      {isNoteShown && (
-        <TextArea
-          label={entry.isCorrecting ? 'Why was the earlier entry wrong?' : 'Note'}
-          rows={2}
-          maxLength={1000}
-          value={entry.typed.note}
-          onChange={(event) => entry.type('note', event.target.value)}
-        />
-      )}
+      {isNoteShown && !entry.isCorrecting && <NoteField label="Note" entry={entry} />}
       <WorkingDialog
         entry={entry}
         station={station}
@@ -94,6 +87,10 @@ export function EntryForm({ commissioning, station, entry, correcting, onKeep }:
     </>
   );
 }
+
+const NoteField = ({ label, entry }: { label: string; entry: Entry }) => (
+  <TextArea label={label} rows={2} maxLength={1000} value={entry.typed.note} onChange={(event) => entry.type('note', event.target.value)} />
+);
 
 /** What the meter would show at the typed setting if the flow were right; before a setting is typed, the scheduled one at a press. */
 function Target({ station, entry, densityKgM3 }: { station: Station; entry: Entry; densityKgM3: number }) {

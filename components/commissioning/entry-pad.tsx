@@ -30,7 +30,8 @@ export function EntryPad({ entry, message, isSending, hasWaiting, before, next, 
   const isDone = entry?.isBlank === true && hasWaiting;
   const type = (key: string) => {
     if (!entry) return;
-    const text = entry.typed[entry.active];
+    // A unit typed behind the figure ends it: the next key begins a new one.
+    const text = /[^\d.,]/.test(entry.typed[entry.active]) ? '' : entry.typed[entry.active];
     if (key === ',' && /[.,]/.test(text)) return;
     entry.setActive(entry.active);
     entry.type(entry.active, `${text}${key === ',' ? '.' : key}`);

@@ -112,9 +112,20 @@ export function useEntry(commissioning: Commissioning, station: Station) {
     },
     chooseMeter: (id: string) => rememberDevice({ ...device, instruments: { ...device.instruments, [typed.method]: id } }),
     chooseUnit: (field: Field, unit: string) => rememberDevice({ ...device, units: { ...device.units, [quantityOf[field]]: unit } }),
-    /** Takes an earlier entry up again: to put it right, or because the server did not take it. */
-    takeUp: ({ method, entered, note }: Pick<Reading, 'method' | 'entered' | 'note'>, correctsReadingId: string | null) =>
-      remember({ method, ...textsOf(entered), note: correctsReadingId ? '' : note, correctsReadingId }),
+    /** Takes an earlier entry up again, in the units it was typed in: to put it right, or because the server did not take it. */
+    takeUp: ({ method, entered, note }: Pick<Reading, 'method' | 'entered' | 'note'>, correctsReadingId: string | null) => {
+      const textOf = (field: Field) => entered.find(({ quantity }) => quantity === quantityOf[field])?.text ?? '';
+      const units = Object.fromEntries(entered.filter(({ quantity }) => quantity !== 'setting').map(({ quantity, unit }) => [quantity, unit]));
+      rememberDevice({ ...device, units: { ...device.units, ...units } });
+      remember({
+        method,
+        setting: textOf('setting'),
+        drop: textOf('drop'),
+        flow: textOf('flow'),
+        note: correctsReadingId ? '' : note,
+        correctsReadingId,
+      });
+    },
     clear: () => remember(null),
     /** The reading as it goes to the server, or why it cannot be kept yet. */
     finish: (): { reading: RecordReading; questions: Question[] } | { message: string } => {
@@ -170,13 +181,4 @@ const missing: Record<Field, string> = {
 function measuredOf(method: ReadingMethod, settingTurns: number | null, dropKpa: number | null, flowLs: number | null): Measured | null {
   if (method === 'direct-flow') return flowLs !== null && flowLs >= 0 ? { method, flowLs } : null;
   return settingTurns !== null && dropKpa !== null ? { method, settingTurns, dropKpa } : null;
-}
-
-/** Texts for the fields, each with the unit it was typed in, which goes before whatever unit the field shows now. */
-function textsOf(entered: Reading['entered']): Record<Field, string> {
-  const textOf = (quantity: string) => {
-    const found = entered.find((it) => it.quantity === quantity);
-    return found ? `${found.text} ${found.unit}` : '';
-  };
-  return { setting: textOf('setting'), drop: textOf('pressure'), flow: textOf('flow') };
 }

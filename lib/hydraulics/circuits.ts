@@ -52,11 +52,13 @@ export class Circuits {
     this.fromPlace = new Float64Array(2 * nodeCount).fill(-Infinity);
     const places = [...order, ...order.map((v) => v + nodeCount)];
     this.toPlace[discharge] = 0;
-    for (const v of places) for (const { b, stretch } of this.leaving[v]) this.toPlace[b] = Math.max(this.toPlace[b], this.toPlace[v] + this.headOf(stretch));
+    for (const v of places)
+      for (const { b, stretch } of this.leaving[v]) this.toPlace[b] = Math.max(this.toPlace[b], this.toPlace[v] + this.headOf(stretch));
     this.goal = this.toPlace[suction + nodeCount] > -Infinity ? suction + nodeCount : suction;
     this.fromPlace[this.goal] = 0;
     for (const v of places.reverse())
-      for (const { a, stretch } of this.arriving[v]) this.fromPlace[a] = Math.max(this.fromPlace[a], this.fromPlace[v] + this.headOf(stretch));
+      for (const { a, stretch } of this.arriving[v])
+        this.fromPlace[a] = Math.max(this.fromPlace[a], this.fromPlace[v] + this.headOf(stretch));
   }
 
   /** Null where no way leads from discharge to suction, or flows run in a ring without a pump. */

@@ -36,10 +36,16 @@ export function designFlows(document: NetworkDocument): DesignFlows {
     }
     return false;
   });
-  const restNetwork = prepareNetwork({ ...open, links: rest, nodes: open.nodes.map((node) => ({ ...node, inflowLs: inflow.get(node.id)! })) });
+  const restNetwork = prepareNetwork({
+    ...open,
+    links: rest,
+    nodes: open.nodes.map((node) => ({ ...node, inflowLs: inflow.get(node.id)! })),
+  });
   const conflict = unbalancedIn(restNetwork.document, restNetwork.forest);
   const solution = findFlows(restNetwork);
-  const restFlow = new Map(rest.map((link, at) => [link.id, restNetwork.numberOf[at] < 0 ? 0 : solution.state.linkFlow[restNetwork.numberOf[at]]]));
+  const restFlow = new Map(
+    rest.map((link, at) => [link.id, restNetwork.numberOf[at] < 0 ? 0 : solution.state.linkFlow[restNetwork.numberOf[at]]]),
+  );
   const flow = Float64Array.from(network.position, (at) => {
     const link = open.links[at];
     return link.kind === 'terminal' ? (live.has(link.id) ? link.designFlowLs : 0) : restFlow.get(link.id)!;

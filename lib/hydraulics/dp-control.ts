@@ -56,7 +56,8 @@ export class DpControl {
   /** Largest distance of a throttling controller from its set point, m. */
   worstError(state: NetworkState): number {
     let worst = 0;
-    for (const each of this.controllers) if (each.state === 'throttling') worst = Math.max(worst, Math.abs(sensed(state, each) - each.setpointM));
+    for (const each of this.controllers)
+      if (each.state === 'throttling') worst = Math.max(worst, Math.abs(sensed(state, each) - each.setpointM));
     return worst;
   }
 
@@ -183,7 +184,7 @@ function senseFinder({ from, to, document }: PreparedNetwork) {
     }
     if (!came.has(low)) return null;
     const path: { link: number; sign: number }[] = [];
-    for (let v = low; v !== high; ) {
+    for (let v = low; v !== high;) {
       const { link, previous } = came.get(v)!;
       path.push({ link, sign: from[link] === previous ? 1 : -1 });
       v = previous;

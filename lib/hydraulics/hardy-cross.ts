@@ -20,7 +20,12 @@ const SWEPT_HEAD_M = 0.1 * CLOSED_HEAD_M;
  * each loop with the flows that the loops before it have left. Where a correction would leave more head than it found
  * (a law with a wall, or flat at rest) the same loop is corrected again at once; nothing else is added to the method. Flows L/s, heads m.
  */
-export function balanceHeads(state: NetworkState, loops: Loops, control: DpControl | null, history: LoopCorrection[] | null): IterationOutcome {
+export function balanceHeads(
+  state: NetworkState,
+  loops: Loops,
+  control: DpControl | null,
+  history: LoopCorrection[] | null,
+): IterationOutcome {
   const mostSweeps = Math.min(MOST_SWEEPS, Math.ceil(MOST_EVALUATIONS / Math.max(1, loops.chain.length)));
   const around = new LoopHead(state, loops);
   state.evaluate();

@@ -31,7 +31,8 @@ export class LoopGradients implements LoopSolver {
     this.chainSlope = chainSlope;
     const { loops, diagonal } = this;
     diagonal.fill(0);
-    for (let l = 0; l < loops.count; l++) for (let p = loops.start[l]; p < loops.start[l + 1]; p++) diagonal[l] += chainSlope[loops.chain[p]];
+    for (let l = 0; l < loops.count; l++)
+      for (let p = loops.start[l]; p < loops.start[l + 1]; p++) diagonal[l] += chainSlope[loops.chain[p]];
   }
 
   solve(heads: Float64Array, flows: Float64Array): void {
@@ -65,10 +66,12 @@ export class LoopGradients implements LoopSolver {
   private apply(x: Float64Array, heads: Float64Array): void {
     const { loops, chainFlow, chainSlope } = this;
     chainFlow.fill(0);
-    for (let l = 0; l < loops.count; l++) for (let p = loops.start[l]; p < loops.start[l + 1]; p++) chainFlow[loops.chain[p]] += loops.sign[p] * x[l];
+    for (let l = 0; l < loops.count; l++)
+      for (let p = loops.start[l]; p < loops.start[l + 1]; p++) chainFlow[loops.chain[p]] += loops.sign[p] * x[l];
     for (let l = 0; l < loops.count; l++) {
       let head = 0;
-      for (let p = loops.start[l]; p < loops.start[l + 1]; p++) head += loops.sign[p] * chainSlope[loops.chain[p]] * chainFlow[loops.chain[p]];
+      for (let p = loops.start[l]; p < loops.start[l + 1]; p++)
+        head += loops.sign[p] * chainSlope[loops.chain[p]] * chainFlow[loops.chain[p]];
       heads[l] = head;
     }
   }

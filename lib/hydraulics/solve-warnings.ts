@@ -23,14 +23,17 @@ export function solveWarnings(network: PreparedNetwork, solution: Solution, link
   ];
 }
 
-export const listed = (ids: string[]) => (ids.length > MOST_NAMES ? `${ids.slice(0, MOST_NAMES).join(', ')} and ${ids.length - MOST_NAMES} more` : ids.join(', '));
+export const listed = (ids: string[]) =>
+  ids.length > MOST_NAMES ? `${ids.slice(0, MOST_NAMES).join(', ')} and ${ids.length - MOST_NAMES} more` : ids.join(', ');
 
 /** Networks that nothing joins to the one with the reference stand on their own first node at 0 kPa. */
 function loneNetworkWarnings(document: NetworkDocument, whole: SpanningForest, reference: number): Warning[] {
   return whole.roots.flatMap((root, network): Warning[] => {
     if (network === whole.part[reference]) return [];
     const { id } = document.nodes[root];
-    return [{ code: 'no-reference', id, message: `Nothing joins ${id} to the reference: pressures there are counted from 0 kPa at ${id}.` }];
+    return [
+      { code: 'no-reference', id, message: `Nothing joins ${id} to the reference: pressures there are counted from 0 kPa at ${id}.` },
+    ];
   });
 }
 
@@ -94,7 +97,12 @@ function wallWarnings({ kinds, document, position }: PreparedNetwork, { state }:
       const link = document.links[position[i]];
       if (state.linkSlope[i] === WALL_SLOPE) {
         const beyond = kind === 'flowLimiter' ? state.linkFlow[i] - (link as LinkOf<'flowLimiter'>).limitLs : -state.linkFlow[i];
-        if (beyond > FORCED_LS) warnings.push({ code: 'forced-flow', id: link.id, message: `Inflows force flow through ${link.id}, which does not let it pass.` });
+        if (beyond > FORCED_LS)
+          warnings.push({
+            code: 'forced-flow',
+            id: link.id,
+            message: `Inflows force flow through ${link.id}, which does not let it pass.`,
+          });
       } else if (kind === 'flowLimiter') {
         const { limitLs } = link as LinkOf<'flowLimiter'>;
         const flow = state.linkFlow[i];
@@ -114,7 +122,10 @@ function controllerWarnings({ document, position }: PreparedNetwork, { control }
   return (control?.controllers ?? []).flatMap(({ link, state }): Warning[] => {
     const { id } = document.links[position[link]];
     if (state === 'open') return [{ code: 'controller-open', id, message: `${id} stands wide open: its set point cannot be reached.` }];
-    if (state === 'shut') return [{ code: 'controller-shut', id, message: `${id} is shut: the sensed differential pressure stays above its set point without it.` }];
+    if (state === 'shut')
+      return [
+        { code: 'controller-shut', id, message: `${id} is shut: the sensed differential pressure stays above its set point without it.` },
+      ];
     return [];
   });
 }

@@ -48,7 +48,8 @@ const iterations = new WeakMap<PreparedNetwork, SimultaneousIteration>();
 /** The simultaneous iteration of a network at its first flows, or, solved before, at those it has. */
 export function startIteration(network: PreparedNetwork, startFlows?: Float64Array): SimultaneousIteration {
   const known = iterations.get(network);
-  const iteration = known ?? new SimultaneousIteration(new NetworkState(network), shortLoops(network.document.nodes.length, network.chains));
+  const iteration =
+    known ?? new SimultaneousIteration(new NetworkState(network), shortLoops(network.document.nodes.length, network.chains));
   iterations.set(network, iteration);
   iteration.state.openControllers();
   // The first flows are also what the least slopes come from.

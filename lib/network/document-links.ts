@@ -57,7 +57,13 @@ const checks: Record<LinkKind, (at: FieldCheck, nodeIds: Set<string>, isForSizin
   balancingValve(at) {
     const table = at.points('kvTable', 'setting', 'kv', 2);
     const rises = table && at.rising('kvTable', 'setting', table);
-    const kvRises = table && at.rising('kvTable', 'kv', table.map(({ y }) => ({ x: y })));
+    const kvRises =
+      table &&
+      at.rising(
+        'kvTable',
+        'kv',
+        table.map(({ y }) => ({ x: y })),
+      );
     if (rises && kvRises) at.between('setting', table[0].x, table[table.length - 1].x);
     else at.number('setting');
     at.flag('locked');
@@ -65,7 +71,8 @@ const checks: Record<LinkKind, (at: FieldCheck, nodeIds: Set<string>, isForSizin
   },
   resistance(at) {
     const { kv, designFlowLs, designDropKpa } = at.fields;
-    if (kv === undefined && designFlowLs === undefined && designDropKpa === undefined) at.bad('kv', 'is required, or designFlowLs with designDropKpa');
+    if (kv === undefined && designFlowLs === undefined && designDropKpa === undefined)
+      at.bad('kv', 'is required, or designFlowLs with designDropKpa');
     else if (kv !== undefined) at.positive('kv');
     if (designFlowLs !== undefined || designDropKpa !== undefined) {
       at.positive('designFlowLs', kv === undefined);

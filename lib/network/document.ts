@@ -9,7 +9,8 @@ import { withLargestBores } from './document-sizing';
 export const MOST_LINKS = 50_000;
 export const MOST_DOCUMENT_BYTES = 32 * 1024 * 1024;
 
-export type DocumentErrorCode = 'not-a-document' | 'unsupported-format' | 'document-too-large' | 'empty-network' | 'invalid-document' | 'fluid-out-of-range';
+export type DocumentErrorCode =
+  'not-a-document' | 'unsupported-format' | 'document-too-large' | 'empty-network' | 'invalid-document' | 'fluid-out-of-range';
 
 export interface DocumentError {
   code: DocumentErrorCode;
@@ -27,7 +28,8 @@ export type Purpose = 'solve' | 'balance' | 'size';
  * with the path of the offending value and, inside a node or link, its id. Fields that are not known are kept and ignored.
  */
 export function parseNetworkDocument(value: unknown, purpose: Purpose = 'solve'): ParsedDocument {
-  if (!isRecord(value)) return failure('not-a-document', 'A network document is a JSON object.', [{ path: '', message: 'must be an object' }]);
+  if (!isRecord(value))
+    return failure('not-a-document', 'A network document is a JSON object.', [{ path: '', message: 'must be an object' }]);
   if (value.format !== 'network/1') {
     const issue = { path: 'format', message: 'must be "network/1"' };
     return failure('unsupported-format', 'The document is of a format that is not supported.', [issue]);

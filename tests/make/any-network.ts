@@ -21,7 +21,13 @@ function passiveLink(kind: PassiveKind, id: string, from: string, to: string, ra
     case 'terminal':
       return { ...ends, kind, designFlowLs: between(0.1, 1), designDropKpa: between(5, 40) };
     case 'controlValve':
-      return { ...ends, kind, kvs: between(2, 16), characteristic: random() < 0.5 ? 'linear' : 'equalPercentage', opening: between(0.3, 1) };
+      return {
+        ...ends,
+        kind,
+        kvs: between(2, 16),
+        characteristic: random() < 0.5 ? 'linear' : 'equalPercentage',
+        opening: between(0.3, 1),
+      };
     case 'balancingValve': {
       const kvs = between(3, 20);
       return { ...ends, kind, kvTable: [1, 2, 4].map((setting) => ({ setting, kv: (kvs * setting) / 4 })), setting: between(1, 4) };
@@ -64,5 +70,10 @@ export function randomMesh(seed: number, nodes: number, chords: number, kinds: P
 
 export const anyNetwork = (kinds: PassiveKind[] = passiveKinds) =>
   fc
-    .record({ seed: fc.integer({ min: 0, max: 1e9 }), nodes: fc.integer({ min: 3, max: 30 }), chords: fc.integer({ min: 0, max: 25 }), pumps: fc.integer({ min: 0, max: 2 }) })
+    .record({
+      seed: fc.integer({ min: 0, max: 1e9 }),
+      nodes: fc.integer({ min: 3, max: 30 }),
+      chords: fc.integer({ min: 0, max: 25 }),
+      pumps: fc.integer({ min: 0, max: 2 }),
+    })
     .map(({ seed, nodes, chords, pumps }) => randomMesh(seed, nodes, chords, kinds, Math.min(pumps, nodes - 2)));

@@ -17,8 +17,22 @@ const KPA_PER_M = 9.80665;
  * Three terminals, direct return, every loss K Q² in kPa and L/s, pump 60 - 15 Q² kPa. Constructed; solved by hand: at design (0.5, 0.3,
  * 0.2 L/s) 45 kPa at the pump leave 35, 30 and 28 kPa at the tees, and valves of Kv 4.6476, 3.4153, 4.1569.
  */
-export function houseExample({ firstMain = 10, kv = [4.6475800154, 3.415259873, 4.1569219382], secondTerminal = 222.2222222, closed, bypass, pump = (q) => 60 - 15 * q * q }: HouseExample = {}): NetworkDocument {
-  const loss = (id: string, from: string, to: string, k: number): NetworkLink => ({ id, kind: 'resistance', from, to, designFlowLs: 1, designDropKpa: k });
+export function houseExample({
+  firstMain = 10,
+  kv = [4.6475800154, 3.415259873, 4.1569219382],
+  secondTerminal = 222.2222222,
+  closed,
+  bypass,
+  pump = (q) => 60 - 15 * q * q,
+}: HouseExample = {}): NetworkDocument {
+  const loss = (id: string, from: string, to: string, k: number): NetworkLink => ({
+    id,
+    kind: 'resistance',
+    from,
+    to,
+    designFlowLs: 1,
+    designDropKpa: k,
+  });
   const curve = Array.from({ length: 161 }, (_, i) => ({ flowLs: i / 100, headM: pump(i / 100) / KPA_PER_M }));
   const design = [0.5, 0.3, 0.2];
   const links: NetworkLink[] = [

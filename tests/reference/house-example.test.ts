@@ -20,7 +20,7 @@ describe('three terminals on direct return', () => {
     ['second coil fouled: others rise', { secondTerminal: 4 * 222.2222222 }, [0.5241, 0.1876, 0.2166]],
     ['second circuit shut: those beyond rise more', { closed: 'T2' }, [0.56068, 0, 0.23907]],
     ['bypass left open at the first tee', { bypass: 20 }, [0.29714, 0.17828, 0.11885]],
-    ['pump running backwards', { pump: (q) => 24 - 40 * q * q > -60 ? 24 - 40 * q * q : -60 }, [0.26568, 0.15941, 0.10627]],
+    ['pump running backwards', { pump: (q) => (24 - 40 * q * q > -60 ? 24 - 40 * q * q : -60) }, [0.26568, 0.15941, 0.10627]],
   ])('%s', (_, example, exact) => {
     terminalFlows(example).forEach((flow, k) => expect(flow).toBeCloseTo(exact[k], 4));
   });

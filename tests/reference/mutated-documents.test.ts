@@ -20,7 +20,11 @@ const stored = readdirSync(folder)
   .map((file) => readFileSync(new URL(file, folder), 'utf8'));
 const withController = houseExample();
 withController.links.push({ id: 'DPC', kind: 'dpController', from: 'n3', to: 'X', setpointKpa: 12, sense: ['n2', 'X'], kvs: 2 });
-const texts = [...stored, JSON.stringify(withController), ...[1, 2, 3].map((seed) => JSON.stringify(randomMesh(seed, 8, 5, passiveKinds, 2)))].map(readyToSize);
+const texts = [
+  ...stored,
+  JSON.stringify(withController),
+  ...[1, 2, 3].map((seed) => JSON.stringify(randomMesh(seed, 8, 5, passiveKinds, 2))),
+].map(readyToSize);
 
 /** Every document also asks for sizes, so that all three commands have work. */
 function readyToSize(text: string, k: number): string {
@@ -64,7 +68,9 @@ const commands: Record<Purpose, (document: NetworkDocument) => object> = { solve
 
 /** Whether any number inside is not finite. */
 const hasBadNumber = (value: unknown): boolean =>
-  typeof value === 'number' ? !Number.isFinite(value) : typeof value === 'object' && value !== null && Object.values(value).some(hasBadNumber);
+  typeof value === 'number'
+    ? !Number.isFinite(value)
+    : typeof value === 'object' && value !== null && Object.values(value).some(hasBadNumber);
 
 describe('a damaged document', () => {
   it('is given a result of finite numbers or a named error, in good time, ten thousand times', { timeout: 600_000 }, () => {

@@ -31,7 +31,15 @@ describe.each(methods)('published networks by %s', (method) => {
   it('E. Maurer, R package hydraulics, hardycross: two loops, h = K Q|Q|', () => {
     const K = [200, 2500, 500, 800, 300];
     const laws = K.map((k) => headLoss(k / 1e6));
-    const document = networkOfLoops([[1, 2, 3], [4, 5, -2]], [300, 100, -200, 200, -300], laws, WATER_1000);
+    const document = networkOfLoops(
+      [
+        [1, 2, 3],
+        [4, 5, -2],
+      ],
+      [300, 100, -200, 200, -300],
+      laws,
+      WATER_1000,
+    );
     expectFlows(flowsOf(document, method, 1000), [0.27467, 0.06418, -0.22533, 0.21049, -0.28951], 6e-6);
   });
 
@@ -40,7 +48,11 @@ describe.each(methods)('published networks by %s', (method) => {
     length: [250, 100, 125, 125, 100, 100, 125, 100, 100, 125],
     factor: [0.01879, 0.02075, 0.02075, 0.02075, 0.02075, 0.02233, 0.01964, 0.02233, 0.02233, 0.01964],
     first: [40, 40, 20, -20, -40, 0, 0, -20, 20, 0],
-    loops: [[1, 2, 3, 4, 5], [-4, 6, 7, 8], [-3, 9, 10, -6]],
+    loops: [
+      [1, 2, 3, 4, 5],
+      [-4, 6, 7, 8],
+      [-3, 9, 10, -6],
+    ],
   };
 
   it('E. Maurer, Hydraulics and Water Resources: Examples Using R, chapter 4: three loops, fixed friction factors', () => {
@@ -50,7 +62,12 @@ describe.each(methods)('published networks by %s', (method) => {
   });
 
   it('the same network with Colebrook-White friction, roughness 0.25 mm', () => {
-    const laws = maurer.bore.map((bore, k) => ({ kind: 'pipe' as const, lengthM: maurer.length[k], boreMm: bore * 1000, roughnessMm: 0.25 }));
+    const laws = maurer.bore.map((bore, k) => ({
+      kind: 'pipe' as const,
+      lengthM: maurer.length[k],
+      boreMm: bore * 1000,
+      roughnessMm: 0.25,
+    }));
     const fluid = { ...WATER_1000, viscosityMPaS: 1.023053 };
     const exact = [0.03812, 0.03812, 0.02301, -0.02567, -0.04188, 0.00867, 0.00378, -0.01622, 0.01511, -0.00489];
     expectFlows(flowsOf(networkOfLoops(maurer.loops, maurer.first, laws, fluid), method, 1000), exact, 6e-6);
@@ -60,9 +77,22 @@ describe.each(methods)('published networks by %s', (method) => {
     const bore = [12, 14, 10, 10, 14, 10, 12];
     const length = [3000, 2000, 3000, 2000, 3000, 2000, 3000];
     const first = [1.67, 3.45, 1, 1.67, 1.78, 1.56, 0.67].map((flow) => flow * CFS);
-    const laws = bore.map((inch, k) => ({ kind: 'pipe' as const, lengthM: length[k] * FT, boreMm: inch * 25.4, roughnessMm: 0.012 * 25.4 }));
+    const laws = bore.map((inch, k) => ({
+      kind: 'pipe' as const,
+      lengthM: length[k] * FT,
+      boreMm: inch * 25.4,
+      roughnessMm: 0.012 * 25.4,
+    }));
     const fluid = { ...WATER_1000, viscosityMPaS: 1.217e-5 * FT ** 2 * 1e6 };
-    const document = networkOfLoops([[1, 2, -3, -4], [-2, -5, 6, 7]], first, laws, fluid);
+    const document = networkOfLoops(
+      [
+        [1, 2, -3, -4],
+        [-2, -5, 6, 7],
+      ],
+      first,
+      laws,
+      fluid,
+    );
     expectFlows(flowsOf(document, method, CFS), [1.74741, 3.48735, 0.92259, 1.59259, 1.73995, 1.60005, 0.71005], 1.5e-5);
   });
 
@@ -72,7 +102,15 @@ describe.each(methods)('published networks by %s', (method) => {
     const first = [5, 2, 2.5, 5, 3, 0.5, 4.5].map((flow) => flow * CFS);
     // h [ft] = 4.73 L Q^1.852 / (C^1.852 D^4.87), Q in cfs, L and D in ft.
     const laws = bore.map((inch, k) => headLoss(((4.73 * length[k]) / (95 ** 1.852 * (inch / 12) ** 4.87)) * FT * CFS ** -1.852, 1.852));
-    const document = networkOfLoops([[1, 2, -3, -4], [5, 6, -7, -2]], first, laws, WATER_1000);
+    const document = networkOfLoops(
+      [
+        [1, 2, -3, -4],
+        [5, 6, -7, -2],
+      ],
+      first,
+      laws,
+      WATER_1000,
+    );
     expectFlows(flowsOf(document, method, CFS), [6.86593, 3.83281, 0.63407, 3.13407, 3.03312, 0.53312, 4.46688], 1.5e-5);
   });
 

@@ -9,7 +9,7 @@ export const boreAreaM2 = (boreMm: number) => (Math.PI / 4) * (boreMm / 1000) **
 
 /** Reynolds number per L/s in a bore: rho D / (mu A), flow in m³/s. */
 export const reynoldsPerLs = (boreMm: number, fluid: FluidProperties) =>
-  fluid.densityKgM3 / (boreAreaM2(boreMm) * 1000 * (fluid.viscosityMPaS / 1000)) * (boreMm / 1000);
+  (fluid.densityKgM3 / (boreAreaM2(boreMm) * 1000 * (fluid.viscosityMPaS / 1000))) * (boreMm / 1000);
 
 /** Darcy-Weisbach with local losses: h = (f L/D + K) v²/2g. */
 class PipeBatch implements LinkBatch {

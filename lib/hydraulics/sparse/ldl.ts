@@ -33,7 +33,11 @@ export class SparseLdl {
   static of(pattern: Pattern, mostFill: number, mostWork: number): SparseLdl | null {
     // Loops come from the ends of the network inwards, which for a tree of ladders is already an order without fill.
     const entries = pattern.index.length / 2;
-    const asGiven = new SparseLdl(pattern, Int32Array.from({ length: pattern.size }, (_, k) => k), GOOD_FILL * entries);
+    const asGiven = new SparseLdl(
+      pattern,
+      Int32Array.from({ length: pattern.size }, (_, k) => k),
+      GOOD_FILL * entries,
+    );
     if (asGiven.fill <= GOOD_FILL * entries) return asGiven;
     const factors = new SparseLdl(pattern, minimumDegree(pattern), mostFill);
     return factors.fill > mostFill || factors.work() > mostWork ? null : factors;
@@ -140,8 +144,7 @@ export class SparseLdl {
   private rowsOf({ size, start, index }: Pattern) {
     const rows = new Int32Array(size + 1);
     const { place } = this;
-    for (let i = 0; i < size; i++)
-      for (let p = start[i]; p < start[i + 1]; p++) if (place[index[p]] < place[i]) rows[place[i] + 1]++;
+    for (let i = 0; i < size; i++) for (let p = start[i]; p < start[i + 1]; p++) if (place[index[p]] < place[i]) rows[place[i] + 1]++;
     for (let k = 0; k < size; k++) rows[k + 1] += rows[k];
     const next = rows.slice(0, size);
     const column = new Int32Array(rows[size]);

@@ -25,7 +25,10 @@ function riser(floors: Floor[]): NetworkDocument {
   };
   const total = 0.2 * floors.reduce((sum, { drops }) => sum + drops.length, 0);
   const curve = [0, 0.5, 1, 1.5].map((part) => ({ flowLs: part * total, headM: 80 - 10 * part ** 2 }));
-  links.push({ id: 'PU', kind: 'pump', from: 'D0', to: 'P', curve }, { id: 'RV', kind: 'balancingValve', from: 'P', to: 'U0', kvTable: kvTable(40) });
+  links.push(
+    { id: 'PU', kind: 'pump', from: 'D0', to: 'P', curve },
+    { id: 'RV', kind: 'balancingValve', from: 'P', to: 'U0', kvTable: kvTable(40) },
+  );
   floors.forEach(({ drops, lengthM }, k) => {
     const f = k + 1;
     pipe(`u${f}`, `U${k}`, `U${f}`, 4, 60);
@@ -47,7 +50,10 @@ function riser(floors: Floor[]): NetworkDocument {
   return { format: 'network/1', fluid: { medium: 'water', temperatureC: 8 }, nodes: ids.map((id) => ({ id })), links };
 }
 
-const floor = fc.record({ drops: fc.array(fc.integer({ min: 5, max: 60 }), { minLength: 1, maxLength: 5 }), lengthM: fc.integer({ min: 1, max: 25 }) });
+const floor = fc.record({
+  drops: fc.array(fc.integer({ min: 5, max: 60 }), { minLength: 1, maxLength: 5 }),
+  lengthM: fc.integer({ min: 1, max: 25 }),
+});
 const floors = fc.array(floor, { minLength: 1, maxLength: 5 });
 
 describe('balance', () => {
@@ -79,7 +85,8 @@ describe('balance', () => {
         const throttled = balance({ ...riser(building), options: { pumpExcess: 'throttle' } });
         expect(throttled.pumps[0].speed).toBe(1);
         expect(valveOf(throttled, 'RV').state).toBe('throttled');
-        for (const valve of throttled.valves) if (valve.id !== 'RV') expect(valve.setting).toBeCloseTo(valveOf(slowed, valve.id).setting, 6);
+        for (const valve of throttled.valves)
+          if (valve.id !== 'RV') expect(valve.setting).toBeCloseTo(valveOf(slowed, valve.id).setting, 6);
         for (const terminal of throttled.terminals) expect(terminal.percentOfDesign).toBeCloseTo(100, 2);
       }),
       { numRuns: 30 },
@@ -160,12 +167,29 @@ describe('balance', () => {
   });
 
   it('holds design flows in a ring main and lets the ring share them', () => {
-    const pipe = (id: string, from: string, to: string): NetworkLink => ({ id, kind: 'pipe', from, to, lengthM: 20, boreMm: 40, roughnessMm: 0.045 });
+    const pipe = (id: string, from: string, to: string): NetworkLink => ({
+      id,
+      kind: 'pipe',
+      from,
+      to,
+      lengthM: 20,
+      boreMm: 40,
+      roughnessMm: 0.045,
+    });
     const kvTable = [0.5, 4].map((setting) => ({ setting, kv: setting * 3 }));
-    const links: NetworkLink[] = [{ id: 'PU', kind: 'pump', from: 'X', to: 'a', curve: [0, 1, 2, 3].map((q) => ({ flowLs: q, headM: 18 - q })) }];
+    const links: NetworkLink[] = [
+      { id: 'PU', kind: 'pump', from: 'X', to: 'a', curve: [0, 1, 2, 3].map((q) => ({ flowLs: q, headM: 18 - q })) },
+    ];
     links.push(pipe('ab', 'a', 'b'), pipe('bc', 'b', 'c'), pipe('ca', 'c', 'a'));
     for (const place of ['b', 'c']) {
-      links.push({ id: `T${place}`, kind: 'terminal', from: place, to: `m${place}`, designFlowLs: place === 'b' ? 0.9 : 0.3, designDropKpa: 30 });
+      links.push({
+        id: `T${place}`,
+        kind: 'terminal',
+        from: place,
+        to: `m${place}`,
+        designFlowLs: place === 'b' ? 0.9 : 0.3,
+        designDropKpa: 30,
+      });
       links.push({ id: `V${place}`, kind: 'balancingValve', from: `m${place}`, to: 'X', kvTable });
     }
     const nodes = ['X', 'a', 'b', 'c', 'mb', 'mc'].map((id) => ({ id }));

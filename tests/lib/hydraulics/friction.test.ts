@@ -18,11 +18,16 @@ describe('friction factor', () => {
 
   it('does not depend on the guess it starts from', () => {
     fc.assert(
-      fc.property(fc.double({ min: 2001, max: 1e8, noNaN: true }), roughness, fc.double({ min: 1e-6, max: 1e6, noNaN: true }), (reynolds, e, guess) => {
-        const cold = frictionFactor(reynolds, e);
-        frictionOf(reynolds, e, guess);
-        expect(Math.abs(friction.factor / cold - 1)).toBeLessThan(1e-12);
-      }),
+      fc.property(
+        fc.double({ min: 2001, max: 1e8, noNaN: true }),
+        roughness,
+        fc.double({ min: 1e-6, max: 1e6, noNaN: true }),
+        (reynolds, e, guess) => {
+          const cold = frictionFactor(reynolds, e);
+          frictionOf(reynolds, e, guess);
+          expect(Math.abs(friction.factor / cold - 1)).toBeLessThan(1e-12);
+        },
+      ),
     );
   });
 

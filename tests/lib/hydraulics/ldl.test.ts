@@ -20,7 +20,12 @@ const pairsOf = ({ size, start, index }: Pattern) =>
 
 const anyPattern = fc
   .record({ size: fc.integer({ min: 1, max: 40 }), pairs: fc.array(fc.tuple(fc.nat(999), fc.nat(999)), { maxLength: 120 }) })
-  .map(({ size, pairs }) => patternOf(size, pairs.map(([i, j]) => [i % size, j % size])));
+  .map(({ size, pairs }) =>
+    patternOf(
+      size,
+      pairs.map(([i, j]) => [i % size, j % size]),
+    ),
+  );
 
 function grid(side: number): Pattern {
   const pairs: [number, number][] = [];

@@ -16,7 +16,10 @@ describe('monotone cubic', () => {
   });
 
   it('passes through its points and never rises where they fall', () => {
-    const falls = fc.array(fc.tuple(fc.double({ min: 0.01, max: 5, noNaN: true }), fc.double({ min: 0, max: 5, noNaN: true })), { minLength: 2, maxLength: 12 });
+    const falls = fc.array(fc.tuple(fc.double({ min: 0.01, max: 5, noNaN: true }), fc.double({ min: 0, max: 5, noNaN: true })), {
+      minLength: 2,
+      maxLength: 12,
+    });
     fc.assert(
       fc.property(falls, fc.double({ min: 0, max: 1, noNaN: true }), (steps, part) => {
         const x = [0];

@@ -39,7 +39,10 @@ describe('size', () => {
   });
 
   it('uses the limit of the range that a bore falls in', () => {
-    const ranges = [{ upToBoreMm: 30, maxPaPerM: 120, maxVelocityMs: 0.6 }, { upToBoreMm: 1000, maxPaPerM: 300, maxVelocityMs: 2 }];
+    const ranges = [
+      { upToBoreMm: 30, maxPaPerM: 120, maxVelocityMs: 0.6 },
+      { upToBoreMm: 1000, maxPaPerM: 300, maxVelocityMs: 2 },
+    ];
     const result = size(toSize(distribution(60), ranges));
     for (const pipe of result.pipes) {
       const { maxPaPerM, maxVelocityMs } = pipe.boreMm <= 30 ? ranges[0] : ranges[1];

@@ -17,19 +17,23 @@ function network(links: NetworkLink[], inflows: Record<string, number> = {}): Ne
 
 describe('pumps', () => {
   it('against closed valves stand at shut-off head, without flow', () => {
-    const result = solve(network([
-      { id: 'PU', kind: 'pump', from: 'A', to: 'B', curve: pumpCurve },
-      { id: 'V', kind: 'resistance', from: 'B', to: 'A', kv: 4, closed: true },
-    ]));
+    const result = solve(
+      network([
+        { id: 'PU', kind: 'pump', from: 'A', to: 'B', curve: pumpCurve },
+        { id: 'V', kind: 'resistance', from: 'B', to: 'A', kv: 4, closed: true },
+      ]),
+    );
     expect(result.converged).toBe(true);
     expect(result.pumps).toMatchObject([{ flowLs: 0, headM: 20, hydraulicKw: 0, shaftKw: null }]);
   });
 
   it('past the last point of the curve go straight on, with a warning', () => {
-    const result = solve(network([
-      { id: 'PU', kind: 'pump', from: 'A', to: 'B', curve: pumpCurve },
-      { id: 'V', kind: 'resistance', from: 'B', to: 'A', kv: 100 },
-    ]));
+    const result = solve(
+      network([
+        { id: 'PU', kind: 'pump', from: 'A', to: 'B', curve: pumpCurve },
+        { id: 'V', kind: 'resistance', from: 'B', to: 'A', kv: 100 },
+      ]),
+    );
     expect(result.converged).toBe(true);
     expect(flow(result, 'PU')).toBeGreaterThan(3);
     expect(codes(result)).toContain('pump-past-curve PU');
@@ -46,12 +50,22 @@ describe('pumps', () => {
   });
 
   it('with a non-return, a weak one beside a strong one stands; without, it is driven backwards', () => {
-    const beside = (nonReturn: boolean) => solve(network([
-      { id: 'strong', kind: 'pump', from: 'A', to: 'B', curve: pumpCurve },
-      { id: 'weak', kind: 'pump', from: 'A', to: 'C', curve: pumpCurve.map((point) => ({ ...point, headM: point.headM / 4 })), nonReturn },
-      { id: 'own', kind: 'resistance', from: 'C', to: 'B', kv: 5 },
-      { id: 'load', kind: 'resistance', from: 'B', to: 'A', kv: 3 },
-    ]));
+    const beside = (nonReturn: boolean) =>
+      solve(
+        network([
+          { id: 'strong', kind: 'pump', from: 'A', to: 'B', curve: pumpCurve },
+          {
+            id: 'weak',
+            kind: 'pump',
+            from: 'A',
+            to: 'C',
+            curve: pumpCurve.map((point) => ({ ...point, headM: point.headM / 4 })),
+            nonReturn,
+          },
+          { id: 'own', kind: 'resistance', from: 'C', to: 'B', kv: 5 },
+          { id: 'load', kind: 'resistance', from: 'B', to: 'A', kv: 3 },
+        ]),
+      );
     expect(Math.abs(flow(beside(true), 'weak'))).toBeLessThan(1e-7);
     expect(flow(beside(false), 'weak')).toBeLessThan(-0.1);
   });
@@ -66,7 +80,11 @@ describe('pumps', () => {
 
   it('report shaft power through their efficiency', () => {
     const document = houseExample();
-    (document.links[0] as LinkOf<'pump'>).efficiency = [{ flowLs: 0, fraction: 0 }, { flowLs: 1, fraction: 0.5 }, { flowLs: 2, fraction: 0.3 }];
+    (document.links[0] as LinkOf<'pump'>).efficiency = [
+      { flowLs: 0, fraction: 0 },
+      { flowLs: 1, fraction: 0.5 },
+      { flowLs: 2, fraction: 0.3 },
+    ];
     const [pump] = solve(document).pumps;
     expect(pump.hydraulicKw).toBeCloseTo(45e-3, 5);
     expect(pump.shaftKw).toBeCloseTo(90e-3, 4);
@@ -106,13 +124,15 @@ describe('parts of a network', () => {
 describe('a decoupler', () => {
   it('carries the difference between primary and secondary flow', () => {
     const pipe = { kind: 'pipe', lengthM: 1, boreMm: 80, roughnessMm: 0.045 } as const;
-    const result = solve(network([
-      { id: 'primary', kind: 'pump', from: 'R', to: 'a', curve: pumpCurve },
-      { id: 'chiller', kind: 'resistance', from: 'a', to: 'S', designFlowLs: 2, designDropKpa: 60 },
-      { ...pipe, id: 'decoupler', from: 'S', to: 'R' },
-      { id: 'secondary', kind: 'pump', from: 'S', to: 'b', curve: pumpCurve },
-      { id: 'load', kind: 'terminal', from: 'b', to: 'R', designFlowLs: 1, designDropKpa: 80 },
-    ]));
+    const result = solve(
+      network([
+        { id: 'primary', kind: 'pump', from: 'R', to: 'a', curve: pumpCurve },
+        { id: 'chiller', kind: 'resistance', from: 'a', to: 'S', designFlowLs: 2, designDropKpa: 60 },
+        { ...pipe, id: 'decoupler', from: 'S', to: 'R' },
+        { id: 'secondary', kind: 'pump', from: 'S', to: 'b', curve: pumpCurve },
+        { id: 'load', kind: 'terminal', from: 'b', to: 'R', designFlowLs: 1, designDropKpa: 80 },
+      ]),
+    );
     expect(result.converged).toBe(true);
     expect(flow(result, 'decoupler')).toBeCloseTo(flow(result, 'primary') - flow(result, 'secondary'), 9);
     expect(flow(result, 'primary')).toBeGreaterThan(flow(result, 'secondary'));
@@ -154,10 +174,13 @@ describe('differential pressure controllers', () => {
 
 describe('flow limiters', () => {
   it('hold their limit with head to spare, and pass less without', () => {
-    const at = (headM: number) => solve(network([
-      { id: 'PU', kind: 'pump', from: 'A', to: 'B', curve: pumpCurve.map((point) => ({ ...point, headM: headM - point.flowLs })) },
-      { id: 'L', kind: 'flowLimiter', from: 'B', to: 'A', limitLs: 0.5, minDropKpa: 16 },
-    ]));
+    const at = (headM: number) =>
+      solve(
+        network([
+          { id: 'PU', kind: 'pump', from: 'A', to: 'B', curve: pumpCurve.map((point) => ({ ...point, headM: headM - point.flowLs })) },
+          { id: 'L', kind: 'flowLimiter', from: 'B', to: 'A', limitLs: 0.5, minDropKpa: 16 },
+        ]),
+      );
     expect(flow(at(20), 'L')).toBeCloseTo(0.5, 7);
     const starved = at(1.5);
     expect(flow(starved, 'L')).toBeLessThan(0.5);
@@ -172,7 +195,9 @@ describe('a history of the Hardy Cross iteration', () => {
     const { history, iterations } = solve(document);
     expect(history!.loops).toHaveLength(3);
     expect(history!.corrections).toHaveLength(3 * iterations);
-    const plain = history!.corrections.filter(({ headM, slopeMPerLs, correctionLs }) => Math.abs(correctionLs + headM / slopeMPerLs) < 1e-15);
+    const plain = history!.corrections.filter(
+      ({ headM, slopeMPerLs, correctionLs }) => Math.abs(correctionLs + headM / slopeMPerLs) < 1e-15,
+    );
     expect(plain.length).toBeGreaterThan(0.9 * history!.corrections.length);
     const last = history!.corrections.slice(-3);
     for (const { headM } of last) expect(Math.abs(headM)).toBeLessThan(1e-4);

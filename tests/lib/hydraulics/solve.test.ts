@@ -57,7 +57,9 @@ function expectSteady(document: NetworkDocument, result: SolveResult) {
   const { densityKgM3 } = document.fluid as Extract<NetworkDocument['fluid'], { medium: 'custom' }>;
   expect(result.converged).toBe(true);
   expect(imbalanceOf(document, result)).toBeLessThan(1e-9);
-  const node = new Map(result.nodes.map((each, v) => [each.id, each.pressureKpa + (densityKgM3 * GRAVITY * (document.nodes[v].elevationM ?? 0)) / 1000]));
+  const node = new Map(
+    result.nodes.map((each, v) => [each.id, each.pressureKpa + (densityKgM3 * GRAVITY * (document.nodes[v].elevationM ?? 0)) / 1000]),
+  );
   document.links.forEach((link, k) => {
     const { flowLs, dropKpa } = result.links[k];
     expect(Number.isFinite(flowLs)).toBe(true);
@@ -74,21 +76,26 @@ function expectSteady(document: NetworkDocument, result: SolveResult) {
 const flowsById = (result: SolveResult) => new Map(result.links.map((link) => [link.id, link.flowLs]));
 
 describe('any network', () => {
-  it.each<Method>(['simultaneous', 'hardy-cross'])('is solved to a steady state by %s', (method) => {
-    fc.assert(
-      fc.property(anyNetwork(), (document) => {
-        expectSteady(document, solve({ ...document, options: { method } }));
-      }),
-      { numRuns: method === 'simultaneous' ? 200 : 60 },
-    );
-  }, 60_000);
+  it.each<Method>(['simultaneous', 'hardy-cross'])(
+    'is solved to a steady state by %s',
+    (method) => {
+      fc.assert(
+        fc.property(anyNetwork(), (document) => {
+          expectSteady(document, solve({ ...document, options: { method } }));
+        }),
+        { numRuns: method === 'simultaneous' ? 200 : 60 },
+      );
+    },
+    60_000,
+  );
 
   it('has the same flows whatever the order of its links', () => {
     fc.assert(
       fc.property(anyNetwork(['pipe', ...quadraticKinds]), fc.integer(), (document, seed) => {
         const shuffled = [...document.links].sort((a, b) => hash(a.id, seed) - hash(b.id, seed));
         const there = flowsById(solve(document));
-        for (const [id, flow] of flowsById(solve({ ...document, links: shuffled }))) expect(Math.abs(there.get(id)! - flow)).toBeLessThan(1e-6);
+        for (const [id, flow] of flowsById(solve({ ...document, links: shuffled })))
+          expect(Math.abs(there.get(id)! - flow)).toBeLessThan(1e-6);
       }),
       { numRuns: 60 },
     );
@@ -113,7 +120,14 @@ describe('any network', () => {
       fc.property(anyNetwork(['pipe']), fc.nat(), fc.double({ min: 0.05, max: 0.95, noNaN: true }), (document, at, part) => {
         const pipes = document.links.filter((link): link is LinkOf<'pipe'> => link.kind === 'pipe');
         const cut = pipes[at % pipes.length];
-        const piece = (id: string, from: string, to: string, share: number) => ({ ...cut, id, from, to, lengthM: cut.lengthM * share, minorK: cut.minorK! * share });
+        const piece = (id: string, from: string, to: string, share: number) => ({
+          ...cut,
+          id,
+          from,
+          to,
+          lengthM: cut.lengthM * share,
+          minorK: cut.minorK! * share,
+        });
         const links = document.links.flatMap((link): NetworkLink[] =>
           link === cut ? [piece(cut.id, cut.from, 'new', part), piece('rest', 'new', cut.to, 1 - part)] : [link],
         );
@@ -130,7 +144,8 @@ describe('any network', () => {
       fc.property(anyNetwork(quadraticKinds), (document) => {
         const slow = document.links.map((link) => (link.kind === 'pump' ? { ...link, speed: 0.5 } : link));
         const there = flowsById(solve(document));
-        for (const [id, flow] of flowsById(solve({ ...document, links: slow }))) expect(Math.abs(there.get(id)! - 2 * flow)).toBeLessThan(1e-5);
+        for (const [id, flow] of flowsById(solve({ ...document, links: slow })))
+          expect(Math.abs(there.get(id)! - 2 * flow)).toBeLessThan(1e-5);
       }),
       { numRuns: 60 },
     );
@@ -148,4 +163,5 @@ describe('any network', () => {
   });
 });
 
-const hash = (id: string, seed: number) => [...id].reduce((sum, letter) => (sum * 31 + letter.charCodeAt(0) + seed) % 10_007, seed % 10_007);
+const hash = (id: string, seed: number) =>
+  [...id].reduce((sum, letter) => (sum * 31 + letter.charCodeAt(0) + seed) % 10_007, seed % 10_007);

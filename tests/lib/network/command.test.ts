@@ -28,7 +28,10 @@ describe('the headless command', { timeout: 60_000 }, () => {
   });
 
   it('balances', () => {
-    expect(run(['balance', '-'], JSON.stringify(houseExample({ kv: [9, 6, 4.1569219382] })))).toMatchObject({ status: 0, result: { indexTerminal: 'T3' } });
+    expect(run(['balance', '-'], JSON.stringify(houseExample({ kv: [9, 6, 4.1569219382] })))).toMatchObject({
+      status: 0,
+      result: { indexTerminal: 'T3' },
+    });
   });
 
   it.each([

@@ -38,7 +38,9 @@ describe('checking a network document', () => {
   });
 
   it('more than 50,000 links are refused before they are looked at', () => {
-    expect(parseNetworkDocument({ ...sound(), links: new Array(50_001).fill(null) })).toMatchObject({ error: { code: 'document-too-large' } });
+    expect(parseNetworkDocument({ ...sound(), links: new Array(50_001).fill(null) })).toMatchObject({
+      error: { code: 'document-too-large' },
+    });
   });
 
   it.each<[string, (document: ReturnType<typeof sound>) => void, string[]]>([
@@ -56,7 +58,15 @@ describe('checking a network document', () => {
     ['two links of one id', (d) => (d.links[2].id = d.links[1].id), ['links[2].id']],
     ['two nodes of one id', (d) => d.nodes.push({ id: 'X' }), ['nodes[8].id']],
     ['a node without id', (d) => d.nodes.push({}), ['nodes[8].id']],
-    ['a curve of two points', (d) => (d.links[0].curve = [{ flowLs: 0, headM: 9 }, { flowLs: 1, headM: 8 }]), ['links[0].curve']],
+    [
+      'a curve of two points',
+      (d) =>
+        (d.links[0].curve = [
+          { flowLs: 0, headM: 9 },
+          { flowLs: 1, headM: 8 },
+        ]),
+      ['links[0].curve'],
+    ],
     ['a curve that rises', (d) => ((d.links[0].curve as Fields[])[5].headM = 50), ['links[0].curve[5].headM']],
     ['a curve out of order', (d) => ((d.links[0].curve as Fields[])[5].flowLs = 0), ['links[0].curve[5].flowLs']],
     ['a negative speed', (d) => (d.links[0].speed = -0.1), ['links[0].speed']],
@@ -67,8 +77,19 @@ describe('checking a network document', () => {
     ['a resistance with nothing', linkFields('resistance', {}), ['links[1].kv']],
     ['a resistance with half a design pair', linkFields('resistance', { designFlowLs: 1 }), ['links[1].designDropKpa']],
     ['a terminal without a design flow', linkFields('terminal', { designDropKpa: 4 }), ['links[1].designFlowLs']],
-    ['a controller that senses nothing', linkFields('dpController', { setpointKpa: 4, kvs: 3, sense: ['X', 'gone'] }), ['links[1].sense[1]']],
-    ['inflows that do not sum to zero', (d) => { d.nodes[0].inflowLs = 1; d.nodes[1].inflowLs = -0.9; }, ['nodes[0].inflowLs', 'nodes[1].inflowLs']],
+    [
+      'a controller that senses nothing',
+      linkFields('dpController', { setpointKpa: 4, kvs: 3, sense: ['X', 'gone'] }),
+      ['links[1].sense[1]'],
+    ],
+    [
+      'inflows that do not sum to zero',
+      (d) => {
+        d.nodes[0].inflowLs = 1;
+        d.nodes[1].inflowLs = -0.9;
+      },
+      ['nodes[0].inflowLs', 'nodes[1].inflowLs'],
+    ],
     ['a reference that is not there', (d) => (d.reference = { node: 'gone', gaugePressureKpa: 1 }), ['reference.node']],
     ['a method that is not offered', (d) => (d.options = { method: 'guess' }), ['options.method']],
     ['no fluid', (d) => delete d.fluid, ['fluid']],
