@@ -14,6 +14,8 @@ export function db(): Knex {
       client: 'pg',
       connection: { connectionString, application_name: 'evenhead' },
       pool: { min: 0, max: Number(process.env.DATABASE_POOL ?? 10) },
+      // Otherwise the message of a failed query, and with it the log, holds what was being stored: a password's hash, a whole drawing.
+      compileSqlOnError: false,
     });
   }
   return holder.evenheadDb;

@@ -28,7 +28,7 @@ export function EntryField({ entry, field, onEnter }: EntryFieldProps) {
           message ? 'outline-high' : isActive ? 'outline-brass' : 'outline-transparent',
         )}
       >
-        <label htmlFor={id} className="text-quiet pointer-events-none absolute top-2 left-3 sm:left-4 text-sm">
+        <label htmlFor={id} className="text-quiet pointer-events-none absolute top-2 left-3 text-sm sm:left-4">
           {fieldNames[field]}
           <span className="sr-only">, {entry.unitOf(field)}</span>
         </label>
@@ -49,7 +49,7 @@ export function EntryField({ entry, field, onEnter }: EntryFieldProps) {
           maxLength={24}
           aria-invalid={Boolean(message)}
           aria-describedby={message ? `${id}-error` : undefined}
-          className="figures h-[4.75rem] w-full bg-transparent pt-6 pr-18 pl-3 text-2xl sm:pr-24 sm:pl-4 sm:text-[1.75rem] outline-none"
+          className="figures h-[4.75rem] w-full bg-transparent pt-6 pr-18 pl-3 text-2xl outline-none sm:pr-24 sm:pl-4 sm:text-[1.75rem]"
         />
         {units.length > 1 ? (
           <select

@@ -23,6 +23,9 @@ interface EntryPadProps {
   onKeep: () => void;
 }
 
+const besideClass = `${buttonClass('secondary', 'touch')} h-14! px-3! text-base! no-underline landscape:h-12!`;
+const keepClass = 'h-14! px-2! sm:text-xl! landscape:order-1 landscape:col-span-2 landscape:h-20!';
+
 /** The keys and what follows: keep and walk on. Beside the figures where the screen is wide, below them where it is tall. */
 export function EntryPad({ entry, message, isSending, hasWaiting, before, next, listPath, onKeep }: EntryPadProps) {
   const onward = next ?? { tag: 'the list', path: listPath };
@@ -53,37 +56,31 @@ export function EntryPad({ entry, message, isSending, hasWaiting, before, next, 
           ▴ {message}
         </p>
       )}
-      {entry && !isDone ? (
-        <Button
-          size="touch"
-          look="primary"
-          className="min-h-14 !text-xl landscape:min-h-20"
-          isPending={isSending && entry.isBlank}
-          pendingText="Sending…"
-          onClick={onKeep}
-        >
-          {entry.isCorrecting ? 'Keep the correction' : next ? `Keep, next ${next.tag}` : 'Keep, back to the list'}
-          <ChevronRight aria-hidden />
-        </Button>
-      ) : (
-        <PlaceLink
-          href={onward.path}
-          className={classNames(buttonClass('primary', 'touch'), 'min-h-14 !text-xl no-underline landscape:min-h-20')}
-        >
-          Next {onward.tag}
-          <ChevronRight aria-hidden />
-        </PlaceLink>
-      )}
-      <div className="flex justify-between gap-2">
-        <PlaceLink
-          href={before?.path ?? listPath}
-          className={classNames(buttonClass('secondary', 'touch'), '!px-3 !text-base no-underline')}
-        >
+      <div className="grid grid-cols-[auto_1fr_auto] gap-2 landscape:grid-cols-2">
+        <PlaceLink href={before?.path ?? listPath} className={classNames(besideClass, 'landscape:order-2 landscape:justify-self-start')}>
           <ChevronLeft size={18} aria-hidden />
-          {before?.tag ?? 'List'}
+          <span className="max-sm:sr-only">{before?.tag ?? 'List'}</span>
         </PlaceLink>
+        {entry && !isDone ? (
+          <Button
+            size="touch"
+            look="primary"
+            className={keepClass}
+            isPending={isSending && entry.isBlank}
+            pendingText="Sending…"
+            onClick={onKeep}
+          >
+            {entry.isCorrecting ? 'Keep the correction' : next ? `Keep, next ${next.tag}` : 'Keep, back to the list'}
+            <ChevronRight aria-hidden className="shrink-0" />
+          </Button>
+        ) : (
+          <PlaceLink href={onward.path} className={classNames(buttonClass('primary', 'touch'), keepClass, 'no-underline')}>
+            Next {onward.tag}
+            <ChevronRight aria-hidden className="shrink-0" />
+          </PlaceLink>
+        )}
         {entry && !isDone && (
-          <PlaceLink href={onward.path} className={classNames(buttonClass('secondary', 'touch'), '!px-3 !text-base no-underline')}>
+          <PlaceLink href={onward.path} className={classNames(besideClass, 'landscape:order-2 landscape:justify-self-end')}>
             Skip
           </PlaceLink>
         )}

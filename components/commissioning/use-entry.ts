@@ -115,7 +115,9 @@ export function useEntry(commissioning: Commissioning, station: Station) {
     /** Takes an earlier entry up again, in the units it was typed in: to put it right, or because the server did not take it. */
     takeUp: ({ method, entered, note }: Pick<Reading, 'method' | 'entered' | 'note'>, correctsReadingId: string | null) => {
       const textOf = (field: Field) => entered.find(({ quantity }) => quantity === quantityOf[field])?.text ?? '';
-      const units = Object.fromEntries(entered.filter(({ quantity }) => quantity !== 'setting').map(({ quantity, unit }) => [quantity, unit]));
+      const units = Object.fromEntries(
+        entered.filter(({ quantity }) => quantity !== 'setting').map(({ quantity, unit }) => [quantity, unit]),
+      );
       rememberDevice({ ...device, units: { ...device.units, ...units } });
       remember({
         method,

@@ -25,6 +25,7 @@ import { PipePreview, ConnectionPreview } from './pipe-preview';
 import { dropOntoPipe, joinEnds, joinToPipe, ON_PIPE_PX, placePiece, pressWithPipeTool } from './placing';
 import { beginGesture } from './store';
 import { showAll } from './show-all';
+import { placeAskedFor, useShowPlace } from './show-place';
 import { StoreyBands } from './storey-bands';
 
 const nodeTypes = { piece: PieceNode };
@@ -39,6 +40,7 @@ export function Canvas() {
   const editor = useEditor();
   const { drawingStore, canvasStore, canEdit } = editor;
   const view = useReactFlow();
+  const showPlace = useShowPlace();
   const drawing = useDrawing((it) => it);
   const tool = useCanvas((state) => state.tool);
   const pieces = useCanvas((state) => state.pieces);
@@ -181,7 +183,11 @@ export function Canvas() {
         }}
         onConnect={connectEnds}
         onConnectEnd={endConnecting}
-        onInit={(instance) => showAll(instance, drawing)}
+        onInit={(instance) => {
+          showAll(instance, drawing);
+          const asked = placeAskedFor(drawing, window.location.search);
+          if (asked) showPlace(asked);
+        }}
         connectionLineComponent={ConnectionPreview}
         connectionMode={ConnectionMode.Loose}
         connectOnClick={false}

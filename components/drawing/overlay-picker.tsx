@@ -18,7 +18,8 @@ const overlayWords: Record<Overlay, { label: string; title: string; quantity?: Q
   setting: { label: 'Setting', title: 'Settings for design flow', quantity: 'setting' },
 };
 
-const item = 'h-8 rounded px-3 text-sm font-semibold whitespace-nowrap hover:bg-well data-[state=on]:bg-well pointer-coarse:h-11';
+const item =
+  'h-8 rounded px-3 text-sm font-semibold whitespace-nowrap hover:bg-well data-[state=on]:bg-well data-[state=on]:shadow-[inset_0_-2px_0_var(--brass)] pointer-coarse:h-11';
 
 /** Chooses which figure stands on the drawing. */
 export function OverlayPicker() {
@@ -91,4 +92,5 @@ export function Legend({ hasBothBases }: { hasBothBases: boolean }) {
   );
 }
 
-const basisItem = 'min-h-7 flex-1 px-2 font-semibold whitespace-nowrap hover:bg-well data-[state=on]:bg-well pointer-coarse:min-h-11';
+const basisItem =
+  'min-h-7 flex-1 px-2 font-semibold whitespace-nowrap hover:bg-well data-[state=on]:bg-well data-[state=on]:shadow-[inset_0_-2px_0_var(--brass)] pointer-coarse:min-h-11';

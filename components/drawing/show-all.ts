@@ -4,6 +4,8 @@ import { boundsOf } from '@/lib/network/piece-geometry';
 
 /** Room at the top of the sheet for what floats over it, as a part of the drawing's height. */
 const HEAD_ROOM = 0.12;
+/** Room at the right, where a piece's words stand. */
+const WORDS_ROOM = 80;
 
 /** Brings the whole drawing into view; an empty one shows its storeys. */
 export function showAll(view: ReactFlowInstance, { equipment, storeys }: Drawing, duration = 0): void {
@@ -11,7 +13,7 @@ export function showAll(view: ReactFlowInstance, { equipment, storeys }: Drawing
     const { left, top, width, height } = boundsOf(equipment);
     const room = Math.max(height * HEAD_ROOM, 60);
     // A drawing of few pieces is not blown up to fill the view.
-    const least = { width: Math.max(width, 700), height: Math.max(height, 420) };
+    const least = { width: Math.max(width + WORDS_ROOM, 1000), height: Math.max(height, 600) };
     view.fitBounds(
       { x: left - (least.width - width) / 2, y: top - room - (least.height - height) / 2, width: least.width, height: least.height + room },
       { padding: 0.06, duration },

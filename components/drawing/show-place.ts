@@ -2,7 +2,7 @@
 
 import { useCallback } from 'react';
 import { useReactFlow } from 'reactflow';
-import type { Place } from '@/lib/network/drawing';
+import type { Drawing, Place } from '@/lib/network/drawing';
 import { labelPlace, routeOfPipe } from '@/lib/network/pipe-route';
 import { selectPlace } from './canvas-state';
 import { useEditor } from './editor-context';
@@ -33,4 +33,11 @@ export function useShowPlace(): (place: Place) => void {
     },
     [canvasStore, drawingStore, view],
   );
+}
+
+/** The piece or pipe that the address asks for (`?select=`, as the schedule's rows do); null where there is none such. */
+export function placeAskedFor({ equipment, pipes }: Drawing, search: string): Place | null {
+  const id = new URLSearchParams(search).get('select');
+  if (equipment.some((piece) => piece.id === id)) return { kind: 'equipment', id: id! };
+  return pipes.some((pipe) => pipe.id === id) ? { kind: 'pipe', id: id! } : null;
 }

@@ -41,7 +41,7 @@ export interface DraftBody {
 }
 
 /** PUT /api/loops/:loopId/draft — 200 {version, savedAt}, or 409 `draft-changed` with detail: DraftBody (what the other person saved). */
-export const saveDraftSchema = z.object({ baseVersion: z.number().int().min(0), drawing: drawingSchema });
+export const saveDraftSchema = z.object({ baseVersion: z.number().int().min(0).max(2_000_000_000), drawing: drawingSchema });
 export interface SavedDraft {
   version: number;
   savedAt: string;

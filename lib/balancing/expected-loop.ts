@@ -39,6 +39,7 @@ export function expectCentred(document: NetworkDocument, settings: LoopSettings,
   let here = expectLoop(document, settings, terminals);
   for (let round = 0; round < CENTRING_ROUNDS && pumps.length; round++) {
     const off = meanOf(here.logRatios);
+    if (Math.abs(off) < SPEED_STEP) break;
     const speeds = pumps.map((pump) => [pump.id, toStep(Math.min((here.settings[pump.id] ?? pump.speed ?? 1) * Math.exp(-off), Math.max(1, pump.speed ?? 1)))] as const);
     if (speeds.every(([id, speed]) => here.settings[id] === speed)) break;
     here = expectLoop(document, { ...here.settings, ...Object.fromEntries(speeds) }, terminals);

@@ -4,7 +4,7 @@ import type { FittedLoop } from './fit-loop';
 import { fittedDocument } from './fit/fitted-document';
 import { balanceWithin } from './reachable-targets';
 import { type LoopSettings, settingIn } from './readings';
-import { expectedOutside, touchUp } from './touch-up';
+import { expectedOutside, touchUp, WORTH_A_CHANGE } from './touch-up';
 
 /** A valve (turns) or pump (speed ratio) as it stands and as it should, with what will be seen there; spreads are one standard deviation. */
 export interface PredictedSetting {
@@ -35,13 +35,14 @@ export interface Prediction {
   expectedOutside: number;
 }
 
-/** More expected terminals out of tolerance than this part, and the whole loop is set anew rather than touched up. */
-const ANEW = 0.2;
+/** More expected terminals out of tolerance than this part, and the whole loop is set anew without a look at touching it up. */
+const ANEW = 0.5;
 const REACHED = 0.97;
 
 /**
  * All settings and the pump speed at once, from the fitted loop: as proportional balancing would end on it, or, where most of it is within
- * tolerance (a part of design flow, default 0.05), the fewest further changes. Settings are rounded to the valve's step.
+ * tolerance (a part of design flow, default 0.05), the fewest further changes. Settings are rounded to the valve's
+ * step; a valve that does not seem to stand where it was noted is to be set again.
  */
 export function predictSettings(fitted: FittedLoop, tolerance = 0.05): Prediction {
   const document = fittedDocument(fitted.document, fitted.unknowns, fitted.values, null);
@@ -55,9 +56,14 @@ export function predictSettings(fitted: FittedLoop, tolerance = 0.05): Predictio
 
   const asIs = expectCentred(document, stands, terminals);
   const spreads = ratioSpreads(fitted, asIs, terminals);
-  const isNear = expectedOutside(asIs.logRatios, spreads, tolerance) <= ANEW * terminals.length;
-  const anew = () => expectCentred(document, { ...stands, ...balanced.settings }, terminals);
-  const expected = touchUp(document, isNear ? asIs : anew(), terminals, spreads, tolerance);
+  const anew = () => touchUp(document, expectCentred(document, { ...stands, ...balanced.settings }, terminals), terminals, spreads, tolerance);
+  let expected: ExpectedLoop;
+  if (expectedOutside(asIs.logRatios, spreads, tolerance) > ANEW * terminals.length) {
+    expected = anew();
+  } else {
+    const price = (loop: ExpectedLoop) => expectedOutside(loop.logRatios, spreads, tolerance) + WORTH_A_CHANGE * changes(document, stands, loop.settings);
+    expected = [touchUp(document, asIs, terminals, spreads, tolerance), anew()].reduce((a, b) => (price(b) < price(a) ? b : a));
+  }
   return {
     settings: predictedSettings(fitted, document, expected, stands),
     terminals: predictedTerminals(fitted, document, expected),
@@ -74,6 +80,7 @@ function ratioSpreads(fitted: FittedLoop, expected: ExpectedLoop, terminals: num
 function predictedSettings(fitted: FittedLoop, document: NetworkDocument, expected: ExpectedLoop, stands: LoopSettings): PredictedSetting[] {
   const watched = document.links.flatMap((link, at) => (link.kind === 'balancingValve' || link.kind === 'pump' ? [at] : []));
   const answers = answersAt(fitted, expected, watched);
+  const misSet = misSetNow(fitted);
   const meterOf = new Map(fitted.readings.map(({ reading }) => [reading.link, reading.meter]));
   return watched.map((at, w): PredictedSetting => {
     const link = document.links[at];
@@ -90,7 +97,7 @@ function predictedSettings(fitted: FittedLoop, document: NetworkDocument, expect
       kind: link.kind,
       from,
       setting,
-      isChanged: Math.abs(setting - from) > 1e-9,
+      isChanged: Math.abs(setting - from) > 1e-9 || misSet.has(link.id),
       expectedFlowLs: flowAt(expected, at),
       expectedDropKpa: Math.abs(dropAt(expected, at)) * Math.exp(meter >= 0 ? 2 * fitted.values[meter] : 0),
       flowSpreadPercent: 100 * spreadOf(fitted, direction(fitted, flowPerUnknown, flowLs)),
@@ -98,6 +105,15 @@ function predictedSettings(fitted: FittedLoop, document: NetworkDocument, expect
     };
   });
 }
+
+/** Valves that do not seem to stand where they were noted: they are set again even to the same setting. */
+function misSetNow({ accepted, unknowns, rounds }: FittedLoop): Set<string> {
+  const acting = accepted.filter(({ cause, unknown }) => cause === 'mis-set' && unknown !== null && unknowns[unknown].rounds[rounds.length - 1]);
+  return new Set(acting.map(({ unknown }) => unknowns[unknown!].id));
+}
+
+const changes = (document: NetworkDocument, before: LoopSettings, after: LoopSettings) =>
+  document.links.filter((link) => link.kind === 'balancingValve' && settingIn(before, link) !== settingIn(after, link)).length;
 
 function predictedTerminals(fitted: FittedLoop, document: NetworkDocument, expected: ExpectedLoop): PredictedTerminal[] {
   const watched = document.links.flatMap((link, at) => (link.kind === 'terminal' ? [at] : []));

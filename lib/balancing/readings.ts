@@ -22,6 +22,8 @@ export type LoopSettings = Record<string, number>;
 export interface ReadingRound {
   settings: LoopSettings;
   readings: LoopReading[];
+  /** Valves that were set anew to the setting they were already noted at: what was wrong with them before need not be now. */
+  setAgain?: string[];
 }
 
 /** The document with its valves and pumps as they stand. */

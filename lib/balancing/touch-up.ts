@@ -7,7 +7,7 @@ import { outsideTolerance } from './normal';
 import { settingIn } from './readings';
 
 /** A valve is touched again when that spares this many terminals out of tolerance, on the average. */
-const WORTH_A_CHANGE = 0.1;
+export const WORTH_A_CHANGE = 0.1;
 const ROUNDS = 3;
 const USUAL_STEP = 0.1;
 

@@ -31,6 +31,7 @@ export class DraftSaver {
   state: SaveState;
   /** The version of the draft that the server last acknowledged here. */
   version: number;
+  private savedAt: string;
   private base: Drawing;
   private drawing: Drawing;
   private keeper: DraftKeeper;
@@ -46,6 +47,7 @@ export class DraftSaver {
     this.version = loaded.version;
     this.base = loaded.drawing;
     this.drawing = loaded.drawing;
+    this.savedAt = loaded.savedAt;
     this.state = { kind: 'saved', at: loaded.savedAt };
   }
 
@@ -80,7 +82,11 @@ export class DraftSaver {
   async saveNow(): Promise<boolean> {
     clearTimeout(this.saveTimer);
     if (this.isSending || this.state.kind === 'conflict') return false;
-    if (this.drawing === this.base) return true;
+    if (this.drawing === this.base) {
+      // Undone to what is saved: there is nothing to send, and nothing to keep.
+      this.rest();
+      return true;
+    }
     const sent = this.drawing;
     this.isSending = true;
     this.tell({ kind: 'saving' });
@@ -123,15 +129,21 @@ export class DraftSaver {
 
   private acknowledge(sent: Drawing, saved: SavedDraft): void {
     this.version = saved.version;
+    this.savedAt = saved.savedAt;
     this.base = sent;
     if (this.drawing === sent) {
-      this.keeper.release();
-      this.tell({ kind: 'saved', at: saved.savedAt });
+      this.rest();
       return;
     }
     this.keep();
     this.tell({ kind: 'waiting' });
     this.saveAfter(SAVE_AFTER_MS);
+  }
+
+  private rest(): void {
+    clearTimeout(this.keepTimer);
+    this.keeper.release();
+    this.tell({ kind: 'saved', at: this.savedAt });
   }
 
   private refuse(error: unknown): void {

@@ -4,5 +4,7 @@ const home = '/projects';
 export function sameSitePath(asked: string | null | undefined): string {
   if (!asked?.startsWith('/') || !URL.canParse(asked, 'http://here.invalid')) return home;
   const url = new URL(asked, 'http://here.invalid');
-  return url.origin === 'http://here.invalid' ? `${url.pathname}${url.search}${url.hash}` : home;
+  // "/.//elsewhere" is a path here until its dots are taken out; what is left of it would name another site.
+  const isHere = url.origin === 'http://here.invalid' && !url.pathname.startsWith('//');
+  return isHere ? `${url.pathname}${url.search}${url.hash}` : home;
 }

@@ -1,8 +1,8 @@
 import type { Loops } from './graph/loops';
 import type { LoopSolver } from './loop-matrix';
 
-const MOST_STEPS = 500;
-const CLOSE_RATIO = 1e-5;
+const MOST_STEPS = 2000;
+const CLOSE_RATIO = 1e-9;
 
 /**
  * The same system as the loop matrix without ever forming it: conjugate gradients (M. Hestenes and E. Stiefel 1952) with the diagonal as preconditioner.

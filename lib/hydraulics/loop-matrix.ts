@@ -13,7 +13,7 @@ export interface LoopSolver {
 /** Entries beyond which factors cost more than they save, and the loops are solved by conjugate gradients. */
 const MOST_PATTERN = 3_000_000;
 const MOST_FILL = 8_000_000;
-const MOST_WORK = 300_000_000;
+const MOST_WORK = 600_000_000;
 
 export function loopSolver(loops: Loops, chainCount: number): LoopSolver {
   const through = loopsThroughChains(loops, chainCount);

@@ -10,6 +10,8 @@ const id = z.string().min(1).max(64);
 const text = z.string().max(200);
 const positive = z.number().positive().max(1e9).nullable();
 const notNegative = z.number().min(0).max(1e9).nullable();
+/** A place on the sheet: far enough for any drawing, near enough that sums of places stay numbers. */
+const coordinate = z.number().min(-1e9).max(1e9);
 
 export const kvTableSchema = z.array(z.object({ setting: z.number(), kv: z.number().min(0) })).max(200);
 
@@ -27,8 +29,8 @@ const placed = {
   id,
   tag: z.string().max(40),
   storeyId: id.nullable(),
-  x: z.number(),
-  y: z.number(),
+  x: coordinate,
+  y: coordinate,
   rotation: z.union([z.literal(0), z.literal(90), z.literal(180), z.literal(270)]),
   isMirrored: z.boolean().default(false),
 };
@@ -112,15 +114,15 @@ export const pipeSchema = z.object({
   boreMm: positive,
   roughnessMm: notNegative,
   minorK: z.number().min(0).max(1e6),
-  bends: z.array(z.object({ x: z.number(), y: z.number() })).max(20).default([]),
+  bends: z.array(z.object({ x: coordinate, y: coordinate })).max(20).default([]),
 });
 
 export const storeySchema = z.object({
   id,
   name: z.string().max(60),
   elevationM: z.number().min(-1000).max(2000),
-  top: z.number(),
-  height: z.number().positive(),
+  top: coordinate,
+  height: z.number().positive().max(1e9),
 });
 
 export const drawingFluidSchema = z.object({
@@ -152,8 +154,8 @@ export type Storey = z.infer<typeof storeySchema>;
 export type ChosenValve = z.infer<typeof valveSchema>;
 export type KvPoint = z.infer<typeof kvTableSchema>[number];
 
-/** Where a fault, a result or a difference belongs: what the canvas selects when it is chosen. */
-export type Place = { kind: 'equipment' | 'pipe' | 'storey'; id: string };
+/** Where a fault, a result or a difference belongs: what the canvas selects when it is chosen. `loop` is what holds for all of it, e.g. its fluid. */
+export type Place = { kind: 'equipment' | 'pipe' | 'storey' | 'loop'; id: string };
 
 /** The ends by which pipes may join a piece. */
 export function portsOf(kind: EquipmentKind): readonly Port[] {

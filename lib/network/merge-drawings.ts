@@ -1,4 +1,4 @@
-import type { Drawing, Place } from './drawing';
+import type { Drawing, DrawingFluid, Place } from './drawing';
 import { pieceNames } from './piece-names';
 
 export interface Difference {
@@ -53,8 +53,7 @@ export function mergeDrawings(base: Drawing, mine: Drawing, theirs: Drawing): Me
 
   const merged: Drawing = {
     format: 'drawing/1',
-    fluid: same(base.fluid, mine.fluid) ? theirs.fluid : mine.fluid,
-    pumpExcess: base.pumpExcess === mine.pumpExcess ? theirs.pumpExcess : mine.pumpExcess,
+    ...ofSettings(mergeList('loop', settingsOf(base), settingsOf(mine), settingsOf(theirs))),
     storeys: mergeList('storey', base.storeys, mine.storeys, theirs.storeys),
     equipment: mergeList('equipment', base.equipment, mine.equipment, theirs.equipment),
     pipes: mergeList('pipe', base.pipes, mine.pipes, theirs.pipes),
@@ -64,6 +63,9 @@ export function mergeDrawings(base: Drawing, mine: Drawing, theirs: Drawing): Me
 
 /** The merged drawing with their side of one conflict taken instead of mine. */
 export function takeTheirs(merged: Drawing, conflict: Conflict): Drawing {
+  if (conflict.place.kind === 'loop') {
+    return { ...merged, ...ofSettings(settingsOf(merged).map((setting) => (setting.id === conflict.place.id ? (conflict.theirs as Setting) : setting))) };
+  }
   const list = { equipment: 'equipment', pipe: 'pipes', storey: 'storeys' } as const;
   const key = list[conflict.place.kind];
   const others = (merged[key] as Item[]).filter((item) => item.id !== conflict.place.id);
@@ -75,6 +77,19 @@ export function changesBetween(before: Drawing, after: Drawing): { message: stri
   return mergeDrawings(before, after, before).differences.map(({ message, place }) => ({ message, place }));
 }
 
+type Setting = ({ id: 'fluid' } & DrawingFluid) | { id: 'pumpExcess'; pumpExcess: Drawing['pumpExcess'] };
+
+/** What holds for the whole loop, as items that can be compared like its pieces. */
+const settingsOf = ({ fluid, pumpExcess }: Drawing): Setting[] => [
+  { id: 'fluid', ...fluid },
+  { id: 'pumpExcess', pumpExcess },
+];
+
+function ofSettings(settings: Setting[]): Pick<Drawing, 'fluid' | 'pumpExcess'> {
+  const [{ id: _, ...fluid }, { pumpExcess }] = settings as [Extract<Setting, { id: 'fluid' }>, Extract<Setting, { id: 'pumpExcess' }>];
+  return { fluid, pumpExcess };
+}
+
 function choose(before: Item | undefined, mine: Item | undefined, theirs: Item | undefined): Choice {
   if (same(mine, theirs) || same(before, theirs)) return { item: mine ?? null, isConflict: false };
   if (same(before, mine)) return { item: theirs ?? null, isConflict: false };
@@ -84,7 +99,8 @@ function choose(before: Item | undefined, mine: Item | undefined, theirs: Item |
 /** Names from the first drawing that still has the thing. */
 function namer(drawings: Drawing[]) {
   const names = drawings.map(pieceNames);
-  return ({ id }: Place): string => names.find((known) => known.has(id))?.get(id) ?? id;
+  const settingNames: Record<string, string> = { fluid: 'Fluid', pumpExcess: 'Excess head' };
+  return ({ kind, id }: Place): string => (kind === 'loop' ? settingNames[id] : undefined) ?? names.find((known) => known.has(id))?.get(id) ?? id;
 }
 
 function told(name: string, before: Item | undefined, after: Item | undefined): string {

@@ -14,18 +14,18 @@ export function visitAsPredicted(document: NetworkDocument, site: CountedSite): 
   const named = new Set<string>();
   const rounds: ReadingRound[] = [];
   let settings: LoopSettings = {};
+  let setAgain: string[] = [];
   let toRead = stations;
   let fitted: FittedLoop | undefined;
   for (let round = 0; round < MOST_ROUNDS; round++) {
-    rounds.push({ settings, readings: toRead.map((station) => site.read(station)) });
+    rounds.push({ settings, setAgain, readings: toRead.map((station) => site.read(station)) });
     fitted = fitLoop(document, rounds, usualPriors, fitted);
     for (const fault of fitted.faults) named.add(fault.link.startsWith('T') ? valveOf(fault.link) : fault.link);
-    if (process.env.SHOW) console.log(round, fitted.faults.map((f) => `${f.cause} ${f.link} r${f.round} ${f.logOdds.toFixed(1)} ×${f.factor.toFixed(2)}`).join('; '));
     const prediction = predictSettings(fitted);
     const changed = prediction.settings.filter((each) => each.isChanged);
-    if (process.env.SHOW) console.log('changes', changed.length, 'outside', prediction.expectedOutside.toFixed(2), prediction.heldBack, changed.slice(0, 20).map((c) => `${c.link} ${c.from}>${c.setting}`).join(' '));
     if (!changed.length) break;
     settings = { ...settings };
+    setAgain = changed.filter((each) => each.setting === each.from).map((each) => each.link);
     for (const { link, setting } of changed) settings[link] = site.set(link, setting);
     // The second round proves every station; later ones only what was touched.
     toRead = round === 0 ? stations : changed.map((each) => each.link);

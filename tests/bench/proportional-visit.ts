@@ -13,7 +13,6 @@ export function visitProportionally(document: NetworkDocument, site: CountedSite
   for (let k = 0; k < most; k++) {
     const { step, lookInto } = nextProportionalStep({ document, events });
     for (const valve of lookInto) named.add(valve);
-    if (process.env.SHOW) console.log(JSON.stringify(step));
     if (step.kind === 'done') return named;
     if (step.kind === 'read') events.push({ kind: 'reading', reading: site.read(step.link) });
     else events.push({ kind: 'set', link: step.link, setting: site.set(step.link, step.kind === 'set-pump' ? step.speed : step.setting) });

@@ -1,4 +1,5 @@
 import { solverSuite } from './solver';
+import { visitsSuite } from './visits';
 
 /** `npm run bench -- SUITE [--json]`: a suite measures and answers rows; with --json they are one JSON document on standard output. */
 export interface Suite {
@@ -7,7 +8,7 @@ export interface Suite {
   [figure: string]: unknown;
 }
 
-const suites: Record<string, () => Promise<Suite>> = { solver: solverSuite };
+const suites: Record<string, () => Promise<Suite>> = { solver: solverSuite, visits: visitsSuite };
 
 async function main(words: string[]): Promise<void> {
   const isJson = words.includes('--json');

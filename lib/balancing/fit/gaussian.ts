@@ -94,13 +94,33 @@ export function activeColumns(rows: Float64Array[], deviations: ArrayLike<number
   });
 }
 
-/** Lower half of A Aᵀ. */
+/** Lower half of A Aᵀ, two rows by two: most of a fit's time is spent here, and each value fetched then serves twice. */
 export function gramOf(rows: Float64Array[]): Float64Array[] {
-  return rows.map((row, m) => {
-    const products = new Float64Array(m + 1);
-    for (let k = 0; k <= m; k++) products[k] = dot(row, rows[k]);
-    return products;
-  });
+  const n = rows.length;
+  const gram = rows.map((_, m) => new Float64Array(m + 1));
+  const length = n ? rows[0].length : 0;
+  for (let m = 0; m < n; m += 2) {
+    const a = rows[m];
+    const b = rows[Math.min(m + 1, n - 1)];
+    for (let k = 0; k <= m; k += 2) {
+      const c = rows[k];
+      const d = rows[Math.min(k + 1, n - 1)];
+      let [ac, ad, bc, bd] = [0, 0, 0, 0];
+      for (let j = 0; j < length; j++) {
+        ac += a[j] * c[j];
+        ad += a[j] * d[j];
+        bc += b[j] * c[j];
+        bd += b[j] * d[j];
+      }
+      gram[m][k] = ac;
+      if (k + 1 <= m) gram[m][k + 1] = ad;
+      if (m + 1 < n) {
+        gram[m + 1][k] = bc;
+        gram[m + 1][k + 1] = bd;
+      }
+    }
+  }
+  return gram;
 }
 
 function cholesky(rows: Float64Array[]): void {

@@ -3,7 +3,7 @@ import type { ReadingModel } from './reading-model';
 
 const MOST_STEPS = 25;
 /** A step that lowers the misfit by less than this part of it is the last: the next would gain its square. */
-const SETTLED = 0.002;
+const SETTLED = 0.004;
 /** No resistance is taken further than this logarithm from its design: beyond, it is as good as shut. */
 const FURTHEST = 9;
 

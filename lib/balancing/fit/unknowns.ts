@@ -75,13 +75,13 @@ function seriesRuns(document: NetworkDocument): number[][] {
   return runs;
 }
 
-/** Rounds between which a valve's recorded setting did not change. */
+/** Rounds between which a valve was not set. */
 function unchangedStretches(rounds: ReadingRound[], id: string, designSetting?: number): boolean[][] {
   const stretches: boolean[][] = [];
   let before: number | undefined | null = null;
-  rounds.forEach(({ settings }, r) => {
+  rounds.forEach(({ settings, setAgain }, r) => {
     const setting = settings[id] ?? designSetting;
-    if (before === null || setting !== before) stretches.push(rounds.map(() => false));
+    if (before === null || setting !== before || setAgain?.includes(id)) stretches.push(rounds.map(() => false));
     stretches[stretches.length - 1][r] = true;
     before = setting;
   });

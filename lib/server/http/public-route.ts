@@ -36,7 +36,8 @@ export function publicRoute<Body>(declaration: Declaration<Body>): PublicRoute {
 async function countCall(request: Request): Promise<void> {
   // Written by the nearest proxy. Where there is none a caller can invent it, so no route's safety rests on this count alone:
   // a reset is also counted by address, and a link's token cannot be guessed.
-  const caller = request.headers.get('x-forwarded-for')?.split(',').at(-1)?.trim() ?? 'unknown';
+  // Cut to the length of an address, so that inventing them does not fill the memory.
+  const caller = request.headers.get('x-forwarded-for')?.split(',').at(-1)?.trim().slice(0, 64) ?? 'unknown';
   try {
     await byCaller.consume(caller);
   } catch {

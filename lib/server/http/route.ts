@@ -64,7 +64,10 @@ const answer = (value: unknown): Response =>
 export function refuseForeignOrigin(request: Request): void {
   if (request.method === 'GET' || request.method === 'HEAD') return;
   const origin = request.headers.get('origin');
-  if (origin && new URL(origin).host !== (request.headers.get('x-forwarded-host') ?? request.headers.get('host'))) {
+  if (!origin) return;
+  // A page that hides where it is from (a sandboxed frame) says "null", which is no address of ours.
+  const host = URL.canParse(origin) ? new URL(origin).host : null;
+  if (host !== (request.headers.get('x-forwarded-host') ?? request.headers.get('host'))) {
     throw new Problem('origin-refused', 'This request came from another site and was refused.');
   }
 }
@@ -84,8 +87,19 @@ export async function readJson(request: Request, maxBytes: number): Promise<unkn
     }
     chunks.push(value);
   }
+  const text = Buffer.concat(chunks).toString('utf8');
+  const value = parseJson(text);
+  if (unstorable.test(text)) throw new Problem('input-invalid', 'A text holds a character that cannot be stored; nothing was changed.');
+  return value;
+}
+
+/** PostgreSQL stores neither NUL nor half of a surrogate pair; in JSON both can only be written as escapes. */
+const unstorable =
+  /(?<!\\)(?:\\\\)*\\u(?:0000|d[89ab][0-9a-f]{2}(?!\\ud[c-f][0-9a-f]{2})|(?<!\\ud[89ab][0-9a-f]{2}\\u)d[c-f][0-9a-f]{2})/i;
+
+function parseJson(text: string): unknown {
   try {
-    return JSON.parse(Buffer.concat(chunks).toString('utf8'));
+    return JSON.parse(text);
   } catch {
     throw new Problem('input-invalid', 'What was sent is not JSON; nothing was changed.');
   }
@@ -96,7 +110,8 @@ export function refusal(error: unknown, requestId: string): Response {
   const known =
     error instanceof z.ZodError
       ? new Problem('input-invalid', 'Some of what was sent cannot be used; nothing was changed.', {
-          fields: error.issues.map((issue) => ({ path: issue.path.join('.'), message: issue.message })),
+          // A drawing may have a fault in each of its pieces: the answer stays of a size that can be read.
+          fields: error.issues.slice(0, 100).map((issue) => ({ path: issue.path.join('.'), message: issue.message })),
         })
       : error;
   if (known instanceof Problem) {

@@ -6,7 +6,8 @@ import { bandOf, stripsOf } from '../loops/loop-strips';
 
 /** The projects that a person is on (an administrator: all), each with its loops; `search` looks in the names of projects, clients, buildings and loops. */
 export async function listProjects(person: Person, search = ''): Promise<ProjectSummary[]> {
-  const rows = await projectRows(person, search.trim());
+  // An address can hold a NUL, which PostgreSQL takes in no text.
+  const rows = await projectRows(person, search.replaceAll('\0', '').trim());
   const projectIds = rows.map(({ id }) => id);
   const [loops, bands] = await Promise.all([loopsOf(person.organizationId, projectIds), bandsOf(person.organizationId, projectIds)]);
   return rows.map(({ held, ...project }) => ({

@@ -3,7 +3,7 @@ import type { NetworkDocument, Warning } from '@/lib/hydraulics/types';
 import { parseNetworkDocument } from '@/lib/network/document';
 import type { Drawing, Place } from '@/lib/network/drawing';
 import type { Fault } from '@/lib/network/drawing-faults';
-import { drawingToDocument, placeOfLink } from '@/lib/network/drawing-to-document';
+import { drawingToDocument } from '@/lib/network/drawing-to-document';
 import { inDrawingWords, pieceNames } from '@/lib/network/piece-names';
 import { cachedSolution, documentKey, keepSolution } from './solution-cache';
 import { solveDocument, type SolvedDocument } from './solve-document';
@@ -47,22 +47,30 @@ async function solved(document: NetworkDocument, { personId, signal }: Asker): P
 }
 
 function placesOf(drawing: Drawing, linkIds: string[]): Place[] {
-  const pipes = new Set(drawing.pipes.map((pipe) => pipe.id));
   const ids = new Set(linkIds.map((id) => id.split(':')[0]));
-  return [...ids].map((id) => ({ kind: pipes.has(id) ? 'pipe' : 'equipment', id }));
+  return [...ids].map(placeFinder(drawing));
 }
 
 /** The strict check found what the drawing's own checks did not: shown at the piece it names. */
-const documentFaults = (drawing: Drawing, issues: { path: string; id?: string; message: string }[]): Fault[] =>
-  issues.map(({ path, id, message }) => ({ code: 'document', severity: 'error', message: `${path}: ${message}`, place: placeOfId(drawing, id) }));
+function documentFaults(drawing: Drawing, issues: { path: string; id?: string; message: string }[]): Fault[] {
+  const placeOf = placeFinder(drawing);
+  return issues.map(({ path, id, message }) => ({ code: 'document', severity: 'error', message: `${path}: ${message}`, place: placeOf(id) }));
+}
 
 /** The engine's warnings, each once: solving and balancing may both find it. */
 function warningFaults(drawing: Drawing, warnings: Warning[]): Fault[] {
   const once = new Map(warnings.map((warning) => [`${warning.code} ${warning.id}`, warning]));
   const names = pieceNames(drawing);
-  return [...once.values()].map(({ code, id, message }) => ({ code, severity: 'warning', message: inDrawingWords(message, names), place: placeOfId(drawing, id) }));
+  const placeOf = placeFinder(drawing);
+  return [...once.values()].map(({ code, id, message }) => ({ code, severity: 'warning', message: inDrawingWords(message, names), place: placeOf(id) }));
 }
 
-/** A node's id is its piece's, with the port behind a dot; a link's has its part behind a colon. */
-const placeOfId = (drawing: Drawing, id: string | undefined): Place =>
-  id ? placeOfLink(drawing, id.split('.')[0]) : { kind: 'equipment', id: drawing.equipment[0]?.id ?? '' };
+/** Where an id of the document is drawn. A node's is its piece's, with the port behind a dot; a link's has its part behind a colon. */
+function placeFinder(drawing: Drawing): (id: string | undefined) => Place {
+  // A large drawing can have as many faults as pipes: each must not look through all of them.
+  const pipes = new Set(drawing.pipes.map((pipe) => pipe.id));
+  return (id) => {
+    if (!id) return { kind: 'equipment', id: drawing.equipment[0]?.id ?? '' };
+    return pipes.has(id) ? { kind: 'pipe', id } : { kind: 'equipment', id: id.split(/[.:]/)[0] };
+  };
+}

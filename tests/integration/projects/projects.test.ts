@@ -89,6 +89,7 @@ it('a search looks in project, client, building and loop names, and takes its si
   expect(await listed('?q=htg%25')).toEqual([]);
   expect(await listed('?q=h__')).toEqual([]);
   expect(await listed('?q=%27%20or%201=1%20--')).toEqual([]);
+  expect(await listed('?q=fre%00sh')).toEqual(['100 % fresh air']);
 });
 
 it('a new loop starts as a draft with an empty drawing of its service', async () => {

@@ -81,6 +81,17 @@ describe('saving a drawing by itself', () => {
     expect(saver.state.kind).toBe('saved');
   });
 
+  it('is at rest again once a change is undone, with nothing sent and nothing kept', async () => {
+    const saver = openPage();
+    saver.change(named('a'));
+    await vi.advanceTimersByTimeAsync(400);
+    saver.change(saved);
+    await vi.advanceTimersByTimeAsync(1000);
+    expect(server.asked).toEqual([]);
+    expect(shelf.held.size).toBe(0);
+    expect(saver.state).toEqual({ kind: 'saved', at: loaded.savedAt });
+  });
+
   it('says that nothing is kept where the browser has no room', async () => {
     shelf.isFull = true;
     const saver = openPage();

@@ -38,6 +38,15 @@ describe('joining two drawings that were changed at once', () => {
     }
   });
 
+  it('does not lose a change of the fluid that both made: it is a conflict like any other', () => {
+    const mine = { ...base, fluid: { ...base.fluid, supplyC: 7 } };
+    const theirs = { ...base, fluid: { ...base.fluid, supplyC: 5 }, pumpExcess: 'throttle' as const };
+    const { merged, conflicts } = mergeDrawings(base, mine, theirs);
+    expect(conflicts.map(({ name, place }) => [name, place.kind])).toEqual([['Fluid', 'loop']]);
+    expect(merged).toMatchObject({ fluid: { supplyC: 7 }, pumpExcess: 'throttle' });
+    expect(takeTheirs(merged, conflicts[0]!)).toMatchObject({ fluid: theirs.fluid, pumpExcess: 'throttle' });
+  });
+
   it('is not disturbed by the order in which a database gives back keys', () => {
     const turned = JSON.parse(JSON.stringify(base, (_, value) => (value && typeof value === 'object' && !Array.isArray(value) ? Object.fromEntries(Object.entries(value).reverse()) : value)));
     expect(same(base, turned)).toBe(true);

@@ -7,7 +7,9 @@ export default function DrawingError({ reset }: { error: Error; reset: () => voi
   return (
     <main className="m-auto max-w-md p-6">
       <h1>The drawing could not be shown</h1>
-      <p className="mt-1 mb-4 text-quiet">Nothing is lost: what was drawn is saved on the server, and what was not yet saved is kept in this browser.</p>
+      <p className="text-quiet mt-1 mb-4">
+        Nothing is lost: what was drawn is saved on the server, and what was not yet saved is kept in this browser.
+      </p>
       <Button look="primary" onClick={reset}>
         Try again
       </Button>

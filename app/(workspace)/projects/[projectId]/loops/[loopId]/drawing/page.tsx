@@ -46,6 +46,6 @@ export default async function DrawingPage({ params }: { params: Promise<{ projec
 const NotIssued = ({ name }: { name: string }) => (
   <div className="m-auto max-w-md p-6 text-center">
     <h2>{name} has not been issued yet</h2>
-    <p className="mt-1 text-quiet">Its drawing appears here as soon as the designer issues the first revision.</p>
+    <p className="text-quiet mt-1">Its drawing appears here as soon as the designer issues the first revision.</p>
   </div>
 );
