@@ -23,8 +23,11 @@ interface EntryPadProps {
   onKeep: () => void;
 }
 
-const besideClass = `${buttonClass('secondary', 'touch')} h-14! px-3! text-base! no-underline landscape:h-12!`;
-const keepClass = 'h-14! px-2! sm:text-xl! landscape:order-1 landscape:col-span-2 landscape:h-20!';
+const besideFigures =
+  'landscape:bg-sheet landscape:w-[clamp(16rem,35vw,23.5rem)] landscape:overflow-y-auto landscape:border-t-0 landscape:border-l landscape:p-4';
+const sideClass = `${buttonClass('secondary', 'touch')} h-14! px-3! text-base! no-underline landscape:h-12!`;
+const keepClass = 'h-14! px-2! sm:text-xl!';
+const keepBeside = 'landscape:order-1 landscape:col-span-2 landscape:h-20!';
 
 /** The keys and what follows: keep and walk on. Beside the figures where the screen is wide, below them where it is tall. */
 export function EntryPad({ entry, message, isSending, hasWaiting, before, next, listPath, onKeep }: EntryPadProps) {
@@ -42,7 +45,7 @@ export function EntryPad({ entry, message, isSending, hasWaiting, before, next, 
   return (
     <aside
       aria-label="Enter and go on"
-      className="bg-paper landscape:bg-sheet flex shrink-0 flex-col gap-2 border-t p-3 landscape:w-[clamp(16rem,35vw,23.5rem)] landscape:overflow-y-auto landscape:border-t-0 landscape:border-l landscape:p-4"
+      className={classNames('bg-paper flex shrink-0 flex-col gap-2 border-t p-3', entry && besideFigures)}
     >
       {entry && (
         <NumberPad
@@ -56,8 +59,11 @@ export function EntryPad({ entry, message, isSending, hasWaiting, before, next, 
           ▴ {message}
         </p>
       )}
-      <div className="grid grid-cols-[auto_1fr_auto] gap-2 landscape:grid-cols-2">
-        <PlaceLink href={before?.path ?? listPath} className={classNames(besideClass, 'landscape:order-2 landscape:justify-self-start')}>
+      <div className={classNames('grid grid-cols-[auto_1fr_auto] gap-2', entry && 'landscape:grid-cols-2')}>
+        <PlaceLink
+          href={before?.path ?? listPath}
+          className={classNames(sideClass, entry && 'landscape:order-2 landscape:justify-self-start')}
+        >
           <ChevronLeft size={18} aria-hidden />
           <span className="max-sm:sr-only">{before?.tag ?? 'List'}</span>
         </PlaceLink>
@@ -65,7 +71,7 @@ export function EntryPad({ entry, message, isSending, hasWaiting, before, next, 
           <Button
             size="touch"
             look="primary"
-            className={keepClass}
+            className={classNames(keepClass, keepBeside)}
             isPending={isSending && entry.isBlank}
             pendingText="Sending…"
             onClick={onKeep}
@@ -74,13 +80,16 @@ export function EntryPad({ entry, message, isSending, hasWaiting, before, next, 
             <ChevronRight aria-hidden className="shrink-0" />
           </Button>
         ) : (
-          <PlaceLink href={onward.path} className={classNames(buttonClass('primary', 'touch'), keepClass, 'no-underline')}>
+          <PlaceLink
+            href={onward.path}
+            className={classNames(buttonClass('primary', 'touch'), keepClass, entry && keepBeside, 'no-underline')}
+          >
             Next {onward.tag}
             <ChevronRight aria-hidden className="shrink-0" />
           </PlaceLink>
         )}
         {entry && !isDone && (
-          <PlaceLink href={onward.path} className={classNames(besideClass, 'landscape:order-2 landscape:justify-self-end')}>
+          <PlaceLink href={onward.path} className={classNames(sideClass, 'landscape:order-2 landscape:justify-self-end')}>
             Skip
           </PlaceLink>
         )}

@@ -9,7 +9,7 @@ const clock = new Intl.DateTimeFormat('en-GB', { hour: '2-digit', minute: '2-dig
 /** Always there: how many readings are kept on this tablet alone, and when the last was sent. */
 export function KeptLine({ commissioning }: { commissioning: Commissioning }) {
   const { keptState, kept, body } = commissioning;
-  const { entries, isSending, isOffline, isStored, lastSentAt } = keptState;
+  const { entries, isSending, isOffline, isSignedOut, isStored, lastSentAt } = keptState;
   const refused = entries.filter(({ refusal }) => refusal !== null).length;
   const count = entries.length === 1 ? '1 reading is kept on this tablet only' : `${entries.length} readings are kept on this tablet only`;
   return (
@@ -22,6 +22,11 @@ export function KeptLine({ commissioning }: { commissioning: Commissioning }) {
         )}
         <span>
           {isOffline && 'No signal. '}
+          {isSignedOut && (
+            <>
+              Your session has ended: <a href={`/sign-in?next=${encodeURIComponent(commissioning.base)}`}>sign in again</a>.{' '}
+            </>
+          )}
           {entries.length ? <strong>{count}</strong> : 'All readings are sent'}
           {refused > 0 && <span className="text-high">, ▴ {refused} refused</span>}
           {lastSentAt && <span className="text-quiet">, last sent {clock.format(new Date(lastSentAt))}</span>}

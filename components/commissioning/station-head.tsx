@@ -25,7 +25,8 @@ export function StationHead({ commissioning, station }: { commissioning: Commiss
       {settingTurns !== null && (
         <p className="border-l-brass bg-sheet rounded-r border-l-4 px-4 py-3">
           <strong>
-            Set the valve to <span className="figures text-brass">{formatQuantity('setting', settingTurns, 'turns')}</span> turns
+            {commissioning.isEntryOpen ? 'Set the valve to' : 'Scheduled setting'}{' '}
+            <span className="figures text-brass">{formatQuantity('setting', settingTurns, 'turns')}</span> turns
           </strong>
           {stands !== null && (
             <span className="text-quiet">

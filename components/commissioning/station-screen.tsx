@@ -4,6 +4,7 @@ import { useEffect, useRef, useState } from 'react';
 import type { RecordReading, Station } from '@/lib/api/commissioning';
 import { neighbours } from '@/lib/commissioning/walking-order';
 import type { Question } from '@/lib/commissioning/suspicion';
+import { classNames } from '../ui/class-names';
 import { Notice } from '../ui/notice';
 import { waitingAt, type Commissioning } from './commissioning-context';
 import { EntryForm } from './entry-form';
@@ -56,7 +57,7 @@ export function StationScreen({ commissioning, station }: { commissioning: Commi
   return (
     <div className="flex h-dvh flex-col">
       <StationBar commissioning={commissioning} />
-      <main className="flex min-h-0 flex-1 flex-col landscape:flex-row">
+      <main className={classNames('flex min-h-0 flex-1 flex-col', isEntryOpen && 'landscape:flex-row')}>
         <div className="flex min-h-0 flex-1 flex-col gap-3.5 overflow-y-auto p-4 landscape:p-6">
           <StationHead commissioning={commissioning} station={station} />
           {waiting.map((it) => (
@@ -103,7 +104,7 @@ export function StationScreen({ commissioning, station }: { commissioning: Commi
           onKeep={press}
         />
       </main>
-      <KeptLine commissioning={commissioning} />
+      {commissioning.mayRecord && <KeptLine commissioning={commissioning} />}
       <QuestionsDialog
         questions={asked?.questions ?? []}
         onLookAgain={() => setAsked(null)}

@@ -6,6 +6,9 @@ import { PlaceLink } from './place-link';
 
 const kindWords = { terminal: '', branch: 'branch', pump: 'pump' } as const;
 
+/** From a tablet's width on; on a phone a station takes two lines. */
+const columns = 'sm:grid-cols-[minmax(7rem,1.2fr)_minmax(0,1.6fr)_5.5rem_6.5rem_6.5rem_6.5rem]';
+
 interface StationTableProps {
   storey: string;
   stations: Station[];
@@ -33,50 +36,42 @@ export function StationTable({ storey, stations, commissioning }: StationTablePr
           </span>
         )}
       </div>
-      <div role="table" aria-label={`Stations, ${name}`}>
-        <div
-          role="row"
-          className="text-quiet hidden gap-x-4 border-b px-4 py-1.5 text-sm sm:grid sm:grid-cols-[minmax(7rem,1.2fr)_minmax(0,1.6fr)_5.5rem_6.5rem_6.5rem_6.5rem]"
-        >
-          <span role="columnheader">Station</span>
-          <span role="columnheader">Room</span>
-          <span role="columnheader" className="text-right">
+      <div>
+        <div aria-hidden className={`text-quiet hidden gap-x-4 border-b px-4 py-1.5 text-sm sm:grid ${columns}`}>
+          <span>Station</span>
+          <span>Room</span>
+          <span className="text-right">
             Design, <UnitName quantity="flow" />
           </span>
-          <span role="columnheader" className="text-right">
-            Last round, %
-          </span>
-          <span role="columnheader" className="text-right">
+          <span className="text-right">Last round, %</span>
+          <span className="text-right">
             {shownRound ? `Round ${shownRound.number}` : 'This round'}, <UnitName quantity="flow" />
           </span>
-          <span role="columnheader" className="text-right">
-            Of design, %
-          </span>
+          <span className="text-right">Of design, %</span>
         </div>
         {stations.map((station) => (
           <PlaceLink
             key={station.id}
-            role="row"
             href={`${base}/stations/${station.id}`}
-            className="text-ink hover:bg-well grid min-h-14 grid-cols-[minmax(0,1fr)_auto] items-center gap-x-4 border-b px-4 py-1.5 no-underline last:border-b-0 sm:grid-cols-[minmax(7rem,1.2fr)_minmax(0,1.6fr)_5.5rem_6.5rem_6.5rem_6.5rem]"
+            className={`text-ink hover:bg-well grid min-h-14 grid-cols-[minmax(0,1fr)_auto] items-center gap-x-4 border-b px-4 py-1.5 no-underline last:border-b-0 ${columns}`}
           >
-            <span role="cell" className="truncate text-lg font-bold">
+            <span className="truncate text-lg font-bold">
               {station.tag} <span className="text-quiet text-sm font-normal">{kindWords[station.kind]}</span>
             </span>
-            <span role="cell" className="text-quiet hidden truncate sm:block">
-              {station.room}
-            </span>
-            <span role="cell" className="text-quiet sm:text-ink order-3 text-sm sm:order-none sm:text-right sm:text-base">
-              <span className="sm:hidden">design </span>
+            <span className="text-quiet hidden truncate sm:block">{station.room}</span>
+            <span className="text-quiet sm:text-ink order-3 text-sm sm:order-none sm:text-right sm:text-base">
+              <span className="sm:sr-only">design </span>
               <Figure quantity="flow" si={station.designFlowLs} />
             </span>
-            <span role="cell" className="hidden text-right sm:block">
+            <span className="hidden text-right sm:block">
+              <span className="sr-only">last round </span>
               <PerCent reading={lastStanding.get(station.id)} />
             </span>
-            <span role="cell" className="order-4 text-right sm:order-none">
+            <span className="order-4 text-right sm:order-none">
+              <span className="sr-only">this round </span>
               <Figure quantity="flow" si={standing.get(station.id)?.flowLs} className="text-sm sm:text-base" />
             </span>
-            <span role="cell" className="text-right text-lg">
+            <span className="text-right text-lg">
               {waitingAt(commissioning, station.id).length > 0 ? (
                 <span className="text-brass text-sm font-semibold">on this tablet</span>
               ) : (

@@ -54,7 +54,7 @@ export function InstrumentRow({ instrument, isOverdue, onChange }: InstrumentRow
         </p>
       </div>
       {onChange && (
-        <div className="flex gap-1">
+        <div className="flex gap-1 max-sm:-ml-4">
           <Button look="quiet" onClick={onChange} aria-label={`Change ${serial}`}>
             Change
           </Button>

@@ -44,8 +44,6 @@ export interface FittedLoop {
   active: Int32Array;
   /** The linear model at the fit, of the active unknowns in units of `deviations`. */
   posterior: Gaussian;
-  /** How all single faults weigh at the fit; see `diagnose`. */
-  search: FaultSearch;
 }
 
 const MOST_PASSES = 12;
@@ -86,7 +84,7 @@ export function fitLoop(document: NetworkDocument, rounds: ReadingRound[], prior
   });
   const active = activeUnknowns(deviations);
   const posterior = new Gaussian(activeColumns(fit.rows, deviations, active), noise);
-  return { document, rounds, unknowns, values: fit.values, deviations, readings, faults, accepted, converged: fit.converged, active, posterior, search };
+  return { document, rounds, unknowns, values: fit.values, deviations, readings, faults, accepted, converged: fit.converged, active, posterior };
 }
 
 /** Prior deviations and variances of the readings, widened where a fault is suspected. */

@@ -17,6 +17,8 @@ export interface KeptState {
   isSending: boolean;
   /** Whether the last try found no server. */
   isOffline: boolean;
+  /** Whether the last try was refused because the session has ended. */
+  isSignedOut: boolean;
   /** When the server last acknowledged an entry from here, ISO. */
   lastSentAt: string | null;
   /** False where this browser has no room: then the entries live only as long as the page. */
@@ -44,7 +46,7 @@ export class KeptReadings {
 
   constructor(options: Options) {
     this.options = options;
-    this.state = { entries: this.read(), isSending: false, isOffline: false, lastSentAt: null, isStored: true };
+    this.state = { entries: this.read(), isSending: false, isOffline: false, isSignedOut: false, lastSentAt: null, isStored: true };
   }
 
   keep(entry: Omit<KeptReading, 'refusal'>): void {
@@ -81,11 +83,11 @@ export class KeptReadings {
       try {
         const stored = await this.options.send(next.roundId, next.reading);
         this.release(stored.id);
-        this.tell({ isOffline: false, lastSentAt: new Date().toISOString() });
+        this.tell({ isOffline: false, isSignedOut: false, lastSentAt: new Date().toISOString() });
         this.options.onAcknowledged(stored);
       } catch (error) {
         if (!(error instanceof RequestError)) throw error;
-        if (mayComeRight(error)) return this.tell({ isOffline: error.code === 'offline' || error.status >= 500 });
+        if (mayComeRight(error)) return this.tell({ isOffline: error.code !== 'signed-out', isSignedOut: error.code === 'signed-out' });
         this.refuse(next.reading.id, error.fields[0]?.message ?? error.message);
       }
     }

@@ -8,6 +8,8 @@ const statuses = {
   'not-found': 404,
   'origin-refused': 403,
   'too-many-tries': 429,
+  'solver-busy': 429,
+  'solve-too-long': 422,
   'draft-changed': 409,
   'drawing-unfit': 422,
   'loop-state': 409,

@@ -9,6 +9,7 @@ import { openDataFolder, requireFreeSpace } from './places.mjs';
 import { requireFreePort } from './ports.mjs';
 import { clearCrashedRuns, liveRuns, recordRun, requireNoOtherRun } from './runs.mjs';
 import { readSecrets } from './secrets.mjs';
+import { isLoopback } from './settings.mjs';
 
 /** @typedef {import('./settings.mjs').Settings} Settings */
 /** @typedef {import('./lifetime.mjs').Lifetime} Lifetime */
@@ -35,7 +36,8 @@ export async function prepare(settings, { database, mode }, lifetime) {
   await installPackages(say);
 
   const secrets = readSecrets(folder);
-  const demo = !settings.databaseUrl;
+  // The demo's passwords are in the repository: not for a server that others can reach.
+  const demo = !settings.databaseUrl && isLoopback(settings.host) && isLoopback(new URL(settings.publicUrl).hostname);
   const databaseUrl = settings.databaseUrl ?? (await openPrivateDatabase(folder, secrets, database, lifetime));
   await migrate(databaseUrl, { demo }).catch((error) => {
     // Who works on a migration or on the demo wants to see it fail and the rest run.

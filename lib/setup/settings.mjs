@@ -19,7 +19,7 @@ export function readSettings({ command, defaultPort, env = process.env }) {
     publicUrl: readUrl('PUBLIC_URL', env.PUBLIC_URL, ['http:', 'https:'])?.replace(/\/$/, '') ?? address,
     databaseUrl: readUrl('DATABASE_URL', env.DATABASE_URL, ['postgres:', 'postgresql:']),
     smtpUrl: readUrl('SMTP_URL', env.SMTP_URL, ['smtp:', 'smtps:']),
-    authSecret: env.AUTH_SECRET || undefined,
+    authSecret: readSecret(env.AUTH_SECRET),
   };
 }
 
@@ -54,3 +54,16 @@ function reachable(host) {
   if (host === '0.0.0.0' || host === '::') return '127.0.0.1';
   return host.includes(':') ? `[${host}]` : host;
 }
+
+/** @param {string | undefined} text */
+function readSecret(text) {
+  if (!text) return undefined;
+  if (text.length >= 32) return text;
+  throw new SetupFailure('AUTH_SECRET is too short to sign sessions with. Give 32 characters or more, for example from `openssl rand -base64 32`.');
+}
+
+/**
+ * Whether only this machine can reach a host of that name.
+ * @param {string} host
+ */
+export const isLoopback = (host) => ['127.0.0.1', 'localhost', '::1', '[::1]'].includes(host);

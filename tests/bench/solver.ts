@@ -51,8 +51,6 @@ export async function solverSuite(): Promise<Suite> {
         ours.again.push(again.took);
       }
       const { residuals, iterations, links } = solve(document);
-      const heapBefore = process.memoryUsage().arrayBuffers;
-      const held = prepareNetwork(document);
       rows.push({
         network,
         terminals,
@@ -68,11 +66,19 @@ export async function solverSuite(): Promise<Suite> {
         loopPa: rounded(residuals.loopPa),
         flowError: rounded(flowError(document)),
         referenceHeadErrorM: rounded(headErrorM),
-        bytesPerLink: Math.round((process.memoryUsage().arrayBuffers - heapBefore) / held.from.length),
+        bytesPerLink: Math.round(bytesIn(startIteration(prepareNetwork(document))) / links.length),
       });
     }
   const direct = rows.filter((row) => row.network === 'direct-return');
   return { suite: 'solver', rows, growth: rounded(growthOf(direct)), tolerance: TOLERANCE };
+}
+
+/** Bytes of all typed arrays that a value holds on to. */
+function bytesIn(value: unknown, seen = new Set<unknown>()): number {
+  if (typeof value !== 'object' || value === null || seen.has(value)) return 0;
+  seen.add(value);
+  if (ArrayBuffer.isView(value)) return value.byteLength;
+  return Object.values(value).reduce((sum: number, each) => sum + bytesIn(each, seen), 0);
 }
 
 /** The exponent of N in the time of the whole, from the three largest sizes. */

@@ -32,6 +32,7 @@ export function linkAnswers(network: PreparedNetwork, solution: Solution, unknow
     const column = () => new Float64Array(unknowns.length);
     return { flowLs: i < 0 ? 0 : state.linkFlow[i], dropKpa: i < 0 ? 0 : state.linkLoss[i] * kpaPerM, flowPerUnknown: column(), dropPerUnknown: column() };
   });
+  const seen = loopsThroughLinks(watched.map((at) => numberOf[at]), chains.chainOf, loopsOf, signOf);
   const heads = new Float64Array(loops.count);
   const step = new Float64Array(loops.count);
   const { linkLoss } = state;
@@ -67,15 +68,14 @@ export function linkAnswers(network: PreparedNetwork, solution: Solution, unknow
       for (let l = 0; l < step.length; l++) step[l] = -step[l];
       control?.correct(state, loops, solver, step);
     }
-    watched.forEach((at, w) => {
-      const i = numberOf[at];
-      if (i < 0) return;
+    for (let w = 0; w < seen.count; w++) {
       let flow = 0;
-      const c = chains.chainOf[i];
-      if (isMoved && c >= 0) for (const { loop, sign } of loopsOf[c]) flow += sign * signOf[i] * step[loop];
+      if (isMoved) for (let p = seen.start[w]; p < seen.start[w + 1]; p++) flow += seen.sign[p] * step[seen.loop[p]];
+      const i = seen.number[w];
+      if (i < 0) continue;
       answers[w].flowPerUnknown[j] = flow;
       answers[w].dropPerUnknown[j] = (state.linkSlope[i] * flow + linkLoss[i] - lossBefore[i]) * kpaPerM;
-    });
+    }
     for (const at of unknown.links) if (numberOf[at] >= 0) linkLoss[numberOf[at]] = lossBefore[numberOf[at]];
   });
   return answers;
@@ -96,4 +96,19 @@ function loopsThroughChains({ loops }: Solution, chainCount: number): { loop: nu
   const through: { loop: number; sign: number }[][] = Array.from({ length: chainCount }, () => []);
   for (let l = 0; l < loops.count; l++) for (let p = loops.start[l]; p < loops.start[l + 1]; p++) through[loops.chain[p]].push({ loop: l, sign: loops.sign[p] });
   return through;
+}
+
+/** Loops through each watched link in plain arrays: they are gone through once for every unknown. */
+function loopsThroughLinks(numbers: number[], chainOf: Int32Array, loopsOf: { loop: number; sign: number }[][], signOf: Int8Array) {
+  const start = [0];
+  const loop: number[] = [];
+  const sign: number[] = [];
+  for (const i of numbers) {
+    for (const through of i < 0 || chainOf[i] < 0 ? [] : loopsOf[chainOf[i]]) {
+      loop.push(through.loop);
+      sign.push(through.sign * signOf[i]);
+    }
+    start.push(loop.length);
+  }
+  return { count: numbers.length, number: Int32Array.from(numbers), start: Int32Array.from(start), loop: Int32Array.from(loop), sign: Int8Array.from(sign) };
 }

@@ -35,6 +35,8 @@ const causeOf: Partial<Record<Unknown['kind'], Cause>> = { run: 'blocked', setti
 
 /** A valve opens or closes no further than its table; this much of its Kv is left to the table's own error. */
 const TABLE_ERROR = 0.05;
+/** A shift along the tangent may overshoot by as much. */
+const BEYOND_TABLE = 1.5;
 const WORTH_A_SECOND_LOOK = -2;
 /** Faults that look this much alike to the readings (squared cosine) are not taken in one go: the first may explain what speaks for the next. */
 const ALIKE = 0.1;
@@ -55,6 +57,9 @@ function unit(length: number, at: number): Float64Array {
   column[at] = 1;
   return column;
 }
+
+const logOdds = ({ cause, variance }: Pick<Weighed, 'cause' | 'variance'>, growth: number, match: number) =>
+  Math.log(faults[cause].odds) - 0.5 * Math.log(growth) + (0.5 * variance * match * match) / growth;
 
 const squaredCosine = (a: Float64Array, b: Float64Array) => dot(a, b) ** 2 / (dot(a, a) * dot(b, b));
 
@@ -120,8 +125,7 @@ export class FaultSearch {
 
   /** Of faults taken as true already, those that are no longer likelier than none, all others being kept. */
   unlikely(accepted: Suspicion[]): Suspicion[] {
-    const gaussian = new Gaussian([], this.noise, 0, this.gram);
-    const innovation = gaussian.whiten(this.innovation);
+    const { gaussian, innovation } = this.factorised();
     return accepted.filter(({ cause, unknown, reading }) => {
       const { deviation, odds } = faults[cause];
       const whitened = gaussian.whiten(unknown !== null ? Float64Array.from(this.fit.rows, (row) => row[unknown]) : unit(this.model.placed.length, reading!));
@@ -131,12 +135,8 @@ export class FaultSearch {
     });
   }
 
-  /** Every fault with its odds, whether likely or not. */
-  all(): Suspicion[] {
-    return this.weigh(this.candidates());
-  }
-
   private accept({ reading, column, variance }: Weighed): void {
+    this.factors = null;
     if (reading !== null) this.noise[reading] += variance;
     else for (let m = 0; m < column.length; m++) for (let k = 0; k <= m; k++) this.gram[m][k] += variance * column[m] * column[k];
   }
@@ -160,16 +160,30 @@ export class FaultSearch {
     return [...ofUnknowns, ...ofReadings];
   }
 
+  private factors: { gaussian: Gaussian; innovation: Float64Array; pull: Float64Array } | null = null;
+
+  /** S as it stands, factorised once for all that is weighed with it. */
+  private factorised() {
+    if (!this.factors) {
+      const gaussian = new Gaussian([], this.noise, 0, this.gram);
+      this.factors = { gaussian, innovation: gaussian.whiten(this.innovation), pull: gaussian.solve(this.innovation) };
+    }
+    return this.factors;
+  }
+
   private weigh(candidates: Weighed[]): Weighed[] {
-    const gaussian = new Gaussian([], this.noise, 0, this.gram);
-    const innovation = gaussian.whiten(this.innovation);
+    const { gaussian, innovation, pull } = this.factorised();
     return candidates.map((each) => {
+      // k·S⁻¹k is at least k_m² / S_mm for any reading m (Cauchy-Schwarz): most candidates are ruled out by that alone.
+      let least = 0;
+      each.column.forEach((value, m) => (least = Math.max(least, value ** 2 / (this.gram[m][m] + this.noise[m]))));
+      const most = logOdds(each, 1 + each.variance * least, dot(each.column, pull));
+      if (most < WORTH_A_SECOND_LOOK) return { ...each, shift: 0, logOdds: -Infinity };
       const whitened = gaussian.whiten(each.column);
       const growth = 1 + each.variance * dot(whitened, whitened);
       const match = dot(whitened, innovation);
       const shift = (each.variance * match) / growth;
-      const logOdds = Math.log(faults[each.cause].odds) - 0.5 * Math.log(growth) + (0.5 * each.variance * match * match) / growth;
-      return { ...each, whitened, shift, logOdds: this.isPossible(each, shift) ? logOdds : -Infinity };
+      return { ...each, whitened, shift, logOdds: this.isPossible(each, shift) ? logOdds(each, growth, match) : -Infinity };
     });
   }
 
@@ -184,6 +198,6 @@ export class FaultSearch {
     const kv = kvAtSetting(table, settingIn(this.rounds[rounds.indexOf(true)].settings, link));
     const least = Math.log(table[0].kv / kv);
     const most = Math.log(table[table.length - 1].kv / kv);
-    return shift > 0 ? most > TABLE_ERROR : least < -TABLE_ERROR;
+    return shift > 0 ? most > TABLE_ERROR && shift < BEYOND_TABLE * most : least < -TABLE_ERROR && shift > BEYOND_TABLE * least;
   }
 }

@@ -22,17 +22,18 @@ export async function askForReset({ email }: { email: string }): Promise<void> {
 }
 
 async function sendResetLink(email: string): Promise<void> {
-  await db().transaction(async (trx) => {
+  const made = await db().transaction(async (trx) => {
     const person = await trx('sign_ins')
       .join('people', (join) => join.on('people.organization_id', 'sign_ins.organization_id').on('people.id', 'sign_ins.person_id'))
       .where({ 'sign_ins.email': email, 'people.is_active': true })
       .first({ organizationId: 'people.organization_id', id: 'people.id', name: 'people.name' });
-    if (!person) return;
-    const link = await makePasswordLink(trx, person, 'reset');
-    await sendMail({
-      to: email,
-      subject: 'Set a new password',
-      text: `${person.name},\n\nsomeone asked for a new password for this address. Set it here within the hour:\n\n${link}\n\nThe link works once. If it was not you, do nothing: your password stays as it is.\n`,
-    });
+    return person && { name: person.name, link: await makePasswordLink(trx, person, 'reset') };
+  });
+  if (!made) return;
+  // After the transaction: whoever is not signed in must not hold the database's connections for as long as a mail server is slow.
+  await sendMail({
+    to: email,
+    subject: 'Set a new password',
+    text: `${made.name},\n\nsomeone asked for a new password for this address. Set it here within the hour:\n\n${made.link}\n\nThe link works once. If it was not you, do nothing: your password stays as it is.\n`,
   });
 }

@@ -10,7 +10,7 @@ import { solveDocument, type SolvedDocument } from './solve-document';
 import { solveOffThread } from './solve-pool';
 
 /** Above this a solve leaves the request thread, where it would keep others waiting. */
-const mostLinksOnThread = 2000;
+const mostLinksOnThread = 500;
 
 export interface Asker {
   personId: string;

@@ -1,6 +1,7 @@
 import { join } from 'node:path';
 import Piscina from 'piscina';
 import type { NetworkDocument } from '@/lib/hydraulics/types';
+import { Problem } from '../problem';
 import type { SolvedDocument } from './solve-document';
 
 const holder = globalThis as typeof globalThis & { evenheadSolvePool?: Piscina };
@@ -17,23 +18,37 @@ function pool(): Piscina {
   return holder.evenheadSolvePool;
 }
 
-const lastOf = new Map<string, Promise<unknown>>();
+const longestSolveMs = 60_000;
+const mostWaiting = 4;
+const waitingOf = new Map<string, { count: number; last: Promise<unknown> }>();
 
 /**
- * Solves off the request thread. One person's solves wait for one another, so that nobody takes both threads;
- * `signal` ends a solve that nobody waits for any more, running or waiting.
+ * Solves off the request thread, for a minute at most. One person's solves wait for one another, a few at most, so that nobody
+ * takes both threads; `signal` ends a solve that nobody waits for any more, running or waiting.
  */
 export async function solveOffThread(document: NetworkDocument, personId: string, signal?: AbortSignal): Promise<SolvedDocument> {
-  const before = lastOf.get(personId) ?? Promise.resolve();
-  const mine = before.catch(() => undefined).then(() => {
-    signal?.throwIfAborted();
-    return pool().run(document, { signal }) as Promise<SolvedDocument>;
-  });
-  lastOf.set(personId, mine);
+  const mine = waitingOf.get(personId) ?? { count: 0, last: Promise.resolve() };
+  if (mine.count >= mostWaiting) throw new Problem('solver-busy', 'Earlier drawings of yours are still being solved. Wait a moment, then change something to solve again.');
+  waitingOf.set(personId, mine);
+  mine.count += 1;
+  const solved = mine.last.catch(() => undefined).then(() => runInThread(document, signal));
+  mine.last = solved;
   try {
-    return await mine;
+    return await solved;
   } finally {
-    if (lastOf.get(personId) === mine) lastOf.delete(personId);
+    mine.count -= 1;
+    if (mine.count === 0) waitingOf.delete(personId);
+  }
+}
+
+async function runInThread(document: NetworkDocument, signal?: AbortSignal): Promise<SolvedDocument> {
+  signal?.throwIfAborted();
+  const timeUp = AbortSignal.timeout(longestSolveMs);
+  try {
+    return await pool().run(document, { signal: signal ? AbortSignal.any([signal, timeUp]) : timeUp });
+  } catch (error) {
+    if (timeUp.aborted) throw new Problem('solve-too-long', 'This drawing could not be solved within a minute. Draw it as several loops.');
+    throw error;
   }
 }
 

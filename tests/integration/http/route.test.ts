@@ -22,10 +22,13 @@ it.each(['null', 'https://elsewhere.example', 'http://127.0.0.1:81', 'nonsense']
   expect(refused).toMatchObject({ status: 403, body: { code: 'origin-refused' } });
 });
 
-it.each(['a\\u0000b', 'a\\ud83d', 'a\\ude00', '\\ud83d\\ud83d\\ude00', '\\\\\\u0000'])('refuses the text "%s", which cannot be stored', async (escaped) => {
-  const refused = await send(JSON.stringify(projectNamed('#')).replace('#', escaped));
-  expect(refused).toMatchObject({ status: 400, body: { code: 'input-invalid' } });
-});
+it.each(['a\\u0000b', 'a\\ud83d', 'a\\ude00', '\\ud83d\\ud83d\\ude00', '\\\\\\u0000'])(
+  'refuses the text "%s", which cannot be stored',
+  async (escaped) => {
+    const refused = await send(JSON.stringify(projectNamed('#')).replace('#', escaped));
+    expect(refused).toMatchObject({ status: 400, body: { code: 'input-invalid' } });
+  },
+);
 
 it.each(['\\ud83d\\ude00', '😀', '\\\\u0000', '\\u00e9'])('takes the text "%s"', async (escaped) => {
   expect((await send(JSON.stringify(projectNamed('#')).replace('#', escaped))).status).toBe(200);
@@ -34,7 +37,11 @@ it.each(['\\ud83d\\ude00', '😀', '\\\\u0000', '\\u00e9'])('takes the text "%s"
 it('names at most a hundred faults of what was sent', async () => {
   const { designer, loopId } = await makeOrganization(suite.db);
   signInAs(designer);
-  const refused = await call(saveDraft, { method: 'PUT', params: { loopId }, body: { baseVersion: 1, drawing: { equipment: Array(5000).fill({}) } } });
+  const refused = await call(saveDraft, {
+    method: 'PUT',
+    params: { loopId },
+    body: { baseVersion: 1, drawing: { equipment: Array(5000).fill({}) } },
+  });
   expect(refused.status).toBe(400);
   expect(refused.body.fields).toHaveLength(100);
 });

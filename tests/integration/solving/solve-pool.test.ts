@@ -30,6 +30,13 @@ it('a solve that nobody waits for any more is ended, and the next one is answere
   expect((await second).solve.converged).toBe(true);
 });
 
+it('of one person’s solves only a few wait: the next is refused with a sentence', async () => {
+  const waiting = Array.from({ length: 4 }, () => solveOffThread(documentOf(6), 'eager'));
+  await expect(solveOffThread(documentOf(6), 'eager')).rejects.toMatchObject({ code: 'solver-busy' });
+  expect((await solveOffThread(documentOf(6), 'patient')).solve.converged).toBe(true);
+  expect((await Promise.all(waiting)).every(({ solve: { converged } }) => converged)).toBe(true);
+});
+
 it('a drawing of more than 2,000 links is solved while a small one of somebody else is answered', async () => {
   const { designer, loopId } = await makeOrganization(suite.db);
   signInAs(designer);

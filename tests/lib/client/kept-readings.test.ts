@@ -86,6 +86,7 @@ describe('a reading kept on the tablet', () => {
     const body = keep();
     await kept.send();
     expect(kept.state.entries).toMatchObject([{ reading: { id: body.id }, refusal: null }]);
+    expect(kept.state).toMatchObject({ isSignedOut: true, isOffline: false });
   });
 
   it('entered while others are on their way goes with them', async () => {

@@ -6,7 +6,10 @@ import { drawingToDocument } from '@/lib/network/drawing-to-document';
 import { ladder } from '../../make/drawing';
 
 const solved = solveDocument(drawingToDocument(ladder([0.02]), 'ladder').document!);
-const ofLinks = (count: number): SolvedDocument => ({ ...solved, solve: { ...solved.solve, links: Array(count).fill(solved.solve.links[0]) } });
+const ofLinks = (count: number): SolvedDocument => ({
+  ...solved,
+  solve: { ...solved.solve, links: Array(count).fill(solved.solve.links[0]) },
+});
 
 it('lets go of the solutions that were asked for longest ago when all together are large', () => {
   for (const key of ['a', 'b', 'c']) keepSolution(key, ofLinks(30_000));
