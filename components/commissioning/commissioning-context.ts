@@ -54,3 +54,10 @@ export function bandWords({ lowerPercent, upperPercent }: { lowerPercent: number
 
 export const placeOf = ({ storey, room }: Pick<Station, 'storey' | 'room'>): string =>
   [storey, room && `room ${room}`].filter(Boolean).join(', ') || 'No place on the drawing';
+
+/**
+ * Whether the list is asked of the server when it is opened: something was sent since this page came, so the strip at its head is no
+ * longer true, and there is signal to ask by.
+ */
+export const isListStale = ({ keptState }: Commissioning): boolean =>
+  keptState.hasSent && keptState.entries.length === 0 && !keptState.isOffline && navigator.onLine;

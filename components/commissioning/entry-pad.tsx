@@ -15,7 +15,6 @@ interface EntryPadProps {
   /** Null where nothing may be entered: then this is only the way to the next station. */
   entry: Entry | null;
   message: string | null;
-  isSending: boolean;
   hasWaiting: boolean;
   before: Neighbour | null;
   next: Neighbour | null;
@@ -30,7 +29,7 @@ const keepClass = 'h-14! px-2! sm:text-xl!';
 const keepBeside = 'landscape:order-1 landscape:col-span-2 landscape:h-20!';
 
 /** The keys and what follows: keep and walk on. Beside the figures where the screen is wide, below them where it is tall. */
-export function EntryPad({ entry, message, isSending, hasWaiting, before, next, listPath, onKeep }: EntryPadProps) {
+export function EntryPad({ entry, message, hasWaiting, before, next, listPath, onKeep }: EntryPadProps) {
   const onward = next ?? { tag: 'the list', path: listPath };
   // What was entered here waits to be sent and nothing new is typed: the way on is the next station.
   const isDone = entry?.isBlank === true && hasWaiting;
@@ -68,14 +67,7 @@ export function EntryPad({ entry, message, isSending, hasWaiting, before, next, 
           <span className="max-sm:sr-only">{before?.tag ?? 'List'}</span>
         </PlaceLink>
         {entry && !isDone ? (
-          <Button
-            size="touch"
-            look="primary"
-            className={classNames(keepClass, keepBeside)}
-            isPending={isSending && entry.isBlank}
-            pendingText="Sending…"
-            onClick={onKeep}
-          >
+          <Button size="touch" look="primary" className={classNames(keepClass, keepBeside)} onClick={onKeep}>
             {entry.isCorrecting ? 'Keep the correction' : next ? `Keep, next ${next.tag}` : 'Keep, back to the list'}
             <ChevronRight aria-hidden className="shrink-0" />
           </Button>

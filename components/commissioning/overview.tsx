@@ -1,7 +1,5 @@
 'use client';
 
-import { useRouter } from 'next/navigation';
-import { useEffect } from 'react';
 import { byStorey } from '@/lib/commissioning/walking-order';
 import { FlowStrip } from '../strip/flow-strip';
 import { Notice } from '../ui/notice';
@@ -17,13 +15,7 @@ import { StationTable } from './station-table';
 
 /** A loop's stations: the round that is open, what is left of it, and what came before. */
 export function Overview({ commissioning }: { commissioning: Commissioning }) {
-  const { body, loop, shownRound, mayRecord, keptState } = commissioning;
-  const router = useRouter();
-  const sentAt = keptState.entries.length === 0 ? keptState.lastSentAt : null;
-  useEffect(() => {
-    // The strip at the head of the page is the server's; it is asked again only while there is signal.
-    if (sentAt && navigator.onLine) router.refresh();
-  }, [router, sentAt]);
+  const { body, loop, shownRound, mayRecord } = commissioning;
   if (!body.revision) return <NotIssued name={loop.name} />;
   const measured = measuredIn(commissioning);
   return (

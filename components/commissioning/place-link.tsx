@@ -8,10 +8,16 @@ export function goTo(path: string): void {
   window.scrollTo(0, 0);
 }
 
+interface PlaceLinkProps extends AnchorHTMLAttributes<HTMLAnchorElement> {
+  href: string;
+  /** Asks the server for the page after all. */
+  isOrdinary?: boolean;
+}
+
 /** A link within a loop's commissioning; opened in a new tab it is an ordinary link. */
-export function PlaceLink({ href, ...rest }: AnchorHTMLAttributes<HTMLAnchorElement> & { href: string }) {
+export function PlaceLink({ href, isOrdinary, ...rest }: PlaceLinkProps) {
   const follow = (event: MouseEvent) => {
-    if (event.metaKey || event.ctrlKey || event.shiftKey || event.altKey || event.button !== 0) return;
+    if (isOrdinary || event.metaKey || event.ctrlKey || event.shiftKey || event.altKey || event.button !== 0) return;
     event.preventDefault();
     goTo(href);
   };

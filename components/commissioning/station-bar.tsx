@@ -1,6 +1,6 @@
 import { ChevronLeft } from 'lucide-react';
 import { FlowStrip } from '../strip/flow-strip';
-import { measuredIn, stripOf, type Commissioning } from './commissioning-context';
+import { isListStale, measuredIn, stripOf, type Commissioning } from './commissioning-context';
 import { PlaceLink } from './place-link';
 
 /** Heads a station's screen in place of the loop's pages: the way back, the round, how far it has come. */
@@ -8,7 +8,12 @@ export function StationBar({ commissioning }: { commissioning: Commissioning }) 
   const { loop, base, shownRound, body } = commissioning;
   return (
     <header data-own-header className="bg-sheet flex min-h-14 shrink-0 items-center gap-3 border-b pr-4">
-      <PlaceLink href={base} aria-label="All stations" className="text-ink flex size-14 shrink-0 items-center justify-center no-underline">
+      <PlaceLink
+        href={base}
+        isOrdinary={isListStale(commissioning)}
+        aria-label="All stations"
+        className="text-ink flex size-14 shrink-0 items-center justify-center no-underline"
+      >
         <ChevronLeft size={22} aria-hidden />
       </PlaceLink>
       <p className="min-w-0 truncate">

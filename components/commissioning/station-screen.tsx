@@ -22,10 +22,12 @@ import { WaitingEntry } from './waiting-entry';
 export function StationScreen({ commissioning, station }: { commissioning: Commissioning; station: Station }) {
   const { body, base, round, kept, keptState, isEntryOpen } = commissioning;
   const entry = useEntry(commissioning, station);
-  const [message, setMessage] = useState<string | null>(null);
+  const [refused, setRefused] = useState<{ message: string; typed: string } | null>(null);
   const [asked, setAsked] = useState<{ reading: RecordReading; questions: Question[] } | null>(null);
   const { before, next } = neighbours(body.stations, station);
   const ofStation = body.readings.filter(({ stationId }) => stationId === station.id).toReversed();
+  // Why it could not be kept is told until something is changed.
+  const typed = JSON.stringify([entry.typed, entry.meter?.id]);
   const waiting = waitingAt(commissioning, station.id);
 
   const isBlank = useRef(entry.isBlank);
@@ -43,12 +45,15 @@ export function StationScreen({ commissioning, station }: { commissioning: Commi
     if (!goesOn) await sent;
     // Who has typed on or gone elsewhere while it was sent is not taken away.
     const isHere = window.location.pathname.endsWith(station.id) && (goesOn || isBlank.current);
-    if (isHere && (goesOn || !kept.state.entries.some((it) => it.reading.id === reading.id)))
-      goTo(next ? `${base}/stations/${next.id}` : base);
+    if (isHere && (goesOn || !kept.state.entries.some((it) => it.reading.id === reading.id))) {
+      if (next) goTo(`${base}/stations/${next.id}`);
+      else if (goesOn) goTo(base);
+      else window.location.assign(base);
+    }
   };
   const press = () => {
     const finished = entry.finish();
-    setMessage('message' in finished ? finished.message : null);
+    setRefused('message' in finished ? { message: finished.message, typed } : null);
     if ('message' in finished) return;
     if (finished.questions.length) setAsked(finished);
     else void keep(finished.reading);
@@ -95,8 +100,7 @@ export function StationScreen({ commissioning, station }: { commissioning: Commi
         </div>
         <EntryPad
           entry={isEntryOpen ? entry : null}
-          message={message}
-          isSending={keptState.isSending}
+          message={refused?.typed === typed ? refused.message : null}
           hasWaiting={waiting.length > 0}
           before={before && { tag: before.tag, path: `${base}/stations/${before.id}` }}
           next={next ? { tag: next.tag, path: `${base}/stations/${next.id}` } : null}

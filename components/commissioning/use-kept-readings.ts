@@ -6,7 +6,15 @@ import { commissioningQuery, recordReading, withReading } from '@/lib/client/com
 import { KeptReadings, type KeptState } from '@/lib/client/kept-readings';
 
 const TRY_AGAIN_AFTER_MS = 15_000;
-const nothingKept: KeptState = { entries: [], isSending: false, isOffline: false, isSignedOut: false, lastSentAt: null, isStored: true };
+const nothingKept: KeptState = {
+  entries: [],
+  isSending: false,
+  isOffline: false,
+  isSignedOut: false,
+  hasSent: false,
+  lastSentAt: null,
+  isStored: true,
+};
 /** While the page is made on the server there is no browser to keep anything in. */
 const noShelf = { getItem: () => null, setItem: () => undefined };
 

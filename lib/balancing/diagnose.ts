@@ -31,11 +31,21 @@ export function diagnose(fitted: FittedLoop): Diagnosis[] {
   const signature = loopSignature(fitted.document, fitted.rounds[fitted.rounds.length - 1]);
   const whole = wholeLoop(signature);
   const isMain = (fault: SuspectedFault) => fitted.document.links.some((link) => link.id === fault.link && link.kind !== 'terminal');
-  const explained = (fault: SuspectedFault) => whole !== null && (fault.cause === 'pump-off-curve' || (fault.cause === 'blocked' && isMain(fault)) || (fault.cause === 'wrong-reading' && !signature.terminals.has(fault.link)));
+  const explained = (fault: SuspectedFault) =>
+    whole !== null &&
+    (fault.cause === 'pump-off-curve' ||
+      (fault.cause === 'blocked' && isMain(fault)) ||
+      (fault.cause === 'wrong-reading' && !signature.terminals.has(fault.link)));
   return [
     ...(whole ? [whole] : []),
     ...fitted.faults.filter((fault) => !explained(fault)).map((fault) => ofFault(fitted, fault)),
-    ...fitted.readings.filter(isNegative).map(({ reading }) => ({ at: reading.link, evidence: `The reading is negative (${reading.value.toFixed(2)}).`, causes: listed(['hoses-swapped']) })),
+    ...fitted.readings
+      .filter(isNegative)
+      .map(({ reading }) => ({
+        at: reading.link,
+        evidence: `The reading is negative (${reading.value.toFixed(2)}).`,
+        causes: listed(['hoses-swapped']),
+      })),
   ];
 }
 
@@ -45,12 +55,24 @@ function wholeLoop({ middle, hasOneRatio, total, pumpHead, totalOverSum }: LoopS
   const head = pumpHead === null ? '' : `, the pump’s differential at ${percent(pumpHead)}`;
   const sum = total === null ? '' : `, the total at ${percent(total)}`;
   const evidence = `${share}${sum}${head}.`;
-  if (middle < NEXT_TO_NONE) return { at: null, evidence, causes: listed(pumpHead === null || pumpHead > 1 ? ['check-valve-stuck', 'main-strainer-blocked'] : ['pump-reversed-or-wrong-impeller', 'check-valve-stuck']) };
+  if (middle < NEXT_TO_NONE)
+    return {
+      at: null,
+      evidence,
+      causes: listed(
+        pumpHead === null || pumpHead > 1
+          ? ['check-valve-stuck', 'main-strainer-blocked']
+          : ['pump-reversed-or-wrong-impeller', 'check-valve-stuck'],
+      ),
+    };
   if (!hasOneRatio) return null;
-  if ((total !== null && total > HIGH && middle < LOW) || (totalOverSum !== null && totalOverSum > 1 + 2 * HEAD_OFF)) return { at: null, evidence, causes: listed(['bypass-open', 'reading-wrong']) };
-  if (pumpHead === null) return { at: null, evidence, causes: listed(['main-strainer-blocked', 'pump-reversed-or-wrong-impeller', 'bypass-open']) };
+  if ((total !== null && total > HIGH && middle < LOW) || (totalOverSum !== null && totalOverSum > 1 + 2 * HEAD_OFF))
+    return { at: null, evidence, causes: listed(['bypass-open', 'reading-wrong']) };
+  if (pumpHead === null)
+    return { at: null, evidence, causes: listed(['main-strainer-blocked', 'pump-reversed-or-wrong-impeller', 'bypass-open']) };
   if (pumpHead > 1 + HEAD_OFF) return { at: null, evidence, causes: listed(['main-strainer-blocked', 'check-valve-stuck']) };
-  if (pumpHead < 1 - HEAD_OFF && total !== null && total < LOW) return { at: null, evidence, causes: listed(['pump-reversed-or-wrong-impeller', 'pump-suction-starved']) };
+  if (pumpHead < 1 - HEAD_OFF && total !== null && total < LOW)
+    return { at: null, evidence, causes: listed(['pump-reversed-or-wrong-impeller', 'pump-suction-starved']) };
   // All a little low with the pump as it should be: what stands out elsewhere takes it.
   return null;
 }
@@ -62,23 +84,53 @@ function ofFault(fitted: FittedLoop, fault: SuspectedFault): Diagnosis {
       const isTerminal = fitted.document.links.some((each) => each.id === link && each.kind === 'terminal');
       const evidence = `The resistance there is ${factor.toFixed(1)} times the design’s.`;
       if (!isTerminal) return { at: link, evidence, causes: listed(['main-strainer-blocked', 'isolating-valve-partly-shut']) };
-      if (factor > SHUT_FACTOR) return { at: link, evidence: 'Next to no flow, while the others take more.', causes: listed(['isolating-valve-shut', 'air-lock', 'control-valve-not-open', 'strainer-or-coil-fouled']) };
-      return { at: link, evidence, causes: listed(['strainer-or-coil-fouled', 'control-valve-not-open', 'isolating-valve-partly-shut', 'air-lock', 'wrong-chart']) };
+      if (factor > SHUT_FACTOR)
+        return {
+          at: link,
+          evidence: 'Next to no flow, while the others take more.',
+          causes: listed(['isolating-valve-shut', 'air-lock', 'control-valve-not-open', 'strainer-or-coil-fouled']),
+        };
+      return {
+        at: link,
+        evidence,
+        causes: listed(['strainer-or-coil-fouled', 'control-valve-not-open', 'isolating-valve-partly-shut', 'air-lock', 'wrong-chart']),
+      };
     }
     case 'mis-set':
-      return { at: link, evidence: `Its readings fit a Kv ${factor.toFixed(2)} times that of the setting noted in round ${fault.round + 1}.`, causes: listed(['valve-not-as-noted', 'wrong-chart', 'reading-wrong']) };
+      return {
+        at: link,
+        evidence: `Its readings fit a Kv ${factor.toFixed(2)} times that of the setting noted in round ${fault.round + 1}.`,
+        causes: listed(['valve-not-as-noted', 'wrong-chart', 'reading-wrong']),
+      };
     case 'wrong-chart':
-      return { at: link, evidence: `Its readings fit a Kv ${factor.toFixed(2)} times the chart’s at every setting so far.`, causes: listed(['wrong-chart', 'valve-not-as-noted', 'strainer-or-coil-fouled']) };
+      return {
+        at: link,
+        evidence: `Its readings fit a Kv ${factor.toFixed(2)} times the chart’s at every setting so far.`,
+        causes: listed(['wrong-chart', 'valve-not-as-noted', 'strainer-or-coil-fouled']),
+      };
     case 'pump-off-curve':
-      return { at: link, evidence: `It raises ${factor.toFixed(2)} times the head of its curve.`, causes: listed(['pump-reversed-or-wrong-impeller', 'pump-suction-starved', 'reading-wrong']) };
+      return {
+        at: link,
+        evidence: `It raises ${factor.toFixed(2)} times the head of its curve.`,
+        causes: listed(['pump-reversed-or-wrong-impeller', 'pump-suction-starved', 'reading-wrong']),
+      };
     case 'wrong-reading': {
       const evidence = `The reading in round ${fault.round + 1} is ${factor.toFixed(2)} times what the rest of the loop leads to.`;
       if (factor < 0) return { at: link, evidence, causes: listed(['hoses-swapped', 'reading-wrong']) };
-      return { at: link, evidence, causes: listed(isUnitRatio(factor) ? ['unit-mixed-up', 'reading-wrong', 'valve-not-as-noted'] : ['reading-wrong', 'unit-mixed-up', 'valve-not-as-noted']) };
+      return {
+        at: link,
+        evidence,
+        causes: listed(
+          isUnitRatio(factor)
+            ? ['unit-mixed-up', 'reading-wrong', 'valve-not-as-noted']
+            : ['reading-wrong', 'unit-mixed-up', 'valve-not-as-noted'],
+        ),
+      };
     }
   }
 }
 
-const isNegative = ({ reading: { value, quantity, absolute = quantity === 'dropKpa' ? 0.1 : 0.001 } }: FittedReading) => value < -BELOW_ZERO * absolute;
+const isNegative = ({ reading: { value, quantity, absolute = quantity === 'dropKpa' ? 0.1 : 0.001 } }: FittedReading) =>
+  value < -BELOW_ZERO * absolute;
 const listed = (causes: CauseCode[]): PossibleCause[] => causes.map((cause) => ({ cause, ...nextChecks[cause] }));
 const percent = (ratio: number) => `${(100 * ratio).toFixed(0)} %`;

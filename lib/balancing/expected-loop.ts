@@ -40,7 +40,10 @@ export function expectCentred(document: NetworkDocument, settings: LoopSettings,
   for (let round = 0; round < CENTRING_ROUNDS && pumps.length; round++) {
     const off = meanOf(here.logRatios);
     if (Math.abs(off) < SPEED_STEP) break;
-    const speeds = pumps.map((pump) => [pump.id, toStep(Math.min((here.settings[pump.id] ?? pump.speed ?? 1) * Math.exp(-off), Math.max(1, pump.speed ?? 1)))] as const);
+    const speeds = pumps.map(
+      (pump) =>
+        [pump.id, toStep(Math.min((here.settings[pump.id] ?? pump.speed ?? 1) * Math.exp(-off), Math.max(1, pump.speed ?? 1)))] as const,
+    );
     if (speeds.every(([id, speed]) => here.settings[id] === speed)) break;
     here = expectLoop(document, { ...here.settings, ...Object.fromEntries(speeds) }, terminals);
   }
@@ -56,7 +59,10 @@ const TRIMMED = 0.2;
 export function meanOf(logRatios: Float64Array): number {
   if (!logRatios.length) return 0;
   const cut = Math.floor(TRIMMED * logRatios.length);
-  const kept = logRatios.slice().sort().subarray(cut, logRatios.length - cut);
+  const kept = logRatios
+    .slice()
+    .sort()
+    .subarray(cut, logRatios.length - cut);
   return kept.reduce((sum, each) => sum + each, 0) / kept.length;
 }
 

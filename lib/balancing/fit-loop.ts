@@ -61,13 +61,23 @@ export function fitLoop(document: NetworkDocument, rounds: ReadingRound[], prior
   let fit = mostLikely(model, deviations, noise, startValues(unknowns, deviations, before));
   const searchNow = () => new FaultSearch(document, rounds, unknowns, model, linearWithin(model, deviations, fit), deviations, noise);
   let search = searchNow();
+  let newest: Suspicion[] = [];
+  const dropped: Suspicion[] = [];
   for (let pass = 0; pass < MOST_PASSES; pass++) {
-    const gone = search.unlikely(accepted);
-    const found = gone.length ? [] : search.likely();
+    // A fault found last was weighed against all that is known; those before it may have stood in for it.
+    const gone = search.unlikely(accepted.filter((each) => !newest.includes(each)));
+    dropped.push(...gone);
+    const found = gone.length ? [] : search.likely(dropped);
     if (!found.length && !gone.length) break;
     accepted = [...accepted.filter((each) => !gone.includes(each)), ...found];
+    newest = found;
     ({ deviations, noise } = spreadsWith(accepted, unknowns, model.placed.length));
-    fit = mostLikely(model, deviations, noise, fit.values.map((value, j) => (deviations[j] > 0 ? value : 0)));
+    fit = mostLikely(
+      model,
+      deviations,
+      noise,
+      fit.values.map((value, j) => (deviations[j] > 0 ? value : 0)),
+    );
     search = searchNow();
   }
 
@@ -84,7 +94,19 @@ export function fitLoop(document: NetworkDocument, rounds: ReadingRound[], prior
   });
   const active = activeUnknowns(deviations);
   const posterior = new Gaussian(activeColumns(fit.rows, deviations, active), noise);
-  return { document, rounds, unknowns, values: fit.values, deviations, readings, faults, accepted, converged: fit.converged, active, posterior };
+  return {
+    document,
+    rounds,
+    unknowns,
+    values: fit.values,
+    deviations,
+    readings,
+    faults,
+    accepted,
+    converged: fit.converged,
+    active,
+    posterior,
+  };
 }
 
 /** Prior deviations and variances of the readings, widened where a fault is suspected. */

@@ -37,7 +37,16 @@ export function loopHierarchy(document: NetworkDocument): LoopHierarchy {
     way.forEach((id, distance) => {
       const kind = kindOf.get(id);
       if (kind !== 'balancingValve' && kind !== 'pump') return;
-      const station = stations.get(id) ?? { link: id, kind: kind === 'pump' ? 'pump' : 'valve', terminals: [], designFlowLs: 0, distance: Infinity, behind: [terminal.id, ...way.slice(0, distance)], parent: null, members: [] };
+      const station = stations.get(id) ?? {
+        link: id,
+        kind: kind === 'pump' ? 'pump' : 'valve',
+        terminals: [],
+        designFlowLs: 0,
+        distance: Infinity,
+        behind: [terminal.id, ...way.slice(0, distance)],
+        parent: null,
+        members: [],
+      };
       stations.set(id, station);
       station.terminals.push(terminal.id);
       station.designFlowLs += terminal.designFlowLs;
@@ -46,7 +55,9 @@ export function loopHierarchy(document: NetworkDocument): LoopHierarchy {
   }
 
   // Of two valves in series for the same terminals the one nearer to the pump is above.
-  const widest = [...stations.values()].sort((a, b) => b.terminals.length - a.terminals.length || Number(b.kind === 'pump') - Number(a.kind === 'pump') || a.distance - b.distance);
+  const widest = [...stations.values()].sort(
+    (a, b) => b.terminals.length - a.terminals.length || Number(b.kind === 'pump') - Number(a.kind === 'pump') || a.distance - b.distance,
+  );
   const lowest = new Map<string, Station>();
   const valveOf = new Map<string, string>();
   for (const station of widest) {
@@ -69,7 +80,10 @@ interface Step {
 
 /** Answers the links once around through a terminal, from it outwards to the pump on both sides. */
 function waysToPump(document: NetworkDocument): (terminal: string) => string[] {
-  const open = { ...document, links: document.links.map((link) => (link.kind === 'balancingValve' ? { ...link, setting: undefined } : link)) };
+  const open = {
+    ...document,
+    links: document.links.map((link) => (link.kind === 'balancingValve' ? { ...link, setting: undefined } : link)),
+  };
   const flows = solve(open).links;
   const back = new Map<string, Step>();
   const on = new Map<string, Step>();
@@ -101,7 +115,7 @@ function waysToPump(document: NetworkDocument): (terminal: string) => string[] {
 function follow(steps: Map<string, Step>, start: string): string[] {
   const way: string[] = [];
   const seen = new Set<string>();
-  for (let node = start; !seen.has(node); ) {
+  for (let node = start; !seen.has(node);) {
     seen.add(node);
     const step = steps.get(node);
     if (!step) break;

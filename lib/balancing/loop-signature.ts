@@ -37,7 +37,9 @@ export function loopSignature(document: NetworkDocument, round: ReadingRound): L
   const measured = (reading: LoopReading) => {
     const link = links.get(reading.link);
     if (reading.quantity === 'flowLs') return reading.value;
-    return link?.kind === 'balancingValve' ? flowThroughValveLs(kvAtSetting(link.kvTable, settingIn(round.settings, link)), reading.value, solved.fluid.densityKgM3) : null;
+    return link?.kind === 'balancingValve'
+      ? flowThroughValveLs(kvAtSetting(link.kvTable, settingIn(round.settings, link)), reading.value, solved.fluid.densityKgM3)
+      : null;
   };
   const terminals = new Map<string, number>();
   let sum = 0;
@@ -61,5 +63,13 @@ export function loopSignature(document: NetworkDocument, round: ReadingRound): L
   const middle = sorted.length ? sorted[sorted.length >> 1] : null;
   const alike = middle === null ? 0 : sorted.filter((ratio) => Math.abs(ratio / middle - 1) <= ONE_RATIO).length;
   const isWhole = terminals.size > 0 && terminals.size === (top?.terminals.length ?? -1);
-  return { terminals, total, pumpHead, totalOverSum: total !== null && isWhole && sum > 0 ? totalLs / sum : null, middle, hasOneRatio: sorted.length > 1 && alike >= BULK * sorted.length, pump };
+  return {
+    terminals,
+    total,
+    pumpHead,
+    totalOverSum: total !== null && isWhole && sum > 0 ? totalLs / sum : null,
+    middle,
+    hasOneRatio: sorted.length > 1 && alike >= BULK * sorted.length,
+    pump,
+  };
 }

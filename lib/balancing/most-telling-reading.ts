@@ -55,14 +55,24 @@ export function mostTellingReading(fitted: FittedLoop, limitPercent = 3): WhatIs
     const value = asFlow ? Math.abs(flowLs) : Math.abs(dropKpa);
     if (value < 1e-6 || total <= 0) return [];
     const quantity = asFlow ? 'flowLs' : 'dropKpa';
-    const scale = new ReadingScale({ link: link.id, quantity, value, meter: '', ...(asFlow ? { flowRelative: DIRECT_FLOW_RELATIVE } : {}) });
-    const along = direction(fitted, asFlow ? flowPerUnknown : dropPerUnknown, 1).map((each) => each * scale.slope(value) * Math.sign(asFlow ? flowLs : dropKpa));
+    const scale = new ReadingScale({
+      link: link.id,
+      quantity,
+      value,
+      meter: '',
+      ...(asFlow ? { flowRelative: DIRECT_FLOW_RELATIVE } : {}),
+    });
+    const along = direction(fitted, asFlow ? flowPerUnknown : dropPerUnknown, 1).map(
+      (each) => each * scale.slope(value) * Math.sign(asFlow ? flowLs : dropKpa),
+    );
     const seen = posterior.seen(along);
     const variance = Math.max(dot(along, along) - dot(seen, seen), 0);
     const taken = flows.reduce((sum, flow) => sum + (dot(flow.along, along) - dot(flow.seen, seen)) ** 2 / (variance + 1), 0);
     return [{ link: link.id, quantity, varianceReduction: taken / total, expected: value }];
   });
   readings.sort((a, b) => b.varianceReduction - a.varianceReduction);
-  const unknown = flows.map(({ link, variance }) => ({ link, spreadPercent: 100 * Math.sqrt(variance) })).filter((flow) => flow.spreadPercent > limitPercent);
+  const unknown = flows
+    .map(({ link, variance }) => ({ link, spreadPercent: 100 * Math.sqrt(variance) }))
+    .filter((flow) => flow.spreadPercent > limitPercent);
   return { terminals: unknown.sort((a, b) => b.spreadPercent - a.spreadPercent), readings: readings.slice(0, MOST_LISTED) };
 }

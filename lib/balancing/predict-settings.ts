@@ -50,18 +50,24 @@ export function predictSettings(fitted: FittedLoop, tolerance = 0.05): Predictio
   const blocked = new Set(fitted.faults.flatMap(({ cause, link }) => (cause === 'blocked' ? [link] : [])));
   const suspected = new Set(document.links.flatMap((link) => (link.kind === 'terminal' && blocked.has(link.id) ? [link.id] : [])));
   const balanced = balanceWithin(document, suspected);
-  const heldBack = [...balanced.reachable].filter(([, part]) => part < REACHED).map(([link, part]) => ({ link, reachablePercent: part < 0.01 ? 0 : 100 * part }));
+  const heldBack = [...balanced.reachable]
+    .filter(([, part]) => part < REACHED)
+    .map(([link, part]) => ({ link, reachablePercent: part < 0.01 ? 0 : 100 * part }));
   const excepted = new Set(heldBack.map(({ link }) => link));
-  const terminals = document.links.flatMap((link, at) => (link.kind === 'terminal' && link.closed !== true && !excepted.has(link.id) ? [at] : []));
+  const terminals = document.links.flatMap((link, at) =>
+    link.kind === 'terminal' && link.closed !== true && !excepted.has(link.id) ? [at] : [],
+  );
 
   const asIs = expectCentred(document, stands, terminals);
   const spreads = ratioSpreads(fitted, asIs, terminals);
-  const anew = () => touchUp(document, expectCentred(document, { ...stands, ...balanced.settings }, terminals), terminals, spreads, tolerance);
+  const anew = () =>
+    touchUp(document, expectCentred(document, { ...stands, ...balanced.settings }, terminals), terminals, spreads, tolerance);
   let expected: ExpectedLoop;
   if (expectedOutside(asIs.logRatios, spreads, tolerance) > ANEW * terminals.length) {
     expected = anew();
   } else {
-    const price = (loop: ExpectedLoop) => expectedOutside(loop.logRatios, spreads, tolerance) + WORTH_A_CHANGE * changes(document, stands, loop.settings);
+    const price = (loop: ExpectedLoop) =>
+      expectedOutside(loop.logRatios, spreads, tolerance) + WORTH_A_CHANGE * changes(document, stands, loop.settings);
     expected = [touchUp(document, asIs, terminals, spreads, tolerance), anew()].reduce((a, b) => (price(b) < price(a) ? b : a));
   }
   return {
@@ -77,7 +83,12 @@ function ratioSpreads(fitted: FittedLoop, expected: ExpectedLoop, terminals: num
   return Float64Array.from(answers, ({ flowLs, flowPerUnknown }) => spreadOf(fitted, direction(fitted, flowPerUnknown, flowLs)));
 }
 
-function predictedSettings(fitted: FittedLoop, document: NetworkDocument, expected: ExpectedLoop, stands: LoopSettings): PredictedSetting[] {
+function predictedSettings(
+  fitted: FittedLoop,
+  document: NetworkDocument,
+  expected: ExpectedLoop,
+  stands: LoopSettings,
+): PredictedSetting[] {
   const watched = document.links.flatMap((link, at) => (link.kind === 'balancingValve' || link.kind === 'pump' ? [at] : []));
   const answers = answersAt(fitted, expected, watched);
   const misSet = misSetNow(fitted);
@@ -108,7 +119,9 @@ function predictedSettings(fitted: FittedLoop, document: NetworkDocument, expect
 
 /** Valves that do not seem to stand where they were noted: they are set again even to the same setting. */
 function misSetNow({ accepted, unknowns, rounds }: FittedLoop): Set<string> {
-  const acting = accepted.filter(({ cause, unknown }) => cause === 'mis-set' && unknown !== null && unknowns[unknown].rounds[rounds.length - 1]);
+  const acting = accepted.filter(
+    ({ cause, unknown }) => cause === 'mis-set' && unknown !== null && unknowns[unknown].rounds[rounds.length - 1],
+  );
   return new Set(acting.map(({ unknown }) => unknowns[unknown!].id));
 }
 

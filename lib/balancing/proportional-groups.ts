@@ -39,7 +39,9 @@ export function measureGroup(station: Station, loop: MeasuredLoop, excused: Read
   const since = lastSetBelow(members, loop);
   const flowsOf = (member: Station) => loop.flows.get(member.link) ?? [];
   const stands = flowsOf(members[0]).map((flow) => flow.stand);
-  const base = stands.reverse().find((stand) => stand >= since && members.every((member) => flowsOf(member).some((flow) => flow.stand === stand)));
+  const base = stands
+    .reverse()
+    .find((stand) => stand >= since && members.every((member) => flowsOf(member).some((flow) => flow.stand === stand)));
   if (base === undefined) {
     const unread = members.find((member) => !flowsOf(member).some((flow) => flow.stand === loop.stand)) ?? null;
     return { ...none, unread };
@@ -84,7 +86,9 @@ export function measureGroup(station: Station, loop: MeasuredLoop, excused: Read
 /** First stand since changes below at which all members were read: where the reference is chosen. */
 function firstCommonStand(members: Station[], loop: MeasuredLoop, since: number): number | undefined {
   const flows = members.map((member) => loop.flows.get(member.link) ?? []);
-  return flows[0].map((flow) => flow.stand).find((stand) => stand >= since && flows.every((list) => list.some((flow) => flow.stand === stand)));
+  return flows[0]
+    .map((flow) => flow.stand)
+    .find((stand) => stand >= since && flows.every((list) => list.some((flow) => flow.stand === stand)));
 }
 
 /** Stand after the last change of anything below the members: it changes their ratios for good. */

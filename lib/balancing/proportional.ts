@@ -20,7 +20,17 @@ export interface ProportionalState {
 
 export type ProportionalStep =
   | { kind: 'read'; link: string; why: string }
-  | { kind: 'set-valve'; link: string; reference: string | null; ratioPercent: number; targetRatioPercent: number; targetFlowLs: number; setting: number; targetDropKpa: number; why: string }
+  | {
+      kind: 'set-valve';
+      link: string;
+      reference: string | null;
+      ratioPercent: number;
+      targetRatioPercent: number;
+      targetFlowLs: number;
+      setting: number;
+      targetDropKpa: number;
+      why: string;
+    }
   | { kind: 'set-pump'; link: string; speed: number; ratioPercent: number; why: string }
   | { kind: 'done'; why: string };
 
@@ -117,7 +127,14 @@ class Procedure {
     if (main && firstMain && pump && !loop.sets.size) {
       const ratio = firstMain.flowLs / main.designFlowLs;
       const speed = (this.speedNow(loop, pump) * START_TOTAL) / ratio;
-      if (ratio > START_TOTAL) return { kind: 'set-pump', link: pump, speed, ratioPercent: 100 * ratio, why: `The total is ${percent(ratio)} of design: slow the pump to about 110 %.` };
+      if (ratio > START_TOTAL)
+        return {
+          kind: 'set-pump',
+          link: pump,
+          speed,
+          ratioPercent: 100 * ratio,
+          why: `The total is ${percent(ratio)} of design: slow the pump to about 110 %.`,
+        };
     }
     const grouped = new Set(groups.flatMap((group) => group.members.map((member) => member.link)));
     const unread = [...hierarchy.stations.values()].find((station) => grouped.has(station.link) && !loop.flows.has(station.link));
@@ -139,10 +156,23 @@ class Procedure {
   private groupStep(loop: MeasuredLoop): ProportionalStep {
     const group = this.openGroup(loop);
     if (group === 'all-done') return this.pumpStep(loop);
-    if (group.unread) return { kind: 'read', link: group.unread.link, why: `Below ${group.station.link} all is done: read its members again before they are compared.` };
+    if (group.unread)
+      return {
+        kind: 'read',
+        link: group.unread.link,
+        why: `Below ${group.station.link} all is done: read its members again before they are compared.`,
+      };
     const { station: member, unread, pairs } = group.next!;
     const reference = group.reference!;
-    if (unread) return { kind: 'read', link: unread.link, why: unread === reference ? `${reference.link} is the reference; it moves with every change, so it is read again.` : `Read what ${member.link} now takes.` };
+    if (unread)
+      return {
+        kind: 'read',
+        link: unread.link,
+        why:
+          unread === reference
+            ? `${reference.link} is the reference; it moves with every change, so it is read again.`
+            : `Read what ${member.link} now takes.`,
+      };
     const { flowLs } = loop.flows.get(reference.link)!.at(-1)!;
     const { quotient } = pairs[pairs.length - 1];
     const target = flowLs / reference.designFlowLs;
@@ -197,12 +227,21 @@ class Procedure {
   private targetFor(loop: MeasuredLoop, station: Station, pairs: { kv: number; quotient: number }[]) {
     const valve = this.design.valves.get(station.link)!;
     const flow = loop.flows.get(station.link)!.at(-1)!;
-    const rest = station.behind.reduce((sum, link) => sum + (this.design.drops.get(link) ?? 0), 0) * (flow.flowLs / station.designFlowLs) ** 2;
+    const rest =
+      station.behind.reduce((sum, link) => sum + (this.design.drops.get(link) ?? 0), 0) * (flow.flowLs / station.designFlowLs) ** 2;
     const byRest = kvByRest(flow.kv, flow.dropKpa, rest, 1 / pairs[pairs.length - 1].quotient);
     return settingForKv(valve, kvBySecant(pairs) ?? byRest);
   }
 
-  private setStep(loop: MeasuredLoop, station: Station, reference: string | null, ratio: number, target: number, pairs: { kv: number; quotient: number }[], why: string): ProportionalStep {
+  private setStep(
+    loop: MeasuredLoop,
+    station: Station,
+    reference: string | null,
+    ratio: number,
+    target: number,
+    pairs: { kv: number; quotient: number }[],
+    why: string,
+  ): ProportionalStep {
     const { setting, kv } = this.targetFor(loop, station, pairs);
     const targetFlowLs = target * station.designFlowLs;
     return {
@@ -227,7 +266,13 @@ class Procedure {
     const ratios = stations.map((station) => ratioOf(station, loop.flows.get(station.link)!.at(-1)!, this.excused));
     const ratio = ratios.reduce((sum, each) => sum + each, 0) / ratios.length;
     const speed = Math.min(this.speedNow(loop, pump) / ratio, Math.max(1, this.speedNow(loop, pump)));
-    return { kind: 'set-pump', link: pump, speed, ratioPercent: 100 * ratio, why: `All ratios are equal and the total is ${percent(ratio)} of design: bring it to 100 % with the pump.` };
+    return {
+      kind: 'set-pump',
+      link: pump,
+      speed,
+      ratioPercent: 100 * ratio,
+      why: `All ratios are equal and the total is ${percent(ratio)} of design: bring it to 100 % with the pump.`,
+    };
   }
 
   /** Every terminal once more; what is still outside tolerance is set to its design flow by itself. */
@@ -240,7 +285,12 @@ class Procedure {
     for (const leaf of leaves) {
       const flows = after(leaf);
       const sets = (loop.sets.get(leaf.link) ?? []).filter((event) => event > trimmed);
-      if (!flows.length || (sets.at(-1) ?? -1) > flows.at(-1)!.event) return { kind: 'read', link: leaf.link, why: flows.length ? 'Read what it now takes.' : 'The last scan: every terminal as it is left.' };
+      if (!flows.length || (sets.at(-1) ?? -1) > flows.at(-1)!.event)
+        return {
+          kind: 'read',
+          link: leaf.link,
+          why: flows.length ? 'Read what it now takes.' : 'The last scan: every terminal as it is left.',
+        };
     }
     for (const leaf of leaves) {
       const flows = after(leaf);
@@ -248,7 +298,15 @@ class Procedure {
       const pairs = flows.map((flow) => ({ kv: flow.kv, quotient: flow.flowLs / leaf.designFlowLs }));
       const ratio = pairs[pairs.length - 1].quotient;
       if (isAside(leaf) || sets.length >= MOST_TRIMS || Math.abs(ratio - 1) <= this.tolerance || ratio <= 0) continue;
-      const step = this.setStep(loop, leaf, null, ratio, 1, pairs, `${leaf.link} is at ${percent(ratio)} of design after the last scan: set it to 100 %.`);
+      const step = this.setStep(
+        loop,
+        leaf,
+        null,
+        ratio,
+        1,
+        pairs,
+        `${leaf.link} is at ${percent(ratio)} of design after the last scan: set it to 100 %.`,
+      );
       if (step.kind === 'set-valve' && step.setting !== settingIn(loop.settings, this.design.valves.get(leaf.link)!)) return step;
     }
     return { kind: 'done', why: 'The last scan is complete: every terminal that can be is within tolerance.' };

@@ -29,9 +29,16 @@ export function balanceWithin(document: NetworkDocument, suspected: ReadonlySet<
 }
 
 /** The part of design flow at which a suspected circuit, its valve fully open, costs what the index circuit of the others does. */
-function headroom(document: NetworkDocument, result: ReturnType<typeof balance>, suspected: ReadonlySet<string>, before: Map<string, number>): Map<string, number> {
+function headroom(
+  document: NetworkDocument,
+  result: ReturnType<typeof balance>,
+  suspected: ReadonlySet<string>,
+  before: Map<string, number>,
+): Map<string, number> {
   const cost = new Map(result.terminals.map((terminal) => [terminal.id, terminal.circuitDropKpa ?? 0]));
-  const most = Math.max(...result.terminals.filter((terminal) => !suspected.has(terminal.id)).map((terminal) => terminal.circuitDropKpa ?? 0));
+  const most = Math.max(
+    ...result.terminals.filter((terminal) => !suspected.has(terminal.id)).map((terminal) => terminal.circuitDropKpa ?? 0),
+  );
   return new Map(
     document.links.flatMap((link): [string, number][] => {
       if (!suspected.has(link.id) || link.kind !== 'terminal') return [];

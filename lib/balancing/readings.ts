@@ -39,4 +39,5 @@ function linkAt(link: NetworkLink, setting: number): NetworkLink {
 }
 
 /** Setting at which a balancing valve stands, turns; fully open where nothing names it. */
-export const settingIn = (settings: LoopSettings, link: BalancingValveLink) => settings[link.id] ?? link.setting ?? largestSetting(link.kvTable);
+export const settingIn = (settings: LoopSettings, link: BalancingValveLink) =>
+  settings[link.id] ?? link.setting ?? largestSetting(link.kvTable);

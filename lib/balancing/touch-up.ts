@@ -29,8 +29,16 @@ export function expectedOutside(logRatios: Float64Array, spreads: Float64Array, 
  * The fewest further changes: one valve after another, always the one that takes most terminals back into tolerance, while that is worth a
  * walk. Pump speed is changed freely. Returns the loop as expected afterwards.
  */
-export function touchUp(document: NetworkDocument, start: ExpectedLoop, terminals: number[], spreads: Float64Array, tolerance: number): ExpectedLoop {
-  const valves = document.links.flatMap((link, at) => (link.kind === 'balancingValve' && !link.locked && link.closed !== true ? [{ link, at }] : []));
+export function touchUp(
+  document: NetworkDocument,
+  start: ExpectedLoop,
+  terminals: number[],
+  spreads: Float64Array,
+  tolerance: number,
+): ExpectedLoop {
+  const valves = document.links.flatMap((link, at) =>
+    link.kind === 'balancingValve' && !link.locked && link.closed !== true ? [{ link, at }] : [],
+  );
   const unknowns = document.links.flatMap((link, at): Unknown[] => {
     if (link.kind === 'pump') return [{ kind: 'pump', id: link.id, links: [at], rounds: [], deviation: 1 }];
     return valves.some((valve) => valve.at === at) ? [{ kind: 'chart', id: link.id, links: [at], rounds: [], deviation: 1 }] : [];
@@ -69,7 +77,15 @@ export function touchUp(document: NetworkDocument, start: ExpectedLoop, terminal
 }
 
 /** The setting of one valve that brings the ratios nearest to 1, and the ratios then, on straight lines and with the pump put right. */
-function bestMove(valve: BalancingValveLink, setting: number, column: Float64Array, pumps: Float64Array[], logRatios: Float64Array, spreads: Float64Array, tolerance: number): Move | null {
+function bestMove(
+  valve: BalancingValveLink,
+  setting: number,
+  column: Float64Array,
+  pumps: Float64Array[],
+  logRatios: Float64Array,
+  spreads: Float64Array,
+  tolerance: number,
+): Move | null {
   let along = 0;
   let square = 0;
   for (let t = 0; t < column.length; t++) {
@@ -80,7 +96,10 @@ function bestMove(valve: BalancingValveLink, setting: number, column: Float64Arr
   const { kvTable, settingStep = USUAL_STEP } = valve;
   const kv = kvAtSetting(kvTable, setting);
   const wanted = settingAtKv(kvTable, kv * Math.exp(-along / square));
-  const stands = Math.min(Math.max(Number((Math.round(wanted / settingStep) * settingStep).toPrecision(12)), kvTable[0].setting), largestSetting(kvTable));
+  const stands = Math.min(
+    Math.max(Number((Math.round(wanted / settingStep) * settingStep).toPrecision(12)), kvTable[0].setting),
+    largestSetting(kvTable),
+  );
   if (stands === setting) return null;
   const moved = Math.log(kvAtSetting(kvTable, stands) / kv);
   let next: Float64Array = logRatios.map((each, t) => each + moved * column[t]);

@@ -19,7 +19,9 @@ export interface KeptState {
   isOffline: boolean;
   /** Whether the last try was refused because the session has ended. */
   isSignedOut: boolean;
-  /** When the server last acknowledged an entry from here, ISO. */
+  /** Whether an entry was acknowledged since this page came. */
+  hasSent: boolean;
+  /** When the server last acknowledged an entry from this tablet, ISO. */
   lastSentAt: string | null;
   /** False where this browser has no room: then the entries live only as long as the page. */
   isStored: boolean;
@@ -46,7 +48,15 @@ export class KeptReadings {
 
   constructor(options: Options) {
     this.options = options;
-    this.state = { entries: this.read(), isSending: false, isOffline: false, isSignedOut: false, lastSentAt: null, isStored: true };
+    this.state = {
+      entries: this.read(),
+      isSending: false,
+      isOffline: false,
+      isSignedOut: false,
+      hasSent: false,
+      lastSentAt: options.shelf.getItem(`${options.key}.sent`),
+      isStored: true,
+    };
   }
 
   keep(entry: Omit<KeptReading, 'refusal'>): void {
@@ -83,7 +93,9 @@ export class KeptReadings {
       try {
         const stored = await this.options.send(next.roundId, next.reading);
         this.release(stored.id);
-        this.tell({ isOffline: false, isSignedOut: false, lastSentAt: new Date().toISOString() });
+        const lastSentAt = new Date().toISOString();
+        this.tell({ isOffline: false, isSignedOut: false, hasSent: true, lastSentAt });
+        this.write(`${this.options.key}.sent`, lastSentAt);
         this.options.onAcknowledged(stored);
       } catch (error) {
         if (!(error instanceof RequestError)) throw error;
@@ -119,8 +131,12 @@ export class KeptReadings {
   }
 
   private store(entries: KeptReading[]): boolean {
+    return this.write(this.options.key, JSON.stringify(entries));
+  }
+
+  private write(key: string, text: string): boolean {
     try {
-      this.options.shelf.setItem(this.options.key, JSON.stringify(entries));
+      this.options.shelf.setItem(key, text);
       return true;
     } catch (error) {
       if (error instanceof DOMException) return false;

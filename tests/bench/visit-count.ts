@@ -42,7 +42,15 @@ export interface VisitRow {
 }
 
 /** What a visit came to. `named` are the places (valves) that the procedure told the technician to look into. */
-export function visitRow(procedure: VisitRow['procedure'], document: NetworkDocument, seed: number, site: VirtualSite, counted: CountedSite, named: Set<string>, seconds: number): VisitRow {
+export function visitRow(
+  procedure: VisitRow['procedure'],
+  document: NetworkDocument,
+  seed: number,
+  site: VirtualSite,
+  counted: CountedSite,
+  named: Set<string>,
+  seconds: number,
+): VisitRow {
   const valves = document.links.filter((link) => link.kind === 'balancingValve').map((link) => link.id);
   const terminals = document.links.filter((link) => link.kind === 'terminal').map((link) => link.id);
   const ofTerminals = new Set(terminals.map(valveOf));

@@ -8,7 +8,7 @@ import { CountedSite, type VisitRow, visitRow } from './visit-count';
 
 const procedures = { proportional: visitProportionally, predicted: visitAsPredicted };
 
-/** Numbers after the suite's name choose the seeds and sizes, so that a look costs little: VISITS_SEEDS=3 VISITS_TERMINALS=12,60. */
+/** VISITS_SEEDS=3 VISITS_TERMINALS=12,60 makes it a quick look; without them it is the whole of it. */
 const seedCount = Number(process.env.VISITS_SEEDS ?? 20);
 const sizes = (process.env.VISITS_TERMINALS ?? Object.keys(layouts).join(',')).split(',').map(Number);
 
@@ -20,17 +20,37 @@ export async function visitsSuite(): Promise<Suite> {
   const rows: VisitRow[] = [];
   for (const terminals of sizes) {
     for (let seed = 1; seed <= seedCount; seed++) {
-      for (const [procedure, visit] of Object.entries(procedures)) rows.push(visitBuilding(procedure as VisitRow['procedure'], visit, terminals, seed));
+      for (const [procedure, visit] of Object.entries(procedures))
+        rows.push(visitBuilding(procedure as VisitRow['procedure'], visit, terminals, seed));
       process.stderr.write(`visits: ${terminals} terminals, seed ${seed}\n`);
     }
   }
-  const means = sizes.flatMap((terminals) => Object.keys(procedures).map((procedure) => meanOf(rows.filter((row) => row.terminals === terminals && row.procedure === procedure))));
+  const means = sizes.flatMap((terminals) =>
+    Object.keys(procedures).map((procedure) => meanOf(rows.filter((row) => row.terminals === terminals && row.procedure === procedure))),
+  );
   const overall = Object.keys(procedures).map((procedure) => meanOf(rows.filter((row) => row.procedure === procedure)));
-  const worse = rows.filter((row) => row.procedure === 'predicted' && row.within5 < rows.find((other) => other.procedure === 'proportional' && other.terminals === row.terminals && other.seed === row.seed)!.within5);
-  return { suite: 'visits', rows: rows.map((row) => ({ ...row })), means, overall, seedsWorseThanProportional: worse.map(({ terminals, seed }) => ({ terminals, seed })), site: { ...statedSite } };
+  const worse = rows.filter(
+    (row) =>
+      row.procedure === 'predicted' &&
+      row.within5 <
+        rows.find((other) => other.procedure === 'proportional' && other.terminals === row.terminals && other.seed === row.seed)!.within5,
+  );
+  return {
+    suite: 'visits',
+    rows: rows.map((row) => ({ ...row })),
+    means,
+    overall,
+    seedsWorseThanProportional: worse.map(({ terminals, seed }) => ({ terminals, seed })),
+    site: { ...statedSite },
+  };
 }
 
-export function visitBuilding(procedure: VisitRow['procedure'], visit: (typeof procedures)['predicted'], terminals: number, seed: number): VisitRow {
+export function visitBuilding(
+  procedure: VisitRow['procedure'],
+  visit: (typeof procedures)['predicted'],
+  terminals: number,
+  seed: number,
+): VisitRow {
   const random = new SeededRandom(1000 * terminals + seed);
   const document = designBuilding(terminals, random);
   const site = new VirtualSite(document, random);

@@ -5,7 +5,11 @@ import { genericValves } from '@/lib/network/valve-families';
 import type { SeededRandom } from './seeded-random';
 
 /** Risers, floors on each and terminals on each floor. */
-export const layouts: Record<number, [risers: number, floors: number, terminals: number]> = { 12: [1, 2, 6], 60: [2, 3, 10], 200: [4, 5, 10] };
+export const layouts: Record<number, [risers: number, floors: number, terminals: number]> = {
+  12: [1, 2, 6],
+  60: [2, 3, 10],
+  200: [4, 5, 10],
+};
 
 const BORES_MM = [15.8, 20.96, 26.64, 35.08, 40.94, 52.48, 62.68, 77.92, 102.26, 128.2, 154.08, 202.74];
 const MOST_PA_PER_M = 250;
@@ -39,7 +43,13 @@ export function designBuilding(terminals: number, random: SeededRandom): Network
   const sum = (first: number, last: number) => flows.slice(first, last).reduce((total, each) => total + each, 0);
 
   const total = sum(0, terminals);
-  links.push({ id: 'PU', kind: 'pump', from: 'suction', to: 'discharge', curve: [0, 0.5, 1, 1.4].map((part) => ({ flowLs: part * total, headM: 60 })) });
+  links.push({
+    id: 'PU',
+    kind: 'pump',
+    from: 'suction',
+    to: 'discharge',
+    curve: [0, 0.5, 1, 1.4].map((part) => ({ flowLs: part * total, headM: 60 })),
+  });
   links.push({ id: 'CH', kind: 'resistance', from: 'discharge', to: 'S', designFlowLs: total, designDropKpa: 40 });
   valve('main', 'R', 'suction', total);
   let [supply, back] = ['S', 'R'];
@@ -74,7 +84,14 @@ export function designBuilding(terminals: number, random: SeededRandom): Network
   function unit(place: string, designFlowLs: number) {
     const [from, to] = [`s${place}`, `r${place}`];
     links.push({ id: `strainer${place}`, kind: 'resistance', from, to: `a${place}`, designFlowLs, designDropKpa: 3 });
-    links.push({ id: `T${place}`, kind: 'terminal', from: `a${place}`, to: `b${place}`, designFlowLs, designDropKpa: Math.round(random.between(15, 35)) });
+    links.push({
+      id: `T${place}`,
+      kind: 'terminal',
+      from: `a${place}`,
+      to: `b${place}`,
+      designFlowLs,
+      designDropKpa: Math.round(random.between(15, 35)),
+    });
     const wanted = (36 * designFlowLs) / Math.sqrt(25);
     const kvs = [0.63, 1, 1.6, 2.5, 4, 6.3].find((each) => each >= wanted) ?? 6.3;
     links.push({ id: `control${place}`, kind: 'controlValve', from: `b${place}`, to: `c${place}`, kvs });
@@ -82,7 +99,13 @@ export function designBuilding(terminals: number, random: SeededRandom): Network
   }
 
   const ids = [...new Set(links.flatMap((link) => [link.from, link.to]))];
-  const document: NetworkDocument = { format: 'network/1', fluid: { medium: 'water', temperatureC: 7 }, reference: { node: 'suction', gaugePressureKpa: 150 }, nodes: ids.map((id) => ({ id })), links };
+  const document: NetworkDocument = {
+    format: 'network/1',
+    fluid: { medium: 'water', temperatureC: 7 },
+    reference: { node: 'suction', gaugePressureKpa: 150 },
+    nodes: ids.map((id) => ({ id })),
+    links,
+  };
   const { requiredHeadM } = balance(document).pumps[0];
   const curve = [0, 0.5, 1, 1.4].map((part) => ({ flowLs: part * total, headM: PUMP_MARGIN * requiredHeadM * (1.2 - 0.2 * part ** 2) }));
   return { ...document, links: links.map((link) => (link.kind === 'pump' ? { ...link, curve } : link)) };

@@ -19,7 +19,16 @@ export interface SiteModel {
   hasFaults: boolean;
 }
 
-export const statedSite: SiteModel = { branch: 0.3, main: 0.15, meterRandom: 0.015, meterBias: 0.01, meterAbsoluteKpa: 0.1, settingStep: 0.1, speedStep: 0.002, hasFaults: true };
+export const statedSite: SiteModel = {
+  branch: 0.3,
+  main: 0.15,
+  meterRandom: 0.015,
+  meterBias: 0.01,
+  meterAbsoluteKpa: 0.1,
+  settingStep: 0.1,
+  speedStep: 0.002,
+  hasFaults: true,
+};
 
 export type SiteFault = { cause: 'blocked' | 'shut' | 'mis-set' | 'wrong-chart'; terminal: string; valve: string };
 
@@ -90,7 +99,9 @@ export class VirtualSite {
     const { meterRandom, meterAbsoluteKpa } = this.model;
     const drop = Math.abs(this.solved().links.find((link) => link.id === station)!.dropKpa);
     const isThere = Math.abs(this.flowAt(station)) > 0;
-    const seen = (isThere ? drop : 0) * ((1 + this.bias[meter]) * (1 + meterRandom * this.random.normal())) ** 2 + meterAbsoluteKpa * this.random.normal();
+    const seen =
+      (isThere ? drop : 0) * ((1 + this.bias[meter]) * (1 + meterRandom * this.random.normal())) ** 2 +
+      meterAbsoluteKpa * this.random.normal();
     return { link: station, quantity: 'dropKpa', value: seen, meter, flowRelative: meterRandom, absolute: meterAbsoluteKpa };
   }
 
@@ -112,7 +123,9 @@ export class VirtualSite {
   /** Ratio of true flow to design of each terminal by id: what the judge of a method may see, never the method. */
   trueRatios(): Map<string, number> {
     const flows = new Map(this.solved().links.map((link) => [link.id, link.flowLs]));
-    return new Map(this.design.links.flatMap((link) => (link.kind === 'terminal' ? [[link.id, flows.get(link.id)! / link.designFlowLs] as const] : [])));
+    return new Map(
+      this.design.links.flatMap((link) => (link.kind === 'terminal' ? [[link.id, flows.get(link.id)! / link.designFlowLs] as const] : [])),
+    );
   }
 
   private solution: ReturnType<typeof solvePrepared> | null = null;

@@ -2,7 +2,12 @@ import type { NetworkDocument, NetworkLink } from '@/lib/hydraulics/types';
 import type { Unknown } from './unknowns';
 
 /** The document with the fitted resistances, charts and pump heads in it, as it was in one round, or as a valve newly set would stand (`round` null). */
-export function fittedDocument(document: NetworkDocument, unknowns: Unknown[], values: ArrayLike<number>, round: number | null): NetworkDocument {
+export function fittedDocument(
+  document: NetworkDocument,
+  unknowns: Unknown[],
+  values: ArrayLike<number>,
+  round: number | null,
+): NetworkDocument {
   const logFactor = new Float64Array(document.links.length);
   unknowns.forEach((unknown, j) => {
     if (round === null ? unknown.kind === 'setting' : !unknown.rounds[round]) return;
@@ -19,7 +24,9 @@ export function scaled(link: NetworkLink, factor: number): NetworkLink {
     case 'terminal':
       return { ...link, designDropKpa: link.designDropKpa * factor };
     case 'resistance':
-      return link.kv === undefined ? { ...link, designDropKpa: link.designDropKpa! * factor } : { ...link, kv: link.kv / Math.sqrt(factor) };
+      return link.kv === undefined
+        ? { ...link, designDropKpa: link.designDropKpa! * factor }
+        : { ...link, kv: link.kv / Math.sqrt(factor) };
     case 'controlValve':
       return { ...link, kvs: link.kvs / Math.sqrt(factor) };
     case 'checkValve':

@@ -62,7 +62,11 @@ export function mostLikely(model: ReadingModel, deviations: ArrayLike<number>, n
   for (let step = 0; step < MOST_STEPS && !converged; step++) {
     const active = activeUnknowns(deviations);
     const columns = activeColumns(rows, deviations, active);
-    const pull = transposeTimes(columns, here.misfit.map((each, m) => each / noise[m]), active.length);
+    const pull = transposeTimes(
+      columns,
+      here.misfit.map((each, m) => each / noise[m]),
+      active.length,
+    );
     const downhill = pull.map((each, k) => each - here.values[active[k]] / deviations[active[k]]);
     const gram = gramOf(columns);
     for (;;) {
@@ -85,7 +89,14 @@ export function mostLikely(model: ReadingModel, deviations: ArrayLike<number>, n
     }
     rows = model.jacobian(here.solved);
   }
-  return { values: here.values, cost: here.cost, converged: converged && here.solved.closed, shown: here.solved.shown, misfit: here.misfit, rows };
+  return {
+    values: here.values,
+    cost: here.cost,
+    converged: converged && here.solved.closed,
+    shown: here.solved.shown,
+    misfit: here.misfit,
+    rows,
+  };
 }
 
 const clamp = (value: number) => Math.min(Math.max(value, -FURTHEST), FURTHEST);

@@ -83,7 +83,9 @@ export class ReadingModel {
       const found = linkAnswers(network, solutions[round], unknowns, (unknown) => unknown.rounds[round], watched);
       return new Map(watched.map((at, w) => [at, found[w]]));
     });
-    return placed.map((each, m) => readingRow(each, shown[m], answers[each.round].get(each.at)!, this.sense(each.round, each.at), this.meterOf));
+    return placed.map((each, m) =>
+      readingRow(each, shown[m], answers[each.round].get(each.at)!, this.sense(each.round, each.at), this.meterOf),
+    );
   }
 
   /** A pump's drop is read as what it raises. */
@@ -93,7 +95,13 @@ export class ReadingModel {
 }
 
 /** Row of one reading: its link's answers, and its meter's bias once for a flow, twice for a drop. */
-export function readingRow({ reading, scale }: Pick<PlacedReading, 'reading' | 'scale'>, shown: number, answers: LinkAnswers, sense: number, meterOf: Map<string, number>): Float64Array {
+export function readingRow(
+  { reading, scale }: Pick<PlacedReading, 'reading' | 'scale'>,
+  shown: number,
+  answers: LinkAnswers,
+  sense: number,
+  meterOf: Map<string, number>,
+): Float64Array {
   const isFlow = reading.quantity === 'flowLs';
   const slope = scale.slope(shown);
   const value = isFlow ? answers.flowLs : sense * answers.dropKpa;

@@ -18,7 +18,13 @@ export interface LinkAnswers {
  * the last correction. One factorisation serves all; each unknown is one solve with it. Differential pressure controllers that throttle
  * keep their set point. A shut link answers with zero.
  */
-export function linkAnswers(network: PreparedNetwork, solution: Solution, unknowns: Unknown[], acts: (unknown: Unknown) => boolean, watched: number[]): LinkAnswers[] {
+export function linkAnswers(
+  network: PreparedNetwork,
+  solution: Solution,
+  unknowns: Unknown[],
+  acts: (unknown: Unknown) => boolean,
+  watched: number[],
+): LinkAnswers[] {
   const { chains, numberOf, fluid } = network;
   const { state, loops, control } = solution;
   const kpaPerM = 1 / metresPerKpa(fluid.densityKgM3);
@@ -30,9 +36,19 @@ export function linkAnswers(network: PreparedNetwork, solution: Solution, unknow
   const answers = watched.map((at): LinkAnswers => {
     const i = numberOf[at];
     const column = () => new Float64Array(unknowns.length);
-    return { flowLs: i < 0 ? 0 : state.linkFlow[i], dropKpa: i < 0 ? 0 : state.linkLoss[i] * kpaPerM, flowPerUnknown: column(), dropPerUnknown: column() };
+    return {
+      flowLs: i < 0 ? 0 : state.linkFlow[i],
+      dropKpa: i < 0 ? 0 : state.linkLoss[i] * kpaPerM,
+      flowPerUnknown: column(),
+      dropPerUnknown: column(),
+    };
   });
-  const seen = loopsThroughLinks(watched.map((at) => numberOf[at]), chains.chainOf, loopsOf, signOf);
+  const seen = loopsThroughLinks(
+    watched.map((at) => numberOf[at]),
+    chains.chainOf,
+    loopsOf,
+    signOf,
+  );
   const heads = new Float64Array(loops.count);
   const step = new Float64Array(loops.count);
   const { linkLoss } = state;
@@ -84,7 +100,8 @@ export function linkAnswers(network: PreparedNetwork, solution: Solution, unknow
 const perUnit = ({ kind }: Unknown) => (kind === 'chart' || kind === 'setting' ? -2 : 1);
 
 /** A valve's chart and its setting act in the same way. */
-const isAlike = (a: Unknown, b: Unknown) => a.links.length === 1 && b.links.length === 1 && a.links[0] === b.links[0] && perUnit(a) === perUnit(b);
+const isAlike = (a: Unknown, b: Unknown) =>
+  a.links.length === 1 && b.links.length === 1 && a.links[0] === b.links[0] && perUnit(a) === perUnit(b);
 
 function signsInChains({ chains, from }: PreparedNetwork): Int8Array {
   const signOf = new Int8Array(from.length);
@@ -94,7 +111,8 @@ function signsInChains({ chains, from }: PreparedNetwork): Int8Array {
 
 function loopsThroughChains({ loops }: Solution, chainCount: number): { loop: number; sign: number }[][] {
   const through: { loop: number; sign: number }[][] = Array.from({ length: chainCount }, () => []);
-  for (let l = 0; l < loops.count; l++) for (let p = loops.start[l]; p < loops.start[l + 1]; p++) through[loops.chain[p]].push({ loop: l, sign: loops.sign[p] });
+  for (let l = 0; l < loops.count; l++)
+    for (let p = loops.start[l]; p < loops.start[l + 1]; p++) through[loops.chain[p]].push({ loop: l, sign: loops.sign[p] });
   return through;
 }
 
@@ -110,5 +128,11 @@ function loopsThroughLinks(numbers: number[], chainOf: Int32Array, loopsOf: { lo
     }
     start.push(loop.length);
   }
-  return { count: numbers.length, number: Int32Array.from(numbers), start: Int32Array.from(start), loop: Int32Array.from(loop), sign: Int8Array.from(sign) };
+  return {
+    count: numbers.length,
+    number: Int32Array.from(numbers),
+    start: Int32Array.from(start),
+    loop: Int32Array.from(loop),
+    sign: Int8Array.from(sign),
+  };
 }

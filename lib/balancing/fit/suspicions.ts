@@ -31,7 +31,12 @@ const faults: Record<Cause, { deviation: number; odds: number }> = {
   'pump-off-curve': { deviation: 0.4, odds: 0.01 },
   'wrong-reading': { deviation: 30, odds: 0.003 },
 };
-const causeOf: Partial<Record<Unknown['kind'], Cause>> = { run: 'blocked', setting: 'mis-set', chart: 'wrong-chart', pump: 'pump-off-curve' };
+const causeOf: Partial<Record<Unknown['kind'], Cause>> = {
+  run: 'blocked',
+  setting: 'mis-set',
+  chart: 'wrong-chart',
+  pump: 'pump-off-curve',
+};
 
 /** A valve opens or closes no further than its table; this much of its Kv is left to the table's own error. */
 const TABLE_ERROR = 0.05;
@@ -87,10 +92,12 @@ export class FaultSearch {
     this.innovation = fit.misfit.map((each, m) => each + dot(fit.rows[m], fit.values));
   }
 
-  /** Unlike faults more likely than none, the most likely first, each found with the earlier ones taken as true. */
-  likely(): Suspicion[] {
+  /** Unlike faults more likely than none, the most likely first, each found with the earlier ones taken as true; not those dropped before. */
+  likely(dropped: Suspicion[]): Suspicion[] {
     const found: Suspicion[] = [];
-    let candidates = this.weigh(this.candidates());
+    const isDropped = (fault: Suspicion) =>
+      dropped.some(({ cause, unknown, reading }) => cause === fault.cause && unknown === fault.unknown && reading === fault.reading);
+    let candidates = this.weigh(this.candidates().filter((fault) => !isDropped(fault)));
     for (;;) {
       candidates = candidates.filter((each) => each.logOdds > WORTH_A_SECOND_LOOK).sort((a, b) => b.logOdds - a.logOdds);
       const first = candidates.at(0);
@@ -128,7 +135,9 @@ export class FaultSearch {
     const { gaussian, innovation } = this.factorised();
     return accepted.filter(({ cause, unknown, reading }) => {
       const { deviation, odds } = faults[cause];
-      const whitened = gaussian.whiten(unknown !== null ? Float64Array.from(this.fit.rows, (row) => row[unknown]) : unit(this.model.placed.length, reading!));
+      const whitened = gaussian.whiten(
+        unknown !== null ? Float64Array.from(this.fit.rows, (row) => row[unknown]) : unit(this.model.placed.length, reading!),
+      );
       // S holds the fault's own variance; taken out of it, k·S⁻¹k and k·S⁻¹r both grow by 1 / (1 - Δ k·S⁻¹k).
       const shrinkage = Math.max(1 - deviation ** 2 * dot(whitened, whitened), 1e-12);
       return Math.log(odds) + 0.5 * Math.log(shrinkage) + (0.5 * deviation ** 2 * dot(whitened, innovation) ** 2) / shrinkage <= 0;
@@ -151,7 +160,14 @@ export class FaultSearch {
       const cause = causeOf[unknown.kind];
       // What is freed already is not freed twice.
       if (!cause || deviations[j] > 0.9 * faults[cause].deviation) return [];
-      return [weighed(cause, j, null, Float64Array.from(fit.rows, (row) => row[j]))];
+      return [
+        weighed(
+          cause,
+          j,
+          null,
+          Float64Array.from(fit.rows, (row) => row[j]),
+        ),
+      ];
     });
     const ofReadings = placed.flatMap((_, m) => {
       if (noise[m] > 1) return [];

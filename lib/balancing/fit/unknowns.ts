@@ -69,7 +69,9 @@ function seriesRuns(document: NetworkDocument): number[][] {
   const { chains, position } = prepareNetwork(document);
   const runs: number[][] = [];
   for (let c = 0; c < chains.count; c++) {
-    const links = Array.from(chains.member.subarray(chains.start[c], chains.start[c + 1]), (i) => position[i]).filter((at) => passive.has(document.links[at].kind));
+    const links = Array.from(chains.member.subarray(chains.start[c], chains.start[c + 1]), (i) => position[i]).filter((at) =>
+      passive.has(document.links[at].kind),
+    );
     if (links.length) runs.push(links);
   }
   return runs;

@@ -16,11 +16,17 @@ function diagnoseWith(change: (link: NetworkLink) => NetworkLink, added: Network
   const links = new Map(solve(built).links.map((link) => [link.id, link]));
   const flow = (link: string): LoopReading => ({ link, quantity: 'flowLs', value: links.get(link)!.flowLs, meter: 'flow' });
   const pump: LoopReading = { link: 'PU', quantity: 'dropKpa', value: -links.get('PU')!.dropKpa, meter: 'gauge' };
-  return { links, found: diagnose(fitLoop(balanced, [{ settings: { ...balancedKv }, readings: [flow('T1'), flow('T2'), flow('T3'), flow('PU'), pump] }], priors)) };
+  return {
+    links,
+    found: diagnose(
+      fitLoop(balanced, [{ settings: { ...balancedKv }, readings: [flow('T1'), flow('T2'), flow('T3'), flow('PU'), pump] }], priors),
+    ),
+  };
 }
 
 const first = ({ found }: ReturnType<typeof diagnoseWith>) => found.map(({ at, causes }) => [at, causes[0].cause]);
-const withDrop = (id: string, times: number) => (link: NetworkLink) => (link.id === id && 'designDropKpa' in link ? { ...link, designDropKpa: times * link.designDropKpa! } : link);
+const withDrop = (id: string, times: number) => (link: NetworkLink) =>
+  link.id === id && 'designDropKpa' in link ? { ...link, designDropKpa: times * link.designDropKpa! } : link;
 
 describe('possible causes by signature (case T9)', () => {
   it('names nothing in a healthy loop', () => {
@@ -50,7 +56,10 @@ describe('possible causes by signature (case T9)', () => {
   });
 
   it('suspects a bypass where the total is high, the pump raises little and all terminals are low', () => {
-    const seen = diagnoseWith((link) => link, [{ id: 'BP', kind: 'resistance', from: 'n1', to: 'back', designFlowLs: 1, designDropKpa: 20 }]);
+    const seen = diagnoseWith(
+      (link) => link,
+      [{ id: 'BP', kind: 'resistance', from: 'n1', to: 'back', designFlowLs: 1, designDropKpa: 20 }],
+    );
     expect(seen.links.get('T1')!.flowLs / 0.5).toBeCloseTo(0.594, 3);
     expect(first(seen)[0]).toEqual([null, 'bypass-open']);
   });
@@ -67,8 +76,15 @@ describe('possible causes by signature (case T9)', () => {
 
   it('names swapped hoses for a negative reading', () => {
     const links = new Map(solve(balanced).links.map((link) => [link.id, link]));
-    const drop = (link: string, sign = 1): LoopReading => ({ link, quantity: 'dropKpa', value: sign * Math.abs(links.get(link)!.dropKpa), meter: 'gauge' });
-    const found = diagnose(fitLoop(balanced, [{ settings: { ...balancedKv }, readings: [drop('V1'), drop('V2', -1), drop('V3'), drop('PU')] }], priors));
+    const drop = (link: string, sign = 1): LoopReading => ({
+      link,
+      quantity: 'dropKpa',
+      value: sign * Math.abs(links.get(link)!.dropKpa),
+      meter: 'gauge',
+    });
+    const found = diagnose(
+      fitLoop(balanced, [{ settings: { ...balancedKv }, readings: [drop('V1'), drop('V2', -1), drop('V3'), drop('PU')] }], priors),
+    );
     expect(found.some(({ at, causes }) => at === 'V2' && causes[0].cause === 'hoses-swapped')).toBe(true);
   });
 

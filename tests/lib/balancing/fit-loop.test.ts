@@ -18,7 +18,17 @@ const open: LoopSettings = { V1: 9, V2: 6, V3: 4.1569 };
 /** Readings without error of a loop as built. */
 function exactRound(built: NetworkDocument, settings: LoopSettings): ReadingRound {
   const drops = new Map(solve(documentAt(built, settings)).links.map((link) => [link.id, Math.abs(link.dropKpa)]));
-  return { settings, readings: stations.map((link) => ({ link, quantity: 'dropKpa', value: drops.get(link)!, meter: 'exact', flowRelative: 0.005, absolute: 0.01 })) };
+  return {
+    settings,
+    readings: stations.map((link) => ({
+      link,
+      quantity: 'dropKpa',
+      value: drops.get(link)!,
+      meter: 'exact',
+      flowRelative: 0.005,
+      absolute: 0.01,
+    })),
+  };
 }
 
 const builtWith = (factors: Record<string, number>) => {
@@ -36,8 +46,15 @@ describe('the fit of a loop to its readings', () => {
 
   it('recovers resistances from readings at two settings', () => {
     const built = builtWith({ T1: 1.5, T2: 0.7, T3: 1.2 });
-    const fitted = fitLoop(threeTerminals(), [exactRound(built, open), exactRound(built, { V1: 5, V2: 3, V3: 3 })], { ...usualPriors, chart: 0.001, meter: 0.001, pump: 0.001, mainRun: 0.01 });
-    const factorOf = (id: string) => Math.exp(fitted.values[fitted.unknowns.findIndex((unknown) => unknown.kind === 'run' && unknown.id === id)]);
+    const fitted = fitLoop(threeTerminals(), [exactRound(built, open), exactRound(built, { V1: 5, V2: 3, V3: 3 })], {
+      ...usualPriors,
+      chart: 0.001,
+      meter: 0.001,
+      pump: 0.001,
+      mainRun: 0.01,
+    });
+    const factorOf = (id: string) =>
+      Math.exp(fitted.values[fitted.unknowns.findIndex((unknown) => unknown.kind === 'run' && unknown.id === id)]);
     expect(factorOf('T1')).toBeCloseTo(1.5, 1);
     expect(factorOf('T2')).toBeCloseTo(0.7, 1);
     expect(factorOf('T3')).toBeCloseTo(1.2, 1);
@@ -78,14 +95,19 @@ describe('the fit of a loop to its readings', () => {
 
   it('sets aside one reading that is ten times too high, and keeps the rest', () => {
     const round = exactRound(threeTerminals(), { V1: 4.6476, V2: 3.4153, V3: 4.1569 });
-    const second = { ...round, readings: round.readings.map((reading) => (reading.link === 'V2' ? { ...reading, value: 10 * reading.value } : reading)) };
+    const second = {
+      ...round,
+      readings: round.readings.map((reading) => (reading.link === 'V2' ? { ...reading, value: 10 * reading.value } : reading)),
+    };
     const fitted = fitLoop(threeTerminals(), [round, second]);
     expect(fitted.faults.map(({ cause, link, round: at }) => [cause, link, at])).toEqual([['wrong-reading', 'V2', 1]]);
     expect(fitted.faults[0].factor).toBeCloseTo(10, 0);
   });
 
   it('refuses a reading at a link that is not there', () => {
-    expect(() => fitLoop(threeTerminals(), [{ settings: {}, readings: [{ link: 'V9', quantity: 'dropKpa', value: 1, meter: 'm' }] }])).toThrow(RangeError);
+    expect(() =>
+      fitLoop(threeTerminals(), [{ settings: {}, readings: [{ link: 'V9', quantity: 'dropKpa', value: 1, meter: 'm' }] }]),
+    ).toThrow(RangeError);
   });
 });
 
@@ -110,7 +132,8 @@ describe('settings predicted from a fit', () => {
   it('come with the reading to expect and a spread that shrinks with the next round', () => {
     const first = exactRound(threeTerminals(), open);
     const stands = { V1: 4.6476, V2: 3.4153, V3: 4.1569 };
-    const spreadAfter = (rounds: ReadingRound[]) => predictSettings(fitLoop(threeTerminals(), rounds)).settings.find((each) => each.link === 'V1')!;
+    const spreadAfter = (rounds: ReadingRound[]) =>
+      predictSettings(fitLoop(threeTerminals(), rounds)).settings.find((each) => each.link === 'V1')!;
     const before = spreadAfter([first]);
     const after = spreadAfter([first, exactRound(threeTerminals(), stands)]);
     expect(before.expectedDropKpa).toBeGreaterThan(13);

@@ -6,8 +6,10 @@ import { solve } from '@/lib/hydraulics/solve';
 import { threeTerminals } from '../../make/three-terminals';
 
 const document = threeTerminals();
-const settingsAfter = (events: SiteEvent[]) => Object.fromEntries(events.flatMap((event) => (event.kind === 'set' ? [[event.link, event.setting]] : [])));
-const flowsAfter = (events: SiteEvent[]) => new Map(solve(documentAt(document, settingsAfter(events))).links.map((link) => [link.id, link]));
+const settingsAfter = (events: SiteEvent[]) =>
+  Object.fromEntries(events.flatMap((event) => (event.kind === 'set' ? [[event.link, event.setting]] : [])));
+const flowsAfter = (events: SiteEvent[]) =>
+  new Map(solve(documentAt(document, settingsAfter(events))).links.map((link) => [link.id, link]));
 const readExactly = (events: SiteEvent[], link: string): SiteEvent => ({
   kind: 'reading',
   reading: { link, quantity: 'dropKpa', value: flowsAfter(events).get(link)!.dropKpa, meter: 'exact' },
@@ -64,7 +66,10 @@ describe('the proportional procedure on three terminals (case N11)', () => {
   });
 
   it('does not take a terminal without flow for the reference', () => {
-    const events: SiteEvent[] = ['V1', 'V2', 'V3'].map((link) => ({ kind: 'reading', reading: { link, quantity: 'flowLs', value: { V1: 0.56, V2: 0.004, V3: 0.22 }[link]!, meter: 'exact' } }));
+    const events: SiteEvent[] = ['V1', 'V2', 'V3'].map((link) => ({
+      kind: 'reading',
+      reading: { link, quantity: 'flowLs', value: { V1: 0.56, V2: 0.004, V3: 0.22 }[link]!, meter: 'exact' },
+    }));
     const { step, lookInto } = nextProportionalStep({ document, events });
     expect(lookInto).toEqual(['V2']);
     expect(step.kind === 'set-valve' ? step.reference : step.kind).not.toBe('V2');
