@@ -41,6 +41,7 @@ test('what is drawn without a connection is kept and saved when it is back; undo
   await expect(draw.field('Return')).toHaveValue('58');
 
   const count = page.locator('.react-flow__node');
+  await expect(count.first()).toBeVisible();
   const before = await count.count();
   await draw.place('Tee', 300, 60);
   await expect(count).toHaveCount(before + 1);

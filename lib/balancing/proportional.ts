@@ -1,8 +1,7 @@
-import { balance } from '@/lib/hydraulics/balance';
-import { fluidProperties } from '@/lib/hydraulics/fluids';
-import type { BalancingValveLink, NetworkDocument } from '@/lib/hydraulics/types';
+import type { NetworkDocument } from '@/lib/hydraulics/types';
 import { dropAcrossValveKpa } from '@/lib/hydraulics/valve-coefficient';
-import { type LoopHierarchy, loopHierarchy, type Station } from './hierarchy';
+import type { Station } from './hierarchy';
+import { type ProportionalDesign, proportionalDesign } from './proportional-design';
 import { type MeasuredGroup, measureGroup, ratioOf } from './proportional-groups';
 import { measuredLoop, type MeasuredLoop, type SiteEvent } from './proportional-log';
 import { settingIn } from './readings';
@@ -54,56 +53,14 @@ export function nextProportionalStep(state: ProportionalState): ProportionalAdvi
   return { step: procedure.next(), lookInto: procedure.lookInto() };
 }
 
-/** What follows from a document alone, kept with it. */
-interface Design {
-  hierarchy: LoopHierarchy;
-  groups: Station[];
-  leaves: Station[];
-  main: Station | null;
-  pump: string | null;
-  valves: Map<string, BalancingValveLink>;
-  /** Drop at design flow of each link, kPa. */
-  drops: Map<string, number>;
-  densityKgM3: number;
-}
-
-const designs = new WeakMap<NetworkDocument, Design>();
-
-function designOf(document: NetworkDocument): Design {
-  const known = designs.get(document);
-  if (known) return known;
-  const hierarchy = loopHierarchy(document);
-  const stations = [...hierarchy.stations.values()];
-  const fluid = fluidProperties(document.fluid);
-  const drops = new Map(balance(document).solution.links.map((link) => [link.id, Math.abs(link.dropKpa)]));
-  const design: Design = {
-    hierarchy,
-    groups: stations.filter((station) => station.members.length > 1),
-    leaves: stations.filter((station) => station.members.length === 0 && station.kind === 'valve'),
-    main: topValve(hierarchy.top),
-    pump: stations.find((station) => station.kind === 'pump')?.link ?? null,
-    valves: new Map(document.links.flatMap((link) => (link.kind === 'balancingValve' ? [[link.id, link] as const] : []))),
-    drops,
-    densityKgM3: fluid.ok ? fluid.properties.densityKgM3 : 1000,
-  };
-  designs.set(document, design);
-  return design;
-}
-
-/** The valve through which everything goes, where there is one. */
-function topValve(top: Station | null): Station | null {
-  if (!top || top.kind === 'valve') return top;
-  return top.members.length === 1 ? topValve(top.members[0]) : null;
-}
-
 class Procedure {
-  private readonly design: Design;
+  private readonly design: ProportionalDesign;
   private readonly criterion: number;
   private readonly tolerance: number;
   private readonly named = new Set<string>();
 
   constructor(private readonly state: ProportionalState) {
-    this.design = designOf(state.document);
+    this.design = proportionalDesign(state.document);
     this.criterion = state.criterion ?? USUAL_PART;
     this.tolerance = state.tolerance ?? USUAL_PART;
   }
