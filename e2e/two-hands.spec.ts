@@ -45,6 +45,14 @@ test('what is drawn without a connection is kept and saved when it is back; undo
   const before = await count.count();
   await draw.place('Tee', 300, 60);
   await expect(count).toHaveCount(before + 1);
+
+  // The tee leads nowhere: a fault that names it and selects its place.
+  await page.keyboard.press('Escape');
+  await expect(page.locator('.react-flow__node.selected')).toHaveCount(0);
+  await draw.panel.getByRole('tab', { name: /^Faults/ }).click();
+  await draw.panel.getByRole('button', { name: /dead leg/ }).click();
+  await expect(page.locator('.react-flow__node.selected')).toHaveCount(1);
+
   await page.getByRole('button', { name: /^Undo/ }).click();
   await expect(count).toHaveCount(before);
   await page.keyboard.press('Control+Shift+z');

@@ -5,7 +5,7 @@ import { ReactFlowProvider } from 'reactflow';
 import type { StripBand } from '@/lib/commissioning/flow-strip';
 import type { RevisionBody } from '@/lib/api/loops';
 import type { Drawing } from '@/lib/network/drawing';
-import { drawingToDocument, placeOfLink } from '@/lib/network/drawing-to-document';
+import { drawingToDocument, placeFinder } from '@/lib/network/drawing-to-document';
 import { figuresOfDrawing } from '@/lib/network/drawing-figures';
 import { circuitThrough } from '@/lib/network/index-circuit';
 import { createCanvasStore } from './canvas-state';
@@ -51,7 +51,7 @@ export function DrawingViewer({ drawing, band, revision }: DrawingViewerProps) {
 function resultsOfRevision(drawing: Drawing, balance: RevisionBody['balance']): Results {
   const { document, faults } = drawingToDocument(drawing, '');
   const links = document && balance.indexTerminal ? circuitThrough(document, balance.solution, balance.indexTerminal) : [];
-  const indexCircuit = links.map((id) => placeOfLink(drawing, id));
+  const indexCircuit = links.map(placeFinder(drawing));
   return {
     solved: { solve: null, balance, balanceMissing: null, indexCircuit, solveMs: 0 },
     figures: figuresOfDrawing(drawing, { solve: null, balance }, 'balanced'),

@@ -1,11 +1,12 @@
 'use client';
 
+import { useMemo } from 'react';
 import { toast } from 'sonner';
 import { Button } from '@/components/ui/button';
 import { Figure, UnitName } from '@/components/ui/figure';
 import { adoptSettings } from '@/lib/network/adopt-settings';
-import type { Drawing } from '@/lib/network/drawing';
-import { placeOfLink } from '@/lib/network/drawing-to-document';
+import type { Place } from '@/lib/network/drawing';
+import { placeFinder } from '@/lib/network/drawing-to-document';
 import type { BalancedValve } from '@/lib/hydraulics/types';
 import { useDrawing, useEditor, useResults } from './editor-context';
 import { useShowPlace } from './show-place';
@@ -25,6 +26,9 @@ export function SettingsTable() {
   const { drawingStore, canEdit } = useEditor();
   const drawing = useDrawing((it) => it);
   const show = useShowPlace();
+  const placeOf = useMemo(() => placeFinder(drawing), [drawing]);
+  const tagOf = useMemo(() => new Map(drawing.equipment.map(({ id, tag }) => [id, tag])), [drawing]);
+  const button = (id: string) => <PlaceButton place={placeOf(id)} tag={tagOf.get(placeOf(id).id)} onPress={show} />;
   const balance = solved?.balance;
   if (!balance)
     return <p className="text-quiet py-4 text-sm">{solved?.balanceMissing ?? 'Settings appear here once the drawing can be solved.'}</p>;
@@ -58,7 +62,7 @@ export function SettingsTable() {
             {balance.pumps.map((pump) => (
               <tr key={pump.id} className="border-b">
                 <th scope="row" className="py-1 text-left font-normal">
-                  <PlaceButton id={pump.id} drawing={drawing} onPress={show} />
+                  {button(pump.id)}
                 </th>
                 <td className={cell}>
                   <Figure quantity="flow" si={pump.flowLs} />
@@ -100,7 +104,7 @@ export function SettingsTable() {
             {balance.valves.map((valve) => (
               <tr key={valve.id} className="border-b">
                 <th scope="row" className="py-1 text-left font-normal">
-                  <PlaceButton id={valve.id} drawing={drawing} onPress={show} />
+                  {button(valve.id)}
                   <span className={`block text-xs ${valve.state.startsWith('too') ? 'text-high' : 'text-quiet'}`}>
                     {stateWords[valve.state]}
                   </span>
@@ -121,9 +125,7 @@ export function SettingsTable() {
   );
 }
 
-function PlaceButton({ id, drawing, onPress }: { id: string; drawing: Drawing; onPress: ReturnType<typeof useShowPlace> }) {
-  const place = placeOfLink(drawing, id);
-  const tag = drawing.equipment.find((piece) => piece.id === place.id)?.tag;
+function PlaceButton({ place, tag, onPress }: { place: Place; tag: string | undefined; onPress: ReturnType<typeof useShowPlace> }) {
   return (
     <button type="button" onClick={() => onPress(place)} className="text-petrol hover:underline">
       {tag || 'untagged'}

@@ -14,10 +14,14 @@ export type UnitLink = (typeof unitLinks)[number];
 
 export const unitLinkId = (equipmentId: string, part: UnitLink) => `${equipmentId}:${part}`;
 
-/** The piece on the drawing that a link of the network document came from. */
-export function placeOfLink(drawing: Drawing, linkId: string): Place {
-  const id = linkId.split(':')[0]!;
-  return { kind: drawing.pipes.some((pipe) => pipe.id === id) ? 'pipe' : 'equipment', id };
+/** Where an id of the document is drawn. A node's is its piece's, with the port behind a dot; a link's has its part behind a colon. */
+export function placeFinder(drawing: Drawing): (id: string | undefined) => Place {
+  // A large drawing can have as many faults as pipes: each must not look through all of them.
+  const pipes = new Set(drawing.pipes.map((pipe) => pipe.id));
+  return (id) => {
+    if (!id) return { kind: 'equipment', id: drawing.equipment[0]?.id ?? '' };
+    return pipes.has(id) ? { kind: 'pipe', id } : { kind: 'equipment', id: id.split(/[.:]/)[0] };
+  };
 }
 
 /** The point of the network at which a pipe end stands: all sides of a tee are one point. */

@@ -3,7 +3,7 @@ import type { NetworkDocument, Warning } from '@/lib/hydraulics/types';
 import { parseNetworkDocument } from '@/lib/network/document';
 import type { Drawing, Place } from '@/lib/network/drawing';
 import type { Fault } from '@/lib/network/drawing-faults';
-import { drawingToDocument } from '@/lib/network/drawing-to-document';
+import { drawingToDocument, placeFinder } from '@/lib/network/drawing-to-document';
 import { inDrawingWords, pieceNames } from '@/lib/network/piece-names';
 import { cachedSolution, documentKey, keepSolution } from './solution-cache';
 import { solveDocument, type SolvedDocument } from './solve-document';
@@ -63,14 +63,4 @@ function warningFaults(drawing: Drawing, warnings: Warning[]): Fault[] {
   const names = pieceNames(drawing);
   const placeOf = placeFinder(drawing);
   return [...once.values()].map(({ code, id, message }) => ({ code, severity: 'warning', message: inDrawingWords(message, names), place: placeOf(id) }));
-}
-
-/** Where an id of the document is drawn. A node's is its piece's, with the port behind a dot; a link's has its part behind a colon. */
-function placeFinder(drawing: Drawing): (id: string | undefined) => Place {
-  // A large drawing can have as many faults as pipes: each must not look through all of them.
-  const pipes = new Set(drawing.pipes.map((pipe) => pipe.id));
-  return (id) => {
-    if (!id) return { kind: 'equipment', id: drawing.equipment[0]?.id ?? '' };
-    return pipes.has(id) ? { kind: 'pipe', id } : { kind: 'equipment', id: id.split(/[.:]/)[0] };
-  };
 }
