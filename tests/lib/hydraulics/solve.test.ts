@@ -73,7 +73,21 @@ function expectSteady(document: NetworkDocument, result: SolveResult) {
   });
 }
 
-const flowsById = (result: SolveResult) => new Map(result.links.map((link) => [link.id, link.flowLs]));
+const CLOSED_KPA = 1e-4;
+
+/**
+ * Asserts that two solved networks stand alike, link by link: `flow` turns the first one's flow into the second one's, `drop` its drop. Flows agree
+ * within 1e-6 L/s; where a quadratic law lies flat at next to no flow, an iteration that closes heads tells the flow no better
+ * than its head, and there the drops agree within 0.1 Pa.
+ */
+function expectAlike(first: SolveResult, second: SolveResult, { flow = (q: number, _: string) => q, drop = (kpa: number, _: string) => kpa } = {}) {
+  const there = new Map(second.links.map((link) => [link.id, link]));
+  for (const { id, flowLs, dropKpa } of first.links) {
+    const other = there.get(id)!;
+    const isSameFlow = Math.abs(flow(flowLs, id) - other.flowLs) < 1e-6;
+    expect(isSameFlow || Math.abs(drop(dropKpa, id) - other.dropKpa) < CLOSED_KPA, `${id}: ${flowLs} L/s against ${other.flowLs}`).toBe(true);
+  }
+}
 
 describe('any network', () => {
   it.each<Method>(['simultaneous', 'hardy-cross'])(
@@ -93,9 +107,7 @@ describe('any network', () => {
     fc.assert(
       fc.property(anyNetwork(['pipe', ...quadraticKinds]), fc.integer(), (document, seed) => {
         const shuffled = [...document.links].sort((a, b) => hash(a.id, seed) - hash(b.id, seed));
-        const there = flowsById(solve(document));
-        for (const [id, flow] of flowsById(solve({ ...document, links: shuffled })))
-          expect(Math.abs(there.get(id)! - flow)).toBeLessThan(1e-6);
+        expectAlike(solve(document), solve({ ...document, links: shuffled }));
       }),
       { numRuns: 60 },
     );
@@ -107,9 +119,8 @@ describe('any network', () => {
         const passive = document.links.filter((link) => link.kind !== 'pump');
         const turned = passive[at % passive.length];
         const links = document.links.map((link) => (link === turned ? { ...link, from: link.to, to: link.from } : link));
-        const there = flowsById(solve(document));
-        for (const [id, flow] of flowsById(solve({ ...document, links })))
-          expect(Math.abs(there.get(id)! - (id === turned.id ? -flow : flow))).toBeLessThan(1e-6);
+        const turn = (value: number, id: string) => (id === turned.id ? -value : value);
+        expectAlike(solve(document), solve({ ...document, links }), { flow: turn, drop: turn });
       }),
       { numRuns: 60 },
     );
@@ -131,9 +142,9 @@ describe('any network', () => {
         const links = document.links.flatMap((link): NetworkLink[] =>
           link === cut ? [piece(cut.id, cut.from, 'new', part), piece('rest', 'new', cut.to, 1 - part)] : [link],
         );
-        const there = flowsById(solve(document));
-        const here = flowsById(solve({ ...document, links, nodes: [...document.nodes, { id: 'new' }] }));
-        for (const [id, flow] of there) expect(Math.abs(here.get(id)! - flow)).toBeLessThan(1e-6);
+        const here = solve({ ...document, links, nodes: [...document.nodes, { id: 'new' }] });
+        const ofCut = (kpa: number, id: string) => (id === cut.id ? kpa * part : kpa);
+        expectAlike(solve(document), here, { drop: ofCut });
       }),
       { numRuns: 60 },
     );
@@ -143,9 +154,7 @@ describe('any network', () => {
     fc.assert(
       fc.property(anyNetwork(quadraticKinds), (document) => {
         const slow = document.links.map((link) => (link.kind === 'pump' ? { ...link, speed: 0.5 } : link));
-        const there = flowsById(solve(document));
-        for (const [id, flow] of flowsById(solve({ ...document, links: slow })))
-          expect(Math.abs(there.get(id)! - 2 * flow)).toBeLessThan(1e-5);
+        expectAlike(solve(document), solve({ ...document, links: slow }), { flow: (q) => q / 2, drop: (kpa) => kpa / 4 });
       }),
       { numRuns: 60 },
     );
