@@ -4,6 +4,7 @@ import { POST as issue } from '@/app/api/loops/[loopId]/revisions/route';
 import { call } from './call';
 import { ladder } from './drawing';
 import { makeOrganization, type MadeOrganization } from './organization';
+import { openRound } from './round';
 import { signInAs } from './session';
 
 export interface MeasuredLoop extends MadeOrganization {
@@ -17,41 +18,16 @@ export interface MeasuredLoop extends MadeOrganization {
 /** A loop of three terminals, issued through the application, with a meter and an open round, nothing read yet. */
 export async function makeMeasuredLoop(db: Knex, name?: string): Promise<MeasuredLoop> {
   const organization = await makeOrganization(db, { name, drawing: ladder([0.2, 0.3, 0.25]) });
-  const { organizationId, loopId, designer, technician } = organization;
+  const { organizationId, loopId, designer } = organization;
   signInAs(designer);
   const issued = await call(issue, { method: 'POST', params: { loopId }, body: { draftVersion: 1, note: 'For construction' } });
   if (issued.status !== 200) throw new Error(`not issued: ${JSON.stringify(issued.body)}`);
   const { id: revisionId } = await db('revisions').where({ organization_id: organizationId, loop_id: loopId }).first('id');
   const rows = await db('station_designs').where({ organization_id: organizationId, revision_id: revisionId }).select('tag', 'station_id');
-  const [instrumentId, roundId] = [uuidv7(), uuidv7()];
-  await db('instruments').insert({
-    organization_id: organizationId,
-    id: instrumentId,
-    name: 'Differential pressure meter',
-    kind: 'differential-pressure',
-    serial: 'DP-02',
-    range_low: 0,
-    range_high: 200,
-    accuracy_percent: 1,
-    accuracy_absolute: 0.1,
-    calibrated_on: '2026-03-14',
-    calibration_due_on: '2027-03-14',
-  });
-  await db('rounds').insert({
-    organization_id: organizationId,
-    id: roundId,
-    loop_id: loopId,
-    revision_id: revisionId,
-    number: 1,
-    purpose: 'As found',
-    started_by: technician.id,
-  });
-  await db('loops').where({ organization_id: organizationId, id: loopId }).update({ state: 'in-commissioning' });
   return {
     ...organization,
     revisionId,
-    roundId,
-    instrumentId,
+    ...(await openRound(db, organization, revisionId)),
     stations: Object.fromEntries(rows.map(({ tag, station_id: id }) => [tag, id])),
   };
 }

@@ -11,8 +11,9 @@ export interface MadeRound {
 }
 
 /** One issued revision with one terminal station (0.5 L/s, Kv 1 to 4 at 1 to 4 turns), a meter, and an open round. */
-export async function makeRound(db: Knex, { organizationId, loopId, designer, technician }: MadeOrganization): Promise<MadeRound> {
-  const [revisionId, stationId, instrumentId, roundId] = [uuidv7(), uuidv7(), uuidv7(), uuidv7()];
+export async function makeRound(db: Knex, organization: MadeOrganization): Promise<MadeRound> {
+  const [revisionId, stationId] = [uuidv7(), uuidv7()];
+  const { organizationId, loopId, designer } = organization;
   await db('revisions').insert({
     organization_id: organizationId,
     id: revisionId,
@@ -42,12 +43,22 @@ export async function makeRound(db: Knex, { organizationId, loopId, designer, te
     setting_turns: 4,
     expected_drop_kpa: 20.25,
   });
+  return { revisionId, stationId, ...(await openRound(db, organization, revisionId)) };
+}
+
+/** A meter of the organisation, and round 1 of the loop on a revision, open; the loop is in commissioning from then on. */
+export async function openRound(
+  db: Knex,
+  { organizationId, loopId, technician }: MadeOrganization,
+  revisionId: string,
+): Promise<Pick<MadeRound, 'roundId' | 'instrumentId'>> {
+  const [instrumentId, roundId] = [uuidv7(), uuidv7()];
   await db('instruments').insert({
     organization_id: organizationId,
     id: instrumentId,
     name: 'Differential pressure meter',
     kind: 'differential-pressure',
-    serial: `DP-${instrumentId.slice(-6)}`,
+    serial: 'DP-02',
     range_low: 0,
     range_high: 200,
     accuracy_percent: 1,
@@ -65,5 +76,5 @@ export async function makeRound(db: Knex, { organizationId, loopId, designer, te
     started_by: technician.id,
   });
   await db('loops').where({ organization_id: organizationId, id: loopId }).update({ state: 'in-commissioning' });
-  return { revisionId, roundId, stationId, instrumentId };
+  return { roundId, instrumentId };
 }
