@@ -68,6 +68,19 @@ export class KeptReadings {
     this.update((entries) => entries.filter(({ reading }) => reading.id !== id));
   }
 
+  /**
+   * Takes a refused entry over into another round and sends it there. What it put right stands in the round it was refused for, so it counts as
+   * an entry of its own now; the reason stays as its note.
+   */
+  moveTo(id: string, roundId: string): Promise<void> {
+    this.update((entries) =>
+      entries.map((entry) =>
+        entry.reading.id === id ? { ...entry, roundId, refusal: null, reading: { ...entry.reading, correctsReadingId: null } } : entry,
+      ),
+    );
+    return this.send();
+  }
+
   /** Sends all that wait; at most one round of sending goes on at a time. */
   send(): Promise<void> {
     this.sending ??= this.sendAll().finally(() => {

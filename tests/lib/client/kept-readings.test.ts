@@ -47,6 +47,29 @@ describe('a reading kept on the tablet', () => {
     expect(kept.state.lastSentAt).not.toBeNull();
   });
 
+  it('that was refused because its round is closed can be kept in the round that is open, once', async () => {
+    const closed = new RequestError('round-closed', 'Round 1 is closed.', 409);
+    const other = uuidv7();
+    const rounds: string[] = [];
+    const kept = new KeptReadings({
+      shelf: new Shelf(),
+      key: 'readings',
+      send: async (to, body) => {
+        rounds.push(to);
+        if (to === roundId) throw closed;
+        return { id: body.id } as Reading;
+      },
+      onAcknowledged: () => undefined,
+    });
+    const body = { ...reading(made), correctsReadingId: uuidv7(), note: 'misread' };
+    kept.keep({ roundId, reading: body, tag: 'FC-1' });
+    await kept.send();
+    expect(kept.state.entries).toMatchObject([{ refusal: 'Round 1 is closed.' }]);
+    await kept.moveTo(body.id, other);
+    expect(rounds).toEqual([roundId, other]);
+    expect(kept.state.entries).toEqual([]);
+  });
+
   it('without signal stays, and is there after the page was closed, under the same id', async () => {
     const first = tablet({ answer: () => Promise.reject(noAnswer()) });
     const body = first.keep();
