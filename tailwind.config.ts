@@ -6,7 +6,10 @@ export default {
   theme: {
     extend: {
       colors: Object.fromEntries(
-        ['paper', 'sheet', 'well', 'ink', 'quiet', 'rule', 'petrol', 'on-petrol', 'brass', 'low', 'high'].map((name) => [name, `var(--${name})`]),
+        ['paper', 'sheet', 'well', 'ink', 'quiet', 'rule', 'petrol', 'on-petrol', 'brass', 'low', 'high'].map((name) => [
+          name,
+          `var(--${name})`,
+        ]),
       ),
       fontFamily: { sans: ['var(--font-words)', 'sans-serif'], figures: ['var(--font-figures)', 'monospace'] },
       borderRadius: { DEFAULT: '3px' },

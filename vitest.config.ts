@@ -8,8 +8,23 @@ export default defineConfig({
   resolve: { alias: { '@': root } },
   test: {
     projects: [
-      { extends: true, test: { name: 'unit', setupFiles: ['tests/make/fixed-seed.ts'], include: ['tests/lib/**/*.test.ts', 'tests/architecture/**/*.test.ts'] } },
-      { extends: true, test: { name: 'reference', setupFiles: ['tests/make/fixed-seed.ts'], include: ['tests/reference/**/*.test.ts'], testTimeout: 120_000 } },
+      {
+        extends: true,
+        test: {
+          name: 'unit',
+          setupFiles: ['tests/make/fixed-seed.ts'],
+          include: ['tests/lib/**/*.test.ts', 'tests/architecture/**/*.test.ts'],
+        },
+      },
+      {
+        extends: true,
+        test: {
+          name: 'reference',
+          setupFiles: ['tests/make/fixed-seed.ts'],
+          include: ['tests/reference/**/*.test.ts'],
+          testTimeout: 120_000,
+        },
+      },
       {
         extends: true,
         test: {

@@ -28,7 +28,11 @@ const settled = async (page: Page) => {
   await expect(page.getByRole('heading').or(page.getByRole('application')).first()).toBeVisible();
 };
 
-for (const [who, colorScheme] of [['mara', 'light'], ['tobin', 'dark'], ['owen', 'light']] as const) {
+for (const [who, colorScheme] of [
+  ['mara', 'light'],
+  ['tobin', 'dark'],
+  ['owen', 'light'],
+] as const) {
   test(`every page is accessible to ${who}, in ${colorScheme}`, async ({ browser }) => {
     test.setTimeout(180_000);
     const context = await browser.newContext({ colorScheme, viewport: { width: 1280, height: 860 }, reducedMotion: 'reduce' });
@@ -40,7 +44,11 @@ for (const [who, colorScheme] of [['mara', 'light'], ['tobin', 'dark'], ['owen',
       await page.goto(path);
       await settled(page);
       const { violations } = await new AxeBuilder({ page }).withTags(['wcag2a', 'wcag2aa', 'wcag21a', 'wcag21aa', 'wcag22aa']).analyze();
-      expect(violations.flatMap(({ id, nodes }) => nodes.filter((node) => !isPieceFarOut(id, node.target)).map(({ target }) => `${path}: ${id} at ${target.join(' ')}`))).toEqual([]);
+      expect(
+        violations.flatMap(({ id, nodes }) =>
+          nodes.filter((node) => !isPieceFarOut(id, node.target)).map(({ target }) => `${path}: ${id} at ${target.join(' ')}`),
+        ),
+      ).toEqual([]);
     }
     expect(trouble).toEqual([]);
   });

@@ -3,7 +3,11 @@ import { signIn, type DemoPerson } from './make/sign-in';
 
 /** Takes the two pictures of README.md from the demo. */
 
-async function demoLoop(browser: Browser, who: DemoPerson, options: { viewport: { width: number; height: number }; colorScheme: 'light' | 'dark' }): Promise<{ page: Page; path: string }> {
+async function demoLoop(
+  browser: Browser,
+  who: DemoPerson,
+  options: { viewport: { width: number; height: number }; colorScheme: 'light' | 'dark' },
+): Promise<{ page: Page; path: string }> {
   const context = await browser.newContext({ ...options, hasTouch: options.colorScheme === 'dark', locale: 'en-GB' });
   const page = await context.newPage();
   await signIn(page, who);

@@ -11,14 +11,17 @@ const item = 'block w-full rounded px-3 py-2 text-left text-ink no-underline out
 export function AccountMenu({ name, organizationName }: { name: string; organizationName: string }) {
   return (
     <DropdownMenu.Root>
-      <DropdownMenu.Trigger className="inline-flex size-11 items-center justify-center rounded text-quiet hover:bg-well hover:text-ink" aria-label={`Account of ${name}`}>
+      <DropdownMenu.Trigger
+        className="text-quiet hover:bg-well hover:text-ink inline-flex size-11 items-center justify-center rounded"
+        aria-label={`Account of ${name}`}
+      >
         <CircleUserRound size={22} />
       </DropdownMenu.Trigger>
       <DropdownMenu.Portal>
-        <DropdownMenu.Content align="end" className="z-50 min-w-56 rounded border bg-sheet p-1 shadow-lg">
+        <DropdownMenu.Content align="end" className="bg-sheet z-50 min-w-56 rounded border p-1 shadow-lg">
           <div className="px-3 py-2">
             <div className="font-semibold">{name}</div>
-            <div className="text-sm text-quiet">{organizationName}</div>
+            <div className="text-quiet text-sm">{organizationName}</div>
           </div>
           <DropdownMenu.Separator className="my-1 border-t" />
           <DropdownMenu.Item asChild>

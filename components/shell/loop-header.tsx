@@ -26,25 +26,35 @@ export function LoopHeader({ loop, person }: { loop: LoopDetail; person: { name:
     ['report', 'Report', true],
   ];
   return (
-    <header className="sticky top-0 z-30 grid grid-cols-[minmax(0,1fr)_auto] items-stretch gap-x-6 border-b bg-sheet px-4 lg:grid-cols-[minmax(0,auto)_auto_1fr] print:hidden">
+    <header className="bg-sheet sticky top-0 z-30 grid grid-cols-[minmax(0,1fr)_auto] items-stretch gap-x-6 border-b px-4 lg:grid-cols-[minmax(0,auto)_auto_1fr] print:hidden">
       <div className="flex min-h-14 min-w-0 items-center gap-4">
         <Mark />
         <div className="flex min-w-0">
-          <Link href={`/projects/${loop.project.id}`} className="truncate text-quiet no-underline hover:underline">
+          <Link href={`/projects/${loop.project.id}`} className="text-quiet truncate no-underline hover:underline">
             {loop.project.name}
           </Link>
-          <span className="mx-1.5 text-quiet">/</span>
+          <span className="text-quiet mx-1.5">/</span>
           <span className="max-w-[60vw] shrink-0 truncate font-bold">{loop.name}</span>
         </div>
       </div>
-      <nav aria-label="Pages of the loop" className="col-span-2 row-start-2 flex items-stretch gap-5 overflow-x-auto lg:col-span-1 lg:col-start-2 lg:row-start-1">
-        {pages.map(([path, name, isShown]) => isShown && <NavLink key={path} href={`${base}/${path}`}>{name}</NavLink>)}
+      <nav
+        aria-label="Pages of the loop"
+        className="col-span-2 row-start-2 flex items-stretch gap-5 overflow-x-auto lg:col-span-1 lg:col-start-2 lg:row-start-1"
+      >
+        {pages.map(
+          ([path, name, isShown]) =>
+            isShown && (
+              <NavLink key={path} href={`${base}/${path}`}>
+                {name}
+              </NavLink>
+            ),
+        )}
       </nav>
       <div className="flex min-h-14 items-center gap-4 justify-self-end">
         <div className="hidden xl:block">
           <FlowStrip ticks={loop.strip} band={loop.band} />
         </div>
-        <span className="hidden text-sm whitespace-nowrap text-quiet sm:inline">
+        <span className="text-quiet hidden text-sm whitespace-nowrap sm:inline">
           {stateWords[loop.state]}
           {loop.revision && `, revision ${loop.revision.number}`}
         </span>

@@ -13,8 +13,8 @@ export function NavLink({ href, children }: { href: string; children: ReactNode 
       href={href}
       aria-current={isHere ? 'page' : undefined}
       className={classNames(
-        'inline-flex h-full min-h-11 items-center border-b-[3px] px-1 pt-[3px] font-semibold whitespace-nowrap text-ink no-underline',
-        isHere ? 'border-brass' : 'border-transparent hover:border-rule',
+        'text-ink inline-flex h-full min-h-11 items-center border-b-[3px] px-1 pt-[3px] font-semibold whitespace-nowrap no-underline',
+        isHere ? 'border-brass' : 'hover:border-rule border-transparent',
       )}
     >
       {children}

@@ -11,7 +11,10 @@ export function Providers({ units, children }: { units: Record<string, string>; 
   return (
     <QueryClientProvider client={client}>
       <UnitsContext value={units}>{children}</UnitsContext>
-      <Toaster position="bottom-center" toastOptions={{ style: { background: 'var(--sheet)', color: 'var(--ink)', borderColor: 'var(--rule)' } }} />
+      <Toaster
+        position="bottom-center"
+        toastOptions={{ style: { background: 'var(--sheet)', color: 'var(--ink)', borderColor: 'var(--rule)' } }}
+      />
     </QueryClientProvider>
   );
 }

@@ -26,12 +26,28 @@ export function FlowStrip({ ticks, band, size = 'header' }: { ticks: StripTick[]
   // Across in parts of the width, so that a strip as wide as its page keeps its marks round.
   const across = (x: number) => `${(100 * x) / width}%`;
   return (
-    <svg role="img" aria-label={`Flow strip: ${says}`} width={size === 'page' ? '100%' : width} height={height} className="block max-w-full">
+    <svg
+      role="img"
+      aria-label={`Flow strip: ${says}`}
+      width={size === 'page' ? '100%' : width}
+      height={height}
+      className="block max-w-full"
+    >
       <rect x={0} width="100%" y={strip.bandTop} height={strip.bandBottom - strip.bandTop} fill="var(--rule)" opacity={0.55} />
       <line x1={0} x2="100%" y1={strip.designY} y2={strip.designY} stroke="var(--brass)" strokeWidth={1} />
       {strip.ticks.map(({ x, y, tick }) => {
         if (y === null || tick.verdict === null || tick.percentOfDesign === null) {
-          return <line key={tick.tag} x1={across(x)} x2={across(x)} y1={strip.designY - 2.5} y2={strip.designY + 2.5} stroke="var(--quiet)" strokeWidth={1} />;
+          return (
+            <line
+              key={tick.tag}
+              x1={across(x)}
+              x2={across(x)}
+              y1={strip.designY - 2.5}
+              y2={strip.designY + 2.5}
+              stroke="var(--quiet)"
+              strokeWidth={1}
+            />
+          );
         }
         const colour = colours[tick.verdict];
         return (
@@ -41,7 +57,12 @@ export function FlowStrip({ ticks, band, size = 'header' }: { ticks: StripTick[]
             {tick.verdict === 'within' ? (
               <circle cy={y} r={mark} stroke="none" />
             ) : (
-              <path stroke="none" d={tick.verdict === 'high' ? `M${-mark} ${y + mark}H${mark}L0 ${y - mark}Z` : `M${-mark} ${y - mark}H${mark}L0 ${y + mark}Z`} />
+              <path
+                stroke="none"
+                d={
+                  tick.verdict === 'high' ? `M${-mark} ${y + mark}H${mark}L0 ${y - mark}Z` : `M${-mark} ${y - mark}H${mark}L0 ${y + mark}Z`
+                }
+              />
             )}
           </svg>
         );

@@ -14,7 +14,11 @@ export type ButtonLook = keyof typeof looks;
 export type ButtonSize = keyof typeof sizes;
 
 export const buttonClass = (look: ButtonLook = 'secondary', size: ButtonSize = 'medium') =>
-  classNames('inline-flex items-center justify-center gap-2 rounded border whitespace-nowrap disabled:opacity-50', looks[look], sizes[size]);
+  classNames(
+    'inline-flex items-center justify-center gap-2 rounded border whitespace-nowrap disabled:opacity-50',
+    looks[look],
+    sizes[size],
+  );
 
 interface ButtonProps extends ButtonHTMLAttributes<HTMLButtonElement> {
   look?: ButtonLook;
@@ -26,7 +30,13 @@ interface ButtonProps extends ButtonHTMLAttributes<HTMLButtonElement> {
 
 export function Button({ look, size, isPending, pendingText, className, children, disabled, type = 'button', ...rest }: ButtonProps) {
   return (
-    <button type={type} className={classNames(buttonClass(look, size), className)} disabled={disabled || isPending} aria-busy={isPending || undefined} {...rest}>
+    <button
+      type={type}
+      className={classNames(buttonClass(look, size), className)}
+      disabled={disabled || isPending}
+      aria-busy={isPending || undefined}
+      {...rest}
+    >
       {isPending ? (pendingText ?? children) : children}
     </button>
   );

@@ -23,7 +23,7 @@ export function Dialog({ isOpen, onClose, title, description, isWide, children }
         <Radix.Content
           aria-describedby={description ? undefined : ''}
           className={classNames(
-            'fixed top-1/2 left-1/2 z-50 max-h-[90dvh] w-[calc(100vw-1.5rem)] -translate-x-1/2 -translate-y-1/2 overflow-auto rounded border bg-sheet p-5 text-ink shadow-lg',
+            'bg-sheet text-ink fixed top-1/2 left-1/2 z-50 max-h-[90dvh] w-[calc(100vw-1.5rem)] -translate-x-1/2 -translate-y-1/2 overflow-auto rounded border p-5 shadow-lg',
             isWide ? 'max-w-4xl' : 'max-w-lg',
           )}
         >
@@ -31,11 +31,11 @@ export function Dialog({ isOpen, onClose, title, description, isWide, children }
             <Radix.Title asChild>
               <h2>{title}</h2>
             </Radix.Title>
-            <Radix.Close className="-m-2 p-2 text-quiet hover:text-ink" aria-label="Close">
+            <Radix.Close className="text-quiet hover:text-ink -m-2 p-2" aria-label="Close">
               <X size={18} />
             </Radix.Close>
           </div>
-          {description && <Radix.Description className="mt-1 text-sm text-quiet">{description}</Radix.Description>}
+          {description && <Radix.Description className="text-quiet mt-1 text-sm">{description}</Radix.Description>}
           <div className="mt-4">{children}</div>
         </Radix.Content>
       </Radix.Portal>

@@ -15,11 +15,11 @@ function Framed({ id, label, hint, error, children }: FieldProps & { id: string;
   return (
     <div className="flex flex-col gap-1">
       <label htmlFor={id} className="text-sm font-semibold">
-        {label} {hint && <span className="font-normal text-quiet">{hint}</span>}
+        {label} {hint && <span className="text-quiet font-normal">{hint}</span>}
       </label>
       {children}
       {error && (
-        <p id={`${id}-error`} role="alert" className="text-sm text-high">
+        <p id={`${id}-error`} role="alert" className="text-high text-sm">
           ▴ {error}
         </p>
       )}
@@ -28,7 +28,13 @@ function Framed({ id, label, hint, error, children }: FieldProps & { id: string;
 }
 
 /** A labelled input; spread `register(...)` of react-hook-form into it. */
-export function TextField({ label, hint, error, className, ...rest }: FieldProps & InputHTMLAttributes<HTMLInputElement> & { ref?: Ref<HTMLInputElement> }) {
+export function TextField({
+  label,
+  hint,
+  error,
+  className,
+  ...rest
+}: FieldProps & InputHTMLAttributes<HTMLInputElement> & { ref?: Ref<HTMLInputElement> }) {
   const id = useId();
   return (
     <Framed id={id} label={label} hint={hint} error={error}>
@@ -43,7 +49,13 @@ export function TextField({ label, hint, error, className, ...rest }: FieldProps
   );
 }
 
-export function TextArea({ label, hint, error, className, ...rest }: FieldProps & TextareaHTMLAttributes<HTMLTextAreaElement> & { ref?: Ref<HTMLTextAreaElement> }) {
+export function TextArea({
+  label,
+  hint,
+  error,
+  className,
+  ...rest
+}: FieldProps & TextareaHTMLAttributes<HTMLTextAreaElement> & { ref?: Ref<HTMLTextAreaElement> }) {
   const id = useId();
   return (
     <Framed id={id} label={label} hint={hint} error={error}>
@@ -77,18 +89,23 @@ export function SelectField({
   );
 }
 
-export function CheckField({ label, hint, error, ...rest }: FieldProps & InputHTMLAttributes<HTMLInputElement> & { ref?: Ref<HTMLInputElement> }) {
+export function CheckField({
+  label,
+  hint,
+  error,
+  ...rest
+}: FieldProps & InputHTMLAttributes<HTMLInputElement> & { ref?: Ref<HTMLInputElement> }) {
   const id = useId();
   return (
     <div className="flex flex-col gap-1">
       <div className="flex items-center gap-2">
-        <input id={id} type="checkbox" className="size-5 accent-petrol" {...rest} />
+        <input id={id} type="checkbox" className="accent-petrol size-5" {...rest} />
         <label htmlFor={id} className="text-sm">
           {label} {hint && <span className="text-quiet">{hint}</span>}
         </label>
       </div>
       {error && (
-        <p role="alert" className="text-sm text-high">
+        <p role="alert" className="text-high text-sm">
           ▴ {error}
         </p>
       )}

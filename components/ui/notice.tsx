@@ -6,9 +6,9 @@ const marks = { plain: 'border-l-rule', brass: 'border-l-brass', high: 'border-l
 /** A short message that stays on the page: what happened, to what, and what to do. */
 export function Notice({ tone = 'plain', title, children }: { tone?: keyof typeof marks; title?: string; children?: ReactNode }) {
   return (
-    <div role={tone === 'high' ? 'alert' : 'status'} className={classNames('rounded border border-l-4 bg-sheet px-4 py-3', marks[tone])}>
+    <div role={tone === 'high' ? 'alert' : 'status'} className={classNames('bg-sheet rounded border border-l-4 px-4 py-3', marks[tone])}>
       {title && <p className="font-semibold">{title}</p>}
-      {children && <div className="text-sm text-quiet">{children}</div>}
+      {children && <div className="text-quiet text-sm">{children}</div>}
     </div>
   );
 }

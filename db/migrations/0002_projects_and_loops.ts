@@ -90,5 +90,6 @@ export async function up(knex: Knex): Promise<void> {
 }
 
 export async function down(knex: Knex): Promise<void> {
-  for (const table of ['revisions', 'drafts', 'loops', 'tolerance_rules', 'project_members', 'projects']) await knex.schema.dropTable(table);
+  for (const table of ['revisions', 'drafts', 'loops', 'tolerance_rules', 'project_members', 'projects'])
+    await knex.schema.dropTable(table);
 }

@@ -66,7 +66,9 @@ export async function up(knex: Knex): Promise<void> {
     await knex.raw(
       `create trigger ${table}_append_only before update or delete on ${table} for each row execute function refuse_rewriting()`,
     );
-    await knex.raw(`create trigger ${table}_no_truncate before truncate on ${table} for each statement execute function refuse_rewriting()`);
+    await knex.raw(
+      `create trigger ${table}_no_truncate before truncate on ${table} for each statement execute function refuse_rewriting()`,
+    );
   }
 }
 

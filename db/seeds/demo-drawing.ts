@@ -45,16 +45,42 @@ const storeys = [
 ];
 
 /** Where things stand on the sheet, px. */
-const sheet = { riserX: 520, riserStep: 80, unitStep: 120, firstUnit: 150, supplyY: 50, unitY: 155, returnY: 260, mainSupplyY: 720, mainReturnY: 860 };
+const sheet = {
+  riserX: 520,
+  riserStep: 80,
+  unitStep: 120,
+  firstUnit: 150,
+  supplyY: 50,
+  unitY: 155,
+  returnY: 260,
+  mainSupplyY: 720,
+  mainReturnY: 860,
+};
 
 /** Stands in until `sizeDemo` knows the flow that each valve carries. */
-const noValve: ChosenValve = { name: '', kvTable: [{ setting: 0.5, kv: 1 }, { setting: 4, kv: 400 }], settingTurns: null, isLocked: false };
+const noValve: ChosenValve = {
+  name: '',
+  kvTable: [
+    { setting: 0.5, kv: 1 },
+    { setting: 4, kv: 400 },
+  ],
+  settingTurns: null,
+  isLocked: false,
+};
 
 /** The pieces and pipes of a demo loop; sizes, valves and the pump are chosen afterwards by `sizeDemo`. */
 export function drawDemo(loop: DemoLoop): Drawing {
   const equipment: Equipment[] = [];
   const pipes: DrawingPipe[] = [];
-  const place = (id: string, tag: string, storeyId: string, x: number, y: number, rotation: Equipment['rotation'] = 0) => ({ id, tag, storeyId, x, y, rotation, isMirrored: false });
+  const place = (id: string, tag: string, storeyId: string, x: number, y: number, rotation: Equipment['rotation'] = 0) => ({
+    id,
+    tag,
+    storeyId,
+    x,
+    y,
+    rotation,
+    isMirrored: false,
+  });
   const tee = (id: string, storeyId: string, x: number, y: number) => equipment.push({ ...place(id, '', storeyId, x, y), kind: 'tee' });
   const pipe = (from: string, to: string, lengthM: number, circuit: 'supply' | 'return', minorK = 1) =>
     pipes.push({
@@ -92,22 +118,41 @@ export function drawDemo(loop: DemoLoop): Drawing {
     tee(`riser-s-${riser}`, level1.id, x0, level1.top + sheet.supplyY);
     tee(`riser-r-${riser}`, level1.id, x0 + 60, level1.top + sheet.returnY);
     equipment.push({ ...place(`rv-${riser}`, `RV-${riser}`, 'storey-0', x0 + 60, 790, 90), kind: 'balancingValve', valve: noValve });
-    pipe(r === 0 ? 'source.out' : `main-s-${loop.risers[r - 1]}.e`, isLast ? `riser-s-${riser}.s` : `main-s-${riser}.w`, r === 0 ? 6 : 14, 'supply', 2);
+    pipe(
+      r === 0 ? 'source.out' : `main-s-${loop.risers[r - 1]}.e`,
+      isLast ? `riser-s-${riser}.s` : `main-s-${riser}.w`,
+      r === 0 ? 6 : 14,
+      'supply',
+      2,
+    );
     if (!isLast) pipe(`main-s-${riser}.n`, `riser-s-${riser}.s`, 4, 'supply');
     pipe(`riser-r-${riser}.s`, `rv-${riser}.in`, 3, 'return');
     pipe(`rv-${riser}.out`, isLast ? `main-r-${loop.risers[r - 1]}.e` : `main-r-${riser}.n`, isLast ? 15 : 1, 'return');
     if (!isLast) pipe(`main-r-${riser}.w`, r === 0 ? 'main-tee.e' : `main-r-${loop.risers[r - 1]}.e`, r === 0 ? 6 : 14, 'return', 2);
 
-    for (const [storey, level] of [[1, level1], [2, storeys[0]!]] as const) {
+    for (const [storey, level] of [
+      [1, level1],
+      [2, storeys[0]!],
+    ] as const) {
       const key = `${riser}${storey}`;
       const [supplyY, returnY] = [level.top + sheet.supplyY, level.top + sheet.returnY];
-      equipment.push({ ...place(`bv-${key}`, `BV-${storey}${riser}`, level.id, x0 + 100, returnY, 180), kind: 'balancingValve', valve: noValve });
+      equipment.push({
+        ...place(`bv-${key}`, `BV-${storey}${riser}`, level.id, x0 + 100, returnY, 180),
+        kind: 'balancingValve',
+        valve: noValve,
+      });
       for (let k = 0; k < loop.unitsPerBranch; k++) {
         const x = x0 + sheet.firstUnit + k * sheet.unitStep;
         const number = r * loop.unitsPerBranch + k + 1;
         const loadKw = Number((loop.loadsKw[k % loop.loadsKw.length]! * (1 + 0.08 * (r - 1))).toFixed(2));
         const unit: TerminalUnit = {
-          ...place(`unit-${key}-${k + 1}`, `${loop.unitTag}-${storey}.${String(number).padStart(2, '0')}`, level.id, x, level.top + sheet.unitY),
+          ...place(
+            `unit-${key}-${k + 1}`,
+            `${loop.unitTag}-${storey}.${String(number).padStart(2, '0')}`,
+            level.id,
+            x,
+            level.top + sheet.unitY,
+          ),
           kind: 'terminalUnit',
           room: `${storey}.${String(10 + number)}`,
           loadKw,
@@ -124,7 +169,8 @@ export function drawDemo(loop: DemoLoop): Drawing {
           tee(`s-${key}-${k + 1}`, level.id, x, supplyY);
           tee(`r-${key}-${k + 1}`, level.id, x, returnY);
         }
-        const [before, after] = k === 0 ? [storey === 1 ? `riser-s-${riser}.e` : `riser-s-${riser}.n`, `bv-${key}.in`] : [`s-${key}-${k}.e`, `r-${key}-${k}.e`];
+        const [before, after] =
+          k === 0 ? [storey === 1 ? `riser-s-${riser}.e` : `riser-s-${riser}.n`, `bv-${key}.in`] : [`s-${key}-${k}.e`, `r-${key}-${k}.e`];
         const run = k === 0 ? (storey === 1 ? 5 : 9) : 4.5;
         pipe(before, isEnd ? `${unit.id}.in` : `s-${key}-${k + 1}.w`, run, 'supply');
         pipe(isEnd ? `${unit.id}.out` : `r-${key}-${k + 1}.w`, after, run, 'return');
@@ -140,7 +186,14 @@ export function drawDemo(loop: DemoLoop): Drawing {
   const plant = 'storey-0';
   equipment.push(
     { ...place('vessel', 'EV-1', plant, 60, 800), kind: 'expansionVessel', gaugePressureKpa: 180 },
-    { ...place('pump', 'P-1', plant, 150, sheet.mainSupplyY), kind: 'pump', curve: pumpCurve(40, 6), efficiency: [], speed: 1, hasNonReturn: true },
+    {
+      ...place('pump', 'P-1', plant, 150, sheet.mainSupplyY),
+      kind: 'pump',
+      curve: pumpCurve(40, 6),
+      efficiency: [],
+      speed: 1,
+      hasNonReturn: true,
+    },
     { ...place('check', 'NRV-1', plant, 250, sheet.mainSupplyY), kind: 'checkValve', kv: 100 },
     {
       ...place('source', `${loop.sourceTag}-1`, plant, 350, sheet.mainSupplyY),

@@ -30,7 +30,7 @@ function noise(seed: number): () => number {
     state = (state + 0x6d2b79f5) | 0;
     let mixed = Math.imul(state ^ (state >>> 15), 1 | state);
     mixed = (mixed + Math.imul(mixed ^ (mixed >>> 7), 61 | mixed)) ^ mixed;
-    return (((mixed ^ (mixed >>> 14)) >>> 0) / 2 ** 31) - 1;
+    return ((mixed ^ (mixed >>> 14)) >>> 0) / 2 ** 31 - 1;
   };
 }
 
@@ -58,10 +58,18 @@ export async function measureDemo(trx: Knex.Transaction, access: Access, loopId:
   const { organizationId } = access.person;
   const revision = await trx('revisions').where({ organization_id: organizationId, loop_id: loopId }).first('id', 'network_document');
   const stations: DemoStation[] = await trx('stations')
-    .join('station_designs', (join) => join.on('station_designs.organization_id', 'stations.organization_id').on('station_designs.station_id', 'stations.id'))
+    .join('station_designs', (join) =>
+      join.on('station_designs.organization_id', 'stations.organization_id').on('station_designs.station_id', 'stations.id'),
+    )
     .where({ 'stations.organization_id': organizationId, 'station_designs.revision_id': revision.id })
     .orderBy('walking_order')
-    .select({ id: 'stations.id', elementId: 'stations.element_id', kind: 'stations.kind', settingTurns: 'setting_turns', kvTable: 'kv_table' });
+    .select({
+      id: 'stations.id',
+      elementId: 'stations.element_id',
+      kind: 'stations.kind',
+      settingTurns: 'setting_turns',
+      kvTable: 'kv_table',
+    });
   const built = asBuilt(revision.network_document);
   const linkOf = ({ kind, elementId }: DemoStation) => (kind === 'terminal' ? unitLinkId(elementId, 'balancing') : elementId);
   const issued = new Map(stations.map((station) => [linkOf(station), Number(station.settingTurns?.toFixed(1) ?? 0)]));

@@ -60,7 +60,8 @@ export async function loadDemo(knex: Knex): Promise<boolean> {
       created_by: mara,
     });
     for (const { who, role, isAdministrator } of people) {
-      if (!isAdministrator) await trx('project_members').insert({ organization_id: organizationId, project_id: projectId, person_id: ids.get(who), role });
+      if (!isAdministrator)
+        await trx('project_members').insert({ organization_id: organizationId, project_id: projectId, person_id: ids.get(who), role });
     }
     for (const rule of defaultTolerances) {
       await trx('tolerance_rules').insert({
@@ -77,7 +78,10 @@ export async function loadDemo(knex: Knex): Promise<boolean> {
     const technician: Access = { person: asPerson(person('tobin', 'Tobin Ashgrove'), 'technician'), roles: ['technician'], projectId };
     const meters = await addMeters(trx, organizationId);
     await onConnection(trx, async () => {
-      for (const [name, loop] of [['CHW-1', chilledLoop], ['HTG-1', hotLoop]] as const) {
+      for (const [name, loop] of [
+        ['CHW-1', chilledLoop],
+        ['HTG-1', hotLoop],
+      ] as const) {
         const loopId = await addLoop(trx, designer, name, loop);
         await issueRevision(designer, loopId, { draftVersion: 1, note: 'For construction' });
         if (loop === chilledLoop) await measureDemo(trx, technician, loopId, meters);
@@ -87,7 +91,10 @@ export async function loadDemo(knex: Knex): Promise<boolean> {
   });
 }
 
-const asPerson = (person: Pick<Person, 'organizationId' | 'organizationName' | 'id' | 'name'>, defaultRole: Person['defaultRole']): Person => ({
+const asPerson = (
+  person: Pick<Person, 'organizationId' | 'organizationName' | 'id' | 'name'>,
+  defaultRole: Person['defaultRole'],
+): Person => ({
   ...person,
   email: '',
   isAdministrator: false,
@@ -98,7 +105,14 @@ const asPerson = (person: Pick<Person, 'organizationId' | 'organizationName' | '
 
 async function addLoop(trx: Knex.Transaction, { person, projectId }: Access, name: string, loop: DemoLoop): Promise<string> {
   const loopId = uuidv7();
-  await trx('loops').insert({ organization_id: person.organizationId, id: loopId, project_id: projectId, name, service: loop.service, created_by: person.id });
+  await trx('loops').insert({
+    organization_id: person.organizationId,
+    id: loopId,
+    project_id: projectId,
+    name,
+    service: loop.service,
+    created_by: person.id,
+  });
   await trx('drafts').insert({
     organization_id: person.organizationId,
     loop_id: loopId,
@@ -115,9 +129,44 @@ async function addMeters(trx: Knex.Transaction, organizationId: string): Promise
   const day = (fromToday: number) => new Date(Date.now() + fromToday * 86_400_000).toISOString().slice(0, 10);
   const meter = { organization_id: organizationId, accuracy_absolute: 0 };
   await trx('instruments').insert([
-    { ...meter, id: pressureId, name: 'Differential pressure meter', kind: 'differential-pressure', serial: 'DP-02', range_low: 0, range_high: 200, accuracy_percent: 1, accuracy_absolute: 0.1, calibrated_on: day(-262), calibration_due_on: day(103) },
-    { ...meter, id: flowId, name: 'Clamp-on ultrasonic meter', kind: 'flow', serial: 'UF-01', range_low: 0.05, range_high: 40, accuracy_percent: 2, calibrated_on: day(-120), calibration_due_on: day(245) },
-    { ...meter, id: uuidv7(), name: 'Differential pressure meter, old', kind: 'differential-pressure', serial: 'DP-01', range_low: 0, range_high: 100, accuracy_percent: 2, accuracy_absolute: 0.2, calibrated_on: day(-500), calibration_due_on: day(-135) },
+    {
+      ...meter,
+      id: pressureId,
+      name: 'Differential pressure meter',
+      kind: 'differential-pressure',
+      serial: 'DP-02',
+      range_low: 0,
+      range_high: 200,
+      accuracy_percent: 1,
+      accuracy_absolute: 0.1,
+      calibrated_on: day(-262),
+      calibration_due_on: day(103),
+    },
+    {
+      ...meter,
+      id: flowId,
+      name: 'Clamp-on ultrasonic meter',
+      kind: 'flow',
+      serial: 'UF-01',
+      range_low: 0.05,
+      range_high: 40,
+      accuracy_percent: 2,
+      calibrated_on: day(-120),
+      calibration_due_on: day(245),
+    },
+    {
+      ...meter,
+      id: uuidv7(),
+      name: 'Differential pressure meter, old',
+      kind: 'differential-pressure',
+      serial: 'DP-01',
+      range_low: 0,
+      range_high: 100,
+      accuracy_percent: 2,
+      accuracy_absolute: 0.2,
+      calibrated_on: day(-500),
+      calibration_due_on: day(-135),
+    },
   ]);
   return { pressureId, flowId };
 }

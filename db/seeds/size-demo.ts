@@ -52,7 +52,10 @@ export function sizeDemo(drawn: Drawing): Drawing {
         ? {
             ...piece,
             curve: pumpCurve(duty.requiredHeadM * pumpSurplus, duty.flowLs),
-            efficiency: [0.2, 0.5, 0.8, 1, 1.3, 1.6].map((part, i) => ({ flowLs: Number((part * duty.flowLs).toFixed(3)), fraction: [0.25, 0.5, 0.64, 0.68, 0.66, 0.56][i]! })),
+            efficiency: [0.2, 0.5, 0.8, 1, 1.3, 1.6].map((part, i) => ({
+              flowLs: Number((part * duty.flowLs).toFixed(3)),
+              fraction: [0.25, 0.5, 0.64, 0.68, 0.66, 0.56][i]!,
+            })),
           }
         : piece,
     ),

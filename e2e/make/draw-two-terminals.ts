@@ -18,7 +18,10 @@ export async function drawTwoTerminals(page: Page): Promise<void> {
   await draw.fill('Return', 8);
 
   const pump = await draw.place('Pump', 200, 160);
-  await draw.paste('pump curve', linkOf('PU', 'pump').curve.map(({ flowLs, headM }) => [flowLs, headM]));
+  await draw.paste(
+    'pump curve',
+    linkOf('PU', 'pump').curve.map(({ flowLs, headM }) => [flowLs, headM]),
+  );
   const source = await draw.place('Source', 360, 160);
   const chiller = linkOf('CH', 'resistance');
   await draw.fill('Design flow', chiller.designFlowLs!);
@@ -35,7 +38,10 @@ export async function drawTwoTerminals(page: Page): Promise<void> {
     await draw.field('Strainer, none if empty').fill('');
     await draw.field('Strainer, none if empty').press('Enter');
     await draw.choose('Valve', 'Own table');
-    await draw.paste('settings and kv', linkOf(valve, 'balancingValve').kvTable.map(({ setting, kv }) => [setting, kv]));
+    await draw.paste(
+      'settings and kv',
+      linkOf(valve, 'balancingValve').kvTable.map(({ setting, kv }) => [setting, kv]),
+    );
     return id;
   };
   const first = await unit(500, 340, 'T1', 'V1');

@@ -10,7 +10,10 @@ export function designer(page: Page) {
 
   /** Places a piece at a point of the canvas (px from its upper left) and answers its id. */
   const place = async (tool: string, x: number, y: number): Promise<string> => {
-    await page.getByRole('toolbar', { name: 'Tools' }).getByRole('button', { name: new RegExp(`^${tool} \\(`) }).click();
+    await page
+      .getByRole('toolbar', { name: 'Tools' })
+      .getByRole('button', { name: new RegExp(`^${tool} \\(`) })
+      .click();
     await canvas.click({ position: { x, y } });
     await page.keyboard.press('Escape');
     const placed = page.locator('.react-flow__node.selected');

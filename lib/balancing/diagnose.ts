@@ -39,13 +39,11 @@ export function diagnose(fitted: FittedLoop): Diagnosis[] {
   return [
     ...(whole ? [whole] : []),
     ...fitted.faults.filter((fault) => !explained(fault)).map((fault) => ofFault(fitted, fault)),
-    ...fitted.readings
-      .filter(isNegative)
-      .map(({ reading }) => ({
-        at: reading.link,
-        evidence: `The reading is negative (${reading.value.toFixed(2)}).`,
-        causes: listed(['hoses-swapped']),
-      })),
+    ...fitted.readings.filter(isNegative).map(({ reading }) => ({
+      at: reading.link,
+      evidence: `The reading is negative (${reading.value.toFixed(2)}).`,
+      causes: listed(['hoses-swapped']),
+    })),
   ];
 }
 

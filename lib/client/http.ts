@@ -18,7 +18,12 @@ export class RequestError extends Error {
 }
 
 /** One request to the application's own server, JSON both ways. Throws `RequestError` with a sentence for a person. */
-export async function send<Answer>(method: 'GET' | 'POST' | 'PUT' | 'PATCH' | 'DELETE', path: string, body?: unknown, signal?: AbortSignal): Promise<Answer> {
+export async function send<Answer>(
+  method: 'GET' | 'POST' | 'PUT' | 'PATCH' | 'DELETE',
+  path: string,
+  body?: unknown,
+  signal?: AbortSignal,
+): Promise<Answer> {
   let response: Response;
   try {
     response = await fetch(path, {

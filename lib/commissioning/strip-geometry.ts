@@ -28,6 +28,10 @@ export function stripGeometry<T extends Tick>(
     designY: yOf(100),
     bandTop: yOf(band.upperPercent),
     bandBottom: yOf(band.lowerPercent),
-    ticks: ticks.map((tick, i) => ({ tick, x: margin + step * (i + 0.5), y: tick.percentOfDesign === null ? null : yOf(tick.percentOfDesign) })),
+    ticks: ticks.map((tick, i) => ({
+      tick,
+      x: margin + step * (i + 0.5),
+      y: tick.percentOfDesign === null ? null : yOf(tick.percentOfDesign),
+    })),
   };
 }

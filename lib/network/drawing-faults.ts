@@ -28,13 +28,16 @@ export function faultsOf(drawing: Drawing): Fault[] {
   faults.push(...repeatedTags(drawing), ...openEnds(drawing));
   for (const piece of drawing.equipment) faults.push(...missingData(piece));
   for (const pipe of drawing.pipes) {
-    const lacking = [
-      pipe.lengthM === null && 'length',
-      pipe.boreMm === null && 'size',
-      pipe.roughnessMm === null && 'roughness',
-    ].filter((what): what is string => Boolean(what));
+    const lacking = [pipe.lengthM === null && 'length', pipe.boreMm === null && 'size', pipe.roughnessMm === null && 'roughness'].filter(
+      (what): what is string => Boolean(what),
+    );
     if (lacking.length) {
-      faults.push({ code: 'pipe-data', severity: 'error', message: `A pipe has no ${lacking.join(' and no ')}.`, place: { kind: 'pipe', id: pipe.id } });
+      faults.push({
+        code: 'pipe-data',
+        severity: 'error',
+        message: `A pipe has no ${lacking.join(' and no ')}.`,
+        place: { kind: 'pipe', id: pipe.id },
+      });
     }
   }
   if (!drawing.equipment.some((piece) => piece.kind === 'pump')) {
@@ -54,7 +57,14 @@ function repeatedTags(drawing: Drawing): Fault[] {
       seen.add(piece.tag);
       return [];
     }
-    return [{ code: 'tag-repeated', severity: 'error' as const, message: `The tag ${piece.tag} stands on more than one piece.`, place: at(piece) }];
+    return [
+      {
+        code: 'tag-repeated',
+        severity: 'error' as const,
+        message: `The tag ${piece.tag} stands on more than one piece.`,
+        place: at(piece),
+      },
+    ];
   });
 }
 
@@ -74,13 +84,23 @@ function openEnds(drawing: Drawing): Fault[] {
       joined.set(key, (joined.get(key) ?? 0) + 1);
     }
     if (pipe.from.equipmentId === pipe.to.equipmentId && byId.get(pipe.from.equipmentId)?.kind === 'tee') {
-      faults.push({ code: 'pipe-to-itself', severity: 'error', message: 'A pipe joins a tee to itself.', place: { kind: 'pipe', id: pipe.id } });
+      faults.push({
+        code: 'pipe-to-itself',
+        severity: 'error',
+        message: 'A pipe joins a tee to itself.',
+        place: { kind: 'pipe', id: pipe.id },
+      });
     }
   }
   for (const piece of drawing.equipment) {
     if (piece.kind === 'tee') {
       if ((joined.get(piece.id) ?? 0) < 2) {
-        faults.push({ code: 'dead-leg', severity: 'warning', message: `${nameOf(piece)} joins fewer than two pipes: a dead leg.`, place: at(piece) });
+        faults.push({
+          code: 'dead-leg',
+          severity: 'warning',
+          message: `${nameOf(piece)} joins fewer than two pipes: a dead leg.`,
+          place: at(piece),
+        });
       }
       continue;
     }
@@ -95,20 +115,35 @@ function openEnds(drawing: Drawing): Fault[] {
 
 /** Figures that the law of a piece needs and that are not there yet. */
 function missingData(piece: Equipment): Fault[] {
-  const lacks = (what: string): Fault => ({ code: 'missing-data', severity: 'error', message: `${nameOf(piece)} has no ${what}.`, place: at(piece) });
-  const fault = (code: string, message: string, severity: Fault['severity'] = 'error'): Fault => ({ code, severity, message, place: at(piece) });
+  const lacks = (what: string): Fault => ({
+    code: 'missing-data',
+    severity: 'error',
+    message: `${nameOf(piece)} has no ${what}.`,
+    place: at(piece),
+  });
+  const fault = (code: string, message: string, severity: Fault['severity'] = 'error'): Fault => ({
+    code,
+    severity,
+    message,
+    place: at(piece),
+  });
   switch (piece.kind) {
     case 'pump':
-      return piece.curve.length < 3 ? [fault('pump-curve', `${nameOf(piece)} needs at least three points on its curve.`)] : pumpCurveFaults(piece.curve, fault, nameOf(piece));
+      return piece.curve.length < 3
+        ? [fault('pump-curve', `${nameOf(piece)} needs at least three points on its curve.`)]
+        : pumpCurveFaults(piece.curve, fault, nameOf(piece));
     case 'source':
-      return [piece.designFlowLs === null && lacks('design flow'), piece.designDropKpa === null && lacks('drop at design flow')].filter((f) => f !== false);
+      return [piece.designFlowLs === null && lacks('design flow'), piece.designDropKpa === null && lacks('drop at design flow')].filter(
+        (f) => f !== false,
+      );
     case 'terminalUnit':
       return [
         piece.designFlowLs === null && lacks('design flow'),
         piece.coilDropKpa === null && lacks('coil drop'),
         piece.controlValve && piece.controlValve.kvs === null && lacks('Kvs of its control valve'),
         piece.balancingValve && valveFault(piece.balancingValve, nameOf(piece), fault),
-        !piece.balancingValve && fault('no-balancing-valve', `${nameOf(piece)} has no balancing valve: its flow can be neither set nor measured.`, 'warning'),
+        !piece.balancingValve &&
+          fault('no-balancing-valve', `${nameOf(piece)} has no balancing valve: its flow can be neither set nor measured.`, 'warning'),
       ].filter((f) => Boolean(f)) as Fault[];
     case 'balancingValve':
       return [valveFault(piece.valve, nameOf(piece), fault)].filter((f) => f !== null);

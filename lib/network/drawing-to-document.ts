@@ -59,7 +59,9 @@ export function drawingToDocument(drawing: Drawing, name: string): DrawnNetwork 
       name,
       // Friction is that of the mean temperature: half of the pipes carry supply, half return.
       fluid: medium === 'water' ? { medium, temperatureC } : { medium, temperatureC, massFraction },
-      ...(vessel && { reference: { node: nodeIdOf({ equipmentId: vessel.id, port: 'in' }), gaugePressureKpa: vessel.gaugePressureKpa ?? 0 } }),
+      ...(vessel && {
+        reference: { node: nodeIdOf({ equipmentId: vessel.id, port: 'in' }), gaugePressureKpa: vessel.gaugePressureKpa ?? 0 },
+      }),
       nodes,
       links,
       options: { pumpExcess: drawing.pumpExcess },

@@ -63,9 +63,7 @@ export const terminalUnitSchema = z.object({
   designFlowLs: positive,
   coilDropKpa: positive,
   strainerKv: positive,
-  controlValve: z
-    .object({ kvs: positive, characteristic: z.enum(characteristics), opening: z.number().min(0).max(1) })
-    .nullable(),
+  controlValve: z.object({ kvs: positive, characteristic: z.enum(characteristics), opening: z.number().min(0).max(1) }).nullable(),
   balancingValve: valveSchema.nullable(),
 });
 
@@ -114,7 +112,10 @@ export const pipeSchema = z.object({
   boreMm: positive,
   roughnessMm: notNegative,
   minorK: z.number().min(0).max(1e6),
-  bends: z.array(z.object({ x: coordinate, y: coordinate })).max(20).default([]),
+  bends: z
+    .array(z.object({ x: coordinate, y: coordinate }))
+    .max(20)
+    .default([]),
 });
 
 export const storeySchema = z.object({

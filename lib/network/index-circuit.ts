@@ -15,7 +15,13 @@ export function circuitThrough(document: NetworkDocument, flows: SolveResult, te
   for (const link of document.links) {
     const flowLs = flowOf.get(link.id) ?? 0;
     if (flowLs === 0) continue;
-    const step: Step = { id: link.id, kind: link.kind, size: Math.abs(flowLs), upstream: flowLs > 0 ? link.from : link.to, downstream: flowLs > 0 ? link.to : link.from };
+    const step: Step = {
+      id: link.id,
+      kind: link.kind,
+      size: Math.abs(flowLs),
+      upstream: flowLs > 0 ? link.from : link.to,
+      downstream: flowLs > 0 ? link.to : link.from,
+    };
     add(leaving, step.upstream, step);
     add(arriving, step.downstream, step);
   }

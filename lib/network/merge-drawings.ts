@@ -64,7 +64,10 @@ export function mergeDrawings(base: Drawing, mine: Drawing, theirs: Drawing): Me
 /** The merged drawing with their side of one conflict taken instead of mine. */
 export function takeTheirs(merged: Drawing, conflict: Conflict): Drawing {
   if (conflict.place.kind === 'loop') {
-    return { ...merged, ...ofSettings(settingsOf(merged).map((setting) => (setting.id === conflict.place.id ? (conflict.theirs as Setting) : setting))) };
+    return {
+      ...merged,
+      ...ofSettings(settingsOf(merged).map((setting) => (setting.id === conflict.place.id ? (conflict.theirs as Setting) : setting))),
+    };
   }
   const list = { equipment: 'equipment', pipe: 'pipes', storey: 'storeys' } as const;
   const key = list[conflict.place.kind];
@@ -100,7 +103,8 @@ function choose(before: Item | undefined, mine: Item | undefined, theirs: Item |
 function namer(drawings: Drawing[]) {
   const names = drawings.map(pieceNames);
   const settingNames: Record<string, string> = { fluid: 'Fluid', pumpExcess: 'Excess head' };
-  return ({ kind, id }: Place): string => (kind === 'loop' ? settingNames[id] : undefined) ?? names.find((known) => known.has(id))?.get(id) ?? id;
+  return ({ kind, id }: Place): string =>
+    (kind === 'loop' ? settingNames[id] : undefined) ?? names.find((known) => known.has(id))?.get(id) ?? id;
 }
 
 function told(name: string, before: Item | undefined, after: Item | undefined): string {

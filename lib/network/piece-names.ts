@@ -7,7 +7,8 @@ export function pieceNames(drawing: Drawing): Map<string, string> {
   for (const storey of drawing.storeys) names.set(storey.id, `Storey ${storey.name}`);
   const ends = new Map(drawing.equipment.map((piece) => [piece.id, piece.tag || kindNames[piece.kind].toLowerCase()]));
   for (const piece of drawing.equipment) names.set(piece.id, piece.tag || kindNames[piece.kind]);
-  for (const pipe of drawing.pipes) names.set(pipe.id, `Pipe ${ends.get(pipe.from.equipmentId) ?? '?'} to ${ends.get(pipe.to.equipmentId) ?? '?'}`);
+  for (const pipe of drawing.pipes)
+    names.set(pipe.id, `Pipe ${ends.get(pipe.from.equipmentId) ?? '?'} to ${ends.get(pipe.to.equipmentId) ?? '?'}`);
   return names;
 }
 

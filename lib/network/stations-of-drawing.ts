@@ -31,17 +31,31 @@ export function stationsOfDrawing(drawing: Drawing, balance: BalanceResult): Dra
 
   const found: { piece: Equipment; station: Omit<DrawnStation, 'walkingOrder'> }[] = [];
   for (const piece of drawing.equipment) {
-    const base = { elementId: piece.id, tag: piece.tag || piece.id, storey: (piece.storeyId && storeyOf.get(piece.storeyId)?.name) || '', room: '' };
+    const base = {
+      elementId: piece.id,
+      tag: piece.tag || piece.id,
+      storey: (piece.storeyId && storeyOf.get(piece.storeyId)?.name) || '',
+      room: '',
+    };
     if (piece.kind === 'terminalUnit' && piece.designFlowLs !== null) {
       const valve = valveOf.get(unitLinkId(piece.id, 'balancing'));
       found.push({
         piece,
-        station: { ...base, kind: 'terminal', room: piece.room, designFlowLs: piece.designFlowLs, ...valveFields(piece.balancingValve, valve) },
+        station: {
+          ...base,
+          kind: 'terminal',
+          room: piece.room,
+          designFlowLs: piece.designFlowLs,
+          ...valveFields(piece.balancingValve, valve),
+        },
       });
     } else if (piece.kind === 'balancingValve') {
       const valve = valveOf.get(piece.id);
       if (valve && Math.abs(valve.flowLs) > 0) {
-        found.push({ piece, station: { ...base, kind: 'branch', designFlowLs: Math.abs(valve.flowLs), ...valveFields(piece.valve, valve) } });
+        found.push({
+          piece,
+          station: { ...base, kind: 'branch', designFlowLs: Math.abs(valve.flowLs), ...valveFields(piece.valve, valve) },
+        });
       }
     } else if (piece.kind === 'pump') {
       const pump = pumpOf.get(piece.id);
@@ -51,7 +65,11 @@ export function stationsOfDrawing(drawing: Drawing, balance: BalanceResult): Dra
     }
   }
   found.sort(
-    (a, b) => elevation(a.piece) - elevation(b.piece) || kindRank[a.station.kind] - kindRank[b.station.kind] || a.piece.x - b.piece.x || a.piece.y - b.piece.y,
+    (a, b) =>
+      elevation(a.piece) - elevation(b.piece) ||
+      kindRank[a.station.kind] - kindRank[b.station.kind] ||
+      a.piece.x - b.piece.x ||
+      a.piece.y - b.piece.y,
   );
   return found.map(({ station }, i) => ({ ...station, walkingOrder: i + 1 }));
 }

@@ -59,7 +59,9 @@ function reachable(host) {
 function readSecret(text) {
   if (!text) return undefined;
   if (text.length >= 32) return text;
-  throw new SetupFailure('AUTH_SECRET is too short to sign sessions with. Give 32 characters or more, for example from `openssl rand -base64 32`.');
+  throw new SetupFailure(
+    'AUTH_SECRET is too short to sign sessions with. Give 32 characters or more, for example from `openssl rand -base64 32`.',
+  );
 }
 
 /**

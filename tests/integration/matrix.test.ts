@@ -25,7 +25,11 @@ const modules = import.meta.glob<Record<string, Handler>>('../../app/api/**/rout
 const declared = Object.entries(modules)
   .filter(([path]) => !undeclared.includes(path))
   .flatMap(([path, module]) =>
-    methods.flatMap((method) => (module[method] ? [{ name: `${method} ${path.replace('../../app', '').replace('/route.ts', '')}`, method, handler: module[method] }] : [])),
+    methods.flatMap((method) =>
+      module[method]
+        ? [{ name: `${method} ${path.replace('../../app', '').replace('/route.ts', '')}`, method, handler: module[method] }]
+        : [],
+    ),
   );
 const guarded = declared.filter(({ handler }) => handler.permission !== 'public');
 
@@ -60,7 +64,9 @@ it('finds the routes at all', () => {
 it('uses every permission of the table somewhere, so that none is a dead letter', () => {
   const used = new Set(declared.map(({ handler }) => handler.permission));
   const usedByPagesAlone = ['project.see', 'draft.see', 'people.see'];
-  const dead = Object.keys(permissions).filter((permission) => !used.has(permission as Permission) && !usedByPagesAlone.includes(permission));
+  const dead = Object.keys(permissions).filter(
+    (permission) => !used.has(permission as Permission) && !usedByPagesAlone.includes(permission),
+  );
   expect(dead).toEqual([]);
 });
 

@@ -1,7 +1,15 @@
 type Handler = (request: Request, context: { params: Promise<Record<string, string>> }) => Promise<Response>;
 
 /** Calls a route handler as a browser on this site would, and gives back status and JSON. */
-export async function call(handler: Handler, { method = 'GET', params = {}, body, query = '' }: { method?: string; params?: Record<string, string>; body?: unknown; query?: string } = {}) {
+export async function call(
+  handler: Handler,
+  {
+    method = 'GET',
+    params = {},
+    body,
+    query = '',
+  }: { method?: string; params?: Record<string, string>; body?: unknown; query?: string } = {},
+) {
   const request = new Request(`http://127.0.0.1/api${query}`, {
     method,
     headers: { host: '127.0.0.1', origin: 'http://127.0.0.1', ...(body === undefined ? {} : { 'Content-Type': 'application/json' }) },

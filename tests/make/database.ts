@@ -10,12 +10,14 @@ function serverUrl(): URL {
   const text = process.env.TEST_DATABASE_URL ?? process.env.DATABASE_URL;
   if (!text) throw new Error('TEST_DATABASE_URL is not set: run `npm test`, which makes a throw-away PostgreSQL.');
   const url = new URL(text);
-  if (!['127.0.0.1', 'localhost', '[::1]'].includes(url.hostname)) throw new Error(`Tests refuse a database that is not local: ${url.hostname}`);
+  if (!['127.0.0.1', 'localhost', '[::1]'].includes(url.hostname))
+    throw new Error(`Tests refuse a database that is not local: ${url.hostname}`);
   return url;
 }
 
 const urlOf = (name: string) => Object.assign(serverUrl(), { pathname: `/${name}` }).toString();
-const connect = (name: string) => knex({ client: 'pg', connection: { connectionString: urlOf(name) }, pool: { min: 0, max: 4 }, migrations: { migrationSource } });
+const connect = (name: string) =>
+  knex({ client: 'pg', connection: { connectionString: urlOf(name) }, pool: { min: 0, max: 4 }, migrations: { migrationSource } });
 
 /** Migrates the template once; suites that start together wait for the first. */
 async function makeTemplate(admin: Knex): Promise<void> {

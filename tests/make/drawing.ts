@@ -21,9 +21,23 @@ export const pump = (id: string, headM = 10, flowLs = 4): Equipment => ({
   hasNonReturn: true,
 });
 
-export const source = (id: string, designFlowLs = 1): Equipment => ({ ...at, kind: 'source', id, tag: id, sourceKind: 'chiller', designFlowLs, designDropKpa: 20 });
+export const source = (id: string, designFlowLs = 1): Equipment => ({
+  ...at,
+  kind: 'source',
+  id,
+  tag: id,
+  sourceKind: 'chiller',
+  designFlowLs,
+  designDropKpa: 20,
+});
 export const tee = (id: string): Equipment => ({ ...at, kind: 'tee', id, tag: id });
-export const vessel = (id: string, gaugePressureKpa = 150): Equipment => ({ ...at, kind: 'expansionVessel', id, tag: id, gaugePressureKpa });
+export const vessel = (id: string, gaugePressureKpa = 150): Equipment => ({
+  ...at,
+  kind: 'expansionVessel',
+  id,
+  tag: id,
+  gaugePressureKpa,
+});
 
 export const unit = (id: string, designFlowLs = 0.2): Equipment => ({
   ...at,
@@ -70,7 +84,15 @@ export const drawing = (equipment: Equipment[], pipes: DrawingPipe[]): Drawing =
 
 /** Pump, chiller and terminals side by side on two mains, each on its own pair of tees: the smallest loop that balances. */
 export function ladder(flowsLs: number[]): Drawing {
-  const pieces: Equipment[] = [pump('P-1', 12, 4 * flowsLs.reduce((a, b) => a + b, 0)), source('CH-1', flowsLs.reduce((a, b) => a + b, 0)), vessel('EV-1'), tee('R-0')];
+  const pieces: Equipment[] = [
+    pump('P-1', 12, 4 * flowsLs.reduce((a, b) => a + b, 0)),
+    source(
+      'CH-1',
+      flowsLs.reduce((a, b) => a + b, 0),
+    ),
+    vessel('EV-1'),
+    tee('R-0'),
+  ];
   const pipes = [pipe('p-pump', 'R-0.e', 'P-1.in'), pipe('p-source', 'P-1.out', 'CH-1.in'), pipe('p-vessel', 'EV-1.in', 'R-0.s')];
   flowsLs.forEach((flowLs, i) => {
     pieces.push(tee(`S-${i + 1}`), tee(`R-${i + 1}`), unit(`FC-${i + 1}`, flowLs));

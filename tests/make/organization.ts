@@ -22,13 +22,23 @@ export interface MadeOrganization {
 }
 
 /** An organisation with a person in every role, one project and one loop with a draft. */
-export async function makeOrganization(db: Knex, { name = 'Test organisation', drawing = emptyDrawing('chilled') }: { name?: string; drawing?: Drawing } = {}): Promise<MadeOrganization> {
+export async function makeOrganization(
+  db: Knex,
+  { name = 'Test organisation', drawing = emptyDrawing('chilled') }: { name?: string; drawing?: Drawing } = {},
+): Promise<MadeOrganization> {
   const organizationId = uuidv7();
   await db('organizations').insert({ organization_id: organizationId, name });
   const person = async (who: string, role: 'designer' | 'technician' | 'owner', isAdministrator = false): Promise<MadePerson> => {
     const id = uuidv7();
     const email = `${who}-${organizationId.slice(-8)}@test.example`;
-    await db('people').insert({ organization_id: organizationId, id, name: who, email, is_administrator: isAdministrator, default_role: role });
+    await db('people').insert({
+      organization_id: organizationId,
+      id,
+      name: who,
+      email,
+      is_administrator: isAdministrator,
+      default_role: role,
+    });
     await db('sign_ins').insert({ email, organization_id: organizationId, person_id: id, password_hash: null });
     return { organizationId, id, name: who };
   };
@@ -40,7 +50,11 @@ export async function makeOrganization(db: Knex, { name = 'Test organisation', d
 
   const projectId = uuidv7();
   await db('projects').insert({ organization_id: organizationId, id: projectId, name: 'Project', created_by: designer.id });
-  for (const [member, role] of [[designer, 'designer'], [technician, 'technician'], [owner, 'owner']] as const) {
+  for (const [member, role] of [
+    [designer, 'designer'],
+    [technician, 'technician'],
+    [owner, 'owner'],
+  ] as const) {
     await db('project_members').insert({ organization_id: organizationId, project_id: projectId, person_id: member.id, role });
   }
   for (const rule of defaultTolerances) {
@@ -54,7 +68,20 @@ export async function makeOrganization(db: Knex, { name = 'Test organisation', d
     });
   }
   const loopId = uuidv7();
-  await db('loops').insert({ organization_id: organizationId, id: loopId, project_id: projectId, name: 'Loop', service: 'chilled', created_by: designer.id });
-  await db('drafts').insert({ organization_id: organizationId, loop_id: loopId, version: 1, drawing: JSON.stringify(drawing), saved_by: designer.id });
+  await db('loops').insert({
+    organization_id: organizationId,
+    id: loopId,
+    project_id: projectId,
+    name: 'Loop',
+    service: 'chilled',
+    created_by: designer.id,
+  });
+  await db('drafts').insert({
+    organization_id: organizationId,
+    loop_id: loopId,
+    version: 1,
+    drawing: JSON.stringify(drawing),
+    saved_by: designer.id,
+  });
   return { organizationId, administrator, designer, technician, owner, outsider, projectId, loopId };
 }

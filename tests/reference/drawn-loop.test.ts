@@ -13,7 +13,18 @@ it('a drawn loop has the flows and drops of the independent solution', () => {
   const { solve } = solveDocument(document!);
   const linkOf = new Map(solve.links.map((link) => [link.id, link]));
   const { links } = expected.solve;
-  for (const [ours, theirs] of [['P-1', 'PU'], ['CH-1', 'CH'], ['s1', 's1'], ['s2', 's2'], ['r1', 'r1'], ['r2', 'r2'], ['FC-1:coil', 'T1'], ['FC-2:coil', 'T2'], ['FC-1:balancing', 'V1'], ['FC-2:balancing', 'V2']] as const) {
+  for (const [ours, theirs] of [
+    ['P-1', 'PU'],
+    ['CH-1', 'CH'],
+    ['s1', 's1'],
+    ['s2', 's2'],
+    ['r1', 'r1'],
+    ['r2', 'r2'],
+    ['FC-1:coil', 'T1'],
+    ['FC-2:coil', 'T2'],
+    ['FC-1:balancing', 'V1'],
+    ['FC-2:balancing', 'V2'],
+  ] as const) {
     within(linkOf.get(ours)!.flowLs, links[theirs].flowLs);
     within(linkOf.get(ours)!.dropKpa, links[theirs].dropKpa);
   }
@@ -22,7 +33,10 @@ it('a drawn loop has the flows and drops of the independent solution', () => {
 it('its settings and its pump duty are those of the independent balance', () => {
   const { balance, indexLinks } = solveDocument(document!);
   const valveOf = new Map(balance!.valves.map((valve) => [valve.id, valve]));
-  for (const [ours, theirs] of [['FC-1:balancing', 'V1'], ['FC-2:balancing', 'V2']] as const) {
+  for (const [ours, theirs] of [
+    ['FC-1:balancing', 'V1'],
+    ['FC-2:balancing', 'V2'],
+  ] as const) {
     within(valveOf.get(ours)!.setting, expected.balance.valves[theirs].setting);
     within(valveOf.get(ours)!.dropKpa, expected.balance.valves[theirs].dropKpa);
     expect(valveOf.get(ours)!.state).toBe(expected.balance.valves[theirs].open ? 'open' : 'throttled');

@@ -10,7 +10,7 @@ export default async function OfficeLayout({ children }: { children: ReactNode }
   const person = await requirePerson();
   return (
     <>
-      <header className="sticky top-0 z-30 flex min-h-14 items-stretch gap-x-6 border-b bg-sheet px-4 print:hidden">
+      <header className="bg-sheet sticky top-0 z-30 flex min-h-14 items-stretch gap-x-6 border-b px-4 print:hidden">
         <div className="flex items-center">
           <Mark />
         </div>

@@ -5,7 +5,8 @@ import { notFound, Problem } from '../problem';
 import { rolesInOrganization, rolesOnProject, type Person } from './person';
 
 /** What a page, action or route is about: it decides which of the person's roles count. */
-export type Scope = { kind: 'organization' } | { kind: 'project'; id: string } | { kind: 'loop'; id: string } | { kind: 'round'; id: string };
+export type Scope =
+  { kind: 'organization' } | { kind: 'project'; id: string } | { kind: 'loop'; id: string } | { kind: 'round'; id: string };
 
 export interface Access {
   person: Person;

@@ -45,7 +45,9 @@ export function route<Body = undefined, Query = undefined>(declaration: Declarat
           ? { kind: 'organization' }
           : { kind: declaration.scope, id: params[scopeParameter[declaration.scope]] ?? '' };
       const access = await authorize(person, declaration.permission, scope);
-      const body = (declaration.body ? declaration.body.parse(await readJson(request, declaration.maxBytes ?? 1 << 20)) : undefined) as Body;
+      const body = (
+        declaration.body ? declaration.body.parse(await readJson(request, declaration.maxBytes ?? 1 << 20)) : undefined
+      ) as Body;
       const query = (
         declaration.query ? declaration.query.parse(Object.fromEntries(new URL(request.url).searchParams)) : undefined
       ) as Query;
@@ -94,8 +96,7 @@ export async function readJson(request: Request, maxBytes: number): Promise<unkn
 }
 
 /** PostgreSQL stores neither NUL nor half of a surrogate pair; in JSON both can only be written as escapes. */
-const unstorable =
-  /(?<!\\)(?:\\\\)*\\u(?:0000|d[89ab][0-9a-f]{2}(?!\\ud[c-f][0-9a-f]{2})|(?<!\\ud[89ab][0-9a-f]{2}\\u)d[c-f][0-9a-f]{2})/i;
+const unstorable = /(?<!\\)(?:\\\\)*\\u(?:0000|d[89ab][0-9a-f]{2}(?!\\ud[c-f][0-9a-f]{2})|(?<!\\ud[89ab][0-9a-f]{2}\\u)d[c-f][0-9a-f]{2})/i;
 
 function parseJson(text: string): unknown {
   try {
@@ -115,8 +116,18 @@ export function refusal(error: unknown, requestId: string): Response {
         })
       : error;
   if (known instanceof Problem) {
-    const body = { type: `/problems/${known.code}`, title: known.message, status: known.status, code: known.code, requestId, ...known.extra };
-    return Response.json(body, { status: known.status, headers: { 'Content-Type': 'application/problem+json', 'Cache-Control': 'no-store' } });
+    const body = {
+      type: `/problems/${known.code}`,
+      title: known.message,
+      status: known.status,
+      code: known.code,
+      requestId,
+      ...known.extra,
+    };
+    return Response.json(body, {
+      status: known.status,
+      headers: { 'Content-Type': 'application/problem+json', 'Cache-Control': 'no-store' },
+    });
   }
   log.error({ err: error, requestId }, 'unexpected error');
   return Response.json(

@@ -17,7 +17,11 @@ export const downloadWorkbook = (organizationId: string, loopId: string, number:
 async function acceptedWorkbook(organizationId: string, loopId: string, number: number): Promise<Download> {
   const row = await db()('reports')
     .where({ organization_id: organizationId, loop_id: loopId, number })
-    .first({ workbook: 'workbook', loop: db().raw("content -> 'loop' ->> 'name'"), revision: db().raw("content -> 'revision' ->> 'number'") });
+    .first({
+      workbook: 'workbook',
+      loop: db().raw("content -> 'loop' ->> 'name'"),
+      revision: db().raw("content -> 'revision' ->> 'number'"),
+    });
   if (!row) throw notFound();
   return { bytes: row.workbook, fileName: fileName(row.loop, `revision ${row.revision}`, `report ${number}`) };
 }
@@ -29,13 +33,24 @@ async function currentWorkbook(organizationId: string, loopId: string): Promise<
   if (!found) throw new Problem('loop-state', 'No revision is issued yet, so there is nothing to download.');
   const { content } = found;
   const signatures = (await readSignatures(db(), organizationId, loopId)).map(shownSignature);
-  const bytes = await buildWorkbook({ content, contentSha256: reportSha256(content), state: loop.state, signatures, acceptedNumber: null, at: new Date() });
+  const bytes = await buildWorkbook({
+    content,
+    contentSha256: reportSha256(content),
+    state: loop.state,
+    signatures,
+    acceptedNumber: null,
+    at: new Date(),
+  });
   return { bytes, fileName: fileName(content.loop.name, `revision ${content.revision.number}`, 'as it stands') };
 }
 
 /** Letters and digits that every file system and header takes; whatever else a name holds becomes a hyphen. */
 export const fileName = (...parts: string[]): string => {
-  const safe = ['report', ...parts].join(' ').normalize('NFKD').replace(/\p{M}/gu, '').replace(/[^A-Za-z0-9]+/g, '-');
+  const safe = ['report', ...parts]
+    .join(' ')
+    .normalize('NFKD')
+    .replace(/\p{M}/gu, '')
+    .replace(/[^A-Za-z0-9]+/g, '-');
   return `${safe.replace(/-$/, '').slice(0, 120)}.xlsx`;
 };
 

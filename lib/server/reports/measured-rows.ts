@@ -21,10 +21,16 @@ export async function entriesOf(
         .on('asked.station_id', 'readings.station_id'),
     )
     .join('rounds', (join) => join.on('rounds.organization_id', 'readings.organization_id').on('rounds.id', 'readings.round_id'))
-    .join('revisions', (join) => join.on('revisions.organization_id', 'readings.organization_id').on('revisions.id', 'readings.revision_id'))
-    .join('instruments', (join) => join.on('instruments.organization_id', 'readings.organization_id').on('instruments.id', 'readings.instrument_id'))
+    .join('revisions', (join) =>
+      join.on('revisions.organization_id', 'readings.organization_id').on('revisions.id', 'readings.revision_id'),
+    )
+    .join('instruments', (join) =>
+      join.on('instruments.organization_id', 'readings.organization_id').on('instruments.id', 'readings.instrument_id'),
+    )
     .join('people', (join) => join.on('people.organization_id', 'readings.organization_id').on('people.id', 'readings.taken_by'))
-    .leftJoin('readings as later', (join) => join.on('later.organization_id', 'readings.organization_id').on('later.corrects_reading_id', 'readings.id'))
+    .leftJoin('readings as later', (join) =>
+      join.on('later.organization_id', 'readings.organization_id').on('later.corrects_reading_id', 'readings.id'),
+    )
     .where({ 'readings.organization_id': organizationId, ...which })
     .orderBy(['readings.taken_at', 'readings.id'])
     .select({

@@ -42,7 +42,9 @@ export async function readContent(connection: Knex, organizationId: string, loop
         return { ...station, reading: entry && entry.designFlowLs === station.designFlowLs ? withoutDesign(entry) : null };
       }),
       rounds: rounds.filter(({ id }) => entries.some(({ roundId }) => roundId === id)).map(({ closedAt: _, ...round }) => round),
-      instruments: instruments.filter(({ id }) => entries.some(({ instrumentId }) => instrumentId === id)).map(({ isRetired: _, ...instrument }) => instrument),
+      instruments: instruments
+        .filter(({ id }) => entries.some(({ instrumentId }) => instrumentId === id))
+        .map(({ isRetired: _, ...instrument }) => instrument),
       readings: entries.map(withoutDesign),
       balance: head.balance,
     },
@@ -88,5 +90,12 @@ function fluidOf({ fluid }: Drawing, solved: Fluid): ReportContent['fluid'] {
   // The revision was solved with this fluid, so its properties are known.
   if (!found.ok) throw new Error(`The fluid of an issued revision is out of range: ${found.error.message}`);
   const { densityKgM3, viscosityMPaS } = found.properties;
-  return { medium: fluid.medium, massFraction: fluid.massFraction, supplyC: fluid.supplyC, returnC: fluid.returnC, densityKgM3, viscosityMPaS };
+  return {
+    medium: fluid.medium,
+    massFraction: fluid.massFraction,
+    supplyC: fluid.supplyC,
+    returnC: fluid.returnC,
+    densityKgM3,
+    viscosityMPaS,
+  };
 }

@@ -15,13 +15,17 @@ export async function readReport({ person, roles }: Access, loopId: string): Pro
   if (!loop) throw notFound();
   const found = await readContent(db(), organizationId, loopId);
   const signatures = await readSignatures(db(), organizationId, loopId);
-  const accepted = await db()('reports').where({ organization_id: organizationId, loop_id: loopId }).orderBy('number', 'desc').select('number', 'sha256', 'accepted_at');
+  const accepted = await db()('reports')
+    .where({ organization_id: organizationId, loop_id: loopId })
+    .orderBy('number', 'desc')
+    .select('number', 'sha256', 'accepted_at');
   const body = {
     state: loop.state,
     signatures: signatures.map(shownSignature),
     accepted: accepted.map((row) => ({ number: row.number, sha256: row.sha256, acceptedAt: row.accepted_at.toISOString() })),
   };
-  if (!found) return { ...body, content: null, contentSha256: null, strip: [], band: { lowerPercent: 100, upperPercent: 100 }, maySign: [] };
+  if (!found)
+    return { ...body, content: null, contentSha256: null, strip: [], band: { lowerPercent: 100, upperPercent: 100 }, maySign: [] };
   const { content } = found;
   const contentSha256 = reportSha256(content);
   return {

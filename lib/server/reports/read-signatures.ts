@@ -7,17 +7,20 @@ export interface SignatureRow extends Signature {
 
 /** All signatures under the reports of a loop, oldest first. */
 export async function readSignatures(connection: Knex, organizationId: string, loopId: string): Promise<SignatureRow[]> {
-  const rows = await connection('signatures').where({ organization_id: organizationId, loop_id: loopId }).orderBy(['signed_at', 'id']).select({
-    id: 'id',
-    meaning: 'meaning',
-    note: 'note',
-    submission: 'submission',
-    contentSha256: 'content_sha256',
-    personId: 'person_id',
-    personName: 'person_name',
-    personRole: 'person_role',
-    signedAt: 'signed_at',
-  });
+  const rows = await connection('signatures')
+    .where({ organization_id: organizationId, loop_id: loopId })
+    .orderBy(['signed_at', 'id'])
+    .select({
+      id: 'id',
+      meaning: 'meaning',
+      note: 'note',
+      submission: 'submission',
+      contentSha256: 'content_sha256',
+      personId: 'person_id',
+      personName: 'person_name',
+      personRole: 'person_role',
+      signedAt: 'signed_at',
+    });
   return rows.map((row) => ({ ...row, signedAt: row.signedAt.toISOString() }));
 }
 

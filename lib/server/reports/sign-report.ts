@@ -47,8 +47,14 @@ export async function signReport(access: Access, loopId: string, sign: Sign): Pr
     });
     await trx('loops').where({ organization_id: organizationId, id: loopId }).update({ state: rule.to });
     if (sign.meaning === 'submitted') await closeRound(trx, organizationId, loopId);
-    if (sign.meaning === 'accepted') await storeAccepted(trx, { organizationId, loopId, revisionId, content, contentSha256: standing.contentSha256 });
-    await recordActivity(trx, access, { verb: sign.meaning, subject: `the report of ${loop.name}, revision ${content.revision.number}`, loopId, detail: { submission } });
+    if (sign.meaning === 'accepted')
+      await storeAccepted(trx, { organizationId, loopId, revisionId, content, contentSha256: standing.contentSha256 });
+    await recordActivity(trx, access, {
+      verb: sign.meaning,
+      subject: `the report of ${loop.name}, revision ${content.revision.number}`,
+      loopId,
+      detail: { submission },
+    });
     return { submission };
   });
 }
@@ -57,19 +63,24 @@ function refuseUnfit(sign: Sign, standing: Standing, personId: string, content: 
   if (sign.meaning !== 'submitted' && hasSigned(standing, personId)) {
     throw new Problem('already-signed', 'You have signed this submission already. Nobody signs twice on one report.');
   }
-  if (!isOpenFor(sign.meaning, standing)) throw new Problem('loop-state', `${signingRules[sign.meaning].before}; this loop is ${standing.state.replace('-', ' ')}.`);
+  if (!isOpenFor(sign.meaning, standing))
+    throw new Problem('loop-state', `${signingRules[sign.meaning].before}; this loop is ${standing.state.replace('-', ' ')}.`);
   if (sign.contentSha256 !== standing.contentSha256) {
     throw new Problem('revision-superseded', 'The report has changed since you looked at it. Look at it again, then sign.');
   }
   if ((sign.meaning === 'reviewed' || sign.meaning === 'accepted') && !isAsSubmitted(standing)) {
-    throw new Problem('revision-superseded', 'The report has changed since it was submitted: the technician has to submit it again before it is signed.');
+    throw new Problem(
+      'revision-superseded',
+      'The report has changed since it was submitted: the technician has to submit it again before it is signed.',
+    );
   }
   if (sign.meaning === 'submitted') refuseUnmeasured(content, sign.note);
 }
 
 function refuseUnmeasured(content: ReportContent, note: string): void {
   const { terminals, notMeasured } = summaryOf(content);
-  if (notMeasured.length === terminals) throw new Problem('nothing-measured', 'No terminal of this revision is measured yet, so there is nothing to submit.');
+  if (notMeasured.length === terminals)
+    throw new Problem('nothing-measured', 'No terminal of this revision is measured yet, so there is nothing to submit.');
   if (notMeasured.length === 0 || note !== '') return;
   const tags = notMeasured.slice(0, 12).map(({ tag }) => tag);
   const more = notMeasured.length - tags.length;

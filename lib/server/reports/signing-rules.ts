@@ -15,10 +15,34 @@ interface SigningRule {
 
 /** A loop's life from measuring to the owner's signature. */
 export const signingRules: Record<Meaning, SigningRule> = {
-  submitted: { from: ['in-commissioning'], to: 'submitted', permission: 'report.submit', signsAs: 'technician', before: 'A report is submitted while its loop is in commissioning' },
-  reviewed: { from: ['submitted'], to: 'reviewed', permission: 'report.review', signsAs: 'designer', before: 'A report is reviewed after it was submitted' },
-  returned: { from: ['submitted', 'reviewed'], to: 'in-commissioning', permission: 'report.review', signsAs: 'designer', before: 'A report is returned after it was submitted' },
-  accepted: { from: ['reviewed'], to: 'accepted', permission: 'report.accept', signsAs: 'owner', before: 'A report is accepted after it was reviewed' },
+  submitted: {
+    from: ['in-commissioning'],
+    to: 'submitted',
+    permission: 'report.submit',
+    signsAs: 'technician',
+    before: 'A report is submitted while its loop is in commissioning',
+  },
+  reviewed: {
+    from: ['submitted'],
+    to: 'reviewed',
+    permission: 'report.review',
+    signsAs: 'designer',
+    before: 'A report is reviewed after it was submitted',
+  },
+  returned: {
+    from: ['submitted', 'reviewed'],
+    to: 'in-commissioning',
+    permission: 'report.review',
+    signsAs: 'designer',
+    before: 'A report is returned after it was submitted',
+  },
+  accepted: {
+    from: ['reviewed'],
+    to: 'accepted',
+    permission: 'report.accept',
+    signsAs: 'owner',
+    before: 'A report is accepted after it was reviewed',
+  },
 };
 
 export interface Standing {

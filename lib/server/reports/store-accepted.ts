@@ -15,7 +15,10 @@ interface Accepted {
 }
 
 /** Freezes an accepted report: its content and its workbook, byte by byte, with the SHA-256 of the file. The caller holds the loop's lock. */
-export async function storeAccepted(trx: Knex.Transaction, { organizationId, loopId, revisionId, content, contentSha256 }: Accepted): Promise<void> {
+export async function storeAccepted(
+  trx: Knex.Transaction,
+  { organizationId, loopId, revisionId, content, contentSha256 }: Accepted,
+): Promise<void> {
   const last = await trx('reports').where({ organization_id: organizationId, loop_id: loopId }).max('number as number').first();
   const number = (last?.number ?? 0) + 1;
   const signatures = await readSignatures(trx, organizationId, loopId);

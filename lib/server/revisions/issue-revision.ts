@@ -31,7 +31,10 @@ export async function issueRevision(access: Access, loopId: string, input: Issue
       throw new Problem('draft-changed', 'The drawing was saved by someone else since you looked at it. Look again, then issue.');
     }
     const drawing: Drawing = draft.drawing;
-    const before = await trx('revisions').where({ organization_id: organizationId, loop_id: loopId }).orderBy('number', 'desc').first('number', 'drawing');
+    const before = await trx('revisions')
+      .where({ organization_id: organizationId, loop_id: loopId })
+      .orderBy('number', 'desc')
+      .first('number', 'drawing');
     if (before && same(before.drawing, drawing)) {
       throw new Problem('revision-unchanged', `The drawing is that of revision ${before.number}: there is nothing new to issue.`);
     }
@@ -40,7 +43,8 @@ export async function issueRevision(access: Access, loopId: string, input: Issue
     if (!document || !solved?.balance) {
       throw new Problem('drawing-unfit', 'The drawing cannot be issued while it cannot be solved and balanced.', { detail: faults });
     }
-    if (!solved.balance.converged) throw new Problem('drawing-unfit', 'The balance has no converged solution, so there are no settings to issue.');
+    if (!solved.balance.converged)
+      throw new Problem('drawing-unfit', 'The balance has no converged solution, so there are no settings to issue.');
 
     const number = (before?.number ?? 0) + 1;
     const revisionId = uuidv7();
@@ -58,14 +62,21 @@ export async function issueRevision(access: Access, loopId: string, input: Issue
     });
     await storeStations(trx, { organizationId, loopId, revisionId }, stationsOfDrawing(drawing, solved.balance));
     // A round belongs to one revision: what was open under the old design ends with it.
-    await trx('rounds').where({ organization_id: organizationId, loop_id: loopId }).whereNull('closed_at').update({ closed_at: trx.fn.now() });
+    await trx('rounds')
+      .where({ organization_id: organizationId, loop_id: loopId })
+      .whereNull('closed_at')
+      .update({ closed_at: trx.fn.now() });
     await trx('loops').where({ organization_id: organizationId, id: loopId }).update({ state: 'issued' });
     await recordActivity(trx, access, { verb: 'issued', subject: `revision ${number} of ${loop.name}`, loopId });
     return { number };
   });
 }
 
-async function storeStations(trx: Knex.Transaction, ids: { organizationId: string; loopId: string; revisionId: string }, stations: DrawnStation[]): Promise<void> {
+async function storeStations(
+  trx: Knex.Transaction,
+  ids: { organizationId: string; loopId: string; revisionId: string },
+  stations: DrawnStation[],
+): Promise<void> {
   const { organizationId, loopId, revisionId } = ids;
   const known = await trx('stations').where({ organization_id: organizationId, loop_id: loopId }).select('id', 'element_id');
   const idOf = new Map(known.map((row) => [row.element_id as string, row.id as string]));
@@ -74,7 +85,13 @@ async function storeStations(trx: Knex.Transaction, ids: { organizationId: strin
   if (added.length) {
     await trx.batchInsert(
       'stations',
-      added.map(({ station, id }) => ({ organization_id: organizationId, id, loop_id: loopId, element_id: station.elementId, kind: station.kind })),
+      added.map(({ station, id }) => ({
+        organization_id: organizationId,
+        id,
+        loop_id: loopId,
+        element_id: station.elementId,
+        kind: station.kind,
+      })),
       500,
     );
   }

@@ -8,7 +8,15 @@ export async function readRevision(organizationId: string, loopId: string, numbe
   const row = await db()('revisions')
     .join('people', (join) => join.on('people.organization_id', 'revisions.organization_id').on('people.id', 'revisions.issued_by'))
     .where({ 'revisions.organization_id': organizationId, 'revisions.loop_id': loopId, 'revisions.number': number })
-    .first('revisions.id', 'revisions.note', 'revisions.issued_at', 'revisions.drawing', 'revisions.balance', 'revisions.changes', 'people.name');
+    .first(
+      'revisions.id',
+      'revisions.note',
+      'revisions.issued_at',
+      'revisions.drawing',
+      'revisions.balance',
+      'revisions.changes',
+      'people.name',
+    );
   if (!row) throw notFound();
   return {
     id: row.id,

@@ -54,7 +54,12 @@ function placesOf(drawing: Drawing, linkIds: string[]): Place[] {
 /** The strict check found what the drawing's own checks did not: shown at the piece it names. */
 function documentFaults(drawing: Drawing, issues: { path: string; id?: string; message: string }[]): Fault[] {
   const placeOf = placeFinder(drawing);
-  return issues.map(({ path, id, message }) => ({ code: 'document', severity: 'error', message: `${path}: ${message}`, place: placeOf(id) }));
+  return issues.map(({ path, id, message }) => ({
+    code: 'document',
+    severity: 'error',
+    message: `${path}: ${message}`,
+    place: placeOf(id),
+  }));
 }
 
 /** The engine's warnings, each once: solving and balancing may both find it. */
@@ -62,5 +67,10 @@ function warningFaults(drawing: Drawing, warnings: Warning[]): Fault[] {
   const once = new Map(warnings.map((warning) => [`${warning.code} ${warning.id}`, warning]));
   const names = pieceNames(drawing);
   const placeOf = placeFinder(drawing);
-  return [...once.values()].map(({ code, id, message }) => ({ code, severity: 'warning', message: inDrawingWords(message, names), place: placeOf(id) }));
+  return [...once.values()].map(({ code, id, message }) => ({
+    code,
+    severity: 'warning',
+    message: inDrawingWords(message, names),
+    place: placeOf(id),
+  }));
 }

@@ -28,7 +28,11 @@ const waitingOf = new Map<string, { count: number; last: Promise<unknown> }>();
  */
 export async function solveOffThread(document: NetworkDocument, personId: string, signal?: AbortSignal): Promise<SolvedDocument> {
   const mine = waitingOf.get(personId) ?? { count: 0, last: Promise.resolve() };
-  if (mine.count >= mostWaiting) throw new Problem('solver-busy', 'Earlier drawings of yours are still being solved. Wait a moment, then change something to solve again.');
+  if (mine.count >= mostWaiting)
+    throw new Problem(
+      'solver-busy',
+      'Earlier drawings of yours are still being solved. Wait a moment, then change something to solve again.',
+    );
   waitingOf.set(personId, mine);
   mine.count += 1;
   const solved = mine.last.catch(() => undefined).then(() => runInThread(document, signal));

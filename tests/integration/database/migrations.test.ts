@@ -8,7 +8,9 @@ import { makeOrganization } from '../../make/organization';
 const suite = withDatabase();
 
 const tables = async (connection: knex.Knex) => {
-  const { rows } = await connection.raw(`select tablename from pg_tables where schemaname = 'public' and tablename not like 'knex_%' order by 1`);
+  const { rows } = await connection.raw(
+    `select tablename from pg_tables where schemaname = 'public' and tablename not like 'knex_%' order by 1`,
+  );
   return rows.map((row: { tablename: string }) => row.tablename);
 };
 
@@ -62,6 +64,15 @@ it('the database refuses to change or remove what was measured, signed, issued o
   await expect(suite.db('activity').delete()).rejects.toThrow('append-only');
   await expect(suite.db.raw('truncate activity')).rejects.toThrow('append-only');
   expect(await suite.db('activity').select('verb')).toEqual([{ verb: 'made' }]);
-  const { rows } = await suite.db.raw(`select distinct event_object_table as name from information_schema.triggers where trigger_name like '%_append_only' order by 1`);
-  expect(rows.map((row: { name: string }) => row.name)).toEqual(['activity', 'readings', 'reports', 'revisions', 'signatures', 'station_designs']);
+  const { rows } = await suite.db.raw(
+    `select distinct event_object_table as name from information_schema.triggers where trigger_name like '%_append_only' order by 1`,
+  );
+  expect(rows.map((row: { name: string }) => row.name)).toEqual([
+    'activity',
+    'readings',
+    'reports',
+    'revisions',
+    'signatures',
+    'station_designs',
+  ]);
 });

@@ -17,13 +17,16 @@ it('of two people who save the same version one is told, with the drawing of the
   const { designer, loopId } = await makeOrganization(suite.db);
   signInAs(designer);
   const answers = await Promise.all(
-    ['T-1', 'T-2', 'T-3', 'T-4'].map((id) => call(PUT, { method: 'PUT', params: { loopId }, body: { baseVersion: 1, drawing: withTee(id) } })),
+    ['T-1', 'T-2', 'T-3', 'T-4'].map((id) =>
+      call(PUT, { method: 'PUT', params: { loopId }, body: { baseVersion: 1, drawing: withTee(id) } }),
+    ),
   );
   expect(answers.map(({ status }) => status).sort()).toEqual([200, 409, 409, 409]);
   const kept = (await call(GET, { params: { loopId } })).body;
   expect(kept.version).toBe(2);
   for (const { status, body } of answers) {
-    if (status === 409) expect(body).toMatchObject({ code: 'draft-changed', detail: { version: 2, drawing: kept.drawing, savedBy: 'designer' } });
+    if (status === 409)
+      expect(body).toMatchObject({ code: 'draft-changed', detail: { version: 2, drawing: kept.drawing, savedBy: 'designer' } });
   }
 });
 

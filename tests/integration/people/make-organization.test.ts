@@ -12,6 +12,8 @@ it('a new organisation has one administrator, who gets a link to set a password'
 });
 
 it('an address that is in use makes nothing', async () => {
-  await expect(makeOrganization({ organization: 'Second', name: 'Una Fell', email: 'una@heron.example' })).rejects.toThrow('in use already');
+  await expect(makeOrganization({ organization: 'Second', name: 'Una Fell', email: 'una@heron.example' })).rejects.toThrow(
+    'in use already',
+  );
   expect(await suite.db('organizations').select('name')).toEqual([{ name: 'Heron Works' }]);
 });

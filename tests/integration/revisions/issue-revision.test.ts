@@ -36,9 +36,15 @@ it('solving gives flows that balance, settings for design flow and an index circ
 it('a drawing with faults is answered with the faults and their places, not with figures', async () => {
   const { designer, loopId } = await makeOrganization(suite.db);
   signInAs(designer);
-  const { body } = await call(solve, { method: 'POST', params: { loopId }, body: { drawing: { ...drawn, equipment: [pump('P-1')], pipes: [] } } });
+  const { body } = await call(solve, {
+    method: 'POST',
+    params: { loopId },
+    body: { drawing: { ...drawn, equipment: [pump('P-1')], pipes: [] } },
+  });
   expect(body.solved).toBeNull();
-  expect(body.faults).toContainEqual(expect.objectContaining({ code: 'open-end', severity: 'error', place: { kind: 'equipment', id: 'P-1' } }));
+  expect(body.faults).toContainEqual(
+    expect.objectContaining({ code: 'open-end', severity: 'error', place: { kind: 'equipment', id: 'P-1' } }),
+  );
 });
 
 it('issuing freezes drawing and settings and makes the stations; a later change of the draft does not touch it', async () => {
@@ -46,7 +52,11 @@ it('issuing freezes drawing and settings and makes the stations; a later change 
   signInAs(designer);
   expect(await issueOf(loopId, 1, 'For construction')).toMatchObject({ status: 200, body: { number: 1 } });
 
-  const stations = await suite.db('station_designs').where({ organization_id: organizationId }).orderBy('walking_order').select('tag', 'design_flow_ls', 'setting_turns');
+  const stations = await suite
+    .db('station_designs')
+    .where({ organization_id: organizationId })
+    .orderBy('walking_order')
+    .select('tag', 'design_flow_ls', 'setting_turns');
   expect(stations.map(({ tag }) => tag)).toEqual(['P-1', 'FC-1', 'FC-2', 'FC-3']);
   expect(stations.map(({ design_flow_ls: flow }) => Number(flow.toFixed(6)))).toEqual([0.75, 0.2, 0.3, 0.25]);
   expect(stations.filter(({ setting_turns: turns }) => turns !== null)).toHaveLength(3);
@@ -65,7 +75,9 @@ it('a second revision keeps the stations of pieces that stay and lists what chan
   const before = await suite.db('stations').where({ loop_id: loopId }).orderBy('element_id').select('id', 'element_id');
   const changed = {
     ...drawn,
-    equipment: drawn.equipment.map((piece) => (piece.kind === 'terminalUnit' && piece.id === 'FC-2' ? { ...piece, designFlowLs: 0.28 } : piece)),
+    equipment: drawn.equipment.map((piece) =>
+      piece.kind === 'terminalUnit' && piece.id === 'FC-2' ? { ...piece, designFlowLs: 0.28 } : piece,
+    ),
   };
   await call(saveDraft, { method: 'PUT', params: { loopId }, body: { baseVersion: 1, drawing: changed } });
   expect((await issueOf(loopId, 2)).body).toEqual({ number: 2 });

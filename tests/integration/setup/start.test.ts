@@ -93,7 +93,11 @@ describe('npm start with services of its own', () => {
   it('uses the database, mail service, secret and public address that it is given, and starts none', async () => {
     const databaseUrl = Object.assign(new URL(managed), { pathname: `/${database}` }).toString();
     const port = await freePort();
-    const given = { SMTP_URL: 'smtp://127.0.0.1:9', AUTH_SECRET: 'given-from-outside-and-long-enough', PUBLIC_URL: 'https://evenhead.example' };
+    const given = {
+      SMTP_URL: 'smtp://127.0.0.1:9',
+      AUTH_SECRET: 'given-from-outside-and-long-enough',
+      PUBLIC_URL: 'https://evenhead.example',
+    };
     const run = await checkout.startAndWait({ PORT: String(port), DATABASE_URL: databaseUrl, ...given });
     const told = await (await fetch(`http://127.0.0.1:${port}/told`)).json();
     expect(told).toMatchObject({ ...given, DATABASE_URL: databaseUrl, NEXTAUTH_SECRET: given.AUTH_SECRET, NEXTAUTH_URL: given.PUBLIC_URL });

@@ -12,7 +12,8 @@ import { signInAs } from '../../make/session';
 const suite = withDatabase();
 afterAll(closeSolvePool);
 
-const documentOf = (terminals: number) => drawingToDocument(ladder(Array.from({ length: terminals }, (_, i) => 0.01 + 0.001 * (i % 5))), 'ladder').document!;
+const documentOf = (terminals: number) =>
+  drawingToDocument(ladder(Array.from({ length: terminals }, (_, i) => 0.01 + 0.001 * (i % 5))), 'ladder').document!;
 
 it('a thread of the pool answers what the engine answers', async () => {
   const document = documentOf(40);
@@ -40,7 +41,8 @@ it('of one person’s solves only a few wait: the next is refused with a sentenc
 it('a drawing of more than 2,000 links is solved while a small one of somebody else is answered', async () => {
   const { designer, loopId } = await makeOrganization(suite.db);
   signInAs(designer);
-  const send = (terminals: number) => call(solve, { method: 'POST', params: { loopId }, body: { drawing: ladder(Array.from({ length: terminals }, () => 0.01)) } });
+  const send = (terminals: number) =>
+    call(solve, { method: 'POST', params: { loopId }, body: { drawing: ladder(Array.from({ length: terminals }, () => 0.01)) } });
   const [large, small] = await Promise.all([send(320), send(3)]);
   expect([large.status, small.status]).toEqual([200, 200]);
   expect(large.body.solved.solve.links.length).toBeGreaterThan(2000);

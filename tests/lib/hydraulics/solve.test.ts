@@ -80,12 +80,18 @@ const CLOSED_KPA = 1e-4;
  * within 1e-6 L/s; where a quadratic law lies flat at next to no flow, an iteration that closes heads tells the flow no better
  * than its head, and there the drops agree within 0.1 Pa.
  */
-function expectAlike(first: SolveResult, second: SolveResult, { flow = (q: number, _: string) => q, drop = (kpa: number, _: string) => kpa } = {}) {
+function expectAlike(
+  first: SolveResult,
+  second: SolveResult,
+  { flow = (q: number, _: string) => q, drop = (kpa: number, _: string) => kpa } = {},
+) {
   const there = new Map(second.links.map((link) => [link.id, link]));
   for (const { id, flowLs, dropKpa } of first.links) {
     const other = there.get(id)!;
     const isSameFlow = Math.abs(flow(flowLs, id) - other.flowLs) < 1e-6;
-    expect(isSameFlow || Math.abs(drop(dropKpa, id) - other.dropKpa) < CLOSED_KPA, `${id}: ${flowLs} L/s against ${other.flowLs}`).toBe(true);
+    expect(isSameFlow || Math.abs(drop(dropKpa, id) - other.dropKpa) < CLOSED_KPA, `${id}: ${flowLs} L/s against ${other.flowLs}`).toBe(
+      true,
+    );
   }
 }
 

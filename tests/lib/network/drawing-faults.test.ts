@@ -3,7 +3,8 @@ import type { Drawing } from '@/lib/network/drawing';
 import { faultsOf } from '@/lib/network/drawing-faults';
 import { drawing, ladder, pipe, pump, tee, unit } from '../../make/drawing';
 
-const messages = (from: Drawing) => faultsOf(from).map(({ severity, message, place }) => `${severity} ${place.kind} ${place.id}: ${message}`);
+const messages = (from: Drawing) =>
+  faultsOf(from).map(({ severity, message, place }) => `${severity} ${place.kind} ${place.id}: ${message}`);
 const change = (from: Drawing, id: string, fields: object): Drawing => ({
   ...from,
   equipment: from.equipment.map((piece) => (piece.id === id ? ({ ...piece, ...fields } as typeof piece) : piece)),
@@ -33,14 +34,28 @@ describe('faults of a drawing', () => {
   });
 
   it('refuses a pump whose head rises, and a curve out of order', () => {
-    const rising = change(ladder([0.2]), 'P-1', { curve: [{ flowLs: 0, headM: 5 }, { flowLs: 1, headM: 6 }, { flowLs: 2, headM: 4 }] });
+    const rising = change(ladder([0.2]), 'P-1', {
+      curve: [
+        { flowLs: 0, headM: 5 },
+        { flowLs: 1, headM: 6 },
+        { flowLs: 2, headM: 4 },
+      ],
+    });
     expect(messages(rising)).toEqual(['error equipment P-1: The head of P-1 must not rise with flow.']);
-    const unsorted = change(ladder([0.2]), 'P-1', { curve: [{ flowLs: 1, headM: 6 }, { flowLs: 0, headM: 5 }, { flowLs: 2, headM: 4 }] });
+    const unsorted = change(ladder([0.2]), 'P-1', {
+      curve: [
+        { flowLs: 1, headM: 6 },
+        { flowLs: 0, headM: 5 },
+        { flowLs: 2, headM: 4 },
+      ],
+    });
     expect(messages(unsorted)).toEqual(['error equipment P-1: The curve of P-1 must go from low to high flow, each flow once.']);
   });
 
   it('sees two pieces with one tag, a dead leg, a loop with no pump, a valve beyond its table', () => {
-    expect(messages(change(ladder([0.2, 0.3]), 'FC-2', { tag: 'FC-1' }))).toEqual(['error equipment FC-2: The tag FC-1 stands on more than one piece.']);
+    expect(messages(change(ladder([0.2, 0.3]), 'FC-2', { tag: 'FC-1' }))).toEqual([
+      'error equipment FC-2: The tag FC-1 stands on more than one piece.',
+    ]);
     const leg = ladder([0.2]);
     expect(messages({ ...leg, equipment: [...leg.equipment, tee('T-9')], pipes: [...leg.pipes, pipe('leg', 'S-1.e', 'T-9.w')] })).toEqual([
       'warning equipment T-9: T-9 joins fewer than two pipes: a dead leg.',
@@ -48,8 +63,13 @@ describe('faults of a drawing', () => {
     expect(messages(drawing([tee('A'), unit('FC-1')], [pipe('a', 'A.e', 'FC-1.in'), pipe('b', 'FC-1.out', 'A.w')]))).toEqual([
       'warning equipment A: The loop has no pump: nothing will flow.',
     ]);
-    const set = { ...(ladder([0.2]).equipment.find(({ id }) => id === 'FC-1') as { balancingValve: object }).balancingValve, settingTurns: 9 };
-    expect(messages(change(ladder([0.2]), 'FC-1', { balancingValve: set }))).toEqual(['error equipment FC-1: FC-1 stands at 9, outside its table (0 to 4).']);
+    const set = {
+      ...(ladder([0.2]).equipment.find(({ id }) => id === 'FC-1') as { balancingValve: object }).balancingValve,
+      settingTurns: 9,
+    };
+    expect(messages(change(ladder([0.2]), 'FC-1', { balancingValve: set }))).toEqual([
+      'error equipment FC-1: FC-1 stands at 9, outside its table (0 to 4).',
+    ]);
   });
 
   it('a pipe whose piece is gone ends in nothing', () => {

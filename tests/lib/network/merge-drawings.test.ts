@@ -12,7 +12,11 @@ const change = (from: Drawing, id: string, fields: object): Drawing => ({
 
 describe('joining two drawings that were changed at once', () => {
   it('keeps both changes where they touch different pieces', () => {
-    const { merged, conflicts, differences } = mergeDrawings(base, change(base, 'FC-1', { coilDropKpa: 20 }), change(base, 'FC-2', { room: '2.14' }));
+    const { merged, conflicts, differences } = mergeDrawings(
+      base,
+      change(base, 'FC-1', { coilDropKpa: 20 }),
+      change(base, 'FC-2', { room: '2.14' }),
+    );
     expect(conflicts).toEqual([]);
     expect(merged.equipment.find(({ id }) => id === 'FC-1')).toMatchObject({ coilDropKpa: 20 });
     expect(merged.equipment.find(({ id }) => id === 'FC-2')).toMatchObject({ room: '2.14' });
@@ -31,7 +35,10 @@ describe('joining two drawings that were changed at once', () => {
   it('does not lose a piece that one changed and the other removed', () => {
     const removed = { ...base, equipment: base.equipment.filter(({ id }) => id !== 'FC-1') };
     const changed = change(base, 'FC-1', { room: '1.02' });
-    for (const [mine, theirs] of [[removed, changed], [changed, removed]] as const) {
+    for (const [mine, theirs] of [
+      [removed, changed],
+      [changed, removed],
+    ] as const) {
       const { merged, conflicts } = mergeDrawings(base, mine, theirs);
       expect(conflicts).toHaveLength(1);
       expect(merged.equipment.some(({ id }) => id === 'FC-1')).toBe(true);
@@ -48,13 +55,22 @@ describe('joining two drawings that were changed at once', () => {
   });
 
   it('is not disturbed by the order in which a database gives back keys', () => {
-    const turned = JSON.parse(JSON.stringify(base, (_, value) => (value && typeof value === 'object' && !Array.isArray(value) ? Object.fromEntries(Object.entries(value).reverse()) : value)));
+    const turned = JSON.parse(
+      JSON.stringify(base, (_, value) =>
+        value && typeof value === 'object' && !Array.isArray(value) ? Object.fromEntries(Object.entries(value).reverse()) : value,
+      ),
+    );
     expect(same(base, turned)).toBe(true);
     expect(changesBetween(base, turned)).toEqual([]);
   });
 
   const piece = fc.record({ id: fc.constantFrom('A', 'B', 'C', 'D'), designFlowLs: fc.integer({ min: 1, max: 3 }) });
-  const drawn = fc.uniqueArray(piece, { selector: ({ id }) => id }).map((pieces) => drawing(pieces.map(({ id, designFlowLs }) => unit(id, designFlowLs)), []));
+  const drawn = fc.uniqueArray(piece, { selector: ({ id }) => id }).map((pieces) =>
+    drawing(
+      pieces.map(({ id, designFlowLs }) => unit(id, designFlowLs)),
+      [],
+    ),
+  );
 
   it('never loses what either side added or changed, whatever they did', () => {
     fc.assert(
@@ -73,7 +89,8 @@ describe('joining two drawings that were changed at once', () => {
   });
 
   it('joins nothing with nothing', () => {
-    fc.assert(fc.property(drawn, (one) => {
+    fc.assert(
+      fc.property(drawn, (one) => {
         expect(mergeDrawings(one, one, one)).toEqual({ merged: one, conflicts: [], differences: [] });
       }),
     );
@@ -83,11 +100,7 @@ describe('joining two drawings that were changed at once', () => {
 it('what changed from one revision to the next is told in words', () => {
   const after = { ...change(base, 'FC-1', { designFlowLs: 0.25, x: 40 }), pipes: base.pipes.filter(({ id }) => id !== 'b-2') };
   const moved = change(after, 'FC-2', { x: 100 });
-  expect(changesBetween(base, { ...moved, equipment: [...moved.equipment, pump('P-2'), tee('T-9')] }).map(({ message }) => message)).toEqual([
-    'FC-1 changed: design flow',
-    'FC-2 moved',
-    'P-2 added',
-    'T-9 added',
-    'Pipe FC-2 to R-2 removed',
-  ]);
+  expect(
+    changesBetween(base, { ...moved, equipment: [...moved.equipment, pump('P-2'), tee('T-9')] }).map(({ message }) => message),
+  ).toEqual(['FC-1 changed: design flow', 'FC-2 moved', 'P-2 added', 'T-9 added', 'Pipe FC-2 to R-2 removed']);
 });

@@ -12,7 +12,9 @@ it('a piece is called by its tag, a pipe by what it joins', () => {
 });
 
 it('a message of the engine says names where it said ids, and nothing else is changed', () => {
-  expect(inDrawingWords('FC-1:coil is left out: its circuit is not open all round.', names)).toBe('FC-1 (coil) is left out: its circuit is not open all round.');
+  expect(inDrawingWords('FC-1:coil is left out: its circuit is not open all round.', names)).toBe(
+    'FC-1 (coil) is left out: its circuit is not open all round.',
+  );
   expect(inDrawingWords('Flow is between laminar and turbulent in s-2, b-1: uncertain, 0.3 L/s.', names)).toBe(
     'Flow is between laminar and turbulent in Pipe tee to S-2, Pipe FC-1 to R-1: uncertain, 0.3 L/s.',
   );

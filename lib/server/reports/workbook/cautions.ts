@@ -5,6 +5,8 @@ import { addSheet, addTable, type Column } from './sheet-table';
 
 /** For whoever takes the report to plant. */
 export function addCautions(workbook: Workbook, report: ReportOnPaper): void {
-  const columns: Column<string>[] = [{ key: 'caution', head: 'Before anyone goes to the plant', width: 120, content: (caution) => caution }];
+  const columns: Column<string>[] = [
+    { key: 'caution', head: 'Before anyone goes to the plant', width: 120, content: (caution) => caution },
+  ];
   addTable(addSheet(workbook, 'Cautions', { title: 'Cautions', reference: referenceOf(report) }), columns, [...cautions, cautionSentence]);
 }

@@ -18,7 +18,11 @@ export const standing: Record<LoopState, string> = {
   accepted: 'Accepted by the owner',
 };
 const meaningWords: Record<Meaning, string> = { submitted: 'Submitted', reviewed: 'Reviewed', returned: 'Returned', accepted: 'Accepted' };
-const mediumWords: Record<string, string> = { water: 'water', 'propylene-glycol': 'propylene glycol', 'ethylene-glycol': 'ethylene glycol' };
+const mediumWords: Record<string, string> = {
+  water: 'water',
+  'propylene-glycol': 'propylene glycol',
+  'ethylene-glycol': 'ethylene glycol',
+};
 
 const pictureRows = 6;
 
@@ -66,7 +70,11 @@ function writeFacts(sheet: Worksheet, from: number, { content, contentSha256, st
 async function placeStrip(sheet: Worksheet, workbook: Workbook, row: number, { content }: ReportOnPaper): Promise<number> {
   const { strip, band } = stripOfReport(content);
   if (strip.length === 0) return row;
-  heading(sheet, row, 'Flow strip: one mark a terminal in walking order, its height is the per cent of design, the tolerance band behind it');
+  heading(
+    sheet,
+    row,
+    'Flow strip: one mark a terminal in walking order, its height is the per cent of design, the tolerance band behind it',
+  );
   const image = workbook.addImage({ buffer: (await stripPicture(strip, band)) as unknown as ArrayBuffer, extension: 'png' });
   sheet.addImage(image, { tl: { col: 0, row }, ext: stripBox });
   for (let i = 1; i <= pictureRows; i++) sheet.getRow(row + i).height = (stripBox.height * 0.75) / pictureRows;
@@ -76,7 +84,12 @@ async function placeStrip(sheet: Worksheet, workbook: Workbook, row: number, { c
 function writeSummary(sheet: Worksheet, row: number, { content }: ReportOnPaper): number {
   const { within, low, high, notMeasured } = summaryOf(content);
   heading(sheet, row, 'Terminals');
-  const counts: [string, number][] = [['within', within], ['low', low], ['high', high], ['not measured', notMeasured.length]];
+  const counts: [string, number][] = [
+    ['within', within],
+    ['low', low],
+    ['high', high],
+    ['not measured', notMeasured.length],
+  ];
   counts.forEach(([verdict, result], i) => {
     write(sheet.getCell(row + 1 + i, 1), verdict);
     const count: Formula = { formula: `COUNTIF(Terminals!$G:$G,A${row + 1 + i})`, result };
@@ -89,8 +102,22 @@ function writeSummary(sheet: Worksheet, row: number, { content }: ReportOnPaper)
 function writeBands(sheet: Worksheet, row: number, workbook: Workbook, tolerances: ToleranceRule[]): number {
   const columns: Column<ToleranceRule>[] = [
     { key: 'kind', head: 'Tolerance of', width: 26, content: ({ stationKind }) => kindWords[stationKind] },
-    { key: 'lower', head: 'Lower', unit: '% from design', width: 15, format: formats.signedPercent, content: ({ lowerPercent }) => lowerPercent / 100 },
-    { key: 'upper', head: 'Upper', unit: '% from design', width: 15, format: formats.signedPercent, content: ({ upperPercent }) => upperPercent / 100 },
+    {
+      key: 'lower',
+      head: 'Lower',
+      unit: '% from design',
+      width: 15,
+      format: formats.signedPercent,
+      content: ({ lowerPercent }) => lowerPercent / 100,
+    },
+    {
+      key: 'upper',
+      head: 'Upper',
+      unit: '% from design',
+      width: 15,
+      format: formats.signedPercent,
+      content: ({ upperPercent }) => upperPercent / 100,
+    },
     { key: 'source', head: 'Source', width: 34, content: ({ source }) => source },
   ];
   writeHeads(sheet, row, columns);
@@ -104,7 +131,12 @@ function writeBands(sheet: Worksheet, row: number, workbook: Workbook, tolerance
 
 function writeSignatures(sheet: Worksheet, row: number, signatures: Signature[]): number {
   const columns: Column<Signature>[] = [
-    { key: 'meaning', head: 'Signature', width: 26, content: ({ meaning, submission }) => `${meaningWords[meaning]}, submission ${submission}` },
+    {
+      key: 'meaning',
+      head: 'Signature',
+      width: 26,
+      content: ({ meaning, submission }) => `${meaningWords[meaning]}, submission ${submission}`,
+    },
     { key: 'role', head: 'As', width: 14, content: ({ personRole }) => personRole },
     { key: 'at', head: 'Signed', unit: 'UTC', width: 14, format: formats.moment, content: ({ signedAt }) => new Date(signedAt) },
     { key: 'name', head: 'By', width: 34, content: ({ personName }) => personName },

@@ -18,12 +18,32 @@ export function addInstruments(workbook: Workbook, report: ReportOnPaper): void 
     { key: 'unit', head: 'Unit', width: 7, content: ({ kind }) => unitOf[kind] },
     { key: 'low', head: 'Range from', unit: 'in its unit', width: 11, format: formats.pressure, content: ({ rangeLow }) => rangeLow },
     { key: 'high', head: 'Range to', unit: 'in its unit', width: 11, format: formats.pressure, content: ({ rangeHigh }) => rangeHigh },
-    { key: 'accuracy', head: 'Accuracy', unit: '± % of reading', width: 14, format: formats.percent, content: ({ accuracyPercent }) => accuracyPercent / 100 },
-    { key: 'fixed', head: 'and fixed', unit: '± in its unit', width: 12, format: formats.pressure, content: ({ accuracyAbsolute }) => accuracyAbsolute },
+    {
+      key: 'accuracy',
+      head: 'Accuracy',
+      unit: '± % of reading',
+      width: 14,
+      format: formats.percent,
+      content: ({ accuracyPercent }) => accuracyPercent / 100,
+    },
+    {
+      key: 'fixed',
+      head: 'and fixed',
+      unit: '± in its unit',
+      width: 12,
+      format: formats.pressure,
+      content: ({ accuracyAbsolute }) => accuracyAbsolute,
+    },
     { key: 'calibrated', head: 'Calibrated on', width: 13, format: formats.day, content: ({ calibratedOn }) => day(calibratedOn) },
     { key: 'due', head: 'Due on', width: 12, format: formats.day, content: ({ calibrationDueOn }) => day(calibrationDueOn) },
     { key: 'entries', head: 'Entries', width: 9, format: formats.whole, content: ({ id }) => entries(id).length },
-    { key: 'overdue', head: 'Of them when overdue', width: 12, format: formats.whole, content: ({ id }) => entries(id).filter(({ isInstrumentOverdue }) => isInstrumentOverdue).length },
+    {
+      key: 'overdue',
+      head: 'Of them when overdue',
+      width: 12,
+      format: formats.whole,
+      content: ({ id }) => entries(id).filter(({ isInstrumentOverdue }) => isInstrumentOverdue).length,
+    },
   ];
   addTable(addSheet(workbook, 'Instruments', { title: 'Instruments', reference: referenceOf(report) }), columns, instruments);
 }

@@ -13,7 +13,14 @@ export const kindWords = { terminal: 'Terminal', branch: 'Branch or main', pump:
 export function measuredColumns<Row>(content: ReportContent, stationOf: (row: Row) => ReportStation): Column<Row>[] {
   const reading = (row: Row) => stationOf(row).reading;
   return [
-    { key: 'measured', head: 'Measured flow', unit: 'L/s', width: 11, format: formats.flow, content: (row) => reading(row)?.flowLs ?? null },
+    {
+      key: 'measured',
+      head: 'Measured flow',
+      unit: 'L/s',
+      width: 11,
+      format: formats.flow,
+      content: (row) => reading(row)?.flowLs ?? null,
+    },
     {
       key: 'percent',
       head: 'Of design',
@@ -23,7 +30,10 @@ export function measuredColumns<Row>(content: ReportContent, stationOf: (row: Ro
       content: (row, cell) => {
         const { designFlowLs } = stationOf(row);
         const measured = reading(row);
-        return { formula: `IF(ISNUMBER(${cell('measured')}),${cell('measured')}/${cell('design')},"")`, result: measured ? measured.flowLs / designFlowLs : '' };
+        return {
+          formula: `IF(ISNUMBER(${cell('measured')}),${cell('measured')}/${cell('design')},"")`,
+          result: measured ? measured.flowLs / designFlowLs : '',
+        };
       },
     },
     { key: 'verdict', head: 'Verdict', width: 14, content: (row, cell) => verdictFormula(content, stationOf(row), cell('percent')) },

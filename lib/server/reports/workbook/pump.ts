@@ -17,7 +17,14 @@ export function addPump(workbook: Workbook, report: ReportOnPaper): void {
     { key: 'method', head: 'Method', width: 12, content: ({ station: { reading } }) => reading && methodWords[reading.method] },
     { key: 'instrument', head: 'Instrument', width: 28, content: ({ station }) => station.reading?.instrumentName ?? null },
     { key: 'by', head: 'Taken by', width: 16, content: ({ station }) => station.reading?.takenBy ?? null },
-    { key: 'at', head: 'Taken', unit: 'UTC', width: 16, format: formats.moment, content: ({ station: { reading } }) => reading && new Date(reading.takenAt) },
+    {
+      key: 'at',
+      head: 'Taken',
+      unit: 'UTC',
+      width: 16,
+      format: formats.moment,
+      content: ({ station: { reading } }) => reading && new Date(reading.takenAt),
+    },
   ];
   const pumps = pumpsOf(report.content);
   const sheet = addSheet(workbook, 'Pump', { title: 'Pump duty', reference: referenceOf(report) });

@@ -6,7 +6,9 @@ import { addSheet, addTable, firstRow, formats, write, type CellContent, type Co
 export function addRevision(workbook: Workbook, report: ReportOnPaper): void {
   const { revision, balance, fluid } = report.content;
   const sheet = addSheet(workbook, 'Revision', { title: `Revision ${revision.number}`, reference: referenceOf(report) });
-  const columns: Column<string>[] = [{ key: 'change', head: 'Changed against the revision before', width: 60, content: (change) => change }];
+  const columns: Column<string>[] = [
+    { key: 'change', head: 'Changed against the revision before', width: 60, content: (change) => change },
+  ];
   addTable(sheet, columns, revision.changes);
   const facts: [string, CellContent, string?][] = [
     ['Issued by', revision.issuedBy],

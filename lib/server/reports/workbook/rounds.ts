@@ -10,7 +10,13 @@ export function addRounds(workbook: Workbook, report: ReportOnPaper): void {
     { key: 'number', head: 'Round', width: 9, format: formats.whole, content: ({ number }) => number },
     { key: 'purpose', head: 'Purpose', width: 40, content: ({ purpose }) => purpose },
     { key: 'revision', head: 'Revision', width: 10, format: formats.whole, content: ({ revisionNumber }) => revisionNumber },
-    { key: 'entries', head: 'Entries', width: 9, format: formats.whole, content: ({ id }) => readings.filter(({ roundId }) => roundId === id).length },
+    {
+      key: 'entries',
+      head: 'Entries',
+      width: 9,
+      format: formats.whole,
+      content: ({ id }) => readings.filter(({ roundId }) => roundId === id).length,
+    },
     { key: 'by', head: 'Started by', width: 20, content: ({ startedBy }) => startedBy },
     { key: 'started', head: 'Started', unit: 'UTC', width: 16, format: formats.moment, content: ({ startedAt }) => new Date(startedAt) },
   ];

@@ -35,7 +35,15 @@ export const formats = {
   day: 'yyyy-mm-dd',
 } as const;
 
-export const inks = { ink: 'FF16232B', quiet: 'FF53636B', rule: 'FFD9D5C9', well: 'FFF1EEE5', low: 'FF4A4FB5', high: 'FFB4571A', brass: 'FF8F6210' } as const;
+export const inks = {
+  ink: 'FF16232B',
+  quiet: 'FF53636B',
+  rule: 'FFD9D5C9',
+  well: 'FFF1EEE5',
+  low: 'FF4A4FB5',
+  high: 'FFB4571A',
+  brass: 'FF8F6210',
+} as const;
 
 /** One typeface for all cells, in the size of a printed table. */
 export const typeface = { name: 'Calibri', size: 11, color: { argb: inks.ink } } as const;

@@ -8,7 +8,9 @@ const colours = { low: '#4A4FB5', within: '#16232B', high: '#B4571A' };
 
 /** The flow strip as a PNG at twice its size in the sheet, sharp on paper; the same geometry as on the screen. */
 export function stripPicture(ticks: StripTick[], band: StripBand): Promise<Buffer> {
-  return sharp(Buffer.from(stripSvg(ticks, band)), { density: 144 }).png({ compressionLevel: 9 }).toBuffer();
+  return sharp(Buffer.from(stripSvg(ticks, band)), { density: 144 })
+    .png({ compressionLevel: 9 })
+    .toBuffer();
 }
 
 function stripSvg(ticks: StripTick[], band: StripBand): string {

@@ -24,8 +24,22 @@ export function addValves(workbook: Workbook, report: ReportOnPaper): void {
     { key: 'setting', head: 'Setting by design', unit: 'turns', width: 11, format: formats.turns, content: ({ valve }) => valve.setting },
     { key: 'state', head: 'State', width: 20, content: ({ valve }) => stateWords[valve.state] },
     ...measuredColumns<ReportValve>(report.content, ({ station }) => station),
-    { key: 'measuredSetting', head: 'Setting read', unit: 'turns', width: 9, format: formats.turns, content: ({ station }) => station.reading?.settingTurns ?? null },
-    { key: 'measuredDrop', head: 'Drop read', unit: 'kPa', width: 10, format: formats.pressure, content: ({ station }) => station.reading?.dropKpa ?? null },
+    {
+      key: 'measuredSetting',
+      head: 'Setting read',
+      unit: 'turns',
+      width: 9,
+      format: formats.turns,
+      content: ({ station }) => station.reading?.settingTurns ?? null,
+    },
+    {
+      key: 'measuredDrop',
+      head: 'Drop read',
+      unit: 'kPa',
+      width: 10,
+      format: formats.pressure,
+      content: ({ station }) => station.reading?.dropKpa ?? null,
+    },
   ];
   const valves = valvesOf(report.content);
   const sheet = addSheet(workbook, 'Valves', { title: 'Balancing valves', reference: referenceOf(report) });

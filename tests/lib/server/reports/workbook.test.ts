@@ -30,7 +30,14 @@ const signature = {
 
 let workbook: ExcelJS.Workbook;
 beforeAll(async () => {
-  const bytes = await buildWorkbook({ content, contentSha256: 'a'.repeat(64), state: 'submitted', signatures: [signature], acceptedNumber: null, at: new Date('2026-03-03T13:00:00Z') });
+  const bytes = await buildWorkbook({
+    content,
+    contentSha256: 'a'.repeat(64),
+    state: 'submitted',
+    signatures: [signature],
+    acceptedNumber: null,
+    at: new Date('2026-03-03T13:00:00Z'),
+  });
   workbook = new ExcelJS.Workbook();
   await workbook.xlsx.load(bytes as unknown as ArrayBuffer);
 });
@@ -42,16 +49,28 @@ function table(name: string): Record<string, CellValue>[] {
   const sheet = workbook.getWorksheet(name)!;
   const heads = (sheet.getRow(4).values as CellValue[]).slice(1).map(headOf);
   const rows: Record<string, CellValue>[] = [];
-  for (let row = 5; row <= sheet.rowCount; row++) rows.push(Object.fromEntries(heads.map((head, i) => [head, sheet.getCell(row, i + 1).value])));
+  for (let row = 5; row <= sheet.rowCount; row++)
+    rows.push(Object.fromEntries(heads.map((head, i) => [head, sheet.getCell(row, i + 1).value])));
   return rows;
 }
 
 function* cellsOf(sheet: Worksheet): Generator<ExcelJS.Cell> {
-  for (let row = 1; row <= sheet.rowCount; row++) for (let column = 1; column <= sheet.columnCount; column++) yield sheet.getCell(row, column);
+  for (let row = 1; row <= sheet.rowCount; row++)
+    for (let column = 1; column <= sheet.columnCount; column++) yield sheet.getCell(row, column);
 }
 
 it('has one sheet for each thing that is handed over', () => {
-  expect(workbook.worksheets.map(({ name }) => name)).toEqual(['Cover', 'Terminals', 'Valves', 'Pump', 'Readings', 'Rounds', 'Revision', 'Instruments', 'Cautions']);
+  expect(workbook.worksheets.map(({ name }) => name)).toEqual([
+    'Cover',
+    'Terminals',
+    'Valves',
+    'Pump',
+    'Readings',
+    'Rounds',
+    'Revision',
+    'Instruments',
+    'Cautions',
+  ]);
 });
 
 it('per cent of design is a formula that carries its value', () => {
@@ -81,7 +100,8 @@ it('counts on the cover are formulas over the verdict column and agree with the 
 
 it('what nobody measured is an empty cell, not a nought', () => {
   const unmeasured = table('Terminals').find(({ Tag }) => Tag === '+FC-3')!;
-  for (const head of ['Measured flow, L/s', 'Setting, turns', 'Drop read, kPa', 'Uncertainty, ± % of flow', 'Taken, UTC', 'Round']) expect(unmeasured[head]).toBeNull();
+  for (const head of ['Measured flow, L/s', 'Setting, turns', 'Drop read, kPa', 'Uncertainty, ± % of flow', 'Taken, UTC', 'Round'])
+    expect(unmeasured[head]).toBeNull();
   // The value of that formula is the empty text, which the reader gives as none.
   expect(unmeasured['Of design, %']).toEqual({ formula: 'IF(ISNUMBER(E7),E7/D7,"")' });
   expect(table('Pump')[0]['Shaft power, kW']).toBeNull();
@@ -117,7 +137,14 @@ it('tables have frozen and filtered heads and print as wide as a page of A4, num
     const sheet = workbook.getWorksheet(name)!;
     expect(sheet.views[0]).toMatchObject({ state: 'frozen', ySplit: 4 });
     expect(sheet.autoFilter).toBeTruthy();
-    expect(sheet.pageSetup).toMatchObject({ paperSize: 9, orientation: 'landscape', fitToPage: true, fitToWidth: 1, fitToHeight: 0, printTitlesRow: '4:4' });
+    expect(sheet.pageSetup).toMatchObject({
+      paperSize: 9,
+      orientation: 'landscape',
+      fitToPage: true,
+      fitToWidth: 1,
+      fitToHeight: 0,
+      printTitlesRow: '4:4',
+    });
     expect(sheet.headerFooter.oddFooter).toContain('&P of &N');
   }
 });

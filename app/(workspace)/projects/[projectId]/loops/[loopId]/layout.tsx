@@ -4,7 +4,13 @@ import { LoopHeader } from '@/components/shell/loop-header';
 import { requireAccess } from '@/lib/server/auth/require-person';
 import { readLoop } from '@/lib/server/loops/read-loop';
 
-export default async function LoopLayout({ children, params }: { children: ReactNode; params: Promise<{ projectId: string; loopId: string }> }) {
+export default async function LoopLayout({
+  children,
+  params,
+}: {
+  children: ReactNode;
+  params: Promise<{ projectId: string; loopId: string }>;
+}) {
   const { projectId, loopId } = await params;
   const access = await requireAccess('loop.see', { kind: 'loop', id: loopId });
   if (!access || access.projectId !== projectId) notFound();
