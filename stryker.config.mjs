@@ -8,10 +8,10 @@ export default {
   htmlReporter: { fileName: '.data/mutation/index.html' },
   clearTextReporter: { allowColor: false, logTests: false },
   tempDirName: '.stryker-tmp',
-  ignorePatterns: ['.next', '.data', 'public', 'app', 'components', 'e2e'],
+  ignorePatterns: ['.next', '.data', 'public', 'app', 'components', 'e2e', 'test-results', 'playwright-report'],
   coverageAnalysis: 'perTest',
   // Static mutants (tables evaluated on import) rerun every test; they are most of the coefficient tables, which the reference suite compares.
   ignoreStatic: true,
   concurrency: 1,
-  timeoutMS: 20_000,
+  timeoutMS: 5_000,
 };

@@ -17,7 +17,7 @@ export default async function RootLayout({ children }: { children: ReactNode }) 
   return (
     <html lang="en" data-theme={person?.theme ?? 'system'} className={`${words.variable} ${figures.variable}`}>
       <body>
-        <Providers units={person?.units ?? {}}>{children}</Providers>
+        <Providers personId={person?.id ?? null} units={person?.units ?? {}}>{children}</Providers>
       </body>
     </html>
   );

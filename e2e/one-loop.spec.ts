@@ -66,6 +66,7 @@ test('a loop is drawn, issued, measured, put right, signed and handed over as a 
   await tablet.goto(`${loopPath}/commissioning`);
   await tablet.getByRole('button', { name: 'Start the first round' }).click();
   await tablet.getByRole('dialog').getByLabel('What is it for?').fill('As set');
+  await tablet.getByRole('dialog').getByLabel(/checks are open/).fill('The flushing record comes tomorrow');
   await tablet.getByRole('dialog').getByRole('button', { name: 'Start the round' }).click();
   await expect(tablet.getByRole('heading', { name: 'Round 1, As set' })).toBeVisible();
 

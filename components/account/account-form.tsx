@@ -24,6 +24,7 @@ const quantityWords: Record<Quantity, string> = {
   valveCoefficient: 'Valve coefficient',
   velocity: 'Velocity',
   gradient: 'Drop per length',
+  speed: 'Pump speed',
   setting: 'Valve setting',
 };
 

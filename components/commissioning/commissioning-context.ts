@@ -1,9 +1,9 @@
 import type { CommissioningBody, Reading, Round, Station } from '@/lib/api/commissioning';
 import type { StripTick } from '@/lib/commissioning/flow-strip';
-import type { LoopState } from '@/lib/api/loops';
-import type { ToleranceRule } from '@/lib/api/projects';
-import { defaultTolerances } from '@/lib/api/tolerances';
-import type { KeptReadings, KeptState } from '@/lib/client/kept-readings';
+import type { LoopState, RevisionBody } from '@/lib/api/loops';
+import type { SiteBody } from '@/lib/api/site';
+import type { KeptOf } from '@/lib/client/kept-entry';
+import type { Outbox, OutboxState } from '@/lib/client/outbox';
 
 /** What every part of a loop's commissioning looks at. */
 export interface Commissioning {
@@ -12,8 +12,13 @@ export interface Commissioning {
   base: string;
   personId: string;
   body: CommissioningBody;
-  kept: KeptReadings;
-  keptState: KeptState;
+  site: SiteBody;
+  /** The revision as it was taken along; null where the page came from the server. */
+  revision: RevisionBody | null;
+  outbox: Outbox;
+  outboxState: OutboxState;
+  /** Readings at this loop that are on this device alone. */
+  keptReadings: KeptOf<'reading'>[];
   /** The open round. */
   round: Round | null;
   /** The open round, or the last one. */
@@ -21,17 +26,15 @@ export interface Commissioning {
   /** Whether this person may enter readings now. */
   isEntryOpen: boolean;
   mayRecord: boolean;
+  mayRaise: boolean;
   /** The entries that count in the round shown and in the one before, by station. */
   standing: Map<string, Reading>;
   lastStanding: Map<string, Reading>;
 }
 
-export const bandOf = (tolerances: ToleranceRule[], station: Station): ToleranceRule =>
-  [...tolerances, ...defaultTolerances].find(({ stationKind }) => stationKind === station.kind)!;
-
 /** Entries of this tablet that wait at a station in the open round. */
-export const waitingAt = ({ keptState, round }: Commissioning, stationId: string) =>
-  keptState.entries.filter((entry) => entry.reading.stationId === stationId && entry.roundId === round?.id);
+export const waitingAt = ({ keptReadings, round }: Commissioning, stationId: string): KeptOf<'reading'>[] =>
+  keptReadings.filter(({ content }) => content.body.stationId === stationId && content.roundId === round?.id);
 
 /** Stations measured in the round shown, those included whose entry still waits on this tablet. */
 export const measuredIn = (commissioning: Commissioning): number =>
@@ -59,5 +62,5 @@ export const placeOf = ({ storey, room }: Pick<Station, 'storey' | 'room'>): str
  * Whether the list is asked of the server when it is opened: something was sent since this page came, so the strip at its head is no
  * longer true, and there is signal to ask by.
  */
-export const isListStale = ({ keptState }: Commissioning): boolean =>
-  keptState.hasSent && keptState.entries.length === 0 && !keptState.isOffline && navigator.onLine;
+export const isListStale = ({ outboxState }: Commissioning): boolean =>
+  outboxState.hasSent && outboxState.entries.length === 0 && !outboxState.isOffline && navigator.onLine;

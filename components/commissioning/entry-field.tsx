@@ -3,7 +3,15 @@ import { unitsOf } from '@/lib/units/quantities';
 import { classNames } from '../ui/class-names';
 import { quantityOf, type Entry, type Field } from './use-entry';
 
-export const fieldNames: Record<Field, string> = { setting: 'Setting', drop: 'Differential pressure', flow: 'Flow' };
+export const fieldNames: Record<Field, string> = {
+  setting: 'Setting',
+  drop: 'Differential pressure',
+  flow: 'Flow',
+  heat: 'Heat',
+  supply: 'Supply',
+  return: 'Return',
+  speed: 'Pump speed',
+};
 
 interface EntryFieldProps {
   entry: Entry;

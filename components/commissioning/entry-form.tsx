@@ -44,7 +44,7 @@ export function EntryForm({ commissioning, station, entry, correcting, onKeep }:
         </div>
       )}
       {entry.isCorrecting && <NoteField label="Why was the earlier entry wrong?" entry={entry} />}
-      <MethodSwitch method={entry.typed.method} hasValve={station.kvTable !== null} onChoose={entry.chooseMethod} />
+      <MethodSwitch method={entry.typed.method} possible={entry.possible} onChoose={entry.chooseMethod} />
       <div className="flex gap-2 sm:gap-3">
         {entry.fields.map((field) => (
           <EntryField key={field} entry={entry} field={field} onEnter={onKeep} />
@@ -80,7 +80,7 @@ export function EntryForm({ commissioning, station, entry, correcting, onKeep }:
       <WorkingDialog
         entry={entry}
         station={station}
-        densityKgM3={body.densityKgM3!}
+        fluid={{ densityKgM3: body.densityKgM3!, specificHeatKJKgK: body.specificHeatKJKgK! }}
         isOpen={isWorkingOpen}
         onClose={() => setWorkingOpen(false)}
       />

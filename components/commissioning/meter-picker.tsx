@@ -1,9 +1,12 @@
 import Link from 'next/link';
 import { useId } from 'react';
 import { isOverdue } from '@/lib/commissioning/calibration';
+import { readingMethods } from '@/lib/commissioning/reading-methods';
 import { dayWords } from '../instruments/instrument-words';
 import { useNow } from './use-now';
 import type { Entry } from './use-entry';
+
+const meterWords = { 'differential-pressure': 'differential pressure meter', flow: 'flow meter', temperature: 'thermometer' } as const;
 
 /** The meter that is read; the device remembers it for the next station. */
 export function MeterPicker({ entry }: { entry: Entry }) {
@@ -13,7 +16,7 @@ export function MeterPicker({ entry }: { entry: Entry }) {
   if (meters.length === 0) {
     return (
       <p className="text-quiet text-sm">
-        No {entry.typed.method === 'valve-drop' ? 'differential pressure' : 'flow'} meter is in the list.{' '}
+        No {meterWords[readingMethods[entry.typed.method].instrument]} is in the list.{' '}
         <Link href="/instruments">Add it under Instruments</Link>.
       </p>
     );

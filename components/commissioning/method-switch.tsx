@@ -1,34 +1,30 @@
 import type { ReadingMethod } from '@/lib/api/commissioning';
+import { readingMethods } from '@/lib/commissioning/reading-methods';
 import { classNames } from '../ui/class-names';
-
-export const methodNames: Record<ReadingMethod, string> = { 'valve-drop': 'Across the valve', 'direct-flow': 'Flow direct' };
 
 interface MethodSwitchProps {
   method: ReadingMethod;
-  /** False where the station has no valve with a table. */
-  hasValve: boolean;
+  /** The methods that the station's design allows. */
+  possible: readonly ReadingMethod[];
   onChoose: (method: ReadingMethod) => void;
 }
 
-export function MethodSwitch({ method, hasValve, onChoose }: MethodSwitchProps) {
+export function MethodSwitch({ method, possible, onChoose }: MethodSwitchProps) {
   return (
-    <fieldset className="bg-sheet flex rounded border">
+    <fieldset className="bg-sheet flex flex-wrap rounded border">
       <legend className="sr-only">How the flow is measured</legend>
-      {(Object.keys(methodNames) as ReadingMethod[]).map((it) => {
-        const isOff = it === 'valve-drop' && !hasValve;
-        return (
-          <label
-            key={it}
-            className={classNames(
-              'has-focus-visible:outline-brass flex h-12 flex-1 items-center justify-center rounded-[2px] font-semibold has-focus-visible:outline-2',
-              it === method ? 'bg-ink text-paper' : isOff ? 'text-quiet opacity-60' : 'cursor-pointer',
-            )}
-          >
-            <input type="radio" name="method" className="sr-only" checked={it === method} disabled={isOff} onChange={() => onChoose(it)} />
-            {methodNames[it]}
-          </label>
-        );
-      })}
+      {possible.map((it) => (
+        <label
+          key={it}
+          className={classNames(
+            'has-focus-visible:outline-brass flex h-12 flex-1 items-center justify-center rounded-[2px] px-2 font-semibold whitespace-nowrap has-focus-visible:outline-2',
+            it === method ? 'bg-ink text-paper' : 'cursor-pointer',
+          )}
+        >
+          <input type="radio" name="method" className="sr-only" checked={it === method} onChange={() => onChoose(it)} />
+          {readingMethods[it].name}
+        </label>
+      ))}
     </fieldset>
   );
 }

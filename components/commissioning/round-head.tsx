@@ -5,6 +5,7 @@ import { useRouter } from 'next/navigation';
 import { useState } from 'react';
 import { toast } from 'sonner';
 import { closeRound, commissioningQuery } from '@/lib/client/commissioning';
+import { openChecks } from '@/lib/commissioning/readiness-checks';
 import { firstOf } from '@/lib/commissioning/walking-order';
 import { Button, buttonClass } from '../ui/button';
 import { Dialog } from '../ui/dialog';
@@ -63,7 +64,7 @@ export function RoundHead({ commissioning, measured }: { commissioning: Commissi
         title="Start a round"
         description="One pass of readings over the stations. Entries go into the round that is open."
       >
-        <StartRoundDialog loopId={loop.id} onDone={() => setStarting(false)} />
+        <StartRoundDialog loopId={loop.id} openChecks={openChecks(commissioning.site.checks).length} onDone={() => setStarting(false)} />
       </Dialog>
       {round && (
         <Dialog isOpen={isClosing} onClose={() => setClosing(false)} title={`Close round ${round.number}?`}>
@@ -77,8 +78,8 @@ export function RoundHead({ commissioning, measured }: { commissioning: Commissi
 function CloseRound({ commissioning, left, onDone }: { commissioning: Commissioning; left: number; onDone: () => void }) {
   const queries = useQueryClient();
   const router = useRouter();
-  const { loop, round, keptState } = commissioning;
-  const waiting = keptState.entries.filter((entry) => entry.roundId === round?.id).length;
+  const { loop, round, outboxState } = commissioning;
+  const waiting = outboxState.entries.filter(({ content }) => 'roundId' in content && content.roundId === round?.id).length;
   const close = useMutation({
     mutationFn: () => closeRound(round!.id),
     onSuccess: async (closed) => {
@@ -96,7 +97,7 @@ function CloseRound({ commissioning, left, onDone }: { commissioning: Commission
       </p>
       {waiting > 0 && (
         <p className="text-high">
-          ▴ {waiting === 1 ? 'One reading is' : `${waiting} readings are`} still on this tablet only and would be refused afterwards. Send
+          ▴ {waiting === 1 ? 'One entry is' : `${waiting} entries are`} still on this tablet only and would be refused afterwards. Send
           first.
         </p>
       )}

@@ -14,11 +14,14 @@ import { FormTrouble } from '../ui/form-trouble';
 
 const usual = ['As found', 'As set', 'As left', 'Witness'];
 
-export function StartRoundDialog({ loopId, onDone }: { loopId: string; onDone: () => void }) {
+export function StartRoundDialog({ loopId, openChecks, onDone }: { loopId: string; openChecks: number; onDone: () => void }) {
   const queries = useQueryClient();
   const router = useRouter();
   // The id is made with the form, so pressing again after no answer came starts no second round.
-  const form = useForm<StartRound>({ resolver: zodResolver(startRoundSchema), defaultValues: { id: uuidv7(), purpose: '' } });
+  const form = useForm<StartRound>({
+    resolver: zodResolver(startRoundSchema),
+    defaultValues: { id: uuidv7(), purpose: '', openChecksReason: '' },
+  });
   const start = useMutation({
     mutationFn: (round: StartRound) => startRound(loopId, round),
     onSuccess: async () => {
@@ -51,6 +54,16 @@ export function StartRoundDialog({ loopId, onDone }: { loopId: string; onDone: (
           </Button>
         ))}
       </div>
+      {openChecks > 0 && (
+        <TextField
+          label={openChecks === 1 ? 'One check is open. Why start all the same?' : `${openChecks} checks are open. Why start all the same?`}
+          hint="stands in the report"
+          className="!h-12 text-lg"
+          autoComplete="off"
+          error={errors.openChecksReason?.message}
+          {...form.register('openChecksReason')}
+        />
+      )}
       <FormTrouble message={errors.root?.message ?? errors.id?.message} />
       <div className="flex justify-end gap-2">
         <Button size="touch" look="quiet" className="!text-base" onClick={onDone}>

@@ -1,11 +1,11 @@
 import type { Reading } from '@/lib/api/commissioning';
+import { readingMethods } from '@/lib/commissioning/reading-methods';
 import { Button } from '../ui/button';
 import { classNames } from '../ui/class-names';
 import { Deviation } from '../ui/deviation';
 import { Figure } from '../ui/figure';
 import { Moment } from '../ui/moment';
 import { enteredWords } from './entry-words';
-import { methodNames } from './method-switch';
 
 interface StationEntriesProps {
   /** Of this station, newest first. */
@@ -35,13 +35,14 @@ export function StationEntries({ readings, openRoundId, onCorrect }: StationEntr
                   <Outcome reading={reading} />
                 )}
                 <span className="text-quiet text-sm">
-                  Round {reading.roundNumber} · {methodNames[reading.method]} ·{' '}
+                  Round {reading.roundNumber} · {readingMethods[reading.method].name} ·{' '}
                   <span className="figures">{enteredWords(reading.entered)}</span>
                 </span>
               </p>
               <p className="text-quiet text-sm">
                 <Moment at={reading.takenAt} />, {reading.takenBy}, {reading.instrumentName}
                 {reading.isInstrumentOverdue && <span className="text-high"> ▴ overdue that day</span>}
+                {reading.isInstrumentOutOfRange && <span className="text-high"> ▴ outside its range</span>}
               </p>
               {reading.note && (
                 <p className="text-sm">

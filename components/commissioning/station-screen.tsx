@@ -16,11 +16,14 @@ import { StationBar } from './station-bar';
 import { StationEntries } from './station-entries';
 import { StationHead } from './station-head';
 import { useEntry } from './use-entry';
+import { ReadTwice } from './read-twice';
+import { Photos } from './site/photos';
+import { RaiseSnagDialog } from './site/raise-snag-dialog';
 import { WaitingEntry } from './waiting-entry';
 
 /** One station, one reading: made for a tablet in a gloved hand, the same on every screen. */
 export function StationScreen({ commissioning, station }: { commissioning: Commissioning; station: Station }) {
-  const { body, base, round, kept, keptState, isEntryOpen } = commissioning;
+  const { body, base, loop, round, outbox, outboxState, isEntryOpen } = commissioning;
   const entry = useEntry(commissioning, station);
   const [refused, setRefused] = useState<{ message: string; typed: string } | null>(null);
   const [asked, setAsked] = useState<{ reading: RecordReading; questions: Question[] } | null>(null);
@@ -37,15 +40,15 @@ export function StationScreen({ commissioning, station }: { commissioning: Commi
 
   const keep = async (reading: RecordReading) => {
     // Where it is known that there is no signal, nobody is made to wait at each station for an answer that does not come.
-    const goesOn = keptState.isOffline;
+    const goesOn = outboxState.isOffline;
     setAsked(null);
-    kept.keep({ roundId: round!.id, reading, tag: station.tag });
+    await outbox.keep(loop.id, station.tag, { kind: 'reading', roundId: round!.id, body: reading });
     entry.clear();
-    const sent = kept.send();
+    const sent = outbox.send();
     if (!goesOn) await sent;
     // Who has typed on or gone elsewhere while it was sent is not taken away.
     const isHere = window.location.pathname.endsWith(station.id) && (goesOn || isBlank.current);
-    if (isHere && (goesOn || !kept.state.entries.some((it) => it.reading.id === reading.id))) {
+    if (isHere && (goesOn || !outbox.state.entries.some(({ id }) => id === reading.id))) {
       if (next) goTo(`${base}/stations/${next.id}`);
       else if (goesOn) goTo(base);
       else window.location.assign(base);
@@ -67,16 +70,17 @@ export function StationScreen({ commissioning, station }: { commissioning: Commi
           <StationHead commissioning={commissioning} station={station} />
           {waiting.map((it) => (
             <WaitingEntry
-              key={it.reading.id}
+              key={it.id}
               entry={it}
-              isSending={keptState.isSending}
-              onSend={() => void kept.send()}
+              isSending={outboxState.isSending}
+              onSend={() => void outbox.send()}
               onTakeBack={() => {
-                kept.release(it.reading.id);
-                entry.takeUp(it.reading, it.reading.correctsReadingId);
+                void outbox.release(it.id);
+                entry.takeUp(it.content.body, it.content.body.correctsReadingId);
               }}
             />
           ))}
+          <ReadTwice readings={ofStation} round={round} />
           {isEntryOpen ? (
             <EntryForm
               commissioning={commissioning}
@@ -92,6 +96,10 @@ export function StationScreen({ commissioning, station }: { commissioning: Commi
                 : 'Technicians of the project enter readings here; you read along.'}
             </Notice>
           )}
+          <div className="flex flex-wrap items-center gap-2">
+            <RaiseSnagDialog commissioning={commissioning} station={station} />
+            <Photos commissioning={commissioning} subject="station" subjectId={station.id} tag={station.tag} />
+          </div>
           <StationEntries
             readings={ofStation}
             openRoundId={isEntryOpen ? round!.id : null}

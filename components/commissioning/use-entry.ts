@@ -13,22 +13,53 @@ import {
   type Station,
 } from '@/lib/api/commissioning';
 import { isOverdue } from '@/lib/commissioning/calibration';
+import { measuredOf, type ReadFigures } from '@/lib/commissioning/measured-of';
+import { methodsAt, readingMethods, type ReadingField } from '@/lib/commissioning/reading-methods';
 import { judgeReading, type Judgement, type Measured } from '@/lib/commissioning/judge-reading';
 import { questionsAbout, type Question } from '@/lib/commissioning/suspicion';
+import { clockOffsetMs } from '@/lib/client/server-clock';
 import { parseQuantity } from '@/lib/units/parse-quantity';
-import { unitFor } from '@/lib/units/quantities';
+import { unitFor, type Quantity } from '@/lib/units/quantities';
 import { useUnitChoice } from '../shell/units-context';
-import { bandOf, type Commissioning } from './commissioning-context';
+import { bandOf } from '@/lib/api/tolerances';
+import type { Commissioning } from './commissioning-context';
 import { useDeviceMemory } from './use-device-memory';
 
-export const quantityOf = { setting: 'setting', drop: 'pressure', flow: 'flow' } as const;
-export type Field = keyof typeof quantityOf;
+export const quantityOf = {
+  setting: 'setting',
+  drop: 'pressure',
+  flow: 'flow',
+  heat: 'power',
+  supply: 'temperature',
+  return: 'temperature',
+  speed: 'speed',
+} as const satisfies Record<ReadingField, Quantity>;
+export type Field = ReadingField;
 
+/** Where each field of the page stands in an entry. */
+const figureOf = {
+  setting: 'settingTurns',
+  drop: 'dropKpa',
+  flow: 'flowLs',
+  heat: 'heatKw',
+  supply: 'supplyC',
+  return: 'returnC',
+  speed: 'pumpSpeed',
+} as const;
+const figures = Object.keys(figureOf) as Field[];
+/** What an entry calls what was typed; of two temperatures it must say which. */
+const enteredAs: Record<Field, string> = { ...quantityOf, supply: 'supply temperature', return: 'return temperature' };
+
+const text = z.string().max(40).default('');
 const typedSchema = z.object({
   method: z.enum(methods),
-  setting: z.string().max(40),
-  drop: z.string().max(40),
-  flow: z.string().max(40),
+  setting: text,
+  drop: text,
+  flow: text,
+  heat: text,
+  supply: text,
+  return: text,
+  speed: text,
   note: z.string().max(1000),
   correctsReadingId: z.uuid().nullable(),
 });
@@ -36,28 +67,37 @@ type Typed = z.infer<typeof typedSchema>;
 
 const deviceSchema = z.object({
   method: z.enum(methods).optional(),
-  units: z.object({ pressure: z.string().optional(), flow: z.string().optional() }),
+  units: z.record(z.string(), z.string()),
   instruments: z.partialRecord(z.enum(methods), z.string()),
 });
 const plainDevice: z.infer<typeof deviceSchema> = { units: {}, instruments: {} };
-
-const kindFor = { 'valve-drop': 'differential-pressure', 'direct-flow': 'flow' } as const;
-export const fieldsOf: Record<ReadingMethod, Field[]> = { 'valve-drop': ['setting', 'drop'], 'direct-flow': ['flow'] };
 
 /** What is being typed at one station: kept on the device at each key, judged at each key, made into a reading when it is kept. */
 export function useEntry(commissioning: Commissioning, station: Station) {
   const { personId, body, round } = commissioning;
   const [device, rememberDevice] = useDeviceMemory(`evenhead.meter.${personId}`, deviceSchema, plainDevice);
-  const usual: ReadingMethod = station.kvTable ? (device.method ?? 'valve-drop') : 'direct-flow';
-  const [blank] = useState<Typed>({ method: usual, setting: '', drop: '', flow: '', note: '', correctsReadingId: null });
+  const possible = methodsAt(station);
+  const usual = possible.find((method) => method === device.method) ?? possible[0]!;
+  const [blank] = useState<Typed>({
+    method: usual,
+    setting: '',
+    drop: '',
+    flow: '',
+    heat: '',
+    supply: '',
+    return: '',
+    speed: '',
+    note: '',
+    correctsReadingId: null,
+  });
   const [stored, remember] = useDeviceMemory<Typed | null>(`evenhead.typing.${personId}.${round?.id}.${station.id}`, typedSchema, null);
   const typed = stored ?? { ...blank, method: usual };
   const [active, setActive] = useState<Field | null>(null);
   const choice = useUnitChoice();
 
-  const fields = fieldsOf[typed.method];
+  const fields: readonly Field[] = readingMethods[typed.method].fields;
   const unitOf = (field: Field): string => {
-    const own = field === 'drop' ? device.units.pressure : field === 'flow' ? device.units.flow : undefined;
+    const own = device.units[quantityOf[field]];
     return unitFor(quantityOf[field], own ? { [quantityOf[field]]: own } : choice);
   };
   const read = Object.fromEntries(
@@ -67,19 +107,26 @@ export function useEntry(commissioning: Commissioning, station: Station) {
   ) as Partial<Record<Field, ReturnType<typeof parseQuantity>>>;
   const siOf = (field: Field): number | null => {
     const found = read[field];
-    return found?.ok ? found.si : null;
+    if (!found?.ok) return null;
+    return field === 'speed' ? found.si / 100 : found.si;
   };
 
-  const meters = body.instruments.filter(({ kind, isRetired }) => kind === kindFor[typed.method] && !isRetired);
+  const meters = body.instruments.filter(({ kind, isRetired }) => kind === readingMethods[typed.method].instrument && !isRetired);
   const meter: Instrument | null =
     meters.find(({ id }) => id === device.instruments[typed.method]) ?? (meters.length === 1 ? meters[0]! : null);
-  const measured = measuredOf(typed.method, siOf('setting'), siOf('drop'), siOf('flow'));
+  const figuresRead = Object.fromEntries(figures.map((field) => [figureOf[field], fields.includes(field) ? siOf(field) : null])) as Omit<
+    ReadFigures,
+    'method'
+  >;
+  const isRead = fields.every((field) => siOf(field) !== null);
+  const measured: Measured | null = isRead ? measuredOf({ method: typed.method, ...figuresRead }) : null;
   const band = bandOf(body.tolerances, station);
   const judgement =
-    measured && body.densityKgM3 !== null
+    measured && body.densityKgM3 !== null && body.specificHeatKJKgK !== null
       ? judgeReading(measured, {
           ...station,
           densityKgM3: body.densityKgM3,
+          specificHeatKJKgK: body.specificHeatKJKgK,
           accuracy: meter ?? { accuracyPercent: 0, accuracyAbsolute: 0 },
           band,
         })
@@ -90,6 +137,7 @@ export function useEntry(commissioning: Commissioning, station: Station) {
     isBlank: stored === null,
     isCorrecting: typed.correctsReadingId !== null,
     fields,
+    possible,
     active: active !== null && fields.includes(active) ? active : (fields.find((field) => typed[field] === '') ?? fields.at(-1)!),
     setActive,
     unitOf,
@@ -97,8 +145,7 @@ export function useEntry(commissioning: Commissioning, station: Station) {
     messageOf: (field: Field): string | null => {
       const found = read[field];
       if (found && !found.ok) return found.message;
-      const path = { setting: 'settingTurns', drop: 'dropKpa', flow: 'flowLs' }[field];
-      return judgement && !judgement.ok && judgement.path === path ? judgement.message : null;
+      return judgement && !judgement.ok && judgement.path === figureOf[field] ? judgement.message : null;
     },
     band,
     meters,
@@ -114,16 +161,17 @@ export function useEntry(commissioning: Commissioning, station: Station) {
     chooseUnit: (field: Field, unit: string) => rememberDevice({ ...device, units: { ...device.units, [quantityOf[field]]: unit } }),
     /** Takes an earlier entry up again, in the units it was typed in: to put it right, or because the server did not take it. */
     takeUp: ({ method, entered, note }: Pick<Reading, 'method' | 'entered' | 'note'>, correctsReadingId: string | null) => {
-      const textOf = (field: Field) => entered.find(({ quantity }) => quantity === quantityOf[field])?.text ?? '';
+      const textOf = (field: Field) => entered.find(({ quantity }) => quantity === enteredAs[field])?.text ?? '';
       const units = Object.fromEntries(
-        entered.filter(({ quantity }) => quantity !== 'setting').map(({ quantity, unit }) => [quantity, unit]),
+        figures.flatMap((field) => {
+          const found = entered.find(({ quantity }) => quantity === enteredAs[field]);
+          return found && field !== 'setting' ? [[quantityOf[field], found.unit]] : [];
+        }),
       );
       rememberDevice({ ...device, units: { ...device.units, ...units } });
       remember({
         method,
-        setting: textOf('setting'),
-        drop: textOf('drop'),
-        flow: textOf('flow'),
+        ...(Object.fromEntries(figures.map((field) => [field, textOf(field)])) as Record<Field, string>),
         note: correctsReadingId ? '' : note,
         correctsReadingId,
       });
@@ -144,15 +192,14 @@ export function useEntry(commissioning: Commissioning, station: Station) {
         id: uuidv7(),
         stationId: station.id,
         method: typed.method,
-        settingTurns: typed.method === 'valve-drop' ? siOf('setting') : null,
-        dropKpa: typed.method === 'valve-drop' ? siOf('drop') : null,
-        flowLs: typed.method === 'direct-flow' ? siOf('flow') : null,
+        ...figuresRead,
         entered: fields.map((field) => {
           const found = read[field] as { text: string; unit: string };
-          return { quantity: quantityOf[field], text: found.text, unit: found.unit };
+          return { quantity: enteredAs[field], text: found.text, unit: found.unit };
         }),
         instrumentId: meter.id,
         takenAt: at.toISOString(),
+        clockOffsetMs: clockOffsetMs(),
         note: typed.note,
         correctsReadingId: typed.correctsReadingId,
       });
@@ -166,6 +213,7 @@ export function useEntry(commissioning: Commissioning, station: Station) {
       measured: what,
       flowLs,
       designFlowLs: station.designFlowLs,
+      lastFlowLs: commissioning.lastStanding.get(station.id)?.flowLs ?? null,
       pumpShutOffKpa: body.pumpShutOffKpa,
       instrument: { ...instrument, isOverdue: isOverdue(instrument, at) },
     });
@@ -178,9 +226,8 @@ const missing: Record<Field, string> = {
   setting: 'Type the turns that the valve stands at: a drop without them says nothing.',
   drop: 'Type the differential pressure.',
   flow: 'Type the flow.',
+  heat: 'Type the heat that the circuit carries.',
+  supply: 'Type the supply temperature.',
+  return: 'Type the return temperature.',
+  speed: 'Type the speed that the pump runs at, per cent of full.',
 };
-
-function measuredOf(method: ReadingMethod, settingTurns: number | null, dropKpa: number | null, flowLs: number | null): Measured | null {
-  if (method === 'direct-flow') return flowLs !== null && flowLs >= 0 ? { method, flowLs } : null;
-  return settingTurns !== null && dropKpa !== null ? { method, settingTurns, dropKpa } : null;
-}

@@ -1,23 +1,23 @@
-import type { KeptReading } from '@/lib/client/kept-readings';
+import type { KeptOf } from '@/lib/client/kept-entry';
 import { Button } from '../ui/button';
 import { enteredWords } from './entry-words';
 
 interface WaitingEntryProps {
-  entry: KeptReading;
+  entry: KeptOf<'reading'>;
   isSending: boolean;
   onSend: () => void;
   onTakeBack: () => void;
 }
 
 /** An entry that the server has not acknowledged: it stands here until it has, or until the person takes it back. */
-export function WaitingEntry({ entry: { reading, refusal }, isSending, onSend, onTakeBack }: WaitingEntryProps) {
+export function WaitingEntry({ entry: { content, refusal }, isSending, onSend, onTakeBack }: WaitingEntryProps) {
   return (
     <div
       role={refusal ? 'alert' : 'status'}
       className={`bg-sheet flex flex-wrap items-center gap-x-4 gap-y-2 rounded border border-l-4 px-4 py-2 ${refusal ? 'border-l-high' : 'border-l-brass'}`}
     >
       <p className="min-w-48 flex-1">
-        <span className="figures text-lg font-bold">{enteredWords(reading.entered)}</span>
+        <span className="figures text-lg font-bold">{enteredWords(content.body.entered)}</span>
         <span className="block text-sm">
           {refusal ? (
             <span className="text-high">▴ Refused: {refusal}</span>

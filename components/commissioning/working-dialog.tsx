@@ -1,21 +1,23 @@
-import type { ReactNode } from 'react';
 import type { Station } from '@/lib/api/commissioning';
 import { instrumentError, kvAssumption } from '@/lib/commissioning/uncertainty';
 import { Dialog } from '../ui/dialog';
+import { IndirectFlow, IndirectUncertainty } from './indirect-working';
+import { figure, Line } from './working-line';
 import { bandWords } from './commissioning-context';
 import type { Entry } from './use-entry';
 
 interface WorkingDialogProps {
   entry: Entry;
   station: Station;
-  densityKgM3: number;
+  fluid: { densityKgM3: number; specificHeatKJKgK: number };
   isOpen: boolean;
   onClose: () => void;
 }
 
 /** Every figure of the result with its formula, the numbers in it, their units and where they come from. */
-export function WorkingDialog({ entry, station, densityKgM3, isOpen, onClose }: WorkingDialogProps) {
+export function WorkingDialog({ entry, station, fluid, isOpen, onClose }: WorkingDialogProps) {
   const { judgement, measured, meter, band } = entry;
+  const { densityKgM3 } = fluid;
   return (
     <Dialog isOpen={isOpen} onClose={onClose} title={`Working at ${station.tag}`} isWide>
       {judgement && measured ? (
@@ -39,7 +41,7 @@ export function WorkingDialog({ entry, station, densityKgM3, isOpen, onClose }: 
               </Line>
             </>
           ) : (
-            <Line name="Flow" formula="as the meter shows it" value={`${figure(judgement.flowLs, 4)} L/s`} />
+            <IndirectFlow measured={measured} flowLs={judgement.flowLs} station={station} fluid={fluid} />
           )}
           <Line
             name="Of design"
@@ -58,6 +60,7 @@ export function WorkingDialog({ entry, station, densityKgM3, isOpen, onClose }: 
               kPa). Combined as uncorrelated inputs, JCGM 100:2008, 5.1.2.
             </Line>
           )}
+          {meter && <IndirectUncertainty measured={measured} percent={judgement.uncertaintyPercent} meter={meter} />}
           {meter && measured.method === 'direct-flow' && (
             <Line
               name="Uncertainty"
@@ -75,19 +78,6 @@ export function WorkingDialog({ entry, station, densityKgM3, isOpen, onClose }: 
   );
 }
 
-const Line = ({ name, formula, value, children }: { name: string; formula: string; value: string; children?: ReactNode }) => (
-  <div className="border-t pt-3 first:border-t-0 first:pt-0">
-    <dt className="font-semibold">{name}</dt>
-    <dd>
-      <span className="block break-words tabular-nums">
-        {formula} = <strong className="figures whitespace-nowrap">{value}</strong>
-      </span>
-      {children && <span className="text-quiet mt-1 block text-sm">{children}</span>}
-    </dd>
-  </div>
-);
-
-const figure = (value: number, decimals: number) => value.toFixed(decimals);
 const exact = (value: number) => String(Number(value.toPrecision(6)));
 
 function pointsAround({ kvTable }: Station, turns: number): string {

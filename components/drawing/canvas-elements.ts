@@ -1,27 +1,22 @@
 import type { Edge, Node } from 'reactflow';
 import type { Drawing, DrawingPipe, Equipment } from '@/lib/network/drawing';
-import { kindNames } from '@/lib/network/drawing-faults';
+import { kindNames } from '@/lib/network/fault';
 import { sizeOf, type Point } from '@/lib/network/piece-geometry';
+import type { Hop, Hops } from '@/lib/network/pipe-crossings';
 import { routeOfPipe } from '@/lib/network/pipe-route';
 import type { PieceNodeProps } from './piece-node';
 import type { PipeEdgeProps } from './pipe-edge';
-
-export interface Measured {
-  width: number;
-  height: number;
-}
 
 const nodes = new WeakMap<Equipment, Node<PieceNodeProps>>();
 const routes = new WeakMap<DrawingPipe, { from: Equipment; to: Equipment; path: Point[] }>();
 const edges = new WeakMap<Point[], Edge<PipeEdgeProps>>();
 
 /** The pieces as React Flow takes them. A piece that has not changed keeps its node, so that only changed ones are drawn again. */
-export function nodesOf(drawing: Drawing, selected: ReadonlySet<string>, measured: Map<string, Measured>): Node<PieceNodeProps>[] {
+export function nodesOf(drawing: Drawing, selected: ReadonlySet<string>): Node<PieceNodeProps>[] {
   return drawing.equipment.map((piece) => {
     const isSelected = selected.has(piece.id);
-    const size = measured.get(piece.id);
     const kept = nodes.get(piece);
-    if (kept && kept.selected === isSelected && kept.width === size?.width && kept.height === size?.height) return kept;
+    if (kept && kept.selected === isSelected) return kept;
     const { width, height } = sizeOf(piece);
     const node: Node<PieceNodeProps> = {
       id: piece.id,
@@ -30,24 +25,36 @@ export function nodesOf(drawing: Drawing, selected: ReadonlySet<string>, measure
       data: { piece },
       selected: isSelected,
       ariaLabel: `${kindNames[piece.kind]} ${piece.tag}`,
-      width: size?.width,
-      height: size?.height,
+      width,
+      height,
     };
     nodes.set(piece, node);
     return node;
   });
 }
 
-/** The pipes likewise; one whose piece is gone cannot be drawn and stands in the list of faults alone. */
-export function edgesOf(drawing: Drawing, selected: ReadonlySet<string>): Edge<PipeEdgeProps>[] {
+const noHops: readonly Hop[] = [];
+
+/**
+ * The pipes likewise; one whose piece is gone cannot be drawn and stands in the list of faults alone. `crossingsOf` tells where
+ * each passes over others.
+ */
+export function edgesOf(
+  drawing: Drawing,
+  selected: ReadonlySet<string>,
+  crossingsOf: (routes: ReadonlyMap<string, Point[]>) => Hops,
+): Edge<PipeEdgeProps>[] {
   const pieces = new Map(drawing.equipment.map((piece) => [piece.id, piece]));
-  return drawing.pipes.flatMap((pipe) => {
+  const drawn = drawing.pipes.flatMap((pipe) => {
     const [from, to] = [pieces.get(pipe.from.equipmentId), pieces.get(pipe.to.equipmentId)];
-    if (!from || !to) return [];
-    const path = keptRoute(pipe, from, to, pieces);
+    return from && to ? [{ pipe, from, to, path: keptRoute(pipe, from, to, pieces) }] : [];
+  });
+  const crossings = crossingsOf(new Map(drawn.map(({ pipe, path }) => [pipe.id, path])));
+  return drawn.map(({ pipe, from, to, path }) => {
+    const hops = crossings.get(pipe.id) ?? noHops;
     const kept = edges.get(path);
     const isSelected = selected.has(pipe.id);
-    if (kept && kept.selected === isSelected && kept.data?.pipe === pipe) return [kept];
+    if (kept && kept.selected === isSelected && kept.data?.pipe === pipe && kept.data.hops === hops) return kept;
     const edge: Edge<PipeEdgeProps> = {
       id: pipe.id,
       type: 'pipe',
@@ -55,13 +62,19 @@ export function edgesOf(drawing: Drawing, selected: ReadonlySet<string>): Edge<P
       target: to.id,
       sourceHandle: pipe.from.port,
       targetHandle: pipe.to.port,
-      data: { pipe, path },
+      data: { pipe, path, hops },
       selected: isSelected,
       ariaLabel: `Pipe from ${from.tag} to ${to.tag}`,
     };
     edges.set(path, edge);
-    return [edge];
+    return edge;
   });
+}
+
+/** The corners of a pipe, worked out once for as long as it and its ends stay; null where an end is gone. */
+export function routeKept(pipe: DrawingPipe, pieces: Map<string, Equipment>): Point[] | null {
+  const [from, to] = [pieces.get(pipe.from.equipmentId), pieces.get(pipe.to.equipmentId)];
+  return from && to ? keptRoute(pipe, from, to, pieces) : null;
 }
 
 function keptRoute(pipe: DrawingPipe, from: Equipment, to: Equipment, pieces: Map<string, Equipment>): Point[] {

@@ -12,6 +12,14 @@ export type Overlay = (typeof overlays)[number];
 
 export type PanelPage = 'properties' | 'settings' | 'faults';
 
+export interface OpenMenu {
+  of: 'piece' | 'pipe' | 'sheet' | 'storey';
+  /** On the screen, px. */
+  screen: Point;
+  /** On the sheet. */
+  at: Point;
+}
+
 export interface CanvasState {
   tool: Tool;
   pieces: ReadonlySet<string>;
@@ -21,7 +29,16 @@ export interface CanvasState {
   page: PanelPage;
   /** On narrow screens the panel is a sheet that opens from below. */
   isSheetOpen: boolean;
-  open: 'shortcuts' | 'find' | 'issue' | null;
+  open: 'shortcuts' | 'find' | 'issue' | 'commands' | 'tags' | 'rename-storey' | null;
+  /** The menu of a piece, a pipe, a storey or the sheet, where it was asked for. */
+  menu: OpenMenu | null;
+  /** The storey that a command was asked for in its own menu; else it is that of the selection. */
+  storeyId: string | null;
+  /** Every press adds to the selection, and a drag draws a box: for a finger, which has no Ctrl. */
+  isPicking: boolean;
+  isMapShown: boolean;
+  /** The piece whose pipes are gone through one after another. */
+  walkedFrom: string | null;
   clipboard: DrawingPart | null;
   /** What new pipes take over. */
   newPipe: PipeFigures;
@@ -43,6 +60,11 @@ export function createCanvasStore(initial: Partial<CanvasState> = {}) {
     page: 'properties',
     isSheetOpen: false,
     open: null,
+    menu: null,
+    storeyId: null,
+    isPicking: false,
+    isMapShown: false,
+    walkedFrom: null,
     clipboard: null,
     newPipe: firstPipeFigures,
     isLikeLast: true,

@@ -2,7 +2,7 @@
 
 import 'reactflow/dist/base.css';
 import './canvas.css';
-import { useCallback, useMemo, useRef, useState, useSyncExternalStore, type CSSProperties, type DragEvent, type MouseEvent } from 'react';
+import { useCallback, useMemo, useRef, useState, type CSSProperties, type DragEvent, type MouseEvent } from 'react';
 import ReactFlow, {
   Background,
   BackgroundVariant,
@@ -16,9 +16,15 @@ import ReactFlow, {
 import type { EquipmentKind, Port } from '@/lib/network/drawing';
 import { placePieces } from '@/lib/network/move-pieces';
 import { GRID, sizeOf } from '@/lib/network/piece-geometry';
+import { crossingRegister } from '@/lib/network/pipe-crossings';
+import { BendHolds } from './bend-holds';
+import { BoxPicker } from './box-picker';
 import { useGrowth } from './detail';
-import { edgesOf, nodesOf, type Measured } from './canvas-elements';
+import { edgesOf, nodesOf } from './canvas-elements';
 import { useCanvas, useDrawing, useEditor } from './editor-context';
+import { selectBox, selectNear } from './far-choice';
+import { FarView, useIsFar } from './far-view';
+import { KnownEnds } from './known-ends';
 import { PieceNode } from './piece-node';
 import { PipeEdge } from './pipe-edge';
 import { PipePreview, ConnectionPreview } from './pipe-preview';
@@ -26,7 +32,10 @@ import { dropOntoPipe, joinEnds, joinToPipe, ON_PIPE_PX, placePiece, pressWithPi
 import { beginGesture } from './store';
 import { showAll } from './show-all';
 import { placeAskedFor, useShowPlace } from './show-place';
-import { StoreyBands } from './storey-bands';
+import { SmallMap } from './small-map';
+import { StoreyBands, StoreyNames } from './storey-bands';
+import { useAskedMenu } from './use-asked-menu';
+import { useCoarsePointer } from './use-media';
 
 const nodeTypes = { piece: PieceNode };
 const edgeTypes = { pipe: PipeEdge };
@@ -47,13 +56,19 @@ export function Canvas() {
   const pipes = useCanvas((state) => state.pipes);
   const isCoarse = useCoarsePointer();
   const growth = useGrowth();
-  const [measured, setMeasured] = useState<Map<string, Measured>>(new Map());
+  const [crossingsOf] = useState(crossingRegister);
   const [isConnecting, setConnecting] = useState(false);
+  const menuHandlers = useAskedMenu();
+  /** What stays selected while a box is drawn with Ctrl or Shift. */
+  const kept = useRef<{ pieces: ReadonlySet<string>; pipes: ReadonlySet<string> } | null>(null);
   const endGesture = useRef<(() => void) | null>(null);
+  /** Any release of the button over the sheet is told as the end of a box: only one that began is one. */
+  const boxStart = useRef<{ x: number; y: number } | null>(null);
   const started = useRef<{ id: string; port: Port; isDone: boolean } | null>(null);
 
-  const nodes = useMemo(() => nodesOf(drawing, pieces, measured), [drawing, pieces, measured]);
-  const edges = useMemo(() => edgesOf(drawing, pipes), [drawing, pipes]);
+  const isFar = useIsFar(drawing);
+  const nodes = useMemo(() => (isFar ? [] : nodesOf(drawing, pieces)), [isFar, drawing, pieces]);
+  const edges = useMemo(() => (isFar ? [] : edgesOf(drawing, pipes, crossingsOf)), [isFar, drawing, pipes, crossingsOf]);
   const within = () => ON_PIPE_PX / view.getZoom();
   const pointOf = (event: { clientX: number; clientY: number }) => view.screenToFlowPosition({ x: event.clientX, y: event.clientY });
 
@@ -62,11 +77,9 @@ export function Canvas() {
       const places = new Map<string, { x: number; y: number }>();
       const selected = new Set(canvasStore.getState().pieces);
       let isSelection = false;
-      const sizes: [string, Measured][] = [];
       const pieceById = new Map(drawingStore.getState().drawing.equipment.map((piece) => [piece.id, piece]));
       for (const change of changes) {
-        if (change.type === 'dimensions' && change.dimensions) sizes.push([change.id, change.dimensions]);
-        else if (change.type === 'select') {
+        if (change.type === 'select') {
           isSelection = true;
           if (change.selected) selected.add(change.id);
           else selected.delete(change.id);
@@ -77,7 +90,7 @@ export function Canvas() {
           places.set(change.id, { x: change.position.x + width / 2, y: change.position.y + height / 2 });
         }
       }
-      if (sizes.length) setMeasured((before) => new Map([...before, ...sizes]));
+      for (const id of kept.current?.pieces ?? []) selected.add(id);
       if (isSelection) canvasStore.setState({ pieces: selected, page: 'properties' });
       if (places.size && canEdit) drawingStore.getState().change((before) => placePieces(before, places));
     },
@@ -97,13 +110,20 @@ export function Canvas() {
     [canvasStore],
   );
 
-  /** A box selects the pieces in it and the pipes among them, not those that lead out of it. */
+  const keepSelection = (event: MouseEvent) => {
+    const { pieces: chosen, pipes: chosenPipes } = canvasStore.getState();
+    const isAdded =
+      event.button === 0 && (event.shiftKey || event.ctrlKey || event.metaKey) && (event.target as Element).matches('.react-flow__pane');
+    kept.current = isAdded ? { pieces: chosen, pipes: chosenPipes } : null;
+  };
+  /** A box selects the pieces in it and the pipes among them, not those that lead out of it; with Ctrl or Shift what was selected stays. */
   const keepInnerPipes = () => {
     const { pieces: chosen } = canvasStore.getState();
     const inner = drawingStore
       .getState()
       .drawing.pipes.filter(({ from, to }) => chosen.has(from.equipmentId) && chosen.has(to.equipmentId));
-    canvasStore.setState({ pipes: new Set(inner.map(({ id }) => id)) });
+    canvasStore.setState({ pipes: new Set([...(kept.current?.pipes ?? []), ...inner.map(({ id }) => id)]) });
+    kept.current = null;
   };
 
   const beginDrag = () => {
@@ -117,6 +137,7 @@ export function Canvas() {
   };
 
   const pressCanvas = (event: MouseEvent, pieceId?: string) => {
+    if (tool === 'select' && isFar) selectNear(canvasStore, drawing, pointOf(event), event, view.getZoom());
     if (!canEdit || tool === 'select') return;
     if (tool === 'pipe') {
       const port = (event.target as Element).closest<HTMLElement>('.piece-port')?.dataset.handleid as Port | undefined;
@@ -141,7 +162,7 @@ export function Canvas() {
       canvasStore.setState({ pipeStart: { end: start, bends: [] } });
       pressWithPipeTool(editor, pointOf(at), { pieceId: overId }, within());
       canvasStore.setState({ pipeStart: null });
-    } else joinToPipe(editor, start, pointOf(at), within());
+    } else if (!overId) joinToPipe(editor, start, pointOf(at), within());
   };
 
   const drop = (event: DragEvent) => {
@@ -160,6 +181,8 @@ export function Canvas() {
       data-is-connecting={isConnecting || tool === 'pipe'}
       onDragOver={(event) => event.dataTransfer.types.includes(draggedKind) && event.preventDefault()}
       onDrop={drop}
+      onMouseDownCapture={keepSelection}
+      {...menuHandlers}
     >
       <ReactFlow
         aria-label="Drawing of the loop"
@@ -173,7 +196,15 @@ export function Canvas() {
         onNodeDragStop={endDrag}
         onSelectionDragStart={beginDrag}
         onSelectionDragStop={endDrag}
-        onSelectionEnd={keepInnerPipes}
+        onSelectionStart={(event) => {
+          boxStart.current = pointOf(event);
+        }}
+        onSelectionEnd={(event) => {
+          const from = boxStart.current;
+          boxStart.current = null;
+          if (from && isFar) selectBox(canvasStore, drawing, from, pointOf(event));
+          else if (from) keepInnerPipes();
+        }}
         onPaneClick={pressCanvas}
         onNodeClick={(event, node) => pressCanvas(event, node.id)}
         onEdgeClick={(event) => pressCanvas(event)}
@@ -197,7 +228,7 @@ export function Canvas() {
         elementsSelectable
         selectionOnDrag={tool === 'select' && !isCoarse}
         selectionMode={SelectionMode.Partial}
-        panOnDrag={isCoarse ? true : [1, 2]}
+        panOnDrag={isCoarse ? true : [1]}
         multiSelectionKeyCode={['Meta', 'Control', 'Shift']}
         selectionKeyCode={null}
         deleteKeyCode={null}
@@ -210,24 +241,17 @@ export function Canvas() {
         zoomOnDoubleClick={false}
         proOptions={{ hideAttribution: true }}
       >
-        <Background variant={BackgroundVariant.Dots} gap={GRID * 4} size={2.5} color="var(--paper-dot)" />
+        {/* From far away the dots would be a grey haze, and a slow one. */}
+        {!isFar && <Background variant={BackgroundVariant.Dots} gap={GRID * 4} size={2.5} color="var(--paper-dot)" />}
         <StoreyBands />
+        {isFar && <FarView />}
+        <KnownEnds />
         {tool === 'pipe' && <PipePreview />}
+        <StoreyNames />
+        <BendHolds />
+        <BoxPicker />
+        <SmallMap />
       </ReactFlow>
     </div>
-  );
-}
-
-const coarseQuery = '(pointer: coarse)';
-
-function useCoarsePointer(): boolean {
-  return useSyncExternalStore(
-    (listener) => {
-      const query = window.matchMedia(coarseQuery);
-      query.addEventListener('change', listener);
-      return () => query.removeEventListener('change', listener);
-    },
-    () => window.matchMedia(coarseQuery).matches,
-    () => false,
   );
 }

@@ -11,12 +11,13 @@ import type { Drawing } from '@/lib/network/drawing';
 import { faultsOf } from '@/lib/network/drawing-faults';
 import { figuresOfDrawing } from '@/lib/network/drawing-figures';
 import { same } from '@/lib/network/merge-drawings';
-import { createCanvasStore } from './canvas-state';
-import { ConflictDialog } from './dialogs/conflict-dialog';
 import { IssueDialog } from './dialogs/issue-dialog';
-import { EditorContext, faultyOf, ResultsContext, useCanvas, type Editor, type Results } from './editor-context';
+import { DraftConflict } from './draft-conflict';
+import { EditorContext, faultyOf, ResultsContext, useCanvas, type Results } from './editor-context';
+import { useOpenDraft, type OpenDraft } from './open-draft';
+import { ExportMenu } from './export-menu';
+import { OthersHere } from './others-here';
 import { savingWords, StatusBar } from './status-bar';
-import { createDrawingStore } from './store';
 import { useDraftSaver } from './use-draft-saver';
 import { Workspace } from './workspace';
 
@@ -30,27 +31,23 @@ interface DrawingEditorProps {
 
 /** The drawing as its designer works on it: drawn, solved and saved as one goes. */
 export function DrawingEditor(props: DrawingEditorProps) {
-  const [editor] = useState<Editor>(() => ({
-    drawingStore: createDrawingStore(props.loaded.drawing),
-    canvasStore: createCanvasStore(lastPipeOf(props.loaded.drawing)),
-    canEdit: true,
-    band: props.loop.band,
-  }));
+  const draft = useOpenDraft(props);
   return (
-    <EditorContext value={editor}>
+    <EditorContext value={draft.editor}>
       <ReactFlowProvider>
-        <Editing {...props} editor={editor} />
+        <Editing loop={props.loop} issued={props.issued} draft={draft} />
       </ReactFlowProvider>
     </EditorContext>
   );
 }
 
-function Editing({ loop, personId, loaded, issued: issuedBefore, editor }: DrawingEditorProps & { editor: Editor }) {
-  const { drawingStore, canvasStore } = editor;
+function Editing({ loop, issued: issuedBefore, draft }: Pick<DrawingEditorProps, 'loop' | 'issued'> & { draft: OpenDraft }) {
+  const { saver } = draft;
+  const { drawingStore, canvasStore } = draft.editor;
   const router = useRouter();
   const drawing = useStore(drawingStore, (state) => state.drawing);
   const open = useCanvas((state) => state.open);
-  const { saver, state: saving } = useDraftSaver(drawingStore, { loopId: loop.id, personId, loaded });
+  const saving = useDraftSaver(draft);
   const { answer, settled, isOld, error } = useSolution(loop.id, drawing);
   const basis = useCanvas((state) => state.basis);
   // Not of the drawing under the hand: a drag changes no figure, and every piece reads these.
@@ -76,20 +73,20 @@ function Editing({ loop, personId, loaded, issued: issuedBefore, editor }: Drawi
   const [later, setLater] = useState<DraftBody | null>(null);
 
   const saveFirst = async () => ((await saver.saveNow()) ? saver.version : null);
-  const resolve = (merged: Drawing) => {
-    if (saving.kind !== 'conflict') return;
-    saver.resolve(merged, saving.theirs);
-    drawingStore.setState({ drawing: merged });
-    // Steps from before would take the other person's changes away again.
-    drawingStore.temporal.getState().clear();
-  };
   return (
     <ResultsContext value={results}>
       <Workspace
         hasBothBases={Boolean(results.solved?.balance)}
         bar={
           <>
+            <OthersHere loopId={loop.id} />
             <span className="text-quiet hidden text-sm sm:inline">{revisionWords}</span>
+            <ExportMenu
+              loop={loop.name}
+              project={loop.project.name}
+              issuedAt={isAhead ? undefined : loop.revision?.issuedAt}
+              revision={isAhead || !issued ? 'Draft' : `Revision ${issued.number}`}
+            />
             <Button look="primary" size="small" disabled={!isAhead} onClick={() => canvasStore.setState({ open: 'issue' })}>
               Issue revision
             </Button>
@@ -104,15 +101,7 @@ function Editing({ loop, personId, loaded, issued: issuedBefore, editor }: Drawi
           />
         }
       />
-      {saving.kind === 'conflict' && later !== saving.theirs && (
-        <ConflictDialog
-          base={saving.base}
-          mine={drawing}
-          theirs={saving.theirs}
-          onResolve={resolve}
-          onLater={() => setLater(saving.theirs)}
-        />
-      )}
+      <DraftConflict draft={draft} saving={saving} drawing={drawing} later={later} onLater={setLater} />
       {open === 'issue' && (
         <IssueDialog
           loopId={loop.id}
@@ -128,12 +117,4 @@ function Editing({ loop, personId, loaded, issued: issuedBefore, editor }: Drawi
       )}
     </ResultsContext>
   );
-}
-
-/** New pipes go on from the last one of the drawing. */
-function lastPipeOf({ pipes }: Drawing): Parameters<typeof createCanvasStore>[0] {
-  const last = pipes.at(-1);
-  if (!last) return {};
-  const { lengthM, series, nominal, boreMm, roughnessMm, minorK } = last;
-  return { newPipe: { lengthM, series, nominal, boreMm, roughnessMm, minorK } };
 }

@@ -10,6 +10,7 @@ import { figuresOfDrawing } from '@/lib/network/drawing-figures';
 import { circuitThrough } from '@/lib/network/index-circuit';
 import { createCanvasStore } from './canvas-state';
 import { EditorContext, faultyOf, noResults, ResultsContext, type Editor, type Results } from './editor-context';
+import { ExportMenu } from './export-menu';
 import { StatusBar } from './status-bar';
 import { createDrawingStore } from './store';
 import { Workspace } from './workspace';
@@ -17,12 +18,13 @@ import { Workspace } from './workspace';
 interface DrawingViewerProps {
   drawing: Drawing;
   band: StripBand;
+  names: { loop: string; project: string };
   /** The revision whose drawing this is; null for a draft that was never issued, which has no results. */
   revision: Pick<RevisionBody, 'number' | 'issuedAt' | 'issuedBy' | 'balance'> | null;
 }
 
 /** An issued drawing with its results, to be read and not changed. */
-export function DrawingViewer({ drawing, band, revision }: DrawingViewerProps) {
+export function DrawingViewer({ drawing, band, names, revision }: DrawingViewerProps) {
   const [editor] = useState<Editor>(() => ({
     drawingStore: createDrawingStore(drawing),
     canvasStore: createCanvasStore({ basis: 'balanced' }),
@@ -39,7 +41,12 @@ export function DrawingViewer({ drawing, band, revision }: DrawingViewerProps) {
         <ReactFlowProvider>
           <Workspace
             hasBothBases={false}
-            bar={<span className="text-quiet px-2 text-sm">{issued ?? 'Draft, never issued'}</span>}
+            bar={
+              <>
+                <span className="text-quiet px-2 text-sm">{issued ?? 'Draft, never issued'}</span>
+                <ExportMenu {...names} revision={revision ? `Revision ${revision.number}` : 'Draft'} issuedAt={revision?.issuedAt} />
+              </>
+            }
             status={<StatusBar saving={null} solveError={null} revision={revision ? 'To be read only' : 'Draft, to be read only'} />}
           />
         </ReactFlowProvider>

@@ -6,7 +6,7 @@ import type { SolvedBody } from '@/lib/api/loops';
 import type { StripBand } from '@/lib/commissioning/flow-strip';
 import type { Drawing } from '@/lib/network/drawing';
 import type { DrawnFigures } from '@/lib/network/drawing-figures';
-import type { Fault } from '@/lib/network/drawing-faults';
+import type { Fault } from '@/lib/network/fault';
 import type { CanvasState, CanvasStore } from './canvas-state';
 import type { DrawingStore } from './store';
 

@@ -4,7 +4,7 @@ import { X } from 'lucide-react';
 import { useState, type KeyboardEvent } from 'react';
 import { inputClass } from '@/components/ui/field';
 import { classNames } from '@/components/ui/class-names';
-import { kindNames } from '@/lib/network/drawing-faults';
+import { kindNames } from '@/lib/network/fault';
 import { useDrawing, useEditor } from './editor-context';
 import { useShowPlace } from './show-place';
 

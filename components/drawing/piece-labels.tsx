@@ -5,9 +5,10 @@ import { Figure } from '@/components/ui/figure';
 import { classNames } from '@/components/ui/class-names';
 import type { Equipment } from '@/lib/network/drawing';
 import { sizeOf } from '@/lib/network/piece-geometry';
-import type { Detail } from './detail';
+import { hasRoom } from '@/lib/network/label-room';
+import { useGrowth, type Detail } from './detail';
 import { signs, tones, verdictOf } from './deviation-mark';
-import { useCanvas, useEditor, useResults } from './editor-context';
+import { useCanvas, useDrawing, useEditor, useResults } from './editor-context';
 
 interface PieceLabelsProps {
   piece: Equipment;
@@ -20,6 +21,8 @@ interface PieceLabelsProps {
 export function PieceLabels({ piece, detail, isFaulty, isSelected }: PieceLabelsProps) {
   const { width, height } = sizeOf(piece);
   const isUpright = piece.kind === 'terminalUnit' ? height > width : piece.rotation === 90 || piece.rotation === 270;
+  const { words } = useGrowth();
+  const isRoomy = useDrawing((drawing) => piece.kind === 'tee' || hasRoom(drawing, words, piece.id));
   const figure = <OverlayFigure piece={piece} />;
   const tag = piece.kind === 'tee' ? (isSelected || isFaulty) && piece.tag : piece.tag;
   const fault = isFaulty && (
@@ -28,6 +31,8 @@ export function PieceLabels({ piece, detail, isFaulty, isSelected }: PieceLabels
     </span>
   );
 
+  // What is wrong or selected is named even where it covers a neighbour's words.
+  if (!isRoomy && !isFaulty && !isSelected) return null;
   if (piece.kind === 'terminalUnit') {
     const side = piece.isMirrored && isUpright ? 'right-1/2 mr-5 items-end' : 'left-1/2 ml-5';
     return (

@@ -1,11 +1,12 @@
 'use client';
 
-import { memo, useEffect } from 'react';
+import { memo, useEffect, useRef } from 'react';
 import { Handle, Position, useUpdateNodeInternals, type NodeProps } from 'reactflow';
-import { portsOf, type Equipment } from '@/lib/network/drawing';
+import { isPoint, portsOf, type Equipment } from '@/lib/network/drawing';
 import { portOffset, sizeOf } from '@/lib/network/piece-geometry';
 import { useDetail } from './detail';
 import { useResults } from './editor-context';
+import { ImpulseLines } from './impulse-lines';
 import { IndexUnderlay } from './index-underlay';
 import { PieceLabels } from './piece-labels';
 import { PieceSymbol } from './symbols/symbol';
@@ -23,14 +24,21 @@ export const PieceNode = memo(function PieceNode({ id, data, selected, isConnect
   const { index, faulty } = useResults();
   const detail = useDetail();
   const update = useUpdateNodeInternals();
+  const stands = `${piece.rotation} ${piece.isMirrored}`;
+  const stood = useRef(stands);
   // React Flow measures the ends when a size changes; a turn or a mirror may leave the size as it is.
-  useEffect(() => update(id), [update, id, piece.rotation, piece.isMirrored]);
+  useEffect(() => {
+    if (stood.current === stands) return;
+    stood.current = stands;
+    update(id);
+  }, [update, id, stands]);
   const isFaulty = faulty.has(piece.id);
+  const isSmall = piece.kind === 'tee' || piece.kind === 'pressureStation';
 
   return (
     <div style={{ width, height }} className="relative">
-      {selected && piece.kind !== 'tee' && <div className="border-brass absolute -inset-1.5 rounded border-2" />}
-      {selected && piece.kind === 'tee' && <div className="border-brass absolute inset-0.5 rounded-full border-2" />}
+      {selected && !isSmall && <div className="border-brass absolute -inset-1.5 rounded border-2" />}
+      {selected && isSmall && <div className="border-brass absolute inset-0.5 rounded-full border-2" />}
       <svg
         viewBox={`${-width / 2} ${-height / 2} ${width} ${height}`}
         width={width}
@@ -38,7 +46,8 @@ export const PieceNode = memo(function PieceNode({ id, data, selected, isConnect
         className="absolute inset-0 overflow-visible"
         aria-hidden
       >
-        {index.has(piece.id) && piece.kind !== 'tee' && <IndexUnderlay piece={piece} />}
+        {index.has(piece.id) && !isPoint(piece.kind) && <IndexUnderlay piece={piece} />}
+        {piece.kind === 'dpController' && <ImpulseLines controller={piece} />}
         <g transform={`rotate(${piece.rotation})${piece.isMirrored ? ' scale(-1 1)' : ''}`} color={inkOf(piece)}>
           <PieceSymbol piece={piece} />
         </g>
@@ -46,7 +55,7 @@ export const PieceNode = memo(function PieceNode({ id, data, selected, isConnect
       {detail !== 'far' && <PieceLabels piece={piece} detail={detail} isFaulty={isFaulty} isSelected={selected} />}
       {portsOf(piece.kind).map((port) => {
         const { at, leaves } = portOffset(piece, port);
-        const reach = piece.kind === 'tee' ? 'calc(var(--reach) + 8px)' : 'var(--reach)';
+        const reach = isSmall ? 'calc(var(--reach) + 8px)' : 'var(--reach)';
         return (
           <Handle
             key={port}

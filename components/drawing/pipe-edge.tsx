@@ -5,6 +5,7 @@ import type { EdgeProps } from 'reactflow';
 import type { DrawingPipe } from '@/lib/network/drawing';
 import type { PipeSolution } from '@/lib/network/drawing-figures';
 import type { Point } from '@/lib/network/piece-geometry';
+import type { Hop } from '@/lib/network/pipe-crossings';
 import { labelPlace } from '@/lib/network/pipe-route';
 import { formatQuantity } from '@/lib/units/format-quantity';
 import { unitFor, type Quantity } from '@/lib/units/quantities';
@@ -13,13 +14,14 @@ import type { Overlay } from './canvas-state';
 import { useDetail } from './detail';
 import { useCanvas, useResults } from './editor-context';
 import { underlay } from './index-underlay';
+import { hoppingPathText, pathText } from './path-text';
 
 export interface PipeEdgeProps {
   pipe: DrawingPipe;
   path: Point[];
+  /** Where it passes over other pipes. */
+  hops: readonly Hop[];
 }
-
-export const pathText = (path: Point[]): string => path.map(({ x, y }, i) => `${i ? 'L' : 'M'}${x} ${y}`).join('');
 
 const SHORT = 36;
 
@@ -29,7 +31,7 @@ export const PipeEdge = memo(function PipeEdge({ data, selected }: EdgeProps<Pip
   const overlay = useCanvas((state) => state.overlay);
   const detail = useDetail();
   if (!data) return null;
-  const { pipe, path } = data;
+  const { pipe, path, hops } = data;
   const d = pathText(path);
   const solution = figures?.pipes.get(pipe.id);
   const isFaulty = faulty.has(pipe.id);
@@ -41,7 +43,7 @@ export const PipeEdge = memo(function PipeEdge({ data, selected }: EdgeProps<Pip
       <path d={d} fill="none" stroke="transparent" strokeWidth={20} />
       <path
         className="pipe-line"
-        d={d}
+        d={detail === 'far' ? d : hoppingPathText(path, hops)}
         fill="none"
         stroke={colour}
         style={{ strokeWidth: `calc(${selected ? 2.5 : 1.5}px * var(--lines, 1))` }}

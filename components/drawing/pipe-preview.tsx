@@ -6,7 +6,7 @@ import type { Port } from '@/lib/network/drawing';
 import { pieceOf, portPlace, snapPoint, type Point } from '@/lib/network/piece-geometry';
 import { route } from '@/lib/network/pipe-route';
 import { useCanvas, useDrawing, useEditor } from './editor-context';
-import { pathText } from './pipe-edge';
+import { pathText } from './path-text';
 
 const look = { fill: 'none', stroke: 'var(--petrol)', strokeWidth: 2, strokeDasharray: '2 4' } as const;
 

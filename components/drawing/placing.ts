@@ -1,10 +1,10 @@
 import { toast } from 'sonner';
 import type { DrawingPipe, EquipmentKind, PipeEnd } from '@/lib/network/drawing';
-import { kindNames } from '@/lib/network/drawing-faults';
+import { kindNames } from '@/lib/network/fault';
 import { connect, freePortTowards } from '@/lib/network/connect-pipe';
 import { newPiece } from '@/lib/network/new-piece';
 import { pieceOf, snapPoint, type Point } from '@/lib/network/piece-geometry';
-import { insertOnPipe, insertTee, pipeAt } from '@/lib/network/split-pipe';
+import { goesOnPipe, insertOnPipe, insertTee, pipeAt } from '@/lib/network/split-pipe';
 import { selectOnly } from './canvas-state';
 import type { Editor } from './editor-context';
 
@@ -20,7 +20,7 @@ const tellSplit = (what: string, pipe: DrawingPipe) =>
 export function placePiece({ drawingStore, canvasStore }: Editor, kind: EquipmentKind, at: Point, withinUnits: number): void {
   const { drawing, change } = drawingStore.getState();
   const like = canvasStore.getState().isLikeLast && kind !== 'tee' ? drawing.equipment.findLast((piece) => piece.kind === kind) : undefined;
-  const found = kind === 'expansionVessel' ? null : pipeAt(drawing, at, withinUnits);
+  const found = goesOnPipe(kind) ? pipeAt(drawing, at, withinUnits) : null;
   const piece = newPiece(drawing, kind, snapPoint(at), like);
   change((before) => {
     const added = { ...before, equipment: [...before.equipment, piece] };
@@ -35,7 +35,7 @@ export function dropOntoPipe({ drawingStore }: Editor, pieceId: string, withinUn
   const { drawing, change } = drawingStore.getState();
   const piece = pieceOf(drawing, pieceId);
   const isJoined = drawing.pipes.some(({ from, to }) => from.equipmentId === pieceId || to.equipmentId === pieceId);
-  if (!piece || isJoined || piece.kind === 'expansionVessel') return;
+  if (!piece || isJoined || !goesOnPipe(piece.kind)) return;
   const found = pipeAt(drawing, piece, withinUnits);
   if (!found) return;
   change((before) => insertOnPipe(before, pieceId, found));

@@ -2,21 +2,21 @@ import { temporal } from 'zundo';
 import { createStore } from 'zustand';
 import type { Drawing } from '@/lib/network/drawing';
 
-const STEPS_KEPT = 200;
-
 interface DrawingState {
   drawing: Drawing;
   /** One step of the history, unless it stands between `beginGesture` and `endGesture`. */
   change: (make: (drawing: Drawing) => Drawing) => void;
 }
 
-/** The drawing under the hand, with its history. What is selected or shown is no part of it. */
+/**
+ * The drawing under the hand, with its history: every step of the session, since two drawings share all that did not change
+ * between them. What is selected or shown is no part of it.
+ */
 export function createDrawingStore(drawing: Drawing) {
   return createStore<DrawingState>()(
     temporal((set) => ({ drawing, change: (make) => set((state) => ({ drawing: make(state.drawing) })) }), {
       partialize: (state) => ({ drawing: state.drawing }),
       equality: (past, current) => past.drawing === current.drawing,
-      limit: STEPS_KEPT,
     }),
   );
 }

@@ -1,27 +1,16 @@
 'use client';
 
-import { useEffect, useState, useSyncExternalStore } from 'react';
+import { useEffect, useSyncExternalStore } from 'react';
 import { toast } from 'sonner';
-import { v7 as newId } from 'uuid';
-import type { DraftBody } from '@/lib/api/loops';
-import { DraftSaver } from '@/lib/client/draft-saver';
-import { saveDraft } from '@/lib/client/drafts';
-import { draftKeeper } from '@/lib/client/kept-drafts';
-import type { DrawingStore } from './store';
+import type { SaveState } from '@/lib/client/draft-saver';
+import type { OpenDraft } from './open-draft';
 
 /** Has every change of the drawing saved, and takes up what this browser kept from an earlier visit. */
-export function useDraftSaver(store: DrawingStore, { loopId, personId, loaded }: { loopId: string; personId: string; loaded: DraftBody }) {
-  const [saver] = useState(
-    () =>
-      new DraftSaver({
-        loaded,
-        // On the server there is no shelf; the first render there keeps nothing.
-        keeper: draftKeeper(typeof window === 'undefined' ? noShelf : window.localStorage, personId, loopId, newId()),
-        save: (baseVersion, drawing) => saveDraft(loopId, baseVersion, drawing),
-      }),
-  );
+export function useDraftSaver(draft: OpenDraft): SaveState {
+  const { saver } = draft;
+  const store = draft.editor.drawingStore;
   useEffect(() => {
-    const kept = saver.restore();
+    const kept = takeUp(draft);
     if (kept) {
       store.getState().change(() => kept);
       toast('What was drawn here and not yet saved is back, and is being saved now.');
@@ -38,13 +27,17 @@ export function useDraftSaver(store: DrawingStore, { loopId, personId, loaded }:
       window.removeEventListener('pagehide', keep);
       window.removeEventListener('online', retry);
     };
-  }, [saver, store]);
-  const state = useSyncExternalStore(
+  }, [draft, saver, store]);
+  return useSyncExternalStore(
     saver.subscribe,
     () => saver.state,
     () => saver.state,
   );
-  return { saver, state };
 }
 
-const noShelf = { getItem: () => null, setItem: () => undefined, removeItem: () => undefined };
+/** Once only: what is kept later is this page's own, or another's that is still at work on it. */
+function takeUp(draft: OpenDraft) {
+  if (draft.isRestored) return null;
+  draft.isRestored = true;
+  return draft.saver.restore();
+}

@@ -6,6 +6,7 @@ import { toast } from 'sonner';
 import type { Instrument } from '@/lib/api/commissioning';
 import { changeInstrument } from '@/lib/client/instruments';
 import { Button } from '../ui/button';
+import { CertificatesDialog } from './certificates-dialog';
 import { dayWords, kindWords, unitOfKind } from './instrument-words';
 
 interface InstrumentRowProps {
@@ -53,21 +54,24 @@ export function InstrumentRow({ instrument, isOverdue, onChange }: InstrumentRow
           {calibratedOn && <span className="text-quiet block">calibrated {dayWords(calibratedOn)}</span>}
         </p>
       </div>
-      {onChange && (
-        <div className="flex gap-1 max-sm:-ml-4">
-          <Button look="quiet" onClick={onChange} aria-label={`Change ${serial}`}>
-            Change
-          </Button>
-          <Button
-            look="quiet"
-            onClick={() => retire.mutate()}
-            isPending={retire.isPending}
-            aria-label={isRetired ? `Take ${serial} back into use` : `Retire ${serial}`}
-          >
-            {isRetired ? 'Take back' : 'Retire'}
-          </Button>
-        </div>
-      )}
+      <div className="flex gap-1 max-sm:-ml-4">
+        <CertificatesDialog instrument={instrument} mayAdd={onChange !== null} />
+        {onChange && (
+          <>
+            <Button look="quiet" onClick={onChange} aria-label={`Change ${serial}`}>
+              Change
+            </Button>
+            <Button
+              look="quiet"
+              onClick={() => retire.mutate()}
+              isPending={retire.isPending}
+              aria-label={isRetired ? `Take ${serial} back into use` : `Retire ${serial}`}
+            >
+              {isRetired ? 'Take back' : 'Retire'}
+            </Button>
+          </>
+        )}
+      </div>
     </li>
   );
 }

@@ -4,17 +4,18 @@ import { zodResolver } from '@hookform/resolvers/zod';
 import { useMutation } from '@tanstack/react-query';
 import { useRouter } from 'next/navigation';
 import { useState } from 'react';
-import { useForm } from 'react-hook-form';
+import { useFieldArray, useForm } from 'react-hook-form';
 import { toast } from 'sonner';
 import { z } from 'zod';
-import { toleranceRuleSchema, type ToleranceRule } from '@/lib/api/projects';
+import { stationKinds, toleranceRuleSchema, type ToleranceRule } from '@/lib/api/projects';
+import { ranksOf, toleranceTemplates } from '@/lib/api/tolerances';
 import { send } from '@/lib/client/http';
 import { showRefusal } from '@/lib/client/show-refusal';
 import { Button } from '../ui/button';
 import { Dialog } from '../ui/dialog';
-import { TextField } from '../ui/field';
+import { SelectField, TextField } from '../ui/field';
 import { FormTrouble } from '../ui/form-trouble';
-import { inOrder, stationKindWords } from './tolerance-table';
+import { bandName, inOrder } from './tolerance-table';
 
 const formSchema = z.object({ tolerances: z.array(toleranceRuleSchema) });
 type FormValues = z.infer<typeof formSchema>;
@@ -51,13 +52,47 @@ function ToleranceForm({ projectId, tolerances, onDone }: { projectId: string; t
     },
     onError: (error) => showRefusal(error, form),
   });
+  const { fields, append, remove, replace } = useFieldArray({ control: form.control, name: 'tolerances' });
+  const missing = stationKinds.flatMap((stationKind) =>
+    ranksOf[stationKind]
+      .filter((rank) => !fields.some((field) => field.stationKind === stationKind && field.rank === rank))
+      .map((rank) => ({ stationKind, rank })),
+  );
   const { errors } = form.formState;
   const percent = { type: 'number', step: 'any', inputMode: 'decimal', className: 'figures text-right' } as const;
   return (
     <form onSubmit={form.handleSubmit((values) => save.mutate(values))} noValidate className="flex flex-col gap-5">
-      {inOrder(tolerances).map(({ stationKind }, i) => (
-        <fieldset key={stationKind} className="grid grid-cols-2 gap-3">
-          <legend className="mb-1 font-semibold">{stationKindWords[stationKind]}</legend>
+      <SelectField
+        label="Start from"
+        hint="every figure can be changed afterwards"
+        value=""
+        onChange={({ target }) => {
+          const template = toleranceTemplates[Number(target.value)];
+          if (target.value !== '' && template) replace(template.rules);
+        }}
+      >
+        <option value="">the bands as they are</option>
+        {toleranceTemplates.map(({ name }, at) => (
+          <option key={name} value={at}>
+            {name}
+          </option>
+        ))}
+      </SelectField>
+      {fields.map(({ id, stationKind, rank }, i) => (
+        <fieldset key={id} className="grid grid-cols-2 gap-3">
+          <legend className="mb-1 flex w-full items-center justify-between font-semibold">
+            {bandName({ stationKind, rank })}
+            {rank !== 'all' && (
+              <Button
+                size="small"
+                look="quiet"
+                onClick={() => remove(i)}
+                aria-label={`No band of its own for ${bandName({ stationKind, rank })}`}
+              >
+                Take away
+              </Button>
+            )}
+          </legend>
           <TextField
             label="Below"
             hint="%"
@@ -77,6 +112,20 @@ function ToleranceForm({ projectId, tolerances, onDone }: { projectId: string; t
           </div>
         </fieldset>
       ))}
+      {missing.length > 0 && (
+        <div className="flex flex-wrap items-center gap-2">
+          <span className="text-quiet text-sm">A band of their own for</span>
+          {missing.map((which) => (
+            <Button
+              key={`${which.stationKind} ${which.rank}`}
+              size="small"
+              onClick={() => append({ ...which, lowerPercent: -10, upperPercent: 10, source: 'Agreed for this project' })}
+            >
+              {bandName(which)}
+            </Button>
+          ))}
+        </div>
+      )}
       <FormTrouble message={errors.root?.message} />
       <div className="flex justify-end gap-2">
         <Button look="quiet" onClick={onDone}>

@@ -13,6 +13,7 @@ import { InstrumentsTable } from './instruments-table';
 import { PumpTable } from './pump-table';
 import { RoundsTable } from './rounds-table';
 import { SignButtons } from './sign-buttons';
+import { ReadinessTable, SettingChangesTable, SnagsTable } from './site-tables';
 import { Signatures } from './signatures';
 import { Summary } from './summary';
 import { TerminalsTable } from './terminals-table';
@@ -65,7 +66,10 @@ export function ReportSheet({ report, loopId, commissioningHref }: ReportSheetPr
           <BranchValvesTable content={content} />
           <PumpTable content={content} />
           <CorrectedEntries content={content} />
+          <SnagsTable content={content} />
+          <ReadinessTable content={content} />
           <RoundsTable content={content} />
+          <SettingChangesTable content={content} />
           <InstrumentsTable content={content} />
         </div>
       </div>

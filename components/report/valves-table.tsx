@@ -3,8 +3,8 @@ import { Sheet } from '@/components/ui/sheet';
 import { Figures, Head, RowName, onlyWide, TableFrame, Words } from '@/components/ui/table';
 import { valvesOf } from '@/lib/api/report-judgement';
 import type { ReportContent } from '@/lib/api/reports';
+import { valveStateNames } from '@/lib/network/schedule-words';
 import { OfDesign } from './of-design';
-import { valveStateWords } from './valve-state-words';
 
 /** Balancing valves of branches and mains; those of the terminals stand with their terminals. */
 export function BranchValvesTable({ content }: { content: ReportContent }) {
@@ -62,7 +62,7 @@ export function BranchValvesTable({ content }: { content: ReportContent }) {
               <Figures className={onlyWide}>
                 <Figure quantity="pressure" si={valve.dropKpa} />
               </Figures>
-              <Words className={onlyWide}>{valveStateWords[valve.state]}</Words>
+              <Words className={onlyWide}>{valveStateNames[valve.state]}</Words>
             </tr>
           ))}
         </tbody>

@@ -1,38 +1,27 @@
 'use client';
 
 import { useSearchParams } from 'next/navigation';
-import { useMemo } from 'react';
-import type { StripBand } from '@/lib/commissioning/flow-strip';
 import type { Schedule } from '@/lib/network/schedule-rows';
+import { pipeTable } from '@/lib/network/schedule-pipes';
+import { pumpTable, sourceTable } from '@/lib/network/schedule-plant';
+import { terminalTable } from '@/lib/network/schedule-terminals';
+import { valveTable } from '@/lib/network/schedule-valves';
 import { classNames } from '../ui/class-names';
-import { pipeColumns, pumpColumns, sourceColumns, terminalColumns, valveColumns } from './schedule-columns';
-import { SortableTable } from './sortable-table';
+import type { ScheduleDesk, Selection } from './desk';
+import { ScheduleTable } from './schedule-table';
 
-const tables = [
-  ['terminals', 'Terminals'],
-  ['valves', 'Balancing valves'],
-  ['pipes', 'Pipes'],
-  ['pumps', 'Pumps'],
-  ['sources', 'Source'],
-] as const;
-
-interface ScheduleTablesProps {
-  schedule: Schedule;
-  bands: { terminal: StripBand; branch: StripBand };
-  drawingHref: string;
-}
+const tables = [terminalTable, pipeTable, valveTable, pumpTable, sourceTable] as const;
 
 /** The tables of the loop, one at a time; which one stands in the address, so that it can be shared. */
-export function ScheduleTables({ schedule, bands, drawingHref }: ScheduleTablesProps) {
+export function ScheduleTables({ desk }: { desk: ScheduleDesk }) {
   const asked = useSearchParams().get('table');
-  const open = tables.find(([key]) => key === asked)?.[0] ?? 'terminals';
-  const columns = useMemo(() => ({ terminals: terminalColumns(bands.terminal), valves: valveColumns(bands.branch) }), [bands]);
+  const { schedule, selection } = desk;
+  const open = tables.find(({ key }) => key === asked)?.key ?? tableOfSelection(schedule, selection) ?? 'terminals';
   const show = (key: string) => window.history.replaceState(null, '', `?table=${key}`);
-
   return (
     <div className="bg-sheet flex min-h-0 flex-1 flex-col rounded border print:border-0">
-      <div role="group" aria-label="Tables" className="flex gap-5 overflow-x-auto border-b px-4 print:hidden">
-        {tables.map(([key, name]) => (
+      <div role="group" aria-label="Tables" className="flex gap-5 overflow-x-auto overflow-y-hidden border-b px-4 print:hidden">
+        {tables.map(({ key, name }) => (
           <button
             key={key}
             type="button"
@@ -47,40 +36,25 @@ export function ScheduleTables({ schedule, bands, drawingHref }: ScheduleTablesP
           </button>
         ))}
       </div>
-      {schedule[open].length === 0 ? (
-        <p className="text-quiet p-6">None on this drawing.</p>
-      ) : (
-        <>
-          {open === 'terminals' && (
-            <SortableTable
-              label="Terminals"
-              nameHead="Terminal"
-              columns={columns.terminals}
-              rows={schedule.terminals}
-              mark={({ isIndex }) => (isIndex ? 'index' : null)}
-              drawingHref={drawingHref}
-            />
-          )}
-          {open === 'valves' && (
-            <SortableTable
-              label="Balancing valves"
-              nameHead="Valve"
-              columns={columns.valves}
-              rows={schedule.valves}
-              drawingHref={drawingHref}
-            />
-          )}
-          {open === 'pipes' && (
-            <SortableTable label="Pipes" nameHead="From – to" columns={pipeColumns} rows={schedule.pipes} drawingHref={drawingHref} />
-          )}
-          {open === 'pumps' && (
-            <SortableTable label="Pumps" nameHead="Pump" columns={pumpColumns} rows={schedule.pumps} drawingHref={drawingHref} />
-          )}
-          {open === 'sources' && (
-            <SortableTable label="Source" nameHead="Source" columns={sourceColumns} rows={schedule.sources} drawingHref={drawingHref} />
-          )}
-        </>
+      {open === 'terminals' && (
+        <ScheduleTable
+          table={terminalTable}
+          rows={schedule.terminals}
+          desk={desk}
+          band={desk.bands.terminal}
+          markOf={({ isIndex }) => (isIndex ? 'index' : null)}
+        />
       )}
+      {open === 'pipes' && <ScheduleTable table={pipeTable} rows={schedule.pipes} desk={desk} band={null} />}
+      {open === 'valves' && <ScheduleTable table={valveTable} rows={schedule.valves} desk={desk} band={desk.bands.branch} />}
+      {open === 'pumps' && <ScheduleTable table={pumpTable} rows={schedule.pumps} desk={desk} band={null} />}
+      {open === 'sources' && <ScheduleTable table={sourceTable} rows={schedule.sources} desk={desk} band={null} />}
     </div>
   );
+}
+
+/** What was selected on the Drawing is what one comes to see. */
+function tableOfSelection(schedule: Schedule, selection: Selection) {
+  if (selection.equipment.size + selection.pipes.size === 0) return null;
+  return tables.find(({ key, of }) => schedule[key].some(({ id }) => selection[of].has(id)))?.key ?? null;
 }

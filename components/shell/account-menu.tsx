@@ -4,8 +4,16 @@ import { CircleUserRound } from 'lucide-react';
 import Link from 'next/link';
 import { signOut } from 'next-auth/react';
 import { DropdownMenu } from 'radix-ui';
+import { leaveAllBehind } from '@/lib/client/aboard';
+import { dropShell } from '@/lib/client/shell-cache';
 
 const item = 'block w-full rounded px-3 py-2 text-left text-ink no-underline outline-none data-[highlighted]:bg-well';
+
+/** What was taken along goes with the person; entries that were not sent stay on the device until that person signs in again. */
+async function leave(): Promise<void> {
+  await Promise.allSettled([leaveAllBehind(), dropShell()]);
+  await signOut({ callbackUrl: '/sign-in' });
+}
 
 /** Who is signed in, with the way to their own settings and out. */
 export function AccountMenu({ name, organizationName }: { name: string; organizationName: string }) {
@@ -30,7 +38,7 @@ export function AccountMenu({ name, organizationName }: { name: string; organiza
             </Link>
           </DropdownMenu.Item>
           <DropdownMenu.Item asChild>
-            <button type="button" className={item} onClick={() => void signOut({ callbackUrl: '/sign-in' })}>
+            <button type="button" className={item} onClick={() => void leave()}>
               Sign out
             </button>
           </DropdownMenu.Item>

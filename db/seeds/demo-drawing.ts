@@ -1,6 +1,6 @@
 import { fluidProperties } from '@/lib/hydraulics/fluids';
-import { pipeSeries } from '@/lib/hydraulics/pipe-series';
 import type { ChosenValve, Drawing, DrawingPipe, Equipment, PipeEnd, Port, TerminalUnit } from '@/lib/network/drawing';
+import { genericPump } from '@/lib/network/generate/generic-pump';
 
 /** What the demo's two loops are told apart by. Loads, lengths and coils are invented. */
 export interface DemoLoop {
@@ -89,10 +89,10 @@ export function drawDemo(loop: DemoLoop): Drawing {
       to: end(to),
       circuit,
       lengthM,
-      series: 'steel-en10255-medium',
-      nominal: 'DN100',
-      boreMm: 105.3,
-      roughnessMm: pipeSeries['steel-en10255-medium'].roughnessMm,
+      series: null,
+      nominal: null,
+      boreMm: null,
+      roughnessMm: null,
       minorK,
       bends: [],
     });
@@ -189,8 +189,7 @@ export function drawDemo(loop: DemoLoop): Drawing {
     {
       ...place('pump', 'P-1', plant, 150, sheet.mainSupplyY),
       kind: 'pump',
-      curve: pumpCurve(40, 6),
-      efficiency: [],
+      ...genericPump(6, 40),
       speed: 1,
       hasNonReturn: true,
     },
@@ -210,13 +209,6 @@ export function drawDemo(loop: DemoLoop): Drawing {
   pipe('vessel.in', 'main-tee.w', 2, 'return');
   return { format: 'drawing/1', fluid: loop.fluid, pumpExcess: 'speed', storeys, equipment, pipes };
 }
-
-/** A falling curve through the shut-off head and the duty point, flow L/s and head m. */
-export const pumpCurve = (dutyHeadM: number, dutyFlowLs: number) =>
-  [0, 0.4, 0.8, 1, 1.3, 1.6].map((part) => ({
-    flowLs: Number((part * dutyFlowLs).toFixed(3)),
-    headM: Number((dutyHeadM * (1.25 - 0.25 * part * part)).toFixed(2)),
-  }));
 
 function end(text: string): PipeEnd {
   const [equipmentId, port] = text.split('.') as [string, Port];

@@ -78,7 +78,7 @@ export async function measureDemo(trx: Knex.Transaction, access: Access, loopId:
   let minutesAgo = 26 * 60;
 
   const round = async (purpose: string, settings: Map<string, number>, count: number): Promise<string> => {
-    const { id } = await startRound(access, loopId, { id: uuidv7(), purpose });
+    const { id } = await startRound(access, loopId, { id: uuidv7(), purpose, openChecksReason: 'The checks were kept on paper' });
     const flows = new Map(solve(withSettings(built, (linkId) => settings.get(linkId))).links.map((link) => [link.id, link.flowLs]));
     for (const station of stations.slice(0, count)) {
       const flowLs = flows.get(linkOf(station))! * (1 + 0.015 * error());
@@ -93,6 +93,10 @@ export async function measureDemo(trx: Knex.Transaction, access: Access, loopId:
         settingTurns: dropKpa === null ? null : settingTurns,
         dropKpa,
         flowLs: dropKpa === null ? Number(flowLs.toFixed(2)) : null,
+        heatKw: null,
+        supplyC: null,
+        returnC: null,
+        pumpSpeed: null,
         entered:
           dropKpa === null
             ? [{ quantity: 'flow', text: flowLs.toFixed(2), unit: 'L/s' }]
@@ -102,6 +106,7 @@ export async function measureDemo(trx: Knex.Transaction, access: Access, loopId:
               ],
         instrumentId: dropKpa === null ? meters.flowId : meters.pressureId,
         takenAt: new Date(Date.now() - minutesAgo * 60_000).toISOString(),
+        clockOffsetMs: 0,
         note: '',
         correctsReadingId: null,
       });

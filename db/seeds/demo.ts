@@ -68,6 +68,7 @@ export async function loadDemo(knex: Knex): Promise<boolean> {
         organization_id: organizationId,
         project_id: projectId,
         station_kind: rule.stationKind,
+        rank: rule.rank,
         lower_percent: rule.lowerPercent,
         upper_percent: rule.upperPercent,
         source: rule.source,

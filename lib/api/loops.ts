@@ -1,7 +1,7 @@
 import { z } from 'zod';
 import type { BalanceResult, SolveResult } from '@/lib/hydraulics/types';
 import { drawingSchema, type Drawing, type Place } from '@/lib/network/drawing';
-import type { Fault } from '@/lib/network/drawing-faults';
+import type { Fault } from '@/lib/network/fault';
 import type { StripBand, StripTick } from '@/lib/commissioning/flow-strip';
 import type { Role } from './permissions';
 
@@ -45,6 +45,11 @@ export const saveDraftSchema = z.object({ baseVersion: z.number().int().min(0).m
 export interface SavedDraft {
   version: number;
   savedAt: string;
+}
+
+/** POST /api/loops/:loopId/draft/presence — said every 15 s by a page that has the draft open; answers who else has it open now. */
+export interface DraftPresence {
+  others: { id: string; name: string }[];
 }
 
 /** POST /api/loops/:loopId/solve — the drawing as it stands on the canvas, saved or not. */

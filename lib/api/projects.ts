@@ -18,8 +18,13 @@ export type CreateProject = z.infer<typeof createProjectSchema>;
 export const stationKinds = ['terminal', 'branch', 'pump'] as const;
 export type StationKind = (typeof stationKinds)[number];
 
+/** What is told apart within a kind: the index terminal, terminals of little flow, valves of mains and risers. */
+export const stationRanks = ['all', 'index', 'small', 'main'] as const;
+export type StationRank = (typeof stationRanks)[number];
+
 export const toleranceRuleSchema = z.object({
   stationKind: z.enum(stationKinds),
+  rank: z.enum(stationRanks),
   lowerPercent: z.number().gt(-100, 'More than −100 %.').max(0, 'Zero or below.'),
   upperPercent: z.number().min(0, 'Zero or above.').max(100),
   source: text.min(1, 'Say where the band comes from.'),
@@ -31,7 +36,8 @@ export const changeProjectSchema = z.object({
   client: text.optional(),
   building: text.optional(),
   members: z.array(memberSchema).max(200).optional(),
-  tolerances: z.array(toleranceRuleSchema).max(3).optional(),
+  /** All of them: one of a rank that is not named is taken away. */
+  tolerances: z.array(toleranceRuleSchema).max(8).optional(),
 });
 export type ChangeProject = z.infer<typeof changeProjectSchema>;
 

@@ -2,19 +2,26 @@ import type { BalancedPump, BalancedValve } from '@/lib/hydraulics/types';
 import { verdictOf as verdictInBand, type Verdict } from '@/lib/commissioning/verdict';
 import type { StripBand, StripTick } from '@/lib/commissioning/flow-strip';
 import type { ReportContent, ReportStation } from './reports';
-import type { ToleranceRule } from './projects';
+import type { StationRank, ToleranceRule } from './projects';
 
-/** The band of a kind of station as the report itself states it. */
-export const bandFor = (content: ReportContent, kind: ReportStation['kind']): ToleranceRule | undefined =>
-  content.tolerances.find(({ stationKind }) => stationKind === kind);
+/** The band of a station as the report itself states it: of its rank, else of its kind. */
+export function bandFor(
+  content: ReportContent,
+  { kind, rank }: Pick<ReportStation, 'kind'> & { rank?: StationRank },
+): ToleranceRule | undefined {
+  const ofKind = content.tolerances.filter(({ stationKind }) => stationKind === kind);
+  // Reports that were accepted before there were ranks name none.
+  return ofKind.find((rule) => rule.rank === rank) ?? ofKind.find((rule) => (rule.rank ?? 'all') === 'all');
+}
 
 /**
  * The verdict on a station's counting entry by the bands that the report states, so that page, workbook and signature speak of the
  * same bands even where a band was changed after the reading. Without a band: the verdict given when it was taken.
  */
-export function verdictOf(content: ReportContent, { kind, reading }: ReportStation): Verdict | null {
+export function verdictOf(content: ReportContent, station: ReportStation): Verdict | null {
+  const { reading } = station;
   if (!reading) return null;
-  const band = bandFor(content, kind);
+  const band = bandFor(content, station);
   if (!band) return reading.verdict;
   return verdictInBand(reading.percentOfDesign, band);
 }
@@ -23,7 +30,7 @@ export const terminalsOf = (content: ReportContent): ReportStation[] => content.
 
 /** The flow strip of what is handed over, and its band as per cent of design. */
 export function stripOfReport(content: ReportContent): { strip: StripTick[]; band: StripBand } {
-  const band = bandFor(content, 'terminal');
+  const band = bandFor(content, { kind: 'terminal' });
   return {
     strip: terminalsOf(content).map((station) => ({
       tag: station.tag,

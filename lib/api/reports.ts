@@ -3,6 +3,7 @@ import type { BalanceResult } from '@/lib/hydraulics/types';
 import type { Instrument, Reading, Round, Station } from './commissioning';
 import type { StripBand, StripTick } from '@/lib/commissioning/flow-strip';
 import type { LoopService, LoopState } from './loops';
+import type { CheckAnswer, SettingChange, Snag } from './site';
 import type { ToleranceRule } from './projects';
 
 export const meanings = ['submitted', 'reviewed', 'returned', 'accepted'] as const;
@@ -64,6 +65,20 @@ export interface ReportReading extends Reading {
   tag: string;
 }
 
+/** What the report says of the site besides its readings. */
+export interface ReportSite {
+  checks: {
+    checkKey: string;
+    text: string;
+    answer: CheckAnswer['answer'];
+    remark: string;
+    answeredBy: string | null;
+    answeredAt: string | null;
+  }[];
+  snags: (Pick<Snag, 'number' | 'text' | 'raisedBy' | 'raisedAt' | 'resolution'> & { tag: string | null })[];
+  settingChanges: (Pick<SettingChange, 'id' | 'before' | 'after' | 'changedBy' | 'changedAt' | 'note'> & { tag: string })[];
+}
+
 /** What is handed over: one value from which the page, the workbook and the SHA-256 are made. */
 export interface ReportContent {
   organization: string;
@@ -78,6 +93,8 @@ export interface ReportContent {
   /** Every entry of every revision, oldest first, those too that were put right later: nothing measured is left out. */
   readings: ReportReading[];
   balance: BalanceResult;
+  /** Missing in reports that were accepted before it was kept. */
+  site?: ReportSite;
 }
 
 /** GET /api/loops/:loopId/report */

@@ -8,7 +8,7 @@ export const activityOptions = (projectId: string | undefined, first: ActivityPa
     queryKey: ['activity', projectId ?? 'all'],
     queryFn: ({ pageParam, signal }) => {
       const query = new URLSearchParams({ ...(projectId && { projectId }), ...(pageParam && { before: pageParam }) });
-      return send<ActivityPage>('GET', `/api/activity?${query}`, undefined, signal);
+      return send<ActivityPage>('GET', `/api/activity?${query}`, undefined, { signal });
     },
     initialPageParam: '',
     getNextPageParam: (page: ActivityPage) => (page.hasMore ? page.rows.at(-1)?.id : undefined),

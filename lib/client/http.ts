@@ -1,4 +1,5 @@
 import { problemSchema, type ProblemBody } from '@/lib/api/problem';
+import { noteServerTime } from './server-clock';
 
 /** A refusal of the server, or the lack of one: `code` is `offline` where no answer came. */
 export class RequestError extends Error {
@@ -17,27 +18,59 @@ export class RequestError extends Error {
   }
 }
 
+type Method = 'GET' | 'POST' | 'PUT' | 'PATCH' | 'DELETE';
+interface Extras {
+  signal?: AbortSignal;
+  headers?: Record<string, string>;
+}
+
 /** One request to the application's own server, JSON both ways. Throws `RequestError` with a sentence for a person. */
-export async function send<Answer>(
-  method: 'GET' | 'POST' | 'PUT' | 'PATCH' | 'DELETE',
-  path: string,
-  body?: unknown,
-  signal?: AbortSignal,
-): Promise<Answer> {
+export function send<Answer>(method: Method, path: string, body?: unknown, { signal, headers }: Extras = {}): Promise<Answer> {
+  return exchange<Answer>(path, {
+    method,
+    signal,
+    headers: { ...headers, ...(body === undefined ? {} : { 'Content-Type': 'application/json' }) },
+    body: body === undefined ? undefined : JSON.stringify(body),
+  });
+}
+
+/** A file as it is; the answer is JSON. */
+export function sendFile<Answer>(method: 'POST' | 'PUT', path: string, file: Blob, { signal, headers }: Extras = {}): Promise<Answer> {
+  return exchange<Answer>(path, {
+    method,
+    signal,
+    headers: { ...headers, 'Content-Type': file.type || 'application/octet-stream' },
+    body: file,
+  });
+}
+
+async function exchange<Answer>(path: string, request: RequestInit): Promise<Answer> {
   let response: Response;
+  let text: string;
   try {
-    response = await fetch(path, {
-      method,
-      signal,
-      headers: body === undefined ? {} : { 'Content-Type': 'application/json' },
-      body: body === undefined ? undefined : JSON.stringify(body),
-    });
+    response = await fetch(path, request);
+    noteServerTime(response.headers.get('date'));
+    // An answer that breaks off says as little as none.
+    text = await response.text();
   } catch (error) {
     if (error instanceof DOMException && error.name === 'AbortError') throw error;
     throw new RequestError('offline', 'The server could not be reached. Check the connection and try again.', 0);
   }
-  if (response.ok) return (await response.json()) as Answer;
-  const parsed = problemSchema.safeParse(await response.json().catch(() => null));
-  if (!parsed.success) throw new RequestError('unexpected', `The server answered ${response.status}. Try again.`, response.status);
+  const answer = parseJson(text);
+  if (response.ok && answer !== undefined) return answer as Answer;
+  const parsed = problemSchema.safeParse(answer);
+  if (!parsed.success) {
+    // A page where JSON should be is a network that wants its own sign-in, or a proxy's page: not Evenhead's word on anything.
+    const status = response.ok ? 502 : response.status;
+    throw new RequestError('unexpected', `The server answered ${response.status}. Try again.`, status);
+  }
   throw new RequestError(parsed.data.code, parsed.data.title, response.status, parsed.data);
+}
+
+function parseJson(text: string): unknown {
+  try {
+    return JSON.parse(text);
+  } catch {
+    return undefined;
+  }
 }

@@ -35,7 +35,7 @@ export function useSolution(loopId: string, drawing: Drawing): Solution {
   const { data, error, isPlaceholderData, isFetching } = useQuery({
     queryKey: ['solution', loopId, key],
     queryFn: async ({ signal }): Promise<Answer> => ({
-      body: await send<SolutionBody>('POST', `/api/loops/${loopId}/solve`, { drawing: settled }, signal),
+      body: await send<SolutionBody>('POST', `/api/loops/${loopId}/solve`, { drawing: settled }, { signal }),
       drawing: settled,
     }),
     placeholderData: keepPreviousData,

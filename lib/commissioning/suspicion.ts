@@ -1,7 +1,18 @@
 import type { Measured } from './judge-reading';
+import { isOutOfRange } from './measured-of';
+import { readingMethods } from './reading-methods';
 
 export interface Question {
-  code: 'unit' | 'above-shut-off' | 'unreliable-signal' | 'low-signal' | 'equal-to-design' | 'overdue' | 'no-certificate' | 'out-of-range';
+  code:
+    | 'unit'
+    | 'above-shut-off'
+    | 'unreliable-signal'
+    | 'low-signal'
+    | 'equal-to-design'
+    | 'overdue'
+    | 'no-certificate'
+    | 'out-of-range'
+    | 'far-from-last';
   message: string;
 }
 
@@ -9,6 +20,8 @@ interface Asked {
   measured: Measured;
   flowLs: number;
   designFlowLs: number;
+  /** Of the round before, where there was one. */
+  lastFlowLs?: number | null;
   /** Drop that the loop's pumps give together at no flow, kPa; null where it is not known. */
   pumpShutOffKpa: number | null;
   instrument: { rangeLow: number | null; rangeHigh: number | null; calibrationDueOn: string | null; isOverdue: boolean };
@@ -16,6 +29,9 @@ interface Asked {
 
 /** Below this a differential pressure is unreliable, and below the next it is a low signal, kPa (common practice). */
 export const signalFloors = { unreliableKpa: 1, lowKpa: 3 } as const;
+
+/** A flow that is more than this many times the last one, or less than that part of it, is asked about (common practice, no source). */
+const FAR = 1.5;
 
 interface UnitSlip {
   /** Flow found over flow that is there. */
@@ -46,18 +62,28 @@ const flowSlips: UnitSlip[] = [
   { ratio: 1 / 10, span: wide, message: 'Has the decimal point slipped by one place?' },
 ];
 
+// A drop across a pump does not enter under a root, and a heat balance has units of its own: a slip there has another ratio.
+const slipsOf: Record<Measured['method'], UnitSlip[]> = {
+  'valve-drop': dropSlips,
+  'coil-differential': dropSlips.filter(({ span }) => span === wide),
+  'direct-flow': flowSlips,
+  'pump-differential': [],
+  'heat-balance': [],
+};
+const unitOfMeter = { 'differential-pressure': 'kPa', flow: 'L/s', temperature: '°C' } as const;
+
 /**
  * What to ask before a reading is kept; it may always be kept as read. A question names what would explain the figure, and never
  * changes it.
  */
-export function questionsAbout({ measured, flowLs, designFlowLs, pumpShutOffKpa, instrument }: Asked): Question[] {
+export function questionsAbout({ measured, flowLs, designFlowLs, lastFlowLs = null, pumpShutOffKpa, instrument }: Asked): Question[] {
   const questions: Question[] = [];
   const ratio = flowLs / designFlowLs;
-  const slip = nearestSlip(ratio, measured.method === 'valve-drop' ? dropSlips : flowSlips);
+  const slip = nearestSlip(ratio, slipsOf[measured.method]);
   if (slip)
     questions.push({ code: 'unit', message: `${ratio >= 1 ? ratio.toPrecision(3) : ratio.toFixed(3)} times design. ${slip.message}` });
 
-  if (measured.method === 'valve-drop') {
+  if ('dropKpa' in measured) {
     const { dropKpa } = measured;
     if (pumpShutOffKpa !== null && dropKpa > pumpShutOffKpa) {
       questions.push({
@@ -71,26 +97,31 @@ export function questionsAbout({ measured, flowLs, designFlowLs, pumpShutOffKpa,
       questions.push({ code: 'low-signal', message: 'A signal of 1 to 3 kPa is low: are the gauges bled and zeroed?' });
     }
   }
+  if (lastFlowLs !== null && lastFlowLs > 0 && Math.abs(Math.log(Math.max(flowLs, 1e-9) / lastFlowLs)) > Math.log(FAR)) {
+    questions.push({
+      code: 'far-from-last',
+      message: `${(flowLs / lastFlowLs).toPrecision(3)} times the last round’s flow. Was something changed here since?`,
+    });
+  }
   // Flows that equal design to the hundredth are known as the mark of data that nobody measured.
   if (Math.abs(ratio - 1) < 0.00005)
     questions.push({ code: 'equal-to-design', message: 'Exactly the design flow. Is this what the meter shows?' });
 
-  const read = measured.method === 'valve-drop' ? measured.dropKpa : measured.flowLs;
   if (instrument.isOverdue)
     questions.push({ code: 'overdue', message: `The meter’s calibration was due on ${instrument.calibrationDueOn}. Is another at hand?` });
   if (instrument.calibrationDueOn === null)
     questions.push({ code: 'no-certificate', message: 'No calibration date is recorded for this meter.' });
-  if ((instrument.rangeLow !== null && read < instrument.rangeLow) || (instrument.rangeHigh !== null && read > instrument.rangeHigh)) {
+  if (isOutOfRange(measured, instrument)) {
     questions.push({
       code: 'out-of-range',
-      message: `Outside the meter’s range (${instrument.rangeLow ?? 0} to ${instrument.rangeHigh ?? '…'} ${measured.method === 'valve-drop' ? 'kPa' : 'L/s'}).`,
+      message: `Outside the meter’s range (${instrument.rangeLow ?? 0} to ${instrument.rangeHigh ?? '…'} ${unitOfMeter[readingMethods[measured.method].instrument]}).`,
     });
   }
   return questions;
 }
 
 function nearestSlip(ratio: number, slips: UnitSlip[]): UnitSlip | null {
-  if (!(ratio > 0)) return null;
+  if (!(ratio > 0) || slips.length === 0) return null;
   const distance = (slip: UnitSlip) => Math.abs(Math.log(ratio / slip.ratio)) / Math.log(1 + slip.span);
   const nearest = slips.reduce((near, slip) => (distance(slip) < distance(near) ? slip : near));
   return distance(nearest) <= 1 ? nearest : null;

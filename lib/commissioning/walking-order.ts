@@ -21,3 +21,17 @@ export function byStorey<S extends Walked & { storey: string }>(stations: readon
 /** The station that is come to first. */
 export const firstOf = <S extends Walked>(stations: readonly S[]): S | undefined =>
   stations.reduce<S | undefined>((first, it) => (first && first.walkingOrder <= it.walkingOrder ? first : it), undefined);
+
+/** A list with the item at `from` put at `to`. */
+export function moved<Item>(items: readonly Item[], from: number, to: number): Item[] {
+  const rest = items.filter((_, at) => at !== from);
+  return [...rest.slice(0, to), items[from]!, ...rest.slice(to)];
+}
+
+/** Stations with the order that was set by hand: those in it first, the others after them as they were. */
+export function inHandOrder<S extends Walked & { id: string }>(stations: readonly S[], order: ReadonlyMap<string, number>): S[] {
+  const place = (station: S) => order.get(station.id) ?? Infinity;
+  return [...stations]
+    .sort((a, b) => (place(a) === place(b) ? a.walkingOrder - b.walkingOrder : place(a) - place(b)))
+    .map((station, at) => ({ ...station, walkingOrder: at + 1 }));
+}

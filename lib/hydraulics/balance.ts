@@ -8,9 +8,12 @@ import { solve } from './solve';
 import { listed } from './solve-warnings';
 import type { BalanceResult, NetworkDocument, NetworkLink, PumpLink, Warning } from './types';
 
+const UNSETTLED: Warning = { code: 'not-converged', message: 'The pumps’ speeds and the flows that depend on them had not settled.' };
 const NO_SETTINGS = new Map<string, number>();
 const SETTLED_SPEED = 1e-9;
 const MOST_ROUNDS = 40;
+/** Change of a pump's speed in the last of those rounds up to which the duty still counts as found. */
+const NEAR_SPEED = 1e-6;
 
 /**
  * Valve settings and pump duty for design flow everywhere, where proportional balancing ends: in each group of parallel circuits the
@@ -19,7 +22,7 @@ const MOST_ROUNDS = 40;
  * Control valves count as they stand; locked balancing valves stay.
  */
 export function balance(document: NetworkDocument): BalanceResult {
-  const { design, loss, circuits, pumps } = findDuty(document);
+  const { design, loss, circuits, pumps, isSettled } = findDuty(document);
   const { network, flow, live, conflict } = design;
   if (conflict.length) return unbalanced(document, conflict);
   const openCircuitHead = mostHeads(circuits);
@@ -34,13 +37,13 @@ export function balance(document: NetworkDocument): BalanceResult {
     null,
   );
   return {
-    converged: solution.converged,
+    converged: solution.converged && isSettled,
     indexTerminal: index?.id ?? null,
     pumps: pumps.results,
     valves: valves.results,
     terminals,
     solution,
-    warnings: [...closedCircuits(document, live), ...pumps.warnings, ...valves.warnings],
+    warnings: [...closedCircuits(document, live), ...pumps.warnings, ...valves.warnings, ...(isSettled ? [] : [UNSETTLED])],
   };
 }
 
@@ -59,21 +62,27 @@ function findDuty(given: NetworkDocument) {
     for (const { batch, first, last } of network.kinds) batch.evaluate(flow, loss, slope, first, last);
     const circuits = pumpCircuits(network, flow, loss);
     const pumps = balancedPumps(network, circuits, flow);
-    const found = { design, loss, circuits, pumps };
-    if (design.conflict.length || round === MOST_ROUNDS) return found;
+    const found = { design, loss, circuits, pumps, isSettled: true };
+    if (design.conflict.length) return found;
 
     const idle = new Set(valvesOffCircuit(network, circuits));
     if (!idle.size && !design.isPumpDependent) return found;
     const keep = (link: NetworkLink) => (idle.has(link.id) && link.kind === 'balancingValve' ? { ...link, locked: true } : link);
     document = { ...document, links: document.links.map(keep) };
     const next = { ...document, links: document.links.map((link) => set(link, NO_SETTINGS, pumps.speeds)) };
-    const isSettled = next.links.every(
-      (link, at) => link.kind !== 'pump' || Math.abs(pumpSpeed(link) - pumpSpeed(atSpeeds.links[at] as PumpLink)) < SETTLED_SPEED,
-    );
-    if (!idle.size && isSettled) return found;
+    const change = speedChange(atSpeeds, next);
+    if (!idle.size && change < SETTLED_SPEED) return found;
+    if (round === MOST_ROUNDS) return { ...found, isSettled: change < NEAR_SPEED };
     atSpeeds = next;
   }
 }
+
+/** Largest change of a pump's speed from one document to the next. */
+const speedChange = (before: NetworkDocument, after: NetworkDocument): number =>
+  after.links.reduce(
+    (most, link, at) => (link.kind === 'pump' ? Math.max(most, Math.abs(pumpSpeed(link) - pumpSpeed(before.links[at] as PumpLink))) : most),
+    0,
+  );
 
 /** Most head of any circuit through each stretch, over all pumps, m. */
 function mostHeads({ groups, stretches }: PumpCircuits): Float64Array {

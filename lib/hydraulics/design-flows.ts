@@ -50,7 +50,7 @@ export function designFlows(document: NetworkDocument): DesignFlows {
     const link = open.links[at];
     return link.kind === 'terminal' ? (live.has(link.id) ? link.designFlowLs : 0) : restFlow.get(link.id)!;
   });
-  const isPumpDependent = holdsPump(restNetwork, solution.loops.chain);
+  const isPumpDependent = holdsPump(restNetwork, solution.loops().chain);
   return { network, flow, live, isPumpDependent, conflict: solution.closed ? conflict : open.nodes.map((node) => node.id) };
 }
 

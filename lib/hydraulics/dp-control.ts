@@ -1,8 +1,8 @@
-import type { Loops } from './graph/loops';
+import { type Loops, shortLoops } from './graph/loops';
 import { metresPerKpa } from './links/law';
 import type { NetworkState } from './network-state';
 import type { PreparedNetwork } from './prepare';
-import type { LoopSolver } from './loop-matrix';
+import type { CorrectionOfAll } from './correction-of-all';
 import { solveDense } from './sparse/dense';
 import type { LinkOf } from './types';
 
@@ -33,18 +33,22 @@ export class DpControl {
 
   private constructor(readonly controllers: Controller[]) {}
 
-  /** Null where the network has no controller that can sense (its nodes being connected). */
+  /** Null where the network has no controller that acts on what it senses; one that cannot (on a closed branch) stays open and is left out. */
   static of(network: PreparedNetwork): DpControl | null {
     const range = network.kinds.find(({ kind }) => kind === 'dpController');
     if (!range) return null;
     const head = metresPerKpa(network.fluid.densityKgM3);
     const senses = senseFinder(network);
+    const { chainOf } = network.chains;
+    const meshes = meshesOf(network, shortLoops(network.document.nodes.length, network.chains));
+    const mesh = (link: number) => (chainOf[link] < 0 ? -1 : meshes[chainOf[link]]);
     const controllers: Controller[] = [];
     for (let i = range.first; i < range.last; i++) {
       const link = network.document.links[network.position[i]] as LinkOf<'dpController'>;
       const [high, low] = link.sense.map((id) => network.nodeIndex.get(id)!);
       const path = senses(high, low);
-      if (path) controllers.push({ link: i, setpointM: link.setpointKpa * head, path, state: 'throttling', step: 0, before: 0 });
+      if (path?.some((step) => mesh(step.link) >= 0 && mesh(step.link) === mesh(i)))
+        controllers.push({ link: i, setpointM: link.setpointKpa * head, path, state: 'throttling', step: 0, before: 0 });
     }
     return controllers.length ? new DpControl(controllers) : null;
   }
@@ -62,39 +66,38 @@ export class DpControl {
   }
 
   /**
-   * Adds to the loops' step what the throttled heads change. With Z = M⁻¹ C the answer of the loops to each head, and W the sensed differentials'
-   * answer to the loops, the heads' corrections y solve (S - W Z) y = setpoint - sensed - W step.
+   * Adds to the chains' step what the throttled heads change. With Z the flows by which the loops answer to each head, and W the sensed
+   * differentials' answer to flows, the heads' corrections y solve (S + W Z) y = setpoint - sensed - W step.
    */
-  correct(state: NetworkState, loops: Loops, solver: LoopSolver, loopStep: Float64Array): void {
+  correct(state: NetworkState, loops: CorrectionOfAll, chainStep: Float64Array): void {
     const active = this.controllers.filter((each) => each.state === 'throttling');
     if (!active.length) return;
     const { chains } = state.network;
-    const answers = active.map((each) => {
-      const column = new Float64Array(loops.count);
-      const c = chains.chainOf[each.link];
-      if (c < 0) return column;
-      const sign = signInChain(state.network, c, each.link);
-      for (let l = 0; l < loops.count; l++)
-        for (let p = loops.start[l]; p < loops.start[l + 1]; p++) if (loops.chain[p] === c) column[l] += loops.sign[p] * sign;
-      const answer = new Float64Array(loops.count);
-      solver.solve(column, answer);
+    const answers = active.map(({ link }) => {
+      const unit = new Float64Array(chains.count);
+      const answer = new Float64Array(chains.count);
+      const c = chains.chainOf[link];
+      if (c < 0) return answer;
+      unit[c] = signInChain(state.network, c, link);
+      loops.sumHeads(unit);
+      loops.correct(answer);
       return answer;
     });
     const n = active.length;
-    const right = sensedChanges(state, loops, active, loopStep).map((change, j) => active[j].setpointM - sensed(state, active[j]) - change);
+    const right = sensedChanges(state, active, chainStep).map((change, j) => active[j].setpointM - sensed(state, active[j]) - change);
     const system = Array.from({ length: n }, () => new Float64Array(n));
     active.forEach((each, k) => {
-      const changes = sensedChanges(state, loops, active, answers[k]);
+      const changes = sensedChanges(state, active, answers[k]);
       active.forEach((other, j) => {
         const own = other.path.find((step) => step.link === each.link)?.sign ?? 0;
-        system[j][k] = own - changes[j];
+        system[j][k] = own + changes[j];
       });
     });
     const heads = solveDense(system, Float64Array.from(right));
     active.forEach((each, k) => {
       each.step = heads[k];
       each.before = state.throttledHead[each.link];
-      for (let l = 0; l < loops.count; l++) loopStep[l] -= answers[k][l] * heads[k];
+      for (let c = 0; c < chainStep.length; c++) chainStep[c] += answers[k][c] * heads[k];
     });
   }
 
@@ -141,12 +144,9 @@ function sensed(state: NetworkState, { path }: Controller): number {
   return head;
 }
 
-/** How the sensed differentials answer to a change of the loops' flows. */
-function sensedChanges(state: NetworkState, loops: Loops, controllers: Controller[], loopStep: Float64Array): number[] {
+/** How the sensed differentials answer to a change of the chains' flows. */
+function sensedChanges(state: NetworkState, controllers: Controller[], chainStep: Float64Array): number[] {
   const { chains } = state.network;
-  const chainStep = new Float64Array(chains.count);
-  for (let l = 0; l < loops.count; l++)
-    for (let p = loops.start[l]; p < loops.start[l + 1]; p++) chainStep[loops.chain[p]] += loops.sign[p] * loopStep[l];
   return controllers.map(({ path }) => {
     let head = 0;
     for (const { link, sign } of path) {
@@ -161,6 +161,22 @@ function signInChain({ chains }: PreparedNetwork, c: number, link: number): numb
   let p = chains.start[c];
   while (chains.member[p] !== link) p++;
   return chains.sign[p];
+}
+
+/** Chains that share loops, directly or through others, have one number: what is throttled in one moves the flow in all. -1 where no loop passes. */
+function meshesOf({ chains }: PreparedNetwork, loops: Loops): Int32Array {
+  const up = Int32Array.from({ length: chains.count }, (_, c) => c);
+  const top = (c: number) => {
+    while (up[c] !== c) c = up[c] = up[up[c]];
+    return c;
+  };
+  const looped = new Uint8Array(chains.count);
+  for (let l = 0; l < loops.count; l++)
+    for (let p = loops.start[l]; p < loops.start[l + 1]; p++) {
+      looped[loops.chain[p]] = 1;
+      up[top(loops.chain[p])] = top(loops.chain[loops.start[l]]);
+    }
+  return up.map((_, c) => (looped[c] ? top(c) : -1));
 }
 
 /** Finds the shortest way between two nodes over open links; null where there is none. */

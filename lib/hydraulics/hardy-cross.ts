@@ -33,10 +33,10 @@ export function balanceHeads(
     const worst = worstHead(around, loops);
     const off = control ? control.worstError(state) : 0;
     if (worst <= SWEPT_HEAD_M && off <= CLOSED_HEAD_M) {
-      if (!control?.switchStates(state)) return { closed: true, iterations: sweep };
+      if (!control?.switchStates(state)) return { closed: true, iterations: sweep, worstM: worst };
       state.evaluate();
     }
-    if (sweep >= mostSweeps || Number.isNaN(worst)) return { closed: false, iterations: sweep };
+    if (sweep >= mostSweeps || Number.isNaN(worst)) return { closed: false, iterations: sweep, worstM: worst };
     for (let loop = 0; loop < loops.count; loop++) {
       around.choose(loop);
       const headM = around.value;

@@ -1,7 +1,7 @@
 import type { Loops } from './graph/loops';
 import { GrowingList } from './growing-list';
 import { LoopGradients } from './loop-gradients';
-import { SparseLdl } from './sparse/ldl';
+import { MOST_FILL, MOST_WORK, SparseLdl } from './sparse/ldl';
 import type { Pattern } from './sparse/minimum-degree';
 
 /** What corrects all loops together: filled from the slopes of the chains, then solved for any heads. */
@@ -12,13 +12,12 @@ export interface LoopSolver {
 
 /** Entries beyond which factors cost more than they save, and the loops are solved by conjugate gradients. */
 const MOST_PATTERN = 3_000_000;
-const MOST_FILL = 8_000_000;
-const MOST_WORK = 600_000_000;
 
 export function loopSolver(loops: Loops, chainCount: number): LoopSolver {
   const through = loopsThroughChains(loops, chainCount);
   const pattern = patternOf(loops, through);
-  const factors = pattern && SparseLdl.of(pattern, MOST_FILL, MOST_WORK);
+  // Loops come from the ends of the network inwards, which for a tree of ladders is already an order without fill.
+  const factors = pattern && (SparseLdl.inOrder(pattern) ?? SparseLdl.of(pattern, MOST_FILL, MOST_WORK));
   return factors ? new LoopMatrix(loops, through, factors) : new LoopGradients(loops, chainCount);
 }
 

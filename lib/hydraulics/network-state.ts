@@ -1,5 +1,5 @@
+import { firstLines } from './first-lines';
 import { WALL_SLOPE } from './links/law';
-import { usualFlowLs } from './links/link-laws';
 import type { PreparedNetwork } from './prepare';
 
 /** A slope never counts for less than this part of the usual one, so that a loop at rest still has a finite correction. */
@@ -107,49 +107,22 @@ export class NetworkState {
     this.chainSlope[c] = Math.max(slope, this.leastSlope[c]);
   }
 
-  /**
-   * Makes every chain a straight line for the first flows: a passive link through its drop at a usual flow, a pump along its
-   * tangent there. Leaves the head at rest in `chainLoss` and the line's slope in `chainSlope`; sets the least slopes.
-   */
-  linearize(): void {
-    const { chains, baseFlow, document, position, fluid, kinds } = this.network;
+  /** Makes every chain a straight line for the first flows: leaves its head at rest in `chainLoss` and its slope in `chainSlope`; sets the least slopes. */
+  linearize(byDesign: boolean): void {
+    const { chains, baseFlow } = this.network;
     const { linkFlow, linkLoss, linkSlope, chainLoss, chainSlope, leastSlope } = this;
-    for (let i = 0; i < linkFlow.length; i++) linkFlow[i] = usualFlowLs(document.links[position[i]], fluid);
-    this.shareDesignFlows();
-    for (const { batch, first, last } of kinds) batch.evaluate(linkFlow, linkLoss, linkSlope, first, last);
-    const isPump = new Uint8Array(linkFlow.length);
-    for (const { kind, first, last } of kinds) if (kind === 'pump') isPump.fill(1, first, last);
+    firstLines(this.network, { flow: linkFlow, head: linkLoss, slope: linkSlope }, byDesign);
     for (let c = 0; c < chains.count; c++) {
       let head = 0;
       let line = 0;
       for (let p = chains.start[c]; p < chains.start[c + 1]; p++) {
         const i = chains.member[p];
-        const slope = isPump[i] ? linkSlope[i] : Math.min(linkLoss[i] / linkFlow[i], WALL_SLOPE);
-        const atRest = isPump[i] ? linkLoss[i] - slope * linkFlow[i] : 0;
-        head += chains.sign[p] * (atRest + slope * baseFlow[i]);
-        line += slope;
+        head += chains.sign[p] * (linkLoss[i] + linkSlope[i] * baseFlow[i]);
+        line += linkSlope[i];
       }
       chainLoss[c] = head;
       chainSlope[c] = Math.max(line, 1e-9);
       leastSlope[c] = LEAST_SLOPE_RATIO * chainSlope[c];
-    }
-  }
-
-  /** A terminal's design flow is also what everything in series with it carries, but no more than a limiter there lets through. */
-  private shareDesignFlows(): void {
-    const { chains, kinds } = this.network;
-    const { linkFlow } = this;
-    const shared = new Float64Array(chains.count).fill(Infinity);
-    for (const name of ['terminal', 'flowLimiter'] as const) {
-      const range = kinds.find(({ kind }) => kind === name);
-      for (let i = range?.first ?? 0; i < (range?.last ?? 0); i++) {
-        const c = chains.chainOf[i];
-        if (c >= 0 && linkFlow[i] < shared[c]) shared[c] = linkFlow[i];
-      }
-    }
-    for (let c = 0; c < chains.count; c++) {
-      if (shared[c] === Infinity) continue;
-      for (let p = chains.start[c]; p < chains.start[c + 1]; p++) linkFlow[chains.member[p]] = shared[c];
     }
   }
 }

@@ -1,5 +1,5 @@
 import { type FluidCaution, type FluidProperties, fluidProperties } from './fluids';
-import { type SpanningForest, spanningForest } from './graph/adjacency';
+import { adjacencyOf, carryAlongTree, MOST_RANK, type SpanningForest, spanningForest } from './graph/adjacency';
 import { type Chains, chainsOf } from './graph/chains';
 import type { LinkBatch } from './links/law';
 import { gather, isShut, linkKinds } from './links/link-laws';
@@ -48,40 +48,68 @@ export function prepareNetwork(document: NetworkDocument): PreparedNetwork {
   const nodeIndex = new Map<string, number>();
   for (let v = 0; v < nodeCount; v++) nodeIndex.set(nodes[v].id, v);
 
-  const open = openLinksByKind(links);
-  const position = Int32Array.from(linkKinds.flatMap((kind) => open[kind]));
-  const numberOf = new Int32Array(links.length).fill(-1);
+  const { position, numberOf, startOf } = numberByKind(links);
   const from = new Int32Array(position.length);
   const to = new Int32Array(position.length);
+  const open: NetworkLink[] = [];
   for (let i = 0; i < position.length; i++) {
     const link = links[position[i]];
-    numberOf[position[i]] = i;
+    open.push(link);
     from[i] = nodeIndex.get(link.from)!;
     to[i] = nodeIndex.get(link.to)!;
   }
 
   const kinds: KindRange[] = [];
-  let first = 0;
-  for (const kind of linkKinds) {
-    const last = first + open[kind].length;
-    if (last > first) {
-      const members = open[kind].map((at) => links[at]);
-      kinds.push({ kind, first, last, batch: gather(kind, members, first, fluid) });
-    }
-    first = last;
-  }
+  linkKinds.forEach((kind, k) => {
+    const [first, last] = [startOf[k], startOf[k + 1]];
+    if (last > first) kinds.push({ kind, first, last, batch: gather(kind, open.slice(first, last), first, fluid) });
+  });
 
   const reference = document.reference ? nodeIndex.get(document.reference.node)! : 0;
-  const forest = spanningForest(nodeCount, from, to, [reference]);
+  const adjacency = adjacencyOf(nodeCount, from, to);
+  const forest = spanningForest(nodeCount, from, to, [reference], undefined, adjacency, Uint8Array.from(open, rankInTree));
   const baseFlow = forcedFlows(document, forest, from);
-  const chains = chainsOf(nodeCount, from, to);
+  const chains = chainsOf(nodeCount, from, to, adjacency);
   return { document, fluid, cautions: found.cautions, nodeIndex, position, numberOf, from, to, kinds, forest, baseFlow, chains };
 }
 
-function openLinksByKind(links: NetworkLink[]): Record<LinkKind, number[]> {
-  const open = Object.fromEntries(linkKinds.map((kind) => [kind, [] as number[]])) as Record<LinkKind, number[]>;
-  for (let at = 0; at < links.length; at++) if (!isShut(links[at])) open[links[at].kind].push(at);
-  return open;
+const kindNumber = Object.fromEntries(linkKinds.map((kind, k) => [kind, k])) as Record<LinkKind, number>;
+
+/** Open links numbered kind by kind, those of kind k from `startOf[k]`, otherwise in the document's order. */
+function numberByKind(links: NetworkLink[]) {
+  const kindOf = new Int8Array(links.length);
+  const startOf = new Int32Array(linkKinds.length + 1);
+  for (let at = 0; at < links.length; at++) {
+    const link = links[at];
+    kindOf[at] = isShut(link) ? -1 : kindNumber[link.kind];
+    if (kindOf[at] >= 0) startOf[kindOf[at] + 1]++;
+  }
+  for (let k = 0; k < linkKinds.length; k++) startOf[k + 1] += startOf[k];
+  const next = startOf.slice();
+  const position = new Int32Array(startOf[linkKinds.length]);
+  const numberOf = new Int32Array(links.length).fill(-1);
+  for (let at = 0; at < links.length; at++) {
+    if (kindOf[at] < 0) continue;
+    const i = next[kindOf[at]]++;
+    numberOf[at] = i;
+    position[i] = at;
+  }
+  return { position, numberOf, startOf };
+}
+
+/** Bores of the lowest and highest rank among pipes, mm. */
+const LARGEST_BORE_MM = 1000;
+const RANKS_PER_HALVING = 6;
+
+/**
+ * Heads are carried along the mains: the tree takes the pipes of larger bore first, and terminals and limiters last, so that a loop is a terminal's
+ * round through the mains.
+ */
+function rankInTree(link: NetworkLink): number {
+  if (link.kind === 'terminal' || link.kind === 'flowLimiter') return MOST_RANK;
+  if (link.kind !== 'pipe') return 0;
+  const halvings = Math.log2(LARGEST_BORE_MM / link.boreMm);
+  return Math.min(Math.max(1, Math.round(RANKS_PER_HALVING * halvings)), MOST_RANK - 1);
 }
 
 /** What each subtree draws from or gives to outside passes through the link that joins it to its parent. */
@@ -89,14 +117,17 @@ function forcedFlows(document: NetworkDocument, forest: SpanningForest, from: In
   const baseFlow = new Float64Array(from.length);
   if (document.nodes.every((node) => !node.inflowLs)) return baseFlow;
   const surplus = Float64Array.from(document.nodes, (node) => node.inflowLs ?? 0);
-  for (let k = forest.order.length - 1; k >= 0; k--) {
-    const v = forest.order[k];
-    const link = forest.treeLink[v];
-    if (link < 0) continue;
-    baseFlow[link] = from[link] === v ? surplus[v] : -surplus[v];
-    surplus[forest.parent[v]] += surplus[v];
-  }
+  carryAlongTree(forest, from, surplus, baseFlow);
   return baseFlow;
+}
+
+/** Where each link stands in a network's document, found when first asked for: a change keeps the ids. */
+const positions = new WeakMap<PreparedNetwork, Map<string, number>>();
+
+function positionsOf(prepared: PreparedNetwork): Map<string, number> {
+  const known = positions.get(prepared) ?? new Map(prepared.document.links.map((link, i) => [link.id, i]));
+  positions.set(prepared, known);
+  return known;
 }
 
 /**
@@ -105,7 +136,7 @@ function forcedFlows(document: NetworkDocument, forest: SpanningForest, from: In
  */
 export function changeLinks(prepared: PreparedNetwork, changed: NetworkLink[]): boolean {
   const { document, kinds, position, numberOf } = prepared;
-  const at = new Map(document.links.map((link, i) => [link.id, i]));
+  const at = positionsOf(prepared);
   const kept = changed.every((link) => {
     const i = at.get(link.id);
     const old = i === undefined ? undefined : document.links[i];

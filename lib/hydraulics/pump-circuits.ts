@@ -26,7 +26,8 @@ export interface PumpCircuits {
 /** Opens the network at its pumps and lays out the circuits of each. `flow` L/s and `loss` m by link number. */
 export function pumpCircuits(network: PreparedNetwork, flow: Float64Array, loss: Float64Array): PumpCircuits {
   const runs = pumpRuns(network, flow);
-  const driving = runs.filter((run) => layOut(network, flow, loss, runs.flatMap(inside)).circuitsOf(run));
+  const apart = layOut(network, flow, loss, runs.flatMap(inside));
+  const driving = runs.filter((run) => apart.circuitsOf(run));
   if (!driving.length && runs.length) driving.push(runs.reduce((most, run) => (run.flowLs > most.flowLs ? run : most)));
   const { stretches, stretchOf, circuitsOf } = layOut(network, flow, loss, driving.flatMap(inside));
   const groups = driving.flatMap((run) => {
@@ -87,6 +88,48 @@ function layOut(network: PreparedNetwork, flow: Float64Array, loss: Float64Array
     const forward = flow[i] > 0;
     stretches.push({ a: forward ? from[i] : to[i], b: forward ? to[i] : from[i], head: forward ? loss[i] : -loss[i], isTerminal });
   }
-  const circuitsOf = ({ discharge, suction }: PumpRun) => Circuits.of(stretches, document.nodes.length, discharge, suction);
+  const nodeCount = document.nodes.length;
+  const circuitsOf = ({ discharge, suction }: PumpRun) =>
+    Circuits.of(stretches, nodeCount, discharge, suction) ?? throughDecoupler(stretches, nodeCount, discharge, suction);
   return { stretches, stretchOf, circuitsOf };
+}
+
+/**
+ * The circuits of a secondary pump where the primary gives more than it takes: the decoupler then flows on from its suction to its return, and its circuits
+ * close through the decoupler against that flow, whose loss helps. Null where no way without a terminal leads there.
+ */
+function throughDecoupler(stretches: Stretch[], nodeCount: number, discharge: number, suction: number): Circuits | null {
+  const supplied = reached(stretches, nodeCount, discharge, () => true);
+  const open = reached(stretches, nodeCount, suction, ({ isTerminal }) => !isTerminal);
+  const end = open.order.find((v) => supplied.behindTerminal[v]);
+  if (end === undefined) return null;
+  const turned = stretches.slice();
+  for (let v = end; v !== suction; v = stretches[open.cameBy[v]].a) {
+    const { a, b, head } = stretches[open.cameBy[v]];
+    turned[open.cameBy[v]] = { a: b, b: a, head: -head, isTerminal: false };
+  }
+  return Circuits.of(turned, nodeCount, discharge, suction);
+}
+
+/** Places to which flow leads from a node along the chosen stretches, the nearest first; by which stretch, and whether also past a terminal. */
+function reached(stretches: Stretch[], nodeCount: number, start: number, isChosen: (stretch: Stretch) => boolean) {
+  const leaving: number[][] = Array.from({ length: nodeCount }, () => []);
+  stretches.forEach((stretch, k) => {
+    if (isChosen(stretch)) leaving[stretch.a].push(k);
+  });
+  const cameBy = new Int32Array(nodeCount).fill(-1);
+  const behindTerminal = new Uint8Array(nodeCount);
+  const order = [start];
+  const seen = new Uint8Array(nodeCount);
+  seen[start] = 1;
+  for (let next = 0; next < order.length; next++)
+    for (const k of leaving[order[next]]) {
+      const { a, b, isTerminal } = stretches[k];
+      const isNews = (isTerminal || behindTerminal[a] === 1) && !behindTerminal[b];
+      if (isNews) behindTerminal[b] = 1;
+      if (!seen[b]) cameBy[b] = k;
+      if (isNews || !seen[b]) order.push(b);
+      seen[b] = 1;
+    }
+  return { order, cameBy, behindTerminal };
 }

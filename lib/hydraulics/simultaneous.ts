@@ -1,12 +1,13 @@
-import type { Loops } from './graph/loops';
 import type { DpControl } from './dp-control';
-import { type LoopSolver, loopSolver } from './loop-matrix';
+import type { CorrectionOfAll } from './correction-of-all';
 import type { NetworkState } from './network-state';
 import { moveTowardsRoot, type RisingFunction } from './rising-root';
 
 export interface IterationOutcome {
   closed: boolean;
   iterations: number;
+  /** Head left around the worst loop, m. */
+  worstM: number;
 }
 
 /** What an iteration stops at: head left around the worst loop (m) and summed flow change over summed flow. */
@@ -16,16 +17,12 @@ const MOST_ITERATIONS = 200;
 const MOST_FLOW_STEP_LS = 1e7;
 
 /**
- * All loops corrected together: Newton's method on the heads around the loops, (B D Bᵀ) dq = -B h, with h and D the losses and slopes of the
- * chains and B the loops' directions (D. W. Martin and G. Peters 1963 for nodes; Epp and Fowler 1970 for loops; the steps are
- * those of the gradient method of E. Todini and S. Pilati 1987). The laws never fall with flow, so the solution is the
- * least of a convex function, and a step that overshoots along its own direction is cut back to where that
- * function is least: no network diverges. Flows are L/s, heads m.
+ * All loops corrected together: Newton's method on the heads around the loops (R. Epp and A. G. Fowler 1970), the steps from the loops' equations
+ * or, where loops outnumber them, from the nodes' (`correctionOfAll`). The laws never fall with flow, so the solution is the least of
+ * a convex function, and a step that overshoots along its own direction is cut back to where that function is least: no
+ * network diverges. Flows are L/s, heads m.
  */
 export class SimultaneousIteration {
-  private readonly solver: LoopSolver;
-  private readonly loopHead: Float64Array;
-  private readonly loopStep: Float64Array;
   private readonly step: Float64Array;
   private readonly before: Float64Array;
 
@@ -39,84 +36,48 @@ export class SimultaneousIteration {
 
   constructor(
     readonly state: NetworkState,
-    readonly loops: Loops,
+    readonly loops: CorrectionOfAll,
   ) {
     const chains = state.chainFlow.length;
-    this.solver = loopSolver(loops, chains);
-    this.loopHead = new Float64Array(loops.count);
-    this.loopStep = new Float64Array(loops.count);
     this.step = new Float64Array(chains);
     this.before = new Float64Array(chains);
   }
 
-  /** First flows: those of the network with every law made a straight line. */
-  start(): void {
-    const { state, solver, loopHead, loopStep, step } = this;
+  /** First flows: those of the network with every law made a straight line, near its design flows where `byDesign`. */
+  start(byDesign: boolean): void {
+    const { state, loops, step } = this;
     state.chainFlow.fill(0);
-    state.linearize();
-    this.sumLoopHeads();
-    solver.assemble(state.chainSlope);
-    for (let l = 0; l < loopHead.length; l++) loopHead[l] = -loopHead[l];
-    solver.solve(loopHead, loopStep);
-    this.spreadStep();
+    state.linearize(byDesign);
+    loops.sumHeads(state.chainLoss);
+    loops.assemble(state.chainSlope);
+    loops.correct(step);
     state.chainFlow.set(step);
   }
 
   /** Iterates from the state's present flows until it is closed and settled. */
   run(control: DpControl | null): IterationOutcome {
-    const { state } = this;
+    const { state, loops, step } = this;
     this.control = control;
     state.evaluate();
     let change = Infinity;
     let shrinking = 1;
     for (let iterations = 0; ; iterations++) {
-      const worst = this.sumLoopHeads();
+      const worst = loops.sumHeads(state.chainLoss);
       const off = control ? control.worstError(state) : 0;
       const closed = worst <= CLOSED_HEAD_M && off <= CLOSED_HEAD_M;
       // Settled: the next change, if it shrinks again as the last one did, would be below the tolerance.
       if (closed && (change * shrinking <= SETTLED_FLOW_RATIO || worst === 0)) {
-        if (!control?.switchStates(state)) return { closed: true, iterations };
+        if (!control?.switchStates(state)) return { closed: true, iterations, worstM: worst };
         state.evaluate();
-        this.sumLoopHeads();
+        loops.sumHeads(state.chainLoss);
       }
-      if (iterations === MOST_ITERATIONS || Number.isNaN(worst)) return { closed: false, iterations };
-      this.findStep();
+      if (iterations === MOST_ITERATIONS || Number.isNaN(worst)) return { closed: false, iterations, worstM: worst };
+      loops.assemble(state.chainSlope);
+      loops.correct(step);
+      if (control) control.correct(state, loops, step);
       const next = this.takeStep(worst + off);
       shrinking = change < Infinity ? Math.min(1, next / change) : 1;
       change = next;
-    }
-  }
-
-  /** Head left around each loop; answers the largest. */
-  private sumLoopHeads(): number {
-    const { loops, loopHead } = this;
-    const { chainLoss } = this.state;
-    let worst = 0;
-    for (let l = 0; l < loops.count; l++) {
-      let head = 0;
-      for (let p = loops.start[l]; p < loops.start[l + 1]; p++) head += loops.sign[p] * chainLoss[loops.chain[p]];
-      loopHead[l] = head;
-      const magnitude = Math.abs(head);
-      if (!(magnitude <= worst)) worst = magnitude;
-    }
-    return worst;
-  }
-
-  private findStep(): void {
-    const { state, solver, loopHead, loopStep, control } = this;
-    solver.assemble(state.chainSlope);
-    for (let l = 0; l < loopHead.length; l++) loopHead[l] = -loopHead[l];
-    solver.solve(loopHead, loopStep);
-    if (control) control.correct(state, this.loops, solver, loopStep);
-    this.spreadStep();
-  }
-
-  private spreadStep(): void {
-    const { loops, loopStep, step } = this;
-    step.fill(0);
-    for (let l = 0; l < loops.count; l++) {
-      const d = loopStep[l];
-      for (let p = loops.start[l]; p < loops.start[l + 1]; p++) step[loops.chain[p]] += loops.sign[p] * d;
     }
   }
 
@@ -179,7 +140,7 @@ export class SimultaneousIteration {
     let part = longest;
     for (let tries = 0; ; tries++, part /= 2) {
       this.moveTo(part);
-      const error = this.sumLoopHeads() + this.control!.worstError(this.state);
+      const error = this.loops.sumHeads(this.state.chainLoss) + this.control!.worstError(this.state);
       if (error < errorBefore || tries === 6) return part;
     }
   }

@@ -1,4 +1,5 @@
 import { cubicAt, evaluateCubic, monotoneCubic } from './monotone-cubic';
+import type { Loops } from './graph/loops';
 import { frictionFactor, LAMINAR_RE, TURBULENT_RE } from './friction';
 import { GRAVITY_MS2, metresPerKpa } from './links/law';
 import { boreAreaM2, reynoldsPerLs } from './links/pipe';
@@ -16,7 +17,7 @@ const MOST_WORST = 10;
 /** The tables of a result from flows and losses. */
 export function solveResult(network: PreparedNetwork, solution: Solution): SolveResult {
   const { document, fluid } = network;
-  const { state, loops, method, iterations } = solution;
+  const { state, method, iterations } = solution;
   const kpaPerM = 1 / metresPerKpa(fluid.densityKgM3);
   const heads = nodeHeads(network, state.linkLoss);
 
@@ -30,8 +31,7 @@ export function solveResult(network: PreparedNetwork, solution: Solution): Solve
   });
 
   const imbalance = nodeImbalance(network, state.linkFlow);
-  const loopHeads = headsAroundLoops(solution);
-  const residuals = { continuityLs: largest(imbalance), loopPa: largest(loopHeads) * kpaPerM * 1000 };
+  const residuals = { continuityLs: largest(imbalance), loopPa: solution.worstM * kpaPerM * 1000 };
   const finite = links.every((link) => Number.isFinite(link.flowLs) && Number.isFinite(link.dropKpa));
   const warnings = solveWarnings(network, solution, links);
   const forced = warnings.some((warning) => warning.code === 'forced-flow');
@@ -51,16 +51,20 @@ export function solveResult(network: PreparedNetwork, solution: Solution): Solve
   };
   if (!converged) {
     result.warnings.push({ code: 'not-converged', message: `The network did not close within ${iterations} iterations.` });
+    const loops = solution.loops();
+    const loopHeads = headsAroundLoops(loops, state.chainLoss);
     result.worst = {
-      loops: worstOf(loopHeads).map((l) => ({ links: linksOfLoop(network, solution, l), headPa: loopHeads[l] * kpaPerM * 1000 })),
+      loops: worstOf(loopHeads).map((l) => ({ links: linksOfLoop(network, loops, l), headPa: loopHeads[l] * kpaPerM * 1000 })),
       nodes: worstOf(imbalance).map((v) => ({ id: document.nodes[v].id, continuityLs: imbalance[v] })),
     };
   }
-  if (solution.history)
+  if (solution.history) {
+    const loops = solution.loops();
     result.history = {
-      loops: Array.from({ length: loops.count }, (_, l) => directedLinks(network, solution, l)),
+      loops: Array.from({ length: loops.count }, (_, l) => directedLinks(network, loops, l)),
       corrections: solution.history,
     };
+  }
   return result;
 }
 
@@ -150,10 +154,10 @@ function nodeImbalance({ document, from, to }: PreparedNetwork, linkFlow: Float6
   return imbalance;
 }
 
-function headsAroundLoops({ loops, state }: Solution): Float64Array {
+function headsAroundLoops(loops: Loops, chainLoss: Float64Array): Float64Array {
   const heads = new Float64Array(loops.count);
   for (let l = 0; l < loops.count; l++)
-    for (let p = loops.start[l]; p < loops.start[l + 1]; p++) heads[l] += loops.sign[p] * state.chainLoss[loops.chain[p]];
+    for (let p = loops.start[l]; p < loops.start[l + 1]; p++) heads[l] += loops.sign[p] * chainLoss[loops.chain[p]];
   return heads;
 }
 
@@ -169,7 +173,7 @@ const worstOf = (values: Float64Array) =>
     .slice(0, MOST_WORST)
     .filter((i) => values[i] !== 0);
 
-function directedLinks({ chains, document, position }: PreparedNetwork, { loops }: Solution, loop: number) {
+function directedLinks({ chains, document, position }: PreparedNetwork, loops: Loops, loop: number) {
   const links: { link: string; direction: 1 | -1 }[] = [];
   for (let p = loops.start[loop]; p < loops.start[loop + 1]; p++) {
     const c = loops.chain[p];
@@ -183,5 +187,4 @@ function directedLinks({ chains, document, position }: PreparedNetwork, { loops 
   return links;
 }
 
-const linksOfLoop = (network: PreparedNetwork, solution: Solution, loop: number) =>
-  directedLinks(network, solution, loop).map(({ link }) => link);
+const linksOfLoop = (network: PreparedNetwork, loops: Loops, loop: number) => directedLinks(network, loops, loop).map(({ link }) => link);

@@ -1,6 +1,7 @@
 import { DpControl } from './dp-control';
 import { type Loops, shortLoops, treeLoops } from './graph/loops';
 import { balanceHeads } from './hardy-cross';
+import { correctionOfAll } from './correction-of-all';
 import { NetworkState } from './network-state';
 import { type PreparedNetwork, prepareNetwork } from './prepare';
 import { SimultaneousIteration } from './simultaneous';
@@ -33,10 +34,12 @@ export function solvePrepared(network: PreparedNetwork, options: SolveOptions = 
 
 export interface Solution {
   state: NetworkState;
-  loops: Loops;
+  /** Those corrected one after another, or the short ones, found when first asked for. */
+  loops: () => Loops;
   method: Method;
   iterations: number;
   closed: boolean;
+  worstM: number;
   control: DpControl | null;
   warnings: Warning[];
   history: LoopCorrection[] | null;
@@ -49,11 +52,11 @@ const iterations = new WeakMap<PreparedNetwork, SimultaneousIteration>();
 export function startIteration(network: PreparedNetwork, startFlows?: Float64Array): SimultaneousIteration {
   const known = iterations.get(network);
   const iteration =
-    known ?? new SimultaneousIteration(new NetworkState(network), shortLoops(network.document.nodes.length, network.chains));
+    known ?? new SimultaneousIteration(new NetworkState(network), correctionOfAll(network.document.nodes.length, network.chains));
   iterations.set(network, iteration);
   iteration.state.openControllers();
-  // The first flows are also what the least slopes come from.
-  if (!known || !startFlows) iteration.start();
+  // The first flows are also what the least slopes come from. One loop after another starts from flows that know nothing of the design.
+  if (!known || !startFlows) iteration.start(network.document.options?.method !== 'hardy-cross');
   if (startFlows) takeFlows(iteration.state, startFlows);
   return iteration;
 }
@@ -62,23 +65,24 @@ export function startIteration(network: PreparedNetwork, startFlows?: Float64Arr
 export function findFlows(network: PreparedNetwork, { startFlows }: SolveOptions = {}): Solution {
   const { document, chains } = network;
   const simultaneous = startIteration(network, startFlows);
-  const { state, loops } = simultaneous;
+  const { state } = simultaneous;
+  const shortest = () => shortLoops(document.nodes.length, chains);
   const control = DpControl.of(network);
   const warnings: Warning[] = [];
 
   if (document.options?.method === 'hardy-cross') {
     // Slopes at the first flows: a valve that these hold shut is a wall, and wants a loop of its own.
     state.evaluate();
-    const cross = treeLoops(document.nodes.length, chains, state.chainSlope, MOST_TREE_LOOP_CHAINS) ?? loops;
+    const cross = treeLoops(document.nodes.length, chains, state.chainSlope, MOST_TREE_LOOP_CHAINS) ?? shortest();
     const history: LoopCorrection[] | null = document.options.history ? [] : null;
     const outcome = balanceHeads(state, cross, control, history);
     const kept = history?.slice(0, MOST_HISTORY) ?? null;
-    if (outcome.closed) return { state, loops: cross, method: 'hardy-cross', ...outcome, control, warnings, history: kept };
+    if (outcome.closed) return { state, loops: () => cross, method: 'hardy-cross', ...outcome, control, warnings, history: kept };
     const message = `Correcting one loop after another had not closed after ${outcome.iterations} sweeps; all loops were corrected together from there.`;
     warnings.push({ code: 'hardy-cross-slow', message });
   }
   const outcome = simultaneous.run(control);
-  return { state, loops, method: 'simultaneous', ...outcome, control, warnings, history: null };
+  return { state, loops: shortest, method: 'simultaneous', ...outcome, control, warnings, history: null };
 }
 
 function takeFlows(state: NetworkState, startFlows: Float64Array): void {

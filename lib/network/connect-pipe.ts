@@ -1,5 +1,5 @@
 import { v7 as newId } from 'uuid';
-import { portsOf, type Drawing, type DrawingPipe, type Equipment, type PipeEnd, type Port } from './drawing';
+import { circuitAt, isPoint, portsOf, type Drawing, type DrawingPipe, type Equipment, type PipeEnd, type Port } from './drawing';
 import { pieceOf, portPlace, sideTowards, type Point } from './piece-geometry';
 import type { PipeFigures } from './pipe-choice';
 
@@ -26,7 +26,7 @@ export function connect(
     [pieceA, a],
     [pieceB, b],
   ] as const) {
-    if (piece.kind !== 'tee' && isPortTaken(drawing, end)) {
+    if ((piece.kind === 'header' || !isPoint(piece.kind)) && isPortTaken(drawing, end)) {
       return { refused: `${piece.tag || 'This piece'} already has a pipe there. Drop the end on that pipe to branch off it with a tee.` };
     }
   }
@@ -48,6 +48,8 @@ export function circuitOf(drawing: Drawing, from: PipeEnd, to: PipeEnd): Drawing
   const [start, goal] = [pieceOf(drawing, from.equipmentId), pieceOf(drawing, to.equipmentId)];
   if (start?.kind === 'terminalUnit') return 'return';
   if (goal?.kind === 'terminalUnit') return 'supply';
+  if (start?.kind === 'decoupler') return circuitAt(start.kind, from.port) ?? 'return';
+  if (goal?.kind === 'decoupler') return circuitAt(goal.kind, to.port) ?? 'supply';
   const near = drawing.pipes.filter((pipe) =>
     [pipe.from, pipe.to].some((end) => end.equipmentId === from.equipmentId || end.equipmentId === to.equipmentId),
   );
@@ -60,7 +62,7 @@ export function circuitOf(drawing: Drawing, from: PipeEnd, to: PipeEnd): Drawing
 
 /** The end of a piece nearest to a point that still takes a pipe; of a tee, the side that looks there. */
 export function freePortTowards(drawing: Drawing, piece: Equipment, point: Point, wanted?: Port): PipeEnd | null {
-  if (piece.kind === 'tee') return { equipmentId: piece.id, port: sideTowards(piece, point) };
+  if (isPoint(piece.kind) && piece.kind !== 'header') return { equipmentId: piece.id, port: sideTowards(piece, point) };
   const free = portsOf(piece.kind).filter((port) => !isPortTaken(drawing, { equipmentId: piece.id, port }));
   if (free.length === 0) return null;
   const gap = (port: Port) => {

@@ -1,32 +1,15 @@
-import { portsOf, type ChosenValve, type Drawing, type Equipment, type Place } from './drawing';
-
-/** Something wrong with a drawing. An `error` keeps it from being solved; a `warning` does not. */
-export interface Fault {
-  code: string;
-  severity: 'error' | 'warning';
-  message: string;
-  place: Place;
-}
-
-export const kindNames: Record<Equipment['kind'], string> = {
-  pump: 'Pump',
-  source: 'Source',
-  terminalUnit: 'Terminal unit',
-  balancingValve: 'Balancing valve',
-  controlValve: 'Control valve',
-  checkValve: 'Check valve',
-  isolatingValve: 'Isolating valve',
-  strainer: 'Strainer',
-  tee: 'Tee',
-  expansionVessel: 'Expansion vessel',
-};
+import { isPoint, portsOf, type Drawing } from './drawing';
+import { at, kindNames, nameOf, type Fault } from './fault';
+import { loadFaults } from './load-faults';
+import { missingFigures } from './missing-figures';
+import { layoutFaults } from './layout-faults';
 
 /** What a drawing lacks before it can be solved, and what a designer should look at; in the order of the drawing. */
 export function faultsOf(drawing: Drawing): Fault[] {
   const faults: Fault[] = [];
   if (drawing.equipment.length === 0) return faults;
   faults.push(...repeatedTags(drawing), ...openEnds(drawing));
-  for (const piece of drawing.equipment) faults.push(...missingData(piece));
+  for (const piece of drawing.equipment) faults.push(...missingFigures(piece));
   for (const pipe of drawing.pipes) {
     const lacking = [pipe.lengthM === null && 'length', pipe.boreMm === null && 'size', pipe.roughnessMm === null && 'roughness'].filter(
       (what): what is string => Boolean(what),
@@ -40,15 +23,9 @@ export function faultsOf(drawing: Drawing): Fault[] {
       });
     }
   }
-  if (!drawing.equipment.some((piece) => piece.kind === 'pump')) {
-    const place: Place = { kind: 'equipment', id: drawing.equipment[0]!.id };
-    faults.push({ code: 'no-pump', severity: 'warning', message: 'The loop has no pump: nothing will flow.', place });
-  }
+  faults.push(...senseFaults(drawing), ...layoutFaults(drawing), ...loadFaults(drawing));
   return faults;
 }
-
-const nameOf = (piece: Equipment) => piece.tag || kindNames[piece.kind].toLowerCase();
-const at = (piece: Equipment): Place => ({ kind: 'equipment', id: piece.id });
 
 function repeatedTags(drawing: Drawing): Fault[] {
   const seen = new Set<string>();
@@ -68,7 +45,7 @@ function repeatedTags(drawing: Drawing): Fault[] {
   });
 }
 
-/** Ends with no pipe, and pipes whose piece is gone. A tee may leave sides free but joins at least two pipes. */
+/** Ends with no pipe, and pipes whose piece is gone. A tee or header may leave sides free but joins at least two pipes. */
 function openEnds(drawing: Drawing): Fault[] {
   const byId = new Map(drawing.equipment.map((piece) => [piece.id, piece]));
   const joined = new Map<string, number>();
@@ -80,20 +57,21 @@ function openEnds(drawing: Drawing): Fault[] {
         faults.push({ code: 'pipe-end', severity: 'error', message: 'A pipe ends in nothing.', place: { kind: 'pipe', id: pipe.id } });
         continue;
       }
-      const key = piece.kind === 'tee' ? piece.id : `${piece.id}.${end.port}`;
+      const key = isPoint(piece.kind) ? piece.id : `${piece.id}.${end.port}`;
       joined.set(key, (joined.get(key) ?? 0) + 1);
     }
-    if (pipe.from.equipmentId === pipe.to.equipmentId && byId.get(pipe.from.equipmentId)?.kind === 'tee') {
+    const only = pipe.from.equipmentId === pipe.to.equipmentId && byId.get(pipe.from.equipmentId);
+    if (only && isPoint(only.kind)) {
       faults.push({
         code: 'pipe-to-itself',
         severity: 'error',
-        message: 'A pipe joins a tee to itself.',
+        message: `A pipe joins a ${kindNames[only.kind].toLowerCase()} to itself.`,
         place: { kind: 'pipe', id: pipe.id },
       });
     }
   }
   for (const piece of drawing.equipment) {
-    if (piece.kind === 'tee') {
+    if (isPoint(piece.kind)) {
       if ((joined.get(piece.id) ?? 0) < 2) {
         faults.push({
           code: 'dead-leg',
@@ -113,69 +91,22 @@ function openEnds(drawing: Drawing): Fault[] {
   return faults;
 }
 
-/** Figures that the law of a piece needs and that are not there yet. */
-function missingData(piece: Equipment): Fault[] {
-  const lacks = (what: string): Fault => ({
-    code: 'missing-data',
-    severity: 'error',
-    message: `${nameOf(piece)} has no ${what}.`,
-    place: at(piece),
+/** Impulse lines of differential pressure controllers that end in nothing, or both in the same point. */
+function senseFaults(drawing: Drawing): Fault[] {
+  const byId = new Map(drawing.equipment.map((piece) => [piece.id, piece]));
+  return drawing.equipment.flatMap((piece): Fault[] => {
+    if (piece.kind !== 'dpController') return [];
+    const own = { equipmentId: piece.id, port: 'in' as const };
+    const [high, low] = [piece.senseHigh ?? own, piece.senseLow ?? own];
+    const isLost = [high, low].some(
+      (end) => !portsOf(byId.get(end.equipmentId)?.kind ?? 'tee').includes(end.port) || !byId.has(end.equipmentId),
+    );
+    const isSame = pointOf(high) === pointOf(low);
+    if (!isLost && !isSame) return [];
+    const what = isLost ? 'An impulse line ends in nothing' : 'Both impulse lines end in the same point';
+    return [{ code: 'sense', severity: 'error', message: `${what}: ${nameOf(piece)} needs two points to hold apart.`, place: at(piece) }];
   });
-  const fault = (code: string, message: string, severity: Fault['severity'] = 'error'): Fault => ({
-    code,
-    severity,
-    message,
-    place: at(piece),
-  });
-  switch (piece.kind) {
-    case 'pump':
-      return piece.curve.length < 3
-        ? [fault('pump-curve', `${nameOf(piece)} needs at least three points on its curve.`)]
-        : pumpCurveFaults(piece.curve, fault, nameOf(piece));
-    case 'source':
-      return [piece.designFlowLs === null && lacks('design flow'), piece.designDropKpa === null && lacks('drop at design flow')].filter(
-        (f) => f !== false,
-      );
-    case 'terminalUnit':
-      return [
-        piece.designFlowLs === null && lacks('design flow'),
-        piece.coilDropKpa === null && lacks('coil drop'),
-        piece.controlValve && piece.controlValve.kvs === null && lacks('Kvs of its control valve'),
-        piece.balancingValve && valveFault(piece.balancingValve, nameOf(piece), fault),
-        !piece.balancingValve &&
-          fault('no-balancing-valve', `${nameOf(piece)} has no balancing valve: its flow can be neither set nor measured.`, 'warning'),
-      ].filter((f) => Boolean(f)) as Fault[];
-    case 'balancingValve':
-      return [valveFault(piece.valve, nameOf(piece), fault)].filter((f) => f !== null);
-    case 'controlValve':
-      return piece.kvs === null ? [lacks('Kvs')] : [];
-    case 'checkValve':
-    case 'isolatingValve':
-    case 'strainer':
-      return piece.kv === null ? [lacks('Kv')] : [];
-    case 'tee':
-    case 'expansionVessel':
-      return [];
-  }
 }
 
-type MakeFault = (code: string, message: string, severity?: Fault['severity']) => Fault;
-
-function pumpCurveFaults(curve: { flowLs: number; headM: number }[], fault: MakeFault, name: string): Fault[] {
-  const unsorted = curve.some((point, i) => i > 0 && point.flowLs <= curve[i - 1]!.flowLs);
-  const rising = curve.some((point, i) => i > 0 && point.headM > curve[i - 1]!.headM);
-  return [
-    ...(unsorted ? [fault('pump-curve', `The curve of ${name} must go from low to high flow, each flow once.`)] : []),
-    ...(rising ? [fault('pump-curve', `The head of ${name} must not rise with flow.`)] : []),
-  ];
-}
-
-function valveFault(valve: ChosenValve, name: string, fault: MakeFault): Fault | null {
-  if (valve.kvTable.length < 2) return fault('valve-table', `${name} has no table of settings and Kv: choose a valve.`);
-  const first = valve.kvTable[0]!.setting;
-  const last = valve.kvTable.at(-1)!.setting;
-  if (valve.settingTurns !== null && (valve.settingTurns < first || valve.settingTurns > last)) {
-    return fault('valve-setting', `${name} stands at ${valve.settingTurns}, outside its table (${first} to ${last}).`);
-  }
-  return null;
-}
+const pointOf = ({ equipmentId, port }: { equipmentId: string; port: string }) =>
+  port === 'in' || port === 'out' ? `${equipmentId}.${port}` : equipmentId;

@@ -1,5 +1,5 @@
 import type { BalanceResult, LinkResult, SolveResult } from '@/lib/hydraulics/types';
-import type { Drawing, DrawingPipe, Equipment } from './drawing';
+import { isPoint, type Drawing, type DrawingPipe, type Equipment } from './drawing';
 import { nodeIdOf, unitLinkId, unitLinks, type UnitLink } from './drawing-to-document';
 
 /** Flows as the valves stand in the drawing, or as they will be with the settings of the balance. */
@@ -118,7 +118,7 @@ function pieceFigures(piece: Equipment, { result, linkOf, pressureOf, design, ba
   const valve = balance?.valves.find(({ id }) => id === (isUnit ? unitLinkId(piece.id, 'balancing') : piece.id));
   const pump = piece.kind === 'pump' ? result.pumps.find(({ id }) => id === piece.id) : undefined;
   const duty = piece.kind === 'pump' ? balance?.pumps.find(({ id }) => id === piece.id) : undefined;
-  const inletId = piece.kind === 'tee' ? piece.id : `${piece.id}.in`;
+  const inletId = isPoint(piece.kind) ? piece.id : `${piece.id}.in`;
   const designLs = isUnit ? piece.designFlowLs : design?.get(piece.id);
   return {
     flowLs,

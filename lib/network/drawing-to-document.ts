@@ -1,6 +1,16 @@
 import type { NetworkDocument, NetworkLink, NetworkNode } from '@/lib/hydraulics/types';
-import type { Drawing, DrawingPipe, Equipment, PipeEnd, Place, TerminalUnit } from './drawing';
-import { faultsOf, type Fault } from './drawing-faults';
+import {
+  portsOf,
+  type ChosenValve,
+  type Drawing,
+  type DrawingPipe,
+  type Equipment,
+  type PipeEnd,
+  type Place,
+  type TerminalUnit,
+} from './drawing';
+import { faultsOf } from './drawing-faults';
+import type { Fault } from './fault';
 
 export interface DrawnNetwork {
   /** Null while a fault of severity `error` stands. */
@@ -24,7 +34,7 @@ export function placeFinder(drawing: Drawing): (id: string | undefined) => Place
   };
 }
 
-/** The point of the network at which a pipe end stands: all sides of a tee are one point. */
+/** The point of the network at which a pipe end stands: all sides of a tee or header are one point. */
 export const nodeIdOf = (end: PipeEnd): string =>
   end.port === 'in' || end.port === 'out' ? `${end.equipmentId}.${end.port}` : end.equipmentId;
 
@@ -43,7 +53,7 @@ export function drawingToDocument(drawing: Drawing, name: string): DrawnNetwork 
     const elevationM = (piece.storeyId && elevationOf.get(piece.storeyId)) || 0;
     const made = linksOf(piece);
     const ids = new Set(made.flatMap((link) => [link.from, link.to]));
-    if (ids.size === 0) ids.add(nodeIdOf({ equipmentId: piece.id, port: piece.kind === 'expansionVessel' ? 'in' : 'n' }));
+    if (ids.size === 0) ids.add(nodeIdOf({ equipmentId: piece.id, port: portsOf(piece.kind)[0]! }));
     for (const id of ids) nodes.push({ id, elevationM });
     links.push(...made);
   }
@@ -111,16 +121,32 @@ function linksOf(piece: Equipment): NetworkLink[] {
       return [{ ...ends, kind: 'resistance', kv: piece.kv!, closed: piece.isClosed }];
     case 'strainer':
       return [{ ...ends, kind: 'resistance', kv: piece.kv! }];
+    case 'dpController': {
+      const own: PipeEnd = { equipmentId: piece.id, port: 'in' };
+      const sense: [string, string] = [nodeIdOf(piece.senseHigh ?? own), nodeIdOf(piece.senseLow ?? own)];
+      return [{ ...ends, kind: 'dpController', setpointKpa: piece.setpointKpa!, kvs: piece.kvs!, sense }];
+    }
+    case 'flowLimiter':
+      return [{ ...ends, kind: 'flowLimiter', limitLs: piece.limitLs!, minDropKpa: piece.minDropKpa! }];
+    case 'decoupler': {
+      const { lengthM, boreMm, roughnessMm, minorK } = piece;
+      return [{ ...ends, kind: 'pipe', lengthM: lengthM!, boreMm: boreMm!, roughnessMm: roughnessMm!, minorK }];
+    }
+    case 'flowStation':
+      return [{ ...ends, kind: 'resistance', kv: (piece.lossKv ?? piece.signalKv)! }];
     case 'tee':
+    case 'header':
+    case 'pressureStation':
     case 'expansionVessel':
       return [];
   }
 }
 
-const balancing = (valve: { kvTable: { setting: number; kv: number }[]; settingTurns: number | null; isLocked: boolean }) => ({
-  kvTable: valve.kvTable,
-  ...(valve.settingTurns === null ? {} : { setting: valve.settingTurns }),
-  locked: valve.isLocked,
+const balancing = ({ kvTable, settingTurns, isLocked, stepTurns }: ChosenValve) => ({
+  kvTable: kvTable.map(({ setting, kv }) => ({ setting, kv })),
+  ...(settingTurns === null ? {} : { setting: settingTurns }),
+  locked: isLocked,
+  ...(stepTurns ? { settingStep: stepTurns } : {}),
 });
 
 function linksOfUnit(unit: TerminalUnit): NetworkLink[] {

@@ -13,7 +13,16 @@ const notNegative = z.number().min(0).max(1e9).nullable();
 /** A place on the sheet: far enough for any drawing, near enough that sums of places stay numbers. */
 const coordinate = z.number().min(-1e9).max(1e9);
 
-export const kvTableSchema = z.array(z.object({ setting: z.number(), kv: z.number().min(0) })).max(200);
+/**
+ * Kv by handwheel setting. `measuringKv` is that between the measuring points, where flow is read over an orifice of its own: the same at
+ * every setting where the orifice is fixed. Absent, the valve is measured by its own Kv.
+ */
+export const kvTableSchema = z
+  .array(z.object({ setting: z.number(), kv: z.number().min(0), measuringKv: z.number().positive().optional() }))
+  .max(200)
+  .refine((points) => new Set(points.map(({ measuringKv }) => measuringKv === undefined)).size < 2, {
+    message: 'A measuring Kv stands at every setting or at none.',
+  });
 
 /** A balancing valve as chosen: its name, the largest-to-smallest Kv by handwheel setting, and where it stands (null = fully open). */
 export const valveSchema = z.object({
@@ -21,6 +30,8 @@ export const valveSchema = z.object({
   kvTable: kvTableSchema,
   settingTurns: z.number().nullable(),
   isLocked: z.boolean(),
+  /** Smallest step of the handwheel's scale; settings that are looked for are rounded to it. */
+  stepTurns: z.number().positive().max(1000).nullish(),
 });
 
 export const characteristics = ['linear', 'equalPercentage', 'quickOpening'] as const;
@@ -40,6 +51,11 @@ export const pumpSchema = z.object({
   kind: z.literal('pump'),
   curve: z.array(z.object({ flowLs: z.number().min(0), headM: z.number().min(0) })).max(100),
   efficiency: z.array(z.object({ flowLs: z.number().min(0), fraction: z.number().min(0).max(1) })).max(100),
+  /** Net positive suction head that the pump requires at full speed. */
+  suctionHeadRequired: z
+    .array(z.object({ flowLs: z.number().min(0), headM: z.number().min(0) }))
+    .max(100)
+    .optional(),
   speed: z.number().min(0).max(2),
   hasNonReturn: z.boolean(),
 });
@@ -84,6 +100,42 @@ export const strainerSchema = z.object({ ...placed, kind: z.literal('strainer'),
 export const teeSchema = z.object({ ...placed, kind: z.literal('tee') });
 export const expansionVesselSchema = z.object({ ...placed, kind: z.literal('expansionVessel'), gaugePressureKpa: notNegative });
 
+/** `in` and `out` of a piece with two ends; the sides of a tee and the places along a header are one point of the network; a vessel has `in` only. */
+export const ports = ['in', 'out', 'n', 'e', 's', 'w', 'n1', 'n2', 'n3', 'n4', 's1', 's2', 's3', 's4'] as const;
+const pipeEndSchema = z.object({ equipmentId: id, port: z.enum(ports) });
+
+/** Throttles so that the differential pressure between its two impulse lines stays at the set point; a line that is null ends at its own inlet. */
+export const dpControllerSchema = z.object({
+  ...placed,
+  kind: z.literal('dpController'),
+  setpointKpa: positive,
+  kvs: positive,
+  senseHigh: pipeEndSchema.nullable(),
+  senseLow: pipeEndSchema.nullable(),
+});
+
+/** A pressure-independent control valve: holds `limitLs` while the drop across it is at least `minDropKpa`. */
+export const flowLimiterSchema = z.object({ ...placed, kind: z.literal('flowLimiter'), limitLs: positive, minDropKpa: positive });
+
+/** A bar that many pipes join: one point of the network. */
+export const headerSchema = z.object({ ...placed, kind: z.literal('header') });
+
+/** The open pipe between supply and return that lets the flows on its two sides differ. */
+export const decouplerSchema = z.object({
+  ...placed,
+  kind: z.literal('decoupler'),
+  lengthM: positive,
+  boreMm: positive,
+  roughnessMm: notNegative,
+  minorK: z.number().min(0).max(1e6),
+});
+
+/** A measuring orifice. `signalKv` turns the differential read at it into flow; `lossKv` is what it costs the loop (null = the same). */
+export const flowStationSchema = z.object({ ...placed, kind: z.literal('flowStation'), signalKv: positive, lossKv: positive });
+
+/** Where pressure is read: a point that costs nothing. */
+export const pressureStationSchema = z.object({ ...placed, kind: z.literal('pressureStation') });
+
 export const equipmentSchema = z.discriminatedUnion('kind', [
   pumpSchema,
   sourceSchema,
@@ -95,11 +147,13 @@ export const equipmentSchema = z.discriminatedUnion('kind', [
   strainerSchema,
   teeSchema,
   expansionVesselSchema,
+  dpControllerSchema,
+  flowLimiterSchema,
+  headerSchema,
+  decouplerSchema,
+  flowStationSchema,
+  pressureStationSchema,
 ]);
-
-/** `in` and `out` of a piece with two ends; a tee's four sides are one point of the network; a vessel has `in` only. */
-export const ports = ['in', 'out', 'n', 'e', 's', 'w'] as const;
-const pipeEndSchema = z.object({ equipmentId: id, port: z.enum(ports) });
 
 export const pipeSchema = z.object({
   id,
@@ -133,10 +187,26 @@ export const drawingFluidSchema = z.object({
   returnC: z.number().min(-40).max(200),
 });
 
+/** What a pipe may have at most, up to a bore (the last one: beyond them all). */
+export const pipeLimitSchema = z.object({
+  upToBoreMm: z.number().positive().max(1e4).nullable(),
+  maxPaPerM: z.number().positive().max(1e5),
+  maxVelocityMs: z.number().positive().max(50),
+});
+
+export const equipmentKinds = equipmentSchema.options.map((option) => option.shape.kind.value);
+
+/** How tags are made, by kind; see `tags.ts` for what may stand in one. */
+export const tagRulesSchema = z.partialRecord(z.enum(equipmentKinds), z.string().min(1).max(24));
+
 export const drawingSchema = z.object({
   format: z.literal('drawing/1'),
   fluid: drawingFluidSchema,
   pumpExcess: z.enum(['speed', 'throttle']),
+  /** Limits of this loop's pipes; the usual ones of `pipe-limits.ts` where it has none of its own. */
+  pipeLimits: z.array(pipeLimitSchema).min(1).max(10).optional(),
+  /** The usual rules hold for kinds that have none of their own. */
+  tagRules: tagRulesSchema.optional(),
   storeys: z.array(storeySchema).max(200),
   equipment: z.array(equipmentSchema).max(20_000),
   pipes: z.array(pipeSchema).max(40_000),
@@ -153,15 +223,33 @@ export type Port = (typeof ports)[number];
 export type PipeEnd = z.infer<typeof pipeEndSchema>;
 export type Storey = z.infer<typeof storeySchema>;
 export type ChosenValve = z.infer<typeof valveSchema>;
+export type PipeLimit = z.infer<typeof pipeLimitSchema>;
+export type TagRules = z.infer<typeof tagRulesSchema>;
 export type KvPoint = z.infer<typeof kvTableSchema>[number];
 
 /** Where a fault, a result or a difference belongs: what the canvas selects when it is chosen. `loop` is what holds for all of it, e.g. its fluid. */
 export type Place = { kind: 'equipment' | 'pipe' | 'storey' | 'loop'; id: string };
 
+/** Pieces that are a single point of the network, whichever of their sides a pipe joins. */
+export const isPoint = (kind: EquipmentKind): kind is 'tee' | 'header' | 'pressureStation' =>
+  kind === 'tee' || kind === 'header' || kind === 'pressureStation';
+
+const sides: readonly Port[] = ['n', 'e', 's', 'w'];
+const alongHeader: readonly Port[] = ['w', 'n1', 'n2', 'n3', 'n4', 'e', 's1', 's2', 's3', 's4'];
+const throughPorts: readonly Port[] = ['in', 'out'];
+
 /** The ends by which pipes may join a piece. */
 export function portsOf(kind: EquipmentKind): readonly Port[] {
-  if (kind === 'tee') return ['n', 'e', 's', 'w'];
-  return kind === 'expansionVessel' ? ['in'] : ['in', 'out'];
+  if (kind === 'header') return alongHeader;
+  if (isPoint(kind)) return sides;
+  return kind === 'expansionVessel' ? ['in'] : throughPorts;
+}
+
+/** Whether supply or return belongs at an end; null where either may be. */
+export function circuitAt(kind: EquipmentKind, port: Port): DrawingPipe['circuit'] | null {
+  if (kind === 'terminalUnit' || kind === 'decoupler') return port === 'in' ? 'supply' : 'return';
+  if (kind === 'source') return port === 'in' ? 'return' : 'supply';
+  return null;
 }
 
 export const emptyDrawing = (service: 'chilled' | 'hot'): Drawing => ({

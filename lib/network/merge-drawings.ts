@@ -61,6 +61,27 @@ export function mergeDrawings(base: Drawing, mine: Drawing, theirs: Drawing): Me
   return { merged, conflicts, differences };
 }
 
+/**
+ * Both sides' changes together where they do not touch: no piece was changed by both, and no pipe of one side leads to a piece that the other
+ * took away. Null where somebody has to look.
+ */
+export function mergeByItself(base: Drawing, mine: Drawing, theirs: Drawing): Drawing | null {
+  const { merged, conflicts } = mergeDrawings(base, mine, theirs);
+  if (conflicts.length > 0) return null;
+  const lostBefore = new Set([...lostPipes(mine), ...lostPipes(theirs)]);
+  return lostPipes(merged).every((id) => lostBefore.has(id)) ? merged : null;
+}
+
+/** Pipes that end in nothing, or impulse lines: what refers to a piece that is gone. */
+function lostPipes({ equipment, pipes }: Drawing): string[] {
+  const known = new Set(equipment.map(({ id }) => id));
+  const controllers = equipment.filter(
+    (piece) => piece.kind === 'dpController' && [piece.senseHigh, piece.senseLow].some((end) => end && !known.has(end.equipmentId)),
+  );
+  const lost = pipes.filter(({ from, to }) => !known.has(from.equipmentId) || !known.has(to.equipmentId));
+  return [...lost, ...controllers].map(({ id }) => id);
+}
+
 /** The merged drawing with their side of one conflict taken instead of mine. */
 export function takeTheirs(merged: Drawing, conflict: Conflict): Drawing {
   if (conflict.place.kind === 'loop') {
@@ -80,17 +101,28 @@ export function changesBetween(before: Drawing, after: Drawing): { message: stri
   return mergeDrawings(before, after, before).differences.map(({ message, place }) => ({ message, place }));
 }
 
-type Setting = ({ id: 'fluid' } & DrawingFluid) | { id: 'pumpExcess'; pumpExcess: Drawing['pumpExcess'] };
+type Setting =
+  | ({ id: 'fluid' } & DrawingFluid)
+  | { id: 'pumpExcess'; pumpExcess: Drawing['pumpExcess'] }
+  | { id: 'pipeLimits'; pipeLimits: Drawing['pipeLimits'] }
+  | { id: 'tagRules'; tagRules: Drawing['tagRules'] };
 
 /** What holds for the whole loop, as items that can be compared like its pieces. */
-const settingsOf = ({ fluid, pumpExcess }: Drawing): Setting[] => [
+const settingsOf = ({ fluid, pumpExcess, pipeLimits, tagRules }: Drawing): Setting[] => [
   { id: 'fluid', ...fluid },
   { id: 'pumpExcess', pumpExcess },
+  { id: 'pipeLimits', pipeLimits },
+  { id: 'tagRules', tagRules },
 ];
 
-function ofSettings(settings: Setting[]): Pick<Drawing, 'fluid' | 'pumpExcess'> {
-  const [{ id: _, ...fluid }, { pumpExcess }] = settings as [Extract<Setting, { id: 'fluid' }>, Extract<Setting, { id: 'pumpExcess' }>];
-  return { fluid, pumpExcess };
+function ofSettings(settings: Setting[]): Pick<Drawing, 'fluid' | 'pumpExcess' | 'pipeLimits' | 'tagRules'> {
+  const [{ id: _, ...fluid }, { pumpExcess }, { pipeLimits }, { tagRules }] = settings as [
+    Extract<Setting, { id: 'fluid' }>,
+    Extract<Setting, { id: 'pumpExcess' }>,
+    Extract<Setting, { id: 'pipeLimits' }>,
+    Extract<Setting, { id: 'tagRules' }>,
+  ];
+  return { fluid, pumpExcess, ...(pipeLimits && { pipeLimits }), ...(tagRules && { tagRules }) };
 }
 
 function choose(before: Item | undefined, mine: Item | undefined, theirs: Item | undefined): Choice {
@@ -102,7 +134,12 @@ function choose(before: Item | undefined, mine: Item | undefined, theirs: Item |
 /** Names from the first drawing that still has the thing. */
 function namer(drawings: Drawing[]) {
   const names = drawings.map(pieceNames);
-  const settingNames: Record<string, string> = { fluid: 'Fluid', pumpExcess: 'Excess head' };
+  const settingNames: Record<string, string> = {
+    fluid: 'Fluid',
+    pumpExcess: 'Excess head',
+    pipeLimits: 'Pipe limits',
+    tagRules: 'Rules for tags',
+  };
   return ({ kind, id }: Place): string =>
     (kind === 'loop' ? settingNames[id] : undefined) ?? names.find((known) => known.has(id))?.get(id) ?? id;
 }

@@ -37,7 +37,17 @@ export function blankPiece(kind: EquipmentKind, placed: Placed): Equipment {
     case 'isolatingValve':
       return { ...placed, kind, kv: null, isClosed: false };
     case 'tee':
+    case 'header':
+    case 'pressureStation':
       return { ...placed, kind };
+    case 'dpController':
+      return { ...placed, kind, setpointKpa: null, kvs: null, senseHigh: null, senseLow: null };
+    case 'flowLimiter':
+      return { ...placed, kind, limitLs: null, minDropKpa: null };
+    case 'decoupler':
+      return { ...placed, kind, lengthM: null, boreMm: null, roughnessMm: 0.045, minorK: 0 };
+    case 'flowStation':
+      return { ...placed, kind, signalKv: null, lossKv: null };
     case 'expansionVessel':
       return { ...placed, kind, gaugePressureKpa: null };
   }
@@ -50,9 +60,13 @@ export function blankPiece(kind: EquipmentKind, placed: Placed): Equipment {
 export function newPiece(drawing: Drawing, kind: EquipmentKind, { x, y }: Point, like?: Equipment): Equipment {
   const placed: Placed = { id: newId(), tag: '', storeyId: storeyAt(drawing, y)?.id ?? null, x, y, rotation: 0, isMirrored: false };
   const { rotation, isMirrored } = like?.kind === kind ? like : placed;
-  const piece: Equipment = like?.kind === kind ? { ...like, ...placed, rotation, isMirrored } : blankPiece(kind, placed);
+  const piece: Equipment = like?.kind === kind ? { ...withoutSense(like), ...placed, rotation, isMirrored } : blankPiece(kind, placed);
   return withRoomOfItsOwn({ ...piece, tag: nextTag(drawing, piece) });
 }
 
 /** A room is where a unit stands: a copy stands elsewhere. */
 export const withRoomOfItsOwn = (piece: Equipment): Equipment => (piece.kind === 'terminalUnit' ? { ...piece, room: '' } : piece);
+
+/** Where the impulse lines of a controller end belongs to its place, not to its make. */
+const withoutSense = (piece: Equipment): Equipment =>
+  piece.kind === 'dpController' ? { ...piece, senseHigh: null, senseLow: null } : piece;

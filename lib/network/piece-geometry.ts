@@ -1,4 +1,4 @@
-import type { Drawing, Equipment, EquipmentKind, Port } from './drawing';
+import { isPoint, type Drawing, type Equipment, type EquipmentKind, type Port } from './drawing';
 
 /**
  * Where a piece and its ends lie on the drawing. `x` and `y` of a piece are its centre, in drawing units (y grows
@@ -24,7 +24,16 @@ const sizes: Record<EquipmentKind, { width: number; height: number }> = {
   strainer: { width: 40, height: 40 },
   tee: { width: 20, height: 20 },
   expansionVessel: { width: 40, height: 40 },
+  dpController: { width: 40, height: 40 },
+  flowLimiter: { width: 40, height: 40 },
+  header: { width: 200, height: 20 },
+  decoupler: { width: 40, height: 120 },
+  flowStation: { width: 40, height: 40 },
+  pressureStation: { width: 20, height: 20 },
 };
+
+/** Between two places along a header. */
+const HEADER_PITCH = 40;
 
 type Turned = Pick<Equipment, 'kind' | 'rotation' | 'isMirrored'>;
 
@@ -38,11 +47,22 @@ export function sizeOf({ kind, rotation }: Pick<Equipment, 'kind' | 'rotation'>)
 function unturnedPort(kind: EquipmentKind, port: Port): { at: Point; leaves: Point } {
   const { width, height } = sizes[kind];
   const sides = { n: { x: 0, y: -1 }, e: { x: 1, y: 0 }, s: { x: 0, y: 1 }, w: { x: -1, y: 0 } };
-  if (kind === 'tee') return { at: { x: 0, y: 0 }, leaves: sides[port as keyof typeof sides] };
+  if (kind === 'header') return headerPlace(port, width, height);
+  if (isPoint(kind)) return { at: { x: 0, y: 0 }, leaves: sides[port as keyof typeof sides] };
   if (kind === 'expansionVessel') return { at: { x: 0, y: height / 2 }, leaves: sides.s };
-  if (kind === 'terminalUnit')
+  if (kind === 'terminalUnit' || kind === 'decoupler')
     return port === 'in' ? { at: { x: 0, y: -height / 2 }, leaves: sides.n } : { at: { x: 0, y: height / 2 }, leaves: sides.s };
   return port === 'in' ? { at: { x: -width / 2, y: 0 }, leaves: sides.w } : { at: { x: width / 2, y: 0 }, leaves: sides.e };
+}
+
+/** The ends of a header's bar, and four places along each of its sides. */
+function headerPlace(port: Port, width: number, height: number): { at: Point; leaves: Point } {
+  if (port === 'e' || port === 'w') {
+    const way = port === 'e' ? 1 : -1;
+    return { at: { x: (way * width) / 2, y: 0 }, leaves: { x: way, y: 0 } };
+  }
+  const way = port.startsWith('n') ? -1 : 1;
+  return { at: { x: (Number(port.slice(1)) - 2.5) * HEADER_PITCH, y: (way * height) / 2 }, leaves: { x: 0, y: way } };
 }
 
 function turn({ x, y }: Point, { rotation, isMirrored }: Turned): Point {
@@ -58,7 +78,7 @@ function turn({ x, y }: Point, { rotation, isMirrored }: Turned): Point {
 export function portOffset(piece: Turned, port: Port): { at: Point; leaves: Point } {
   const { at, leaves } = unturnedPort(piece.kind, port);
   // The sides of a tee are those of the sheet, however it was turned.
-  if (piece.kind === 'tee') return { at, leaves };
+  if (isPoint(piece.kind) && piece.kind !== 'header') return { at, leaves };
   return { at: turn(at, piece), leaves: turn(leaves, piece) };
 }
 
@@ -70,7 +90,7 @@ export interface PortPlace extends Point {
 
 export function portPlace(piece: Equipment, port: Port): PortPlace {
   const { at, leaves } = portOffset(piece, port);
-  return { x: piece.x + at.x, y: piece.y + at.y, leaves, isFree: piece.kind === 'tee' };
+  return { x: piece.x + at.x, y: piece.y + at.y, leaves, isFree: isPoint(piece.kind) && piece.kind !== 'header' };
 }
 
 /** The side of a tee that looks towards a point. */

@@ -1,5 +1,5 @@
 import type { Drawing } from './drawing';
-import { kindNames } from './drawing-faults';
+import { kindNames } from './fault';
 
 /** What a person calls each piece, pipe and storey of a drawing, by id: its tag, or what it is and what it joins. */
 export function pieceNames(drawing: Drawing): Map<string, string> {

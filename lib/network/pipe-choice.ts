@@ -1,5 +1,5 @@
 import { pipeSeries, type PipeSeriesId } from '@/lib/hydraulics/pipe-series';
-import type { DrawingPipe } from './drawing';
+import type { Drawing, DrawingPipe } from './drawing';
 
 /** What a pipe is made of and how long it is: what new pipes take over from the last one. */
 export type PipeFigures = Pick<DrawingPipe, 'lengthM' | 'series' | 'nominal' | 'boreMm' | 'roughnessMm' | 'minorK'>;
@@ -34,3 +34,11 @@ export function pipeWords(pipe: PipeFigures): string {
 
 /** What the first pipe of a drawing has: a common pipe, its length left for the designer to say. */
 export const firstPipeFigures: PipeFigures = { lengthM: null, ...chosenSize('steel-en10255-medium', 'DN25')!, minorK: 0 };
+
+/** The figures of the pipe that was drawn last: new pipes go on from it. Null where there is none. */
+export function lastPipeOf({ pipes }: Drawing): PipeFigures | null {
+  const last = pipes.at(-1);
+  if (!last) return null;
+  const { lengthM, series, nominal, boreMm, roughnessMm, minorK } = last;
+  return { lengthM, series, nominal, boreMm, roughnessMm, minorK };
+}

@@ -1,4 +1,4 @@
-import type { Drawing, DrawingPipe, PipeEnd } from './drawing';
+import type { Drawing, DrawingPipe, Equipment, PipeEnd } from './drawing';
 
 /**
  * Takes pieces and pipes off the drawing. A piece with two pipes gives way to one pipe of their length together; where
@@ -16,12 +16,19 @@ function removePiece(drawing: Drawing, pieceId: string): Drawing {
   const gone = new Set(joined.map(({ id }) => id));
   return {
     ...drawing,
-    equipment: drawing.equipment.filter(({ id }) => id !== pieceId),
+    equipment: drawing.equipment.filter(({ id }) => id !== pieceId).map((piece) => withoutSenseAt(piece, pieceId)),
     pipes: drawing.pipes.flatMap((pipe) => {
       if (!gone.has(pipe.id)) return [pipe];
       return healed && pipe.id === healed.id ? [healed] : [];
     }),
   };
+}
+
+/** A controller lets go of what its impulse lines ended at. */
+function withoutSenseAt(piece: Equipment, goneId: string): Equipment {
+  if (piece.kind !== 'dpController') return piece;
+  const [isHigh, isLow] = [piece.senseHigh?.equipmentId === goneId, piece.senseLow?.equipmentId === goneId];
+  return isHigh || isLow ? { ...piece, senseHigh: isHigh ? null : piece.senseHigh, senseLow: isLow ? null : piece.senseLow } : piece;
 }
 
 const touches = (pipe: DrawingPipe, pieceId: string) => pipe.from.equipmentId === pieceId || pipe.to.equipmentId === pieceId;

@@ -1,5 +1,5 @@
 import { v7 as newId } from 'uuid';
-import type { Drawing, DrawingPipe, Equipment, Port } from './drawing';
+import { isPoint, type Drawing, type DrawingPipe, type Equipment, type EquipmentKind, type Port } from './drawing';
 import { newPiece } from './new-piece';
 import { portPlace, sideTowards, snap, type Point, type PortPlace } from './piece-geometry';
 import { nearestOnRoute, routeOfPipe, type RoutePlace } from './pipe-route';
@@ -63,14 +63,17 @@ export function insertTee(drawing: Drawing, { pipe, at }: FoundPipe): { drawing:
   return { drawing: splitPipe(withTee, pipe.id, tee.id, ends, at.part), tee };
 }
 
+/** A vessel hangs on a branch, a header is joined by its places, a decoupler stands between two mains: none goes into a pipe. */
+export const goesOnPipe = (kind: EquipmentKind): boolean => !['expansionVessel', 'header', 'decoupler'].includes(kind);
+
 const quarterTurns = [0, 90, 180, 270] as const;
 
 /** Puts a piece with two ends on a pipe: it moves onto the pipe's line and turns so that its outlet looks the pipe's way. */
 export function insertOnPipe(drawing: Drawing, pieceId: string, { pipe, at }: FoundPipe): Drawing {
   const piece = drawing.equipment.find(({ id }) => id === pieceId);
-  if (!piece || piece.kind === 'expansionVessel') return drawing;
+  if (!piece || !goesOnPipe(piece.kind)) return drawing;
   const place = at.along.x === 0 ? { x: at.x, y: snap(at.y) } : { x: snap(at.x), y: at.y };
-  const isTee = piece.kind === 'tee';
+  const isTee = isPoint(piece.kind);
   const rotation = isTee
     ? piece.rotation
     : quarterTurns.find((turn) => looksAlong(portPlace({ ...piece, rotation: turn }, 'out'), at.along));

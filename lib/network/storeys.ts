@@ -2,7 +2,8 @@ import { v7 as newId } from 'uuid';
 import type { Drawing, Storey } from './drawing';
 
 const HEIGHT = 320;
-const USUAL_RISE_M = 4;
+/** From floor to floor, where no other is known. */
+export const USUAL_RISE_M = 4;
 
 /** The storey whose band holds a height on the sheet; above and below all bands, the nearest. Null without storeys. */
 export function storeyAt(drawing: Drawing, y: number): Storey | null {
@@ -40,10 +41,16 @@ export function addStorey(drawing: Drawing, where: 'above' | 'below'): Drawing {
   const elevations = storeys.map((it) => it.elevationM);
   const elevationM =
     storeys.length === 0 ? 0 : where === 'above' ? Math.max(...elevations) + USUAL_RISE_M : Math.min(...elevations) - USUAL_RISE_M;
+  const name = freeLevelName(drawing, storeys.length);
+  return { ...drawing, storeys: [...storeys, { id: newId(), name, elevationM, top, height: HEIGHT }] };
+}
+
+/** "Level 4", or the next number that no storey has. */
+export function freeLevelName({ storeys }: Drawing, from: number): string {
   const used = new Set(storeys.map((it) => it.name));
-  let number = storeys.length;
+  let number = from;
   while (used.has(`Level ${number}`)) number++;
-  return { ...drawing, storeys: [...storeys, { id: newId(), name: `Level ${number}`, elevationM, top, height: HEIGHT }] };
+  return `Level ${number}`;
 }
 
 export const isStoreyEmpty = (drawing: Drawing, storeyId: string): boolean =>
@@ -65,7 +72,36 @@ export function resizeStorey(drawing: Drawing, storeyId: string, height: number)
   return shiftAbove({ ...drawing, storeys }, storey.top, shift, storeyId);
 }
 
-function shiftAbove(drawing: Drawing, top: number, by: number, except?: string): Drawing {
+/**
+ * Changes places with the band above or below, with all that is drawn in both. Each keeps its name and its elevation: the
+ * order of the bands is how the sheet reads, not how high the storeys lie.
+ */
+export function moveStorey(drawing: Drawing, storeyId: string, way: 'up' | 'down'): Drawing {
+  const falling = [...drawing.storeys].sort((a, b) => a.top - b.top);
+  const at = falling.findIndex(({ id }) => id === storeyId);
+  const [upper, lower] = way === 'up' ? [falling[at - 1], falling[at]] : [falling[at], falling[at + 1]];
+  if (at < 0 || !upper || !lower) return drawing;
+  const shifts = new Map([
+    [lower.id, upper.top - lower.top],
+    [upper.id, lower.top + lower.height - upper.height - upper.top],
+  ]);
+  const bandOf = ({ y }: { y: number }) => [upper, lower].find(({ top, height }) => y >= top && y < top + height)?.id;
+  const shifted = <T extends { y: number }>(item: T, id: string | null | undefined): T => {
+    const by = id ? shifts.get(id) : undefined;
+    return by ? { ...item, y: item.y + by } : item;
+  };
+  return {
+    ...drawing,
+    storeys: drawing.storeys.map((it) => (shifts.has(it.id) ? { ...it, top: it.top + shifts.get(it.id)! } : it)),
+    equipment: drawing.equipment.map((piece) => shifted(piece, piece.storeyId)),
+    pipes: drawing.pipes.map((pipe) =>
+      pipe.bends.some(bandOf) ? { ...pipe, bends: pipe.bends.map((bend) => shifted(bend, bandOf(bend))) } : pipe,
+    ),
+  };
+}
+
+/** Moves what is drawn above a height down by `by` (up where it is negative), with the bands there. */
+export function shiftAbove(drawing: Drawing, top: number, by: number, except?: string): Drawing {
   const down = <T extends { y: number }>(item: T): T => (item.y < top ? { ...item, y: item.y + by } : item);
   return {
     ...drawing,

@@ -1,7 +1,7 @@
 import type { ChosenValve, KvPoint } from './drawing';
 
 /**
- * Generic balancing valves, DN15 to DN150, for a draft whose valve is not chosen yet. The data is our own and no
+ * Generic balancing valves, DN15 to DN400, for a draft whose valve is not chosen yet. The data is our own and no
  * maker's: fully open each has a loss coefficient of 9 on its nominal bore, so Kvs = 3600 A sqrt(2 · 10⁵ Pa / (1000 kg/m³ · 9)),
  * and with the handwheel at the part x of its turns Kv = Kvs · x (0.12 + 0.88 x^1.2), rounded to three digits. Replace it by the chart of
  * the valve that is bought.
@@ -34,6 +34,11 @@ const sizes: [boreMm: number, turns: number][] = [
   [100, 8],
   [125, 8],
   [150, 8],
+  [200, 12],
+  [250, 12],
+  [300, 12],
+  [350, 16],
+  [400, 16],
 ];
 
 const threeDigits = (value: number) => Number(value.toPrecision(3));

@@ -149,3 +149,26 @@ export function pumpWorking(flowLs: number, headM: number, densityKgM3: number):
     source: 'Head: the curve as typed, a smooth monotone line through its points; other speeds by the affinity laws.',
   };
 }
+
+/**
+ * Authority of a control valve: its drop fully open at design flow (L/s) over the differential across the branch that it controls, both at design
+ * flow. The differential is the one that the solved circuit has there.
+ */
+export function authorityWorking(kvs: number, designFlowLs: number, densityKgM3: number, authority: number): Working {
+  const flowM3h = designFlowLs * 3.6;
+  const valveKpa = (flowM3h / kvs) ** 2 * (densityKgM3 / 1000) * 100;
+  return {
+    title: 'Authority of the control valve',
+    formula: 'N = Δp valve / Δp branch, with Δp valve = (Q / Kvs)² · ρ / 1000 bar',
+    numbers: `(${digits(flowM3h)} / ${digits(kvs)})² · ${digits(densityKgM3)} / 1000 · 100 / ${digits(valveKpa / authority)}`,
+    inputs: [
+      { name: 'Design flow Q', value: `${digits(flowM3h)} m³/h` },
+      { name: 'Kvs of the valve, fully open', value: `${digits(kvs)} m³/h` },
+      { name: 'Density ρ', value: `${digits(densityKgM3)} kg/m³` },
+      { name: 'Δp valve, fully open', value: `${digits(valveKpa)} kPa` },
+      { name: 'Δp branch, out of the solved circuit', value: `${digits(valveKpa / authority)} kPa` },
+    ],
+    result: digits(authority),
+    source: 'Definition of valve authority; valve law of IEC 60534-2-1 for liquids without choking.',
+  };
+}

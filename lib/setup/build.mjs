@@ -22,10 +22,20 @@ export async function buildIfStale({ buildFolder, say }) {
   // A build needs no database and no secret, so it is told none.
   const { DATABASE_URL: _database, SMTP_URL: _mail, AUTH_SECRET: _secret, ...rest } = process.env;
   const env = { ...rest, NODE_ENV: /** @type {const} */ ('production'), NEXT_TELEMETRY_DISABLED: '1', NEXT_DIST_DIR: buildFolder };
+  await bundleWorkers(env);
   const built = await run(process.execPath, [nextProgram, 'build'], { cwd: root, env });
   if (/ENOSPC|No space left on device/.test(built.output)) throw new Error('No space left on device');
   if (built.code !== 0) throw new SetupFailure(`The application does not build:\n${built.output.trim()}`);
   writeFileSync(stampFile, hash);
+}
+
+/**
+ * Bundles what runs beside the pages into `public`, where the browser finds it under a name that stays; git ignores it.
+ * @param {NodeJS.ProcessEnv} env
+ */
+export async function bundleWorkers(env) {
+  const bundled = await run('npm', ['run', '--silent', 'build:workers'], { cwd: root, env });
+  if (bundled.code !== 0) throw new SetupFailure(`The workers do not build:\n${bundled.output.trim()}`);
 }
 
 /**

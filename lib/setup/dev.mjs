@@ -1,3 +1,4 @@
+import { bundleWorkers } from './build.mjs';
 import { inOneLifetime } from './lifetime.mjs';
 import { failWhenEnded, startNext, waitUntilUp } from './next-server.mjs';
 import { requireNode } from './packages.mjs';
@@ -9,6 +10,7 @@ await inOneLifetime(async (lifetime) => {
   requireNode();
   const settings = readSettings({ command: 'npm run dev', defaultPort: 4310 });
   const prepared = await prepare(settings, { database: 'evenhead_dev', mode: 'development' }, lifetime);
+  await bundleWorkers(prepared.env);
   const server = startNext({ mode: 'dev', host: settings.host, port: settings.port, env: prepared.env });
   lifetime.atEnd(server.stop);
   prepared.addServer(server.pid);

@@ -1,6 +1,7 @@
 import { join } from 'node:path';
 import { buildIfStale } from './build.mjs';
 import { requireChromium } from './chromium.mjs';
+import { startFileServer } from './file-server.mjs';
 import { startMailServer } from './mail-server.mjs';
 import { applicationEnv, startNext, waitUntilUp } from './next-server.mjs';
 import { freePort } from './ports.mjs';
@@ -19,14 +20,16 @@ export async function runEndToEnd({ throwAway, lifetime, addServer, say }) {
   const mailFolder = join(throwAway.folder, 'mail');
   const mail = await startMailServer(mailFolder);
   lifetime.atEnd(mail.stop);
+  const files = await startFileServer(join(throwAway.folder, 'files'));
+  lifetime.atEnd(files.stop);
 
   const port = await freePort();
   const address = `http://127.0.0.1:${port}`;
-  const told = { databaseUrl, smtpUrl: mail.url, authSecret: newSecrets().authSecret, publicUrl: address };
+  const told = { databaseUrl, smtpUrl: mail.url, files: files.store, authSecret: newSecrets().authSecret, publicUrl: address };
   const env = { ...applicationEnv({ ...told, mode: 'production' }), NEXT_DIST_DIR: testBuildFolder };
   const server = startNext({ mode: 'start', host: '127.0.0.1', port, env, logFile: join(reports, 'e2e-server.log') });
   lifetime.atEnd(server.stop);
   addServer(server.pid);
   await waitUntilUp({ url: `${address}/api/health`, server });
-  return runPlaywright({ BASE_URL: address, MAIL_FOLDER: mailFolder, DATABASE_URL: databaseUrl });
+  return runPlaywright({ BASE_URL: address, NEXT_DIST_DIR: testBuildFolder, MAIL_FOLDER: mailFolder, DATABASE_URL: databaseUrl });
 }

@@ -12,16 +12,17 @@ export const nextProgram = join(root, 'node_modules/next/dist/bin/next');
 
 /**
  * What the application is told. The variables of sign-in carry the names that its library wants.
- * @param {{ databaseUrl: string, smtpUrl: string, authSecret: string, publicUrl: string, mode: 'production' | 'development' }} told
+ * @param {{ databaseUrl: string, smtpUrl: string, files: Record<string, string>, authSecret: string, publicUrl: string, mode: 'production' | 'development' }} told
  * @returns {NodeJS.ProcessEnv}
  */
-export function applicationEnv({ databaseUrl, smtpUrl, authSecret, publicUrl, mode }) {
+export function applicationEnv({ databaseUrl, smtpUrl, files, authSecret, publicUrl, mode }) {
   return {
     ...process.env,
     NODE_ENV: mode,
     NEXT_TELEMETRY_DISABLED: '1',
     DATABASE_URL: databaseUrl,
     SMTP_URL: smtpUrl,
+    ...files,
     AUTH_SECRET: authSecret,
     PUBLIC_URL: publicUrl,
     NEXTAUTH_SECRET: authSecret,

@@ -1,6 +1,7 @@
 import { join } from 'node:path';
 import { openCluster } from './cluster.mjs';
 import { describe } from './failure.mjs';
+import { startFileServer } from './file-server.mjs';
 import { startMailServer } from './mail-server.mjs';
 import { migrate } from './migrate.mjs';
 import { applicationEnv } from './next-server.mjs';
@@ -46,7 +47,8 @@ export async function prepare(settings, { database, mode }, lifetime) {
   });
   const smtpUrl = settings.smtpUrl ?? (await openPrivateMail(folder, lifetime));
   const authSecret = settings.authSecret ?? secrets.authSecret;
-  const env = applicationEnv({ databaseUrl, smtpUrl, authSecret, publicUrl: settings.publicUrl, mode });
+  const files = settings.hasBucket ? {} : await openPrivateFiles(folder, lifetime);
+  const env = applicationEnv({ databaseUrl, smtpUrl, files, authSecret, publicUrl: settings.publicUrl, mode });
   return { folder, env, demo, addServer: run.addServer };
 }
 
@@ -76,4 +78,16 @@ async function openPrivateMail(folder, lifetime) {
   lifetime.atEnd(mail.stop);
   say(`no SMTP_URL: mail is kept in ${mailFolder}`);
   return mail.url;
+}
+
+/**
+ * @param {string} folder
+ * @param {Lifetime} lifetime
+ */
+async function openPrivateFiles(folder, lifetime) {
+  const filesFolder = join(folder, 'files');
+  const files = await startFileServer(filesFolder);
+  lifetime.atEnd(files.stop);
+  say(`no S3_BUCKET: photos and certificates are kept in ${filesFolder}`);
+  return files.store;
 }

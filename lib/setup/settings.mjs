@@ -1,6 +1,6 @@
 import { SetupFailure } from './failure.mjs';
 
-/** @typedef {{ command: string, host: string, port: number, address: string, publicUrl: string, databaseUrl?: string, smtpUrl?: string, authSecret?: string }} Settings */
+/** @typedef {{ command: string, host: string, port: number, address: string, publicUrl: string, databaseUrl?: string, smtpUrl?: string, hasBucket: boolean, authSecret?: string }} Settings */
 
 /**
  * What the environment says. Each variable that is set replaces what we would otherwise set up ourselves.
@@ -19,6 +19,8 @@ export function readSettings({ command, defaultPort, env = process.env }) {
     publicUrl: readUrl('PUBLIC_URL', env.PUBLIC_URL, ['http:', 'https:'])?.replace(/\/$/, '') ?? address,
     databaseUrl: readUrl('DATABASE_URL', env.DATABASE_URL, ['postgres:', 'postgresql:']),
     smtpUrl: readUrl('SMTP_URL', env.SMTP_URL, ['smtp:', 'smtps:']),
+    // The SDK reads the rest of it itself.
+    hasBucket: Boolean(env.S3_BUCKET),
     authSecret: readSecret(env.AUTH_SECRET),
   };
 }

@@ -24,6 +24,7 @@ math.createUnit({
   Kv: {},
   Cv: `${1 / CV_PER_KV} Kv`,
   turn: {},
+  percentOfFull: {},
 });
 
 interface Line {

@@ -53,6 +53,7 @@ const table = {
     { unit: 'Pa/m', expression: 'Pa/m', decimals: 0, typed: [] },
     { unit: 'ft/100 ft', expression: 'footOfWaterPer100Feet', decimals: 2, typed: [] },
   ],
+  speed: [{ unit: '%', expression: 'percentOfFull', decimals: 1, typed: ['percent'] }],
   setting: [{ unit: 'turns', expression: 'turn', decimals: 2, typed: ['turn', 't'] }],
 } as const satisfies Record<string, readonly UnitOfQuantity[]>;
 

@@ -52,6 +52,7 @@ const allowed: [importer: string, imported: string][] = [
   ['components', 'lib/client'],
   ['components', 'lib/network'],
   ['lib/network', 'lib/hydraulics'],
+  ['lib/network', 'lib/units'],
   ['lib/commissioning', 'lib/hydraulics'],
   ['lib/server', 'db'],
   ['lib/server', 'lib/hydraulics'],

@@ -1,3 +1,6 @@
+import { canvasSuite } from './canvas';
+import { generateSuite } from './generate';
+import { nothingLostSuite } from './nothing-lost';
 import { solverSuite } from './solver';
 import { visitsSuite } from './visits';
 
@@ -8,7 +11,7 @@ export interface Suite {
   [figure: string]: unknown;
 }
 
-const suites: Record<string, () => Promise<Suite>> = { solver: solverSuite, visits: visitsSuite };
+const suites: Record<string, () => Promise<Suite>> = { canvas: canvasSuite, generate: generateSuite, 'nothing-lost': nothingLostSuite, solver: solverSuite, visits: visitsSuite };
 
 async function main(words: string[]): Promise<void> {
   const isJson = words.includes('--json');

@@ -15,6 +15,12 @@ const kinds: EquipmentKind[] = [
   'strainer',
   'tee',
   'expansionVessel',
+  'dpController',
+  'flowLimiter',
+  'header',
+  'decoupler',
+  'flowStation',
+  'pressureStation',
 ];
 
 /** Drawings as a designer makes them: pieces put down anywhere, some joined; whatever refuses to be joined stays apart. */

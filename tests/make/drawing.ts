@@ -53,6 +53,24 @@ export const unit = (id: string, designFlowLs = 0.2): Equipment => ({
   balancingValve: valve(2.5),
 });
 
+export const decoupler = (id: string): Equipment => ({
+  ...at,
+  kind: 'decoupler',
+  id,
+  tag: id,
+  lengthM: 1,
+  boreMm: 52.5,
+  roughnessMm: 0.045,
+  minorK: 0,
+});
+export const isolator = (id: string, kv = 20): Equipment => ({ ...at, kind: 'isolatingValve', id, tag: id, kv, isClosed: false });
+
+/** A piece of the drawing with some fields changed. */
+export const change = (from: Drawing, id: string, fields: object): Drawing => ({
+  ...from,
+  equipment: from.equipment.map((piece) => (piece.id === id ? ({ ...piece, ...fields } as typeof piece) : piece)),
+});
+
 /** "P-1.out" is the outlet of P-1; "T-1.n" the upper side of tee T-1. */
 const end = (text: string): PipeEnd => {
   const [equipmentId, port] = text.split('.') as [string, Port];

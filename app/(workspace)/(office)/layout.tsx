@@ -17,6 +17,7 @@ export default async function OfficeLayout({ children }: { children: ReactNode }
         <nav aria-label="Pages" className="flex min-w-0 flex-1 items-stretch gap-5 overflow-x-auto">
           <NavLink href="/projects">Projects</NavLink>
           <NavLink href="/instruments">Instruments</NavLink>
+          {may(rolesInOrganization(person), 'draft.see') && <NavLink href="/catalogue">Catalogue</NavLink>}
           {may(rolesInOrganization(person), 'people.see') && <NavLink href="/people">People</NavLink>}
           <NavLink href="/activity">Activity</NavLink>
         </nav>

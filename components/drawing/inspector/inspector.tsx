@@ -1,11 +1,13 @@
 'use client';
 
 import type { ReactNode } from 'react';
-import type { DrawingPipe, Equipment, EquipmentKind, EquipmentOf } from '@/lib/network/drawing';
-import { kindNames } from '@/lib/network/drawing-faults';
+import { isPoint, type DrawingPipe, type Equipment, type EquipmentKind, type EquipmentOf } from '@/lib/network/drawing';
+import { kindNames } from '@/lib/network/fault';
 import { useCanvas, useDrawing } from '../editor-context';
 import { BalancingValveForm } from './balancing-valve-form';
 import { ControlValveForm } from './control-valve-form';
+import { ControllerForm } from './controller-form';
+import { FiguresForm } from './figures-form';
 import { LoopForm } from './loop-form';
 import { PieceResults } from './piece-results';
 import { PipeForm } from './pipe-form';
@@ -64,7 +66,7 @@ function OnePipe({ pipe }: { pipe: DrawingPipe }) {
 
 /** Many at once: their common fields, a group a kind. */
 function Many({ pieces, pipes }: { pieces: Equipment[]; pipes: DrawingPipe[] }) {
-  const kinds = [...new Set(pieces.map(({ kind }) => kind))].filter((kind) => kind !== 'tee' && kind !== 'expansionVessel');
+  const kinds = [...new Set(pieces.map(({ kind }) => kind))].filter((kind) => !isPoint(kind) && kind !== 'expansionVessel');
   const words = [
     pieces.length && `${pieces.length} ${pieces.length === 1 ? 'piece' : 'pieces'}`,
     pipes.length && `${pipes.length} ${pipes.length === 1 ? 'pipe' : 'pipes'}`,
@@ -116,7 +118,15 @@ function KindForm({ pieces }: { pieces: Equipment[] }): ReactNode {
     case 'isolatingValve':
     case 'strainer':
       return <SingleKvForm pieces={pieces as EquipmentOf<'checkValve' | 'isolatingValve' | 'strainer'>[]} />;
+    case 'dpController':
+      return <ControllerForm controllers={as('dpController')} />;
+    case 'flowLimiter':
+    case 'decoupler':
+    case 'flowStation':
+      return <FiguresForm pieces={pieces as EquipmentOf<'flowLimiter' | 'decoupler' | 'flowStation'>[]} />;
     case 'tee':
+    case 'header':
+    case 'pressureStation':
       return null;
   }
 }

@@ -5,6 +5,7 @@ import { drawingFluidSchema } from '@/lib/network/drawing';
 import { useDrawing, useEditor } from '../editor-context';
 import { CommitForm } from './commit-form';
 import { NewPipes } from './new-pipes';
+import { PipeLimitsForm } from './pipe-limits-form';
 import { CheckRow, NumberRow, QuantityRow, Section, SelectRow } from './rows';
 import { StoreyList } from './storey-list';
 import { useEdit } from './use-edit';
@@ -69,6 +70,7 @@ export function LoopForm() {
           />
         </Section>
       </CommitForm>
+      <PipeLimitsForm />
       <StoreyList />
       {canEdit && (
         <>

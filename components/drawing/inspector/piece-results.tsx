@@ -4,7 +4,7 @@ import { Deviation } from '@/components/ui/deviation';
 import { inherentRatio } from '@/lib/hydraulics/control-valve';
 import type { Equipment } from '@/lib/network/drawing';
 import type { PieceSolution } from '@/lib/network/drawing-figures';
-import { designPairWorking, pumpWorking, valveWorking, type Working } from '@/lib/network/working';
+import { authorityWorking, designPairWorking, pumpWorking, valveWorking, type Working } from '@/lib/network/working';
 import { verdictOf } from '../deviation-mark';
 import { useEditor, useResults } from '../editor-context';
 import { FigureRow, Section } from './rows';
@@ -74,7 +74,7 @@ export function PieceResults({ piece }: { piece: Equipment }) {
   );
 }
 
-function workingsOf(piece: Equipment, { flowLs, valve, parts, pump }: PieceSolution, densityKgM3: number): Working[] {
+function workingsOf(piece: Equipment, { flowLs, valve, parts, pump, authority }: PieceSolution, densityKgM3: number): Working[] {
   if (flowLs === null) return [];
   const balancing = valve
     ? [valveWorking('Balancing valve, drop at its balanced setting and design flow', valve.kv, valve.flowLs, densityKgM3)]
@@ -88,6 +88,9 @@ function workingsOf(piece: Equipment, { flowLs, valve, parts, pump }: PieceSolut
         ...(controlKv && parts.control ? [valveWorking('Control valve, drop', controlKv, flowLs, densityKgM3)] : []),
         ...(strainerKv && parts.strainer ? [valveWorking('Strainer, drop', strainerKv, flowLs, densityKgM3)] : []),
         ...balancing,
+        ...(authority !== null && controlValve?.kvs && designFlowLs
+          ? [authorityWorking(controlValve.kvs, designFlowLs, densityKgM3, authority)]
+          : []),
       ];
     }
     case 'balancingValve':
@@ -106,7 +109,17 @@ function workingsOf(piece: Equipment, { flowLs, valve, parts, pump }: PieceSolut
     case 'isolatingValve':
     case 'strainer':
       return piece.kv ? [valveWorking('Drop', piece.kv, flowLs, densityKgM3)] : [];
+    case 'flowStation': {
+      const kv = piece.lossKv ?? piece.signalKv;
+      return kv ? [valveWorking('Drop', kv, flowLs, densityKgM3)] : [];
+    }
+    // A controller stands where its set point asks for, a limiter's drop is what is left to it: neither is a formula of the flow.
+    case 'dpController':
+    case 'flowLimiter':
+    case 'decoupler':
     case 'tee':
+    case 'header':
+    case 'pressureStation':
     case 'expansionVessel':
       return [];
   }

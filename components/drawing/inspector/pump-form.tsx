@@ -5,6 +5,7 @@ import type { EquipmentOf } from '@/lib/network/drawing';
 import { useEditor } from '../editor-context';
 import { CommitForm } from './commit-form';
 import { PointTable } from './point-table';
+import { PumpChoice } from './pump-choice';
 import { CheckRow, NumberRow, Section } from './rows';
 import { useEdit } from './use-edit';
 
@@ -33,6 +34,7 @@ export function PumpForm({ pump }: { pump: Pump }) {
           <CheckRow name="hasNonReturn" label="Non-return at the pump" />
         </CommitForm>
       </Section>
+      <PumpChoice pump={pump} disabled={!canEdit} onChoose={(curves) => editPieces([pump], (piece) => ({ ...piece, ...curves }))} />
       <Section title="Curve at full speed, three points or more">
         <PointTable
           label="Pump curve"
@@ -60,6 +62,18 @@ export function PumpForm({ pump }: { pump: Pump }) {
               efficiency: (points as Pump['efficiency']).map((point) => ({ ...point, fraction: Math.min(1, Math.max(0, point.fraction)) })),
             }))
           }
+        />
+      </Section>
+      <Section title="Suction head required at full speed, if known">
+        <PointTable
+          label="Suction head required"
+          columns={[
+            { key: 'flowLs', label: 'Flow', quantity: 'flow' },
+            { key: 'headM', label: 'Head', quantity: 'head' },
+          ]}
+          points={pump.suctionHeadRequired ?? []}
+          disabled={!canEdit}
+          onCommit={(points) => editPieces([pump], (piece) => ({ ...piece, suctionHeadRequired: points as Pump['suctionHeadRequired'] }))}
         />
       </Section>
     </>

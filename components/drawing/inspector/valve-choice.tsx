@@ -1,11 +1,15 @@
 'use client';
 
+import { useQuery } from '@tanstack/react-query';
 import { useId, useState } from 'react';
 import { inputClass } from '@/components/ui/field';
 import { QuantityField } from '@/components/ui/quantity-field';
 import { classNames } from '@/components/ui/class-names';
+import { copiedValve, offeredValves } from '@/lib/catalogue/chosen-entries';
+import { catalogueQuery } from '@/lib/client/catalogue';
 import type { ChosenValve } from '@/lib/network/drawing';
-import { chosenValve, genericValves, genericValveSource } from '@/lib/network/valve-families';
+import { same } from '@/lib/network/merge-drawings';
+import { genericValves, genericValveSource } from '@/lib/network/valve-families';
 import { PointTable } from './point-table';
 import { rowClass } from './rows';
 
@@ -19,16 +23,21 @@ interface ValveChoiceProps {
 
 const OWN = 'own';
 
-/** Which balancing valve: a generic one or one's own table of settings and Kv, where it stands, and whether it stays so. */
+/**
+ * Which balancing valve: one of the organisation's catalogue, a generic one, or one's own table of settings and Kv; where it stands, and
+ * whether it stays so. The figures are copied into the drawing, which keeps them when the catalogue changes.
+ */
 export function ValveChoice({ valve, isMixed, disabled, onCommit }: ValveChoiceProps) {
   const id = useId();
+  const families = useQuery(catalogueQuery).data?.valveFamilies ?? [];
   const generic = genericValves.find(({ name }) => name === valve.name);
+  const offered = offeredValves(families).find(({ name }) => name === valve.name);
+  const isAsOffered = offered !== undefined && same(offered.kvTable, valve.kvTable);
   const first = valve.kvTable[0]?.setting;
   const last = valve.kvTable.at(-1)?.setting;
   const choose = (name: string) => {
-    const chosen = genericValves.find((it) => it.name === name);
-    if (chosen) onCommit({ name: chosen.name, kvTable: chosen.kvTable, settingTurns: chosenValve(chosen).settingTurns });
-    else onCommit({ name: 'Own valve' });
+    const chosen = offeredValves(families).find((it) => it.name === name) ?? genericValves.find((it) => it.name === name);
+    onCommit(chosen ? copiedValve(chosen) : { name: 'Own valve', stepTurns: null });
   };
   return (
     <>
@@ -38,22 +47,39 @@ export function ValveChoice({ valve, isMixed, disabled, onCommit }: ValveChoiceP
           id={`${id}-valve`}
           disabled={disabled}
           className={classNames(inputClass, 'h-8 px-1.5 pointer-coarse:h-11')}
-          value={isMixed ? '' : generic ? generic.name : valve.name ? OWN : ''}
+          value={isMixed ? '' : generic || isAsOffered ? valve.name : valve.name ? OWN : ''}
           onChange={(event) => choose(event.target.value)}
         >
           <option value="" disabled>
             {isMixed ? 'several' : 'choose…'}
           </option>
-          {genericValves.map(({ name, nominal, kvs }) => (
-            <option key={name} value={name}>
-              Generic {nominal}, Kvs {kvs}
-            </option>
+          {families.map((family) => (
+            <optgroup key={family.id} label={family.name}>
+              {offeredValves([family]).map(({ name, nominal, kvs }) => (
+                <option key={name} value={name}>
+                  {nominal}, Kvs {kvs}
+                </option>
+              ))}
+            </optgroup>
           ))}
+          <optgroup label="Generic, Evenhead’s own data">
+            {genericValves.map(({ name, nominal, kvs }) => (
+              <option key={name} value={name}>
+                Generic {nominal}, Kvs {kvs}
+              </option>
+            ))}
+          </optgroup>
           <option value={OWN}>Own table</option>
         </select>
       </div>
+      {!isMixed && isAsOffered && <p className="text-quiet pt-1 text-xs">{valve.name}, copied from the catalogue.</p>}
+      {!isMixed && offered && !isAsOffered && (
+        <p className="text-brass pt-1 text-xs">
+          The catalogue has other figures for this valve now. The drawing keeps those below until you choose it again.
+        </p>
+      )}
       {!isMixed && generic && <p className="text-quiet pt-1 text-xs">{genericValveSource}</p>}
-      {!isMixed && !generic && valve.name !== '' && (
+      {!isMixed && !generic && !isAsOffered && valve.name !== '' && (
         <>
           <div className={rowClass}>
             <label htmlFor={`${id}-name`}>Name</label>
@@ -72,6 +98,9 @@ export function ValveChoice({ valve, isMixed, disabled, onCommit }: ValveChoiceP
             columns={[
               { key: 'setting', label: 'Setting', quantity: 'setting' },
               { key: 'kv', label: 'Kv', quantity: 'valveCoefficient' },
+              ...(valve.kvTable.some(({ measuringKv }) => measuringKv !== undefined)
+                ? [{ key: 'measuringKv', label: 'Measuring', quantity: 'valveCoefficient' as const }]
+                : []),
             ]}
             points={valve.kvTable}
             disabled={disabled}

@@ -1,5 +1,5 @@
 import { metresPerKpa } from '@/lib/hydraulics/links/law';
-import { loopSolver } from '@/lib/hydraulics/loop-matrix';
+import { correctionOfAll } from '@/lib/hydraulics/correction-of-all';
 import type { PreparedNetwork } from '@/lib/hydraulics/prepare';
 import type { Solution } from '@/lib/hydraulics/solve';
 import type { Unknown } from './unknowns';
@@ -14,8 +14,8 @@ export interface LinkAnswers {
 
 /**
  * Answers of the watched links (document positions) to every unknown that acts, by the implicit-function theorem: at a
- * solution the heads round all loops are zero, so a head d added in a chain moves the loops' flows by -M⁻¹ L d, M being the matrix of
- * the last correction. One factorisation serves all; each unknown is one solve with it. Differential pressure controllers that throttle
+ * solution the heads round all loops are zero, so a head added in a chain moves the flows as the iteration would correct
+ * it. One factorisation serves all; each unknown is one solve with it. Differential pressure controllers that throttle
  * keep their set point. A shut link answers with zero.
  */
 export function linkAnswers(
@@ -26,12 +26,11 @@ export function linkAnswers(
   watched: number[],
 ): LinkAnswers[] {
   const { chains, numberOf, fluid } = network;
-  const { state, loops, control } = solution;
+  const { state, control } = solution;
   const kpaPerM = 1 / metresPerKpa(fluid.densityKgM3);
-  const solver = loopSolver(loops, chains.count);
-  solver.assemble(state.chainSlope);
+  const loops = correctionOfAll(network.document.nodes.length, chains);
+  loops.assemble(state.chainSlope);
   const signOf = signsInChains(network);
-  const loopsOf = loopsThroughChains(solution, chains.count);
 
   const answers = watched.map((at): LinkAnswers => {
     const i = numberOf[at];
@@ -43,14 +42,8 @@ export function linkAnswers(
       dropPerUnknown: column(),
     };
   });
-  const seen = loopsThroughLinks(
-    watched.map((at) => numberOf[at]),
-    chains.chainOf,
-    loopsOf,
-    signOf,
-  );
-  const heads = new Float64Array(loops.count);
-  const step = new Float64Array(loops.count);
+  const heads = new Float64Array(chains.count);
+  const step = new Float64Array(chains.count);
   const { linkLoss } = state;
   const lossBefore = linkLoss.slice();
 
@@ -77,18 +70,18 @@ export function linkAnswers(
       const c = chains.chainOf[i];
       if (c < 0) continue;
       isMoved = true;
-      for (const { loop, sign } of loopsOf[c]) heads[loop] += sign * signOf[i] * added;
+      heads[c] += signOf[i] * added;
     }
     if (isMoved) {
-      solver.solve(heads, step);
-      for (let l = 0; l < step.length; l++) step[l] = -step[l];
-      control?.correct(state, loops, solver, step);
+      loops.sumHeads(heads);
+      loops.correct(step);
+      control?.correct(state, loops, step);
     }
-    for (let w = 0; w < seen.count; w++) {
-      let flow = 0;
-      if (isMoved) for (let p = seen.start[w]; p < seen.start[w + 1]; p++) flow += seen.sign[p] * step[seen.loop[p]];
-      const i = seen.number[w];
+    for (let w = 0; w < watched.length; w++) {
+      const i = numberOf[watched[w]];
       if (i < 0) continue;
+      const c = chains.chainOf[i];
+      const flow = isMoved && c >= 0 ? signOf[i] * step[c] : 0;
       answers[w].flowPerUnknown[j] = flow;
       answers[w].dropPerUnknown[j] = (state.linkSlope[i] * flow + linkLoss[i] - lossBefore[i]) * kpaPerM;
     }
@@ -107,32 +100,4 @@ function signsInChains({ chains, from }: PreparedNetwork): Int8Array {
   const signOf = new Int8Array(from.length);
   chains.member.forEach((i, p) => (signOf[i] = chains.sign[p]));
   return signOf;
-}
-
-function loopsThroughChains({ loops }: Solution, chainCount: number): { loop: number; sign: number }[][] {
-  const through: { loop: number; sign: number }[][] = Array.from({ length: chainCount }, () => []);
-  for (let l = 0; l < loops.count; l++)
-    for (let p = loops.start[l]; p < loops.start[l + 1]; p++) through[loops.chain[p]].push({ loop: l, sign: loops.sign[p] });
-  return through;
-}
-
-/** Loops through each watched link in plain arrays: they are gone through once for every unknown. */
-function loopsThroughLinks(numbers: number[], chainOf: Int32Array, loopsOf: { loop: number; sign: number }[][], signOf: Int8Array) {
-  const start = [0];
-  const loop: number[] = [];
-  const sign: number[] = [];
-  for (const i of numbers) {
-    for (const through of i < 0 || chainOf[i] < 0 ? [] : loopsOf[chainOf[i]]) {
-      loop.push(through.loop);
-      sign.push(through.sign * signOf[i]);
-    }
-    start.push(loop.length);
-  }
-  return {
-    count: numbers.length,
-    number: Int32Array.from(numbers),
-    start: Int32Array.from(start),
-    loop: Int32Array.from(loop),
-    sign: Int8Array.from(sign),
-  };
 }

@@ -1,5 +1,5 @@
 import { GrowingList } from '../growing-list';
-import { adjacencyOf } from './adjacency';
+import { type Adjacency, adjacencyOf } from './adjacency';
 
 /**
  * Links in series share one flow, so the loops are found and corrected on chains: runs of links between junctions. Links that lead
@@ -16,9 +16,14 @@ export interface Chains {
   to: Int32Array;
 }
 
-export function chainsOf(nodeCount: number, from: Int32Array, to: Int32Array): Chains {
+export function chainsOf(
+  nodeCount: number,
+  from: Int32Array,
+  to: Int32Array,
+  adjacency: Adjacency = adjacencyOf(nodeCount, from, to),
+): Chains {
   const linkCount = from.length;
-  const { start: first, link } = adjacencyOf(nodeCount, from, to);
+  const { start: first, link } = adjacency;
   const degree = new Int32Array(nodeCount);
   for (let v = 0; v < nodeCount; v++) degree[v] = first[v + 1] - first[v];
   const used = cutDeadEnds(degree, first, link, from, to);

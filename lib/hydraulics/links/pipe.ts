@@ -1,5 +1,5 @@
 import type { FluidProperties } from '../fluids';
-import { friction, frictionOf } from '../friction';
+import { friction, frictionOf, LAMINAR_RE, TURBULENT_RE } from '../friction';
 import type { PipeLink } from '../types';
 import { GRAVITY_MS2, type LinkBatch, type LinkLaw } from './law';
 
@@ -18,7 +18,10 @@ class PipeBatch implements LinkBatch {
   private readonly lengthInBores: Float64Array;
   private readonly roughness: Float64Array;
   private readonly minorK: Float64Array;
+  /** Of the last turbulent flow: what `frictionOf` left for the next, its logarithmic slope and the Reynolds number; guess 0 where there is none. */
   private readonly guess: Float64Array;
+  private readonly logSlope: Float64Array;
+  private readonly reynoldsBefore: Float64Array;
 
   constructor(
     links: PipeLink[],
@@ -32,6 +35,8 @@ class PipeBatch implements LinkBatch {
     this.roughness = new Float64Array(count);
     this.minorK = new Float64Array(count);
     this.guess = new Float64Array(count);
+    this.logSlope = new Float64Array(count);
+    this.reynoldsBefore = new Float64Array(count);
     for (let k = 0; k < count; k++) {
       const { boreMm, lengthM, roughnessMm, minorK } = links[k];
       this.perReynolds[k] = reynoldsPerLs(boreMm, fluid);
@@ -43,22 +48,26 @@ class PipeBatch implements LinkBatch {
   }
 
   evaluate(flow: Float64Array, loss: Float64Array, slope: Float64Array, a: number, b: number): void {
-    const { first, perReynolds, velocityHead, lengthInBores, roughness, minorK, guess } = this;
+    const { first, perReynolds, velocityHead, lengthInBores, roughness, minorK, guess, logSlope, reynoldsBefore } = this;
     for (let i = a; i < b; i++) {
       const k = i - first;
       const q = flow[i];
       const magnitude = Math.abs(q);
       const minor = velocityHead[k] * minorK[k] * magnitude;
       const reynolds = perReynolds[k] * magnitude;
-      if (reynolds < 2000) {
+      if (reynolds < LAMINAR_RE) {
         // f/Re stays finite at rest: a pipe keeps its laminar slope there.
         const laminar = ((64 * lengthInBores[k]) / perReynolds[k]) * velocityHead[k];
         loss[i] = (laminar + minor) * q;
         slope[i] = laminar + 2 * minor;
         continue;
       }
-      frictionOf(reynolds, roughness[k], guess[k]);
+      // The guess goes with f to the power -1/2: along its slope it comes so near that one step reaches rounding.
+      const risen = (2 * (reynolds - reynoldsBefore[k])) / (reynolds + reynoldsBefore[k]);
+      frictionOf(reynolds, roughness[k], guess[k] * (1 - 0.5 * logSlope[k] * risen));
       guess[k] = friction.guess;
+      logSlope[k] = reynolds >= TURBULENT_RE ? friction.logSlope : 0;
+      reynoldsBefore[k] = reynolds;
       const perFlow = velocityHead[k] * lengthInBores[k] * friction.factor * magnitude;
       loss[i] = (perFlow + minor) * q;
       slope[i] = perFlow * (2 + friction.logSlope) + 2 * minor;

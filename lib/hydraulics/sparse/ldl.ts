@@ -1,6 +1,9 @@
 import { GrowingList } from '../growing-list';
 import { minimumDegree, type Pattern } from './minimum-degree';
 
+/** Entries of factors, and multiplications to make them, beyond which they cost more than they save. */
+export const MOST_FILL = 8_000_000;
+export const MOST_WORK = 600_000_000;
 /** Fill over entries up to which the order given is kept. */
 const GOOD_FILL = 1.25;
 
@@ -26,21 +29,25 @@ export class SparseLdl {
   private readonly pathStart: Int32Array;
   private readonly path: Int32Array;
   private readonly lower: Float64Array;
-  private readonly pivot: Float64Array;
+  /** One over each pivot. */
+  private readonly inverse: Float64Array;
   private readonly row: Float64Array;
 
-  /** Null where L would have more than `mostFill` entries or take more than `mostWork` multiplications. */
+  /** In the order of least degree. Null where L would have more than `mostFill` entries or take more than `mostWork` multiplications. */
   static of(pattern: Pattern, mostFill: number, mostWork: number): SparseLdl | null {
-    // Loops come from the ends of the network inwards, which for a tree of ladders is already an order without fill.
-    const entries = pattern.index.length / 2;
-    const asGiven = new SparseLdl(
-      pattern,
-      Int32Array.from({ length: pattern.size }, (_, k) => k),
-      GOOD_FILL * entries,
-    );
-    if (asGiven.fill <= GOOD_FILL * entries) return asGiven;
     const factors = new SparseLdl(pattern, minimumDegree(pattern), mostFill);
     return factors.fill > mostFill || factors.work() > mostWork ? null : factors;
+  }
+
+  /** In the order given. Null where L would have more than `GOOD_FILL` times the entries of the matrix. */
+  static inOrder(pattern: Pattern): SparseLdl | null {
+    const mostFill = (GOOD_FILL * pattern.index.length) / 2;
+    const factors = new SparseLdl(
+      pattern,
+      Int32Array.from({ length: pattern.size }, (_, k) => k),
+      mostFill,
+    );
+    return factors.fill > mostFill ? null : factors;
   }
 
   private constructor(pattern: Pattern, order: Int32Array, mostFill: number) {
@@ -53,33 +60,38 @@ export class SparseLdl {
     this.diagonal = new Float64Array(n);
     this.value = new Float64Array(this.rowColumn.length);
 
-    // Row k of L is what the elimination tree reaches from the entries of row k (J. Liu 1990).
+    // Row k of L is what the elimination tree reaches from the entries of row k (J. Liu 1990), each place after those below it.
     const parent = new Int32Array(n).fill(-1);
     const flag = new Int32Array(n);
     const columnCount = new Int32Array(n);
+    const climb = new Int32Array(n);
+    const reached = new Int32Array(n);
     const path = new GrowingList(4 * n);
     this.pathStart = new Int32Array(n + 1);
     for (let k = 0; k < n && path.length <= mostFill; k++) {
       flag[k] = k;
+      let top = n;
       for (let p = this.rowStart[k]; p < this.rowStart[k + 1]; p++) {
+        let length = 0;
         for (let i = this.rowColumn[p]; flag[i] !== k; i = parent[i]) {
           if (parent[i] === -1) parent[i] = k;
           flag[i] = k;
           columnCount[i]++;
-          path.push(i);
+          climb[length++] = i;
         }
+        while (length > 0) reached[--top] = climb[--length];
       }
+      while (top < n) path.push(reached[top++]);
       this.pathStart[k + 1] = path.length;
     }
     this.path = path.toArray();
-    for (let k = 0; k < n; k++) this.path.subarray(this.pathStart[k], this.pathStart[k + 1]).sort();
     this.columnStart = new Int32Array(n + 1);
     for (let i = 0; i < n; i++) this.columnStart[i + 1] = this.columnStart[i] + columnCount[i];
     this.fill = path.length;
     this.columnRow = new Int32Array(this.fill);
     this.lower = new Float64Array(this.fill);
     this.filled = new Int32Array(n);
-    this.pivot = new Float64Array(n);
+    this.inverse = new Float64Array(n);
     this.row = new Float64Array(n);
   }
 
@@ -98,7 +110,8 @@ export class SparseLdl {
   }
 
   factorize(): void {
-    const { size, order, diagonal, value, rowStart, rowColumn, columnStart, columnRow, filled, pathStart, path, lower, pivot, row } = this;
+    const { size, order, diagonal, value, rowStart, rowColumn, columnStart, columnRow, filled, pathStart, path, lower, inverse, row } =
+      this;
     for (let k = 0; k < size; k++) {
       const own = diagonal[order[k]];
       let d = own;
@@ -110,27 +123,27 @@ export class SparseLdl {
         row[i] = 0;
         const end = filled[i];
         for (let p = columnStart[i]; p < end; p++) row[columnRow[p]] -= lower[p] * y;
-        const l = y / pivot[i];
+        const l = y * inverse[i];
         d -= l * y;
         columnRow[end] = k;
         lower[end] = l;
         filled[i] = end + 1;
       }
       // Rounding can eat a pivot where walls meet near-frictionless loops; the step then only grows less exact.
-      pivot[k] = d > own * 1e-14 ? d : own * 1e-14 + 1e-300;
+      inverse[k] = 1 / (d > own * 1e-14 ? d : own * 1e-14 + 1e-300);
     }
   }
 
   /** Solves M x = b with the last factors; x may be b. */
   solve(b: Float64Array, x: Float64Array): void {
-    const { size, order, columnStart, columnRow, lower, pivot, row } = this;
+    const { size, order, columnStart, columnRow, lower, inverse, row } = this;
     for (let k = 0; k < size; k++) row[k] = b[order[k]];
     for (let k = 0; k < size; k++) {
       const y = row[k];
       for (let p = columnStart[k]; p < columnStart[k + 1]; p++) row[columnRow[p]] -= lower[p] * y;
     }
     for (let k = size - 1; k >= 0; k--) {
-      let y = row[k] / pivot[k];
+      let y = row[k] * inverse[k];
       for (let p = columnStart[k]; p < columnStart[k + 1]; p++) y -= lower[p] * row[columnRow[p]];
       row[k] = y;
     }

@@ -12,6 +12,7 @@ export interface Pattern {
  * An order of elimination that keeps a Cholesky factor sparse: at each step the unknown that is joined to the fewest others goes
  * first. Eliminating it joins all its neighbours; that clique is kept as one element, not edge by edge, and degrees are
  * bounded from the elements' sizes (P. Amestoy, T. Davis, I. Duff, SIAM J. Matrix Anal. Appl. 1996, 17(4), 886; without supervariables).
+ * What is absorbed comes right before what absorbs it (a postorder, which changes no fill), so that a factor is worked through memory in order.
  */
 export function minimumDegree(pattern: Pattern): Int32Array {
   return new Elimination(pattern).run();
@@ -28,7 +29,8 @@ class Elimination {
   private readonly members: GrowingList;
   private readonly memberStart: Int32Array;
   private readonly memberEnd: Int32Array;
-  private readonly absorbed: Uint8Array;
+  /** The element that has absorbed each, or -1. */
+  private readonly absorber: Int32Array;
   private readonly done: Uint8Array;
   private readonly mark: Int32Array;
   private readonly seen: Int32Array;
@@ -45,7 +47,7 @@ class Elimination {
     this.members = new GrowingList(2 * index.length + 16);
     this.memberStart = new Int32Array(size);
     this.memberEnd = new Int32Array(size);
-    this.absorbed = new Uint8Array(size);
+    this.absorber = new Int32Array(size).fill(-1);
     this.done = new Uint8Array(size);
     this.mark = new Int32Array(size).fill(-1);
     this.seen = new Int32Array(size).fill(-1);
@@ -72,12 +74,33 @@ class Elimination {
         buckets.move(j, Math.min(degree, size - k - 2));
       }
     }
-    return order;
+    return this.postorder(order);
+  }
+
+  /** Each subtree of absorptions in one piece, its root last. */
+  private postorder(order: Int32Array): Int32Array {
+    const { size, absorber } = this;
+    const subtree = new Int32Array(size).fill(1);
+    for (let k = 0; k < size; k++) if (absorber[order[k]] >= 0) subtree[absorber[order[k]]] += subtree[order[k]];
+    const sorted = new Int32Array(size);
+    // Where the next child of each goes, and the next root, from the end backwards.
+    const end = new Int32Array(size);
+    let rootEnd = size;
+    for (let k = size - 1; k >= 0; k--) {
+      const v = order[k];
+      const above = absorber[v];
+      const last = (above < 0 ? rootEnd : end[above]) - 1;
+      sorted[last] = v;
+      end[v] = last;
+      if (above < 0) rootEnd = last + 1 - subtree[v];
+      else end[above] = last + 1 - subtree[v];
+    }
+    return sorted;
   }
 
   /** The new element: all that the pivot is joined to, directly or through elements, which it absorbs. */
   private gatherElement(pivot: number, k: number): void {
-    const { list, start, elementCount, length, members, memberStart, memberEnd, absorbed, done, mark } = this;
+    const { list, start, elementCount, length, members, memberStart, memberEnd, absorber, done, mark } = this;
     done[pivot] = 1;
     mark[pivot] = k;
     memberStart[pivot] = members.length;
@@ -88,8 +111,8 @@ class Elimination {
         if (!done[each] && mark[each] !== k) this.join(each, k);
         continue;
       }
-      if (absorbed[each]) continue;
-      absorbed[each] = 1;
+      if (absorber[each] >= 0) continue;
+      absorber[each] = pivot;
       for (let m = memberStart[each]; m < memberEnd[each]; m++) {
         const j = members.at(m);
         if (!done[j] && mark[j] !== k) this.join(j, k);
@@ -105,12 +128,12 @@ class Elimination {
 
   /** Of every element that meets the new one: how much of it lies outside. */
   private measureOverlap(pivot: number, k: number): void {
-    const { list, start, elementCount, members, memberStart, memberEnd, absorbed, seen, outside } = this;
+    const { list, start, elementCount, members, memberStart, memberEnd, absorber, seen, outside } = this;
     for (let m = memberStart[pivot]; m < memberEnd[pivot]; m++) {
       const j = members.at(m);
       for (let p = start[j]; p < start[j] + elementCount[j]; p++) {
         const e = list[p];
-        if (absorbed[e]) continue;
+        if (absorber[e] >= 0) continue;
         if (seen[e] !== k) {
           seen[e] = k;
           outside[e] = memberEnd[e] - memberStart[e];
@@ -122,15 +145,15 @@ class Elimination {
 
   /** Puts the new element into j's list in place of all that it covers; answers how much j is joined to outside it. */
   private replace(j: number, pivot: number, k: number): number {
-    const { list, start, elementCount, length, absorbed, done, mark, outside, scratch } = this;
+    const { list, start, elementCount, length, absorber, done, mark, outside, scratch } = this;
     const first = start[j];
     let kept = 0;
     let beyond = 0;
     for (let p = first; p < first + elementCount[j]; p++) {
       const e = list[p];
-      if (absorbed[e]) continue;
+      if (absorber[e] >= 0) continue;
       if (outside[e] <= 0) {
-        absorbed[e] = 1;
+        absorber[e] = pivot;
         continue;
       }
       beyond += outside[e];

@@ -31,8 +31,13 @@ export const generateOptionsSchema = z.object({
   storeyHeightM: z.number().positive().max(50),
   /** m in the plant room from the pump to the first riser, and from riser to riser. */
   riserSpacingM: z.number().positive().max(500),
+  /** A storey with more terminals on one riser is served by as many equal branches as keep each to this. */
+  mostOnBranch: z.number().int().min(2).max(100),
+  /** A balancing valve in the return of every branch, and of every riser where there are several. */
   hasBranchValves: z.boolean(),
   hasMainValve: z.boolean(),
+  /** Drop of the chiller or boiler at design flow. */
+  sourceDropKpa: z.number().positive().max(1000),
   pipeSeries: z.string().max(60),
   maxVelocityMs: z.number().positive().max(10),
   maxGradientPaM: z.number().positive().max(5000),
@@ -41,3 +46,21 @@ export const generateOptionsSchema = z.object({
 });
 
 export type GenerateOptions = z.infer<typeof generateOptionsSchema>;
+export type ReturnPiping = GenerateOptions['returnPiping'];
+
+/** What the options begin with; the figures are common practice, no source. */
+export const usualGenerateOptions: GenerateOptions = {
+  returnPiping: 'direct',
+  terminalSpacingM: 4.5,
+  runOutM: 1.5,
+  storeyHeightM: 4,
+  riserSpacingM: 15,
+  mostOnBranch: 20,
+  hasBranchValves: true,
+  hasMainValve: true,
+  sourceDropKpa: 30,
+  pipeSeries: 'steel-en10255-medium',
+  maxVelocityMs: 1.2,
+  maxGradientPaM: 250,
+  minReadingKpa: 3,
+};

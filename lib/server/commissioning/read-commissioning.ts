@@ -2,6 +2,7 @@ import { db } from '@/db/knex';
 import type { CommissioningBody, Reading } from '@/lib/api/commissioning';
 import { defaultTolerances } from '@/lib/api/tolerances';
 import { shutOffDropKpa } from '@/lib/commissioning/shut-off';
+import { inHandOrder } from '@/lib/commissioning/walking-order';
 import type { NetworkDocument } from '@/lib/hydraulics/types';
 import type { Access } from '../auth/authorize';
 import { listInstruments } from '../instruments/list-instruments';
@@ -9,7 +10,7 @@ import { bandOf, stripsOf } from '../loops/loop-strips';
 import { notFound } from '../problem';
 import { readTolerances } from '../projects/read-tolerances';
 import { entriesOf, stationsOf, type Entry } from '../reports/measured-rows';
-import { densityOf } from './loop-fluid';
+import { loopFluid } from './loop-fluid';
 import { readRounds } from './read-rounds';
 
 /** All that the tablet needs for one loop: the newest revision's stations, every round and entry, the meters at hand. */
@@ -21,21 +22,23 @@ export async function readCommissioning({ person }: Access, loopId: string): Pro
     .where({ organization_id: organizationId, loop_id: loopId })
     .orderBy('number', 'desc')
     .first({ id: 'id', number: 'number', document: 'network_document' });
-  const [tolerances, stations, rounds, entries, instruments, strips] = await Promise.all([
+  const [tolerances, stations, rounds, entries, instruments, strips, order] = await Promise.all([
     readTolerances(organizationId, loop.project_id),
     revision ? stationsOf(db(), organizationId, revision.id) : [],
     readRounds(db(), organizationId, { 'rounds.loop_id': loopId }),
     entriesOf(db(), organizationId, { 'stations.loop_id': loopId }),
     listInstruments(organizationId),
     stripsOf(organizationId, [loopId]),
+    db()('station_orders').where({ organization_id: organizationId, loop_id: loopId }).select('station_id', 'position'),
   ]);
-  const densityKgM3 = revision ? densityOf(revision.document.fluid) : null;
+  const fluid = revision ? loopFluid(revision.document.fluid) : null;
   return {
     revision: revision ? { id: revision.id, number: revision.number } : null,
-    densityKgM3,
-    pumpShutOffKpa: revision && densityKgM3 ? shutOffDropKpa(revision.document.links, densityKgM3) : null,
+    densityKgM3: fluid?.densityKgM3 ?? null,
+    specificHeatKJKgK: fluid?.specificHeatKJKgK ?? null,
+    pumpShutOffKpa: revision && fluid ? shutOffDropKpa(revision.document.links, fluid.densityKgM3) : null,
     tolerances: tolerances.length ? tolerances : defaultTolerances,
-    stations,
+    stations: inHandOrder(stations, new Map(order.map((row) => [row.station_id, row.position]))),
     rounds,
     readings: entries.map(readingOf),
     instruments,

@@ -16,6 +16,7 @@ export async function readRounds(
       id: 'rounds.id',
       number: 'rounds.number',
       purpose: 'rounds.purpose',
+      openChecksReason: 'rounds.open_checks_reason',
       revisionNumber: 'revisions.number',
       startedBy: 'people.name',
       startedAt: 'rounds.started_at',

@@ -1,13 +1,15 @@
 import type { Knex } from 'knex';
 import type { InstrumentKind, RecordReading } from '@/lib/api/commissioning';
-import type { StationKind, ToleranceRule } from '@/lib/api/projects';
-import { defaultTolerances } from '@/lib/api/tolerances';
+import type { StationKind, StationRank, ToleranceRule } from '@/lib/api/projects';
+import { bandOf } from '@/lib/api/tolerances';
 import { judgeReading, type Judgement } from '@/lib/commissioning/judge-reading';
+import { measuredOf } from '@/lib/commissioning/measured-of';
+import { readingMethods } from '@/lib/commissioning/reading-methods';
 import type { FluidSpecification } from '@/lib/hydraulics/fluids';
 import type { KvPoint } from '@/lib/network/drawing';
 import { notFound, Problem } from '../problem';
 import { readTolerances } from '../projects/read-tolerances';
-import { densityOf } from './loop-fluid';
+import { loopFluid } from './loop-fluid';
 
 export interface RoundContext {
   loopId: string;
@@ -15,7 +17,7 @@ export interface RoundContext {
   number: number;
   isClosed: boolean;
   revisionId: string;
-  densityKgM3: number;
+  fluid: { densityKgM3: number; specificHeatKJKgK: number };
   tolerances: ToleranceRule[];
 }
 
@@ -24,11 +26,16 @@ interface StationContext {
   kind: StationKind;
   designFlowLs: number;
   kvTable: KvPoint[] | null;
+  rank: StationRank;
+  coilDropKpa: number | null;
+  pumpCurve: { flowLs: number; headM: number }[] | null;
 }
 
 interface InstrumentContext {
   accuracyPercent: number;
   accuracyAbsolute: number;
+  rangeLow: number | null;
+  rangeHigh: number | null;
   calibrationDueOn: string | null;
 }
 
@@ -60,7 +67,7 @@ export async function readRound(trx: Knex.Transaction, organizationId: string, r
     });
   if (!row) throw notFound();
   const tolerances = await readTolerances(organizationId, row.projectId, trx);
-  return { ...row, isClosed: row.closedAt !== null, densityKgM3: densityOf(row.fluid), tolerances };
+  return { ...row, isClosed: row.closedAt !== null, fluid: loopFluid(row.fluid), tolerances };
 }
 
 /** The station as the round's revision asks it; one of another loop, revision or organisation is not there. */
@@ -78,12 +85,24 @@ export async function readStation(
       'design.station_id': stationId,
       'stations.loop_id': round.loopId,
     })
-    .first({ tag: 'design.tag', kind: 'stations.kind', designFlowLs: 'design.design_flow_ls', kvTable: 'design.kv_table' });
+    .first({
+      tag: 'design.tag',
+      kind: 'stations.kind',
+      designFlowLs: 'design.design_flow_ls',
+      kvTable: 'design.kv_table',
+      rank: 'design.rank',
+      coilDropKpa: 'design.coil_drop_kpa',
+      pumpCurve: 'design.pump_curve',
+    });
   if (!station) throw notFound();
   return station;
 }
 
-const kindFor: Record<RecordReading['method'], InstrumentKind> = { 'valve-drop': 'differential-pressure', 'direct-flow': 'flow' };
+const wantedMeter: Record<InstrumentKind, string> = {
+  'differential-pressure': 'Choose a differential pressure meter.',
+  flow: 'Choose a flow meter.',
+  temperature: 'Choose a thermometer.',
+};
 const refusedInstrument = (message: string) => new Problem('input-invalid', message, { fields: [{ path: 'instrumentId', message }] });
 
 /** The meter that was read, fit for what was read. */
@@ -98,14 +117,16 @@ export async function readInstrument(
       kind: 'kind',
       accuracyPercent: 'accuracy_percent',
       accuracyAbsolute: 'accuracy_absolute',
+      rangeLow: 'range_low',
+      rangeHigh: 'range_high',
       // As text: a date has no hour, and the driver would give it one of this machine's time zone.
       calibrationDueOn: trx.raw("to_char(calibration_due_on, 'YYYY-MM-DD')"),
       isRetired: 'is_retired',
     });
   if (!row) throw refusedInstrument('This meter is not known. Choose another.');
   if (row.isRetired) throw refusedInstrument('This meter is retired. Choose another.');
-  if (row.kind !== kindFor[method])
-    throw refusedInstrument(method === 'valve-drop' ? 'Choose a differential pressure meter.' : 'Choose a flow meter.');
+  const kind = readingMethods[method].instrument;
+  if (row.kind !== kind) throw refusedInstrument(wantedMeter[kind]);
   return row;
 }
 
@@ -116,13 +137,8 @@ export function judgeAtStation(
   instrument: InstrumentContext,
   round: RoundContext,
 ): Judgement {
-  const { method, settingTurns, dropKpa, flowLs } = input;
-  const band = [...round.tolerances, ...defaultTolerances].find(({ stationKind }) => stationKind === station.kind)!;
-  const judged = judgeReading(
-    // The schema has seen to it that each method has its figures.
-    method === 'valve-drop' ? { method, settingTurns: settingTurns!, dropKpa: dropKpa! } : { method, flowLs: flowLs! },
-    { ...station, densityKgM3: round.densityKgM3, accuracy: instrument, band },
-  );
+  const band = bandOf(round.tolerances, station);
+  const judged = judgeReading(measuredOf(input), { ...station, ...round.fluid, accuracy: instrument, band });
   if (!judged.ok) throw new Problem('input-invalid', judged.message, { fields: [{ path: judged.path, message: judged.message }] });
   return judged;
 }

@@ -2,15 +2,15 @@ import type { Knex } from 'knex';
 import { db } from '@/db/knex';
 import type { Reading, RecordReading } from '@/lib/api/commissioning';
 import { isOverdue } from '@/lib/commissioning/calibration';
+import { isOutOfRange, measuredOf } from '@/lib/commissioning/measured-of';
 import { recordActivity } from '../activity/record-activity';
 import type { Access } from '../auth/authorize';
 import { notFound, Problem } from '../problem';
 import { entriesOf } from '../reports/measured-rows';
 import { judgeAtStation, readInstrument, readRound, readStation } from './reading-context';
 import { readingOf } from './read-commissioning';
+import { refuseFuture } from './refuse-future';
 import { refuseOtherContent } from './same-reading';
-
-const ONE_DAY_MS = 24 * 3600 * 1000;
 
 /**
  * Stores a reading once, however often it is sent. Flow, per cent, uncertainty and verdict are worked out here from what was read, against
@@ -23,7 +23,7 @@ export async function recordReading(access: Access, roundId: string, input: Reco
     if (!(await isStored(trx, access, roundId, input))) {
       if (round.isClosed)
         throw new Problem('round-closed', `Round ${round.number} is closed. Keep this reading in the round that is open now.`);
-      refuseFuture(input.takenAt);
+      refuseFuture(input.takenAt, input.clockOffsetMs);
       const station = await readStation(trx, organizationId, round, input.stationId);
       const instrument = await readInstrument(trx, organizationId, input);
       if (input.correctsReadingId !== null)
@@ -45,11 +45,17 @@ export async function recordReading(access: Access, roundId: string, input: Reco
         verdict: judged.verdict,
         entered: JSON.stringify(input.entered),
         instrument_id: input.instrumentId,
-        instrument_overdue: isOverdue(instrument, new Date(input.takenAt)),
+        heat_kw: input.heatKw,
+        supply_c: input.supplyC,
+        return_c: input.returnC,
+        pump_speed: input.pumpSpeed,
+        instrument_overdue: isOverdue(instrument, new Date(Date.parse(input.takenAt) + (input.clockOffsetMs ?? 0))),
+        instrument_out_of_range: isOutOfRange(measuredOf(input), instrument),
         corrects_reading_id: input.correctsReadingId,
         note: input.note,
         taken_by: access.person.id,
         taken_at: new Date(input.takenAt),
+        clock_offset_ms: input.clockOffsetMs,
       });
       if (isNew) {
         const verb = input.correctsReadingId === null ? 'recorded a reading at' : 'corrected a reading at';
@@ -77,6 +83,10 @@ async function isStored(trx: Knex.Transaction, { person }: Access, roundId: stri
     settingTurns: 'setting_turns',
     dropKpa: 'drop_kpa',
     flowLs: 'flow_ls',
+    heatKw: 'heat_kw',
+    supplyC: 'supply_c',
+    returnC: 'return_c',
+    pumpSpeed: 'pump_speed',
     entered: 'entered',
     instrumentId: 'instrument_id',
     takenAt: 'taken_at',
@@ -97,12 +107,6 @@ async function insert(trx: Knex.Transaction, row: Record<string, unknown>): Prom
     if (error instanceof Error && 'constraint' in error && error.constraint === 'readings_one_correction') throw corrected();
     throw error;
   }
-}
-
-function refuseFuture(takenAt: string): void {
-  if (Date.parse(takenAt) <= Date.now() + ONE_DAY_MS) return;
-  const message = 'This time is more than a day ahead. Set the clock of the tablet.';
-  throw new Problem('input-invalid', message, { fields: [{ path: 'takenAt', message }] });
 }
 
 /** Anyone on the project may put right what stands at this station in this round, once. */

@@ -16,7 +16,9 @@ interface Declaration<Body, Query> {
   query?: z.ZodType<Query>;
   /** Largest request body in bytes; drawings are the largest that anybody sends. */
   maxBytes?: number;
-  handle: (input: Access & { params: Params; body: Body; query: Query; request: Request }) => Promise<unknown>;
+  /** The body is a file, handed over as its bytes; more than this are refused. */
+  upload?: { maxBytes: number };
+  handle: (input: Access & { params: Params; body: Body; query: Query; upload: Buffer; request: Request }) => Promise<unknown>;
 }
 
 /** What the matrix test asks of a route handler. */
@@ -39,6 +41,7 @@ export function route<Body = undefined, Query = undefined>(declaration: Declarat
       refuseForeignOrigin(request);
       const person = await currentPerson();
       if (!person) throw new Problem('signed-out', 'You are not signed in, or your session has ended. Sign in again.');
+      refuseOtherPerson(request, person.id);
       const params = await context.params;
       const scope: Scope =
         declaration.scope === 'organization'
@@ -51,7 +54,8 @@ export function route<Body = undefined, Query = undefined>(declaration: Declarat
       const query = (
         declaration.query ? declaration.query.parse(Object.fromEntries(new URL(request.url).searchParams)) : undefined
       ) as Query;
-      return answer(await declaration.handle({ ...access, params, body, query, request }));
+      const upload = declaration.upload ? await readBytes(request, declaration.upload.maxBytes) : Buffer.alloc(0);
+      return answer(await declaration.handle({ ...access, params, body, query, upload, request }));
     } catch (error) {
       return refusal(error, requestId);
     }
@@ -74,8 +78,18 @@ export function refuseForeignOrigin(request: Request): void {
   }
 }
 
-/** The JSON body, read no further than the limit. */
-export async function readJson(request: Request, maxBytes: number): Promise<unknown> {
+/**
+ * What was entered on a device goes in under the name of the person who entered it: where somebody else has signed in there since, it
+ * waits for its own.
+ */
+function refuseOtherPerson(request: Request, personId: string): void {
+  const enteredBy = request.headers.get('x-entered-by');
+  if (enteredBy !== null && enteredBy !== personId)
+    throw new Problem('signed-out', 'Somebody else is signed in on this device now. Sign in again to send what you entered.');
+}
+
+/** The body, read no further than the limit. */
+async function readBytes(request: Request, maxBytes: number): Promise<Buffer> {
   const chunks: Uint8Array[] = [];
   let size = 0;
   const reader = request.body?.getReader();
@@ -85,15 +99,23 @@ export async function readJson(request: Request, maxBytes: number): Promise<unkn
     size += value.byteLength;
     if (size > maxBytes) {
       await reader.cancel();
-      throw new Problem('input-too-large', `More than ${Math.round(maxBytes / 1024)} KiB were sent; nothing was changed.`);
+      throw new Problem('input-too-large', `More than ${sizeInWords(maxBytes)} were sent; nothing was changed.`);
     }
     chunks.push(value);
   }
-  const text = Buffer.concat(chunks).toString('utf8');
+  return Buffer.concat(chunks);
+}
+
+/** The JSON body, read no further than the limit. */
+export async function readJson(request: Request, maxBytes: number): Promise<unknown> {
+  const text = (await readBytes(request, maxBytes)).toString('utf8');
   const value = parseJson(text);
   if (unstorable.test(text)) throw new Problem('input-invalid', 'A text holds a character that cannot be stored; nothing was changed.');
   return value;
 }
+
+const sizeInWords = (bytes: number): string =>
+  bytes < 1 << 20 ? `${Math.round(bytes / 1024)} KiB` : `${Math.round(bytes / (1 << 20))} MiB`;
 
 /** PostgreSQL stores neither NUL nor half of a surrogate pair; in JSON both can only be written as escapes. */
 const unstorable = /(?<!\\)(?:\\\\)*\\u(?:0000|d[89ab][0-9a-f]{2}(?!\\ud[c-f][0-9a-f]{2})|(?<!\\ud[89ab][0-9a-f]{2}\\u)d[c-f][0-9a-f]{2})/i;

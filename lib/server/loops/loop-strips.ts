@@ -1,7 +1,7 @@
 import { db } from '@/db/knex';
 import type { StripBand, StripTick } from '@/lib/commissioning/flow-strip';
 import type { ToleranceRule } from '@/lib/api/projects';
-import { defaultTolerances } from '@/lib/api/tolerances';
+import { bandOf as bandOfStation } from '@/lib/api/tolerances';
 
 export interface LoopStrip {
   ticks: StripTick[];
@@ -80,6 +80,6 @@ export async function stripsOf(organizationId: string, loopIds: string[]): Promi
 
 /** The band behind the strip: that of the terminals, as per cent of design. */
 export function bandOf(rules: ToleranceRule[]): StripBand {
-  const { lowerPercent, upperPercent } = [...rules, ...defaultTolerances].find(({ stationKind }) => stationKind === 'terminal')!;
+  const { lowerPercent, upperPercent } = bandOfStation(rules, { kind: 'terminal' });
   return { lowerPercent: 100 + lowerPercent, upperPercent: 100 + upperPercent };
 }

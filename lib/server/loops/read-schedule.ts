@@ -1,4 +1,4 @@
-import type { Fault } from '@/lib/network/drawing-faults';
+import type { Fault } from '@/lib/network/fault';
 import { may } from '@/lib/api/permissions';
 import { scheduleOf, type Schedule } from '@/lib/network/schedule-rows';
 import type { Access } from '../auth/authorize';

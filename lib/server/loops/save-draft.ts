@@ -1,5 +1,6 @@
+import type { Knex } from 'knex';
 import { db } from '@/db/knex';
-import type { SavedDraft } from '@/lib/api/loops';
+import type { DraftBody, SavedDraft } from '@/lib/api/loops';
 import type { Drawing } from '@/lib/network/drawing';
 import { same } from '@/lib/network/merge-drawings';
 import type { Access } from '../auth/authorize';
@@ -12,16 +13,29 @@ import { readDraft } from './read-draft';
  * (an answer that got lost) is answered as the save that already happened.
  */
 export async function saveDraft(access: Access, loopId: string, input: { baseVersion: number; drawing: Drawing }): Promise<SavedDraft> {
-  const { organizationId, id: personId } = access.person;
-  const [saved] = await db()('drafts')
-    .where({ organization_id: organizationId, loop_id: loopId, version: input.baseVersion })
-    .update({ version: input.baseVersion + 1, drawing: JSON.stringify(input.drawing), saved_by: personId, saved_at: db().fn.now() })
-    .returning(['version', 'saved_at']);
-  if (saved) return { version: saved.version, savedAt: saved.saved_at.toISOString() };
-
-  const current = await readDraft(organizationId, loopId);
+  const saved = await storeDraft(db(), access, loopId, input);
+  if (saved) return saved;
+  const current = await readDraft(access.person.organizationId, loopId);
   if (same(current.drawing, input.drawing)) return { version: current.version, savedAt: current.savedAt };
-  throw new Problem('draft-changed', `${current.savedBy} has saved this drawing meanwhile. Nothing of yours is lost: see what differs.`, {
+  throw draftChanged(current);
+}
+
+/** Writes the next version of a draft; null where the draft is not at `baseVersion` any more. */
+export async function storeDraft(
+  connection: Knex,
+  { person }: Access,
+  loopId: string,
+  { baseVersion, drawing }: { baseVersion: number; drawing: Drawing },
+): Promise<SavedDraft | null> {
+  const [saved] = await connection('drafts')
+    .where({ organization_id: person.organizationId, loop_id: loopId, version: baseVersion })
+    .update({ version: baseVersion + 1, drawing: JSON.stringify(drawing), saved_by: person.id, saved_at: connection.fn.now() })
+    .returning(['version', 'saved_at']);
+  return saved ? { version: saved.version, savedAt: saved.saved_at.toISOString() } : null;
+}
+
+/** Somebody else has saved meanwhile: their drawing goes along, for the two to be compared. */
+export const draftChanged = (current: DraftBody) =>
+  new Problem('draft-changed', `${current.savedBy} has saved this drawing meanwhile. Nothing of yours is lost: see what differs.`, {
     detail: current,
   });
-}

@@ -91,6 +91,7 @@ async function bandsOf(organizationId: string, projectIds: string[]) {
     .select({
       projectId: 'project_id',
       stationKind: 'station_kind',
+      rank: 'rank',
       lowerPercent: 'lower_percent',
       upperPercent: 'upper_percent',
       source: 'source',

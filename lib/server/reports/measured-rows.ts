@@ -44,6 +44,10 @@ export async function entriesOf(
       method: 'readings.method',
       settingTurns: 'readings.setting_turns',
       dropKpa: 'readings.drop_kpa',
+      heatKw: 'readings.heat_kw',
+      supplyC: 'readings.supply_c',
+      returnC: 'readings.return_c',
+      pumpSpeed: 'readings.pump_speed',
       kv: 'readings.kv',
       flowLs: 'readings.flow_ls',
       percentOfDesign: 'readings.percent_of_design',
@@ -53,6 +57,7 @@ export async function entriesOf(
       instrumentId: 'readings.instrument_id',
       instrumentName: 'instruments.name',
       isInstrumentOverdue: 'readings.instrument_overdue',
+      isInstrumentOutOfRange: 'readings.instrument_out_of_range',
       takenBy: 'people.name',
       takenAt: 'readings.taken_at',
       recordedAt: 'readings.recorded_at',
@@ -87,5 +92,9 @@ export async function stationsOf(connection: Knex, organizationId: string, revis
       kvTable: 'design.kv_table',
       settingTurns: 'design.setting_turns',
       expectedDropKpa: 'design.expected_drop_kpa',
+      rank: 'design.rank',
+      coilDropKpa: 'design.coil_drop_kpa',
+      pumpCurve: 'design.pump_curve',
+      pumpSpeed: 'design.pump_speed',
     });
 }

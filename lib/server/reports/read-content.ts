@@ -6,7 +6,9 @@ import type { Drawing } from '@/lib/network/drawing';
 import { readRounds } from '../commissioning/read-rounds';
 import { listInstruments } from '../instruments/list-instruments';
 import { readTolerances } from '../projects/read-tolerances';
+import { readSite } from '../site/read-site';
 import { entriesOf, stationsOf, type Entry } from './measured-rows';
+import { siteContent } from './site-content';
 
 export interface RevisionContent {
   revisionId: string;
@@ -22,6 +24,7 @@ export async function readContent(connection: Knex, organizationId: string, loop
   const stations = await stationsOf(connection, organizationId, head.revisionId);
   const rounds = await readRounds(connection, organizationId, { 'rounds.loop_id': loopId });
   const instruments = await listInstruments(organizationId, connection);
+  const site = await readSite(organizationId, loopId, connection);
   return {
     revisionId: head.revisionId,
     content: {
@@ -47,6 +50,7 @@ export async function readContent(connection: Knex, organizationId: string, loop
         .map(({ isRetired: _, ...instrument }) => instrument),
       readings: entries.map(withoutDesign),
       balance: head.balance,
+      site: siteContent(site, (stationId) => stations.find(({ id }) => id === stationId)?.tag ?? null),
     },
   };
 }

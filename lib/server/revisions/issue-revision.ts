@@ -110,6 +110,10 @@ async function storeStations(
       kv_table: station.kvTable && JSON.stringify(station.kvTable),
       setting_turns: station.settingTurns,
       expected_drop_kpa: station.expectedDropKpa,
+      rank: station.rank,
+      coil_drop_kpa: station.coilDropKpa,
+      pump_curve: station.pumpCurve && JSON.stringify(station.pumpCurve),
+      pump_speed: station.pumpSpeed,
     })),
     500,
   );

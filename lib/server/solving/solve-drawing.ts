@@ -2,9 +2,10 @@ import type { SolutionBody } from '@/lib/api/loops';
 import type { NetworkDocument, Warning } from '@/lib/hydraulics/types';
 import { parseNetworkDocument } from '@/lib/network/document';
 import type { Drawing, Place } from '@/lib/network/drawing';
-import type { Fault } from '@/lib/network/drawing-faults';
+import type { Fault } from '@/lib/network/fault';
 import { drawingToDocument, placeFinder } from '@/lib/network/drawing-to-document';
 import { inDrawingWords, pieceNames } from '@/lib/network/piece-names';
+import { resultFaults } from '@/lib/network/result-faults';
 import { cachedSolution, documentKey, keepSolution } from './solution-cache';
 import { solveDocument, type SolvedDocument } from './solve-document';
 import { solveOffThread } from './solve-pool';
@@ -26,7 +27,11 @@ export async function solveDrawing(drawing: Drawing, name: string, asker: Asker)
 
   const { solve, balance, indexLinks, solveMs } = await solved(parsed.document, asker);
   return {
-    faults: [...faults, ...warningFaults(drawing, [...solve.warnings, ...(balance?.warnings ?? [])])],
+    faults: [
+      ...faults,
+      ...warningFaults(drawing, [...solve.warnings, ...(balance?.warnings ?? [])]),
+      ...resultFaults(drawing, { solve, balance }),
+    ],
     solved: {
       solve,
       balance,

@@ -9,7 +9,6 @@ const holder = globalThis as typeof globalThis & { evenheadSolvePool?: Piscina }
 /** Threads run the TypeScript as it is: the engine is the same file for tests, command and server. */
 function pool(): Piscina {
   holder.evenheadSolvePool ??= new Piscina({
-    filename: join(process.cwd(), 'lib/server/solving/solve-worker.ts'),
     execArgv: ['--import', 'tsx'],
     minThreads: 0,
     maxThreads: 2,
@@ -22,11 +21,25 @@ const longestSolveMs = 60_000;
 const mostWaiting = 4;
 const waitingOf = new Map<string, { count: number; last: Promise<unknown> }>();
 
+/** Solves a document off the request thread. */
+export const solveOffThread = (document: NetworkDocument, personId: string, signal?: AbortSignal): Promise<SolvedDocument> =>
+  runOffThread({ worker: 'solving/solve-worker.ts', task: document, personId, signal });
+
+interface OffThread {
+  /** A file of lib/server whose default export does the work. */
+  worker: string;
+  task: unknown;
+  personId: string;
+  signal?: AbortSignal;
+  longestMs?: number;
+}
+
 /**
- * Solves off the request thread, for a minute at most. One person's solves wait for one another, a few at most, so that nobody
- * takes both threads; `signal` ends a solve that nobody waits for any more, running or waiting.
+ * Does work off the request thread, for a minute at most unless said otherwise. One person's runs wait for one another, a few at most, so that nobody
+ * takes both threads; `signal` ends a run that nobody waits for any more, running or waiting.
  */
-export async function solveOffThread(document: NetworkDocument, personId: string, signal?: AbortSignal): Promise<SolvedDocument> {
+export async function runOffThread<Result>(work: OffThread): Promise<Result> {
+  const { personId } = work;
   const mine = waitingOf.get(personId) ?? { count: 0, last: Promise.resolve() };
   if (mine.count >= mostWaiting)
     throw new Problem(
@@ -35,7 +48,7 @@ export async function solveOffThread(document: NetworkDocument, personId: string
     );
   waitingOf.set(personId, mine);
   mine.count += 1;
-  const solved = mine.last.catch(() => undefined).then(() => runInThread(document, signal));
+  const solved = mine.last.catch(() => undefined).then(() => runInThread(work));
   mine.last = solved;
   try {
     return await solved;
@@ -45,13 +58,16 @@ export async function solveOffThread(document: NetworkDocument, personId: string
   }
 }
 
-async function runInThread(document: NetworkDocument, signal?: AbortSignal): Promise<SolvedDocument> {
+async function runInThread({ worker, task, signal, longestMs = longestSolveMs }: OffThread) {
   signal?.throwIfAborted();
-  const timeUp = AbortSignal.timeout(longestSolveMs);
+  const timeUp = AbortSignal.timeout(longestMs);
   try {
-    return await pool().run(document, { signal: signal ? AbortSignal.any([signal, timeUp]) : timeUp });
+    return await pool().run(task, {
+      filename: join(process.cwd(), 'lib/server', worker),
+      signal: signal ? AbortSignal.any([signal, timeUp]) : timeUp,
+    });
   } catch (error) {
-    if (timeUp.aborted) throw new Problem('solve-too-long', 'This drawing could not be solved within a minute. Draw it as several loops.');
+    if (timeUp.aborted) throw new Problem('solve-too-long', 'This drawing takes too long to be solved. Draw it as several loops.');
     throw error;
   }
 }

@@ -19,8 +19,8 @@ beforeEach(async () => {
   signInAs(home.technician);
 });
 
-const start = (id = uuidv7(), purpose = 'As left') =>
-  call(postRound, { method: 'POST', params: { loopId: home.loopId }, body: { id, purpose } });
+const start = (id = uuidv7(), purpose = 'As left', openChecksReason = 'The flushing record comes tomorrow') =>
+  call(postRound, { method: 'POST', params: { loopId: home.loopId }, body: { id, purpose, openChecksReason } });
 const close = (roundId = home.roundId) => call(patchRound, { method: 'PATCH', params: { roundId }, body: { isClosed: true } });
 const state = async () => (await suite.db('loops').where({ id: home.loopId }).first('state')).state;
 const setState = (to: string) => suite.db('loops').where({ id: home.loopId }).update({ state: to });

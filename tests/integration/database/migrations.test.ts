@@ -69,10 +69,16 @@ it('the database refuses to change or remove what was measured, signed, issued o
   );
   expect(rows.map((row: { name: string }) => row.name)).toEqual([
     'activity',
+    'check_answers',
+    'instrument_certificates',
+    'photos',
     'readings',
     'reports',
     'revisions',
+    'setting_changes',
     'signatures',
+    'snag_resolutions',
+    'snags',
     'station_designs',
   ]);
 });

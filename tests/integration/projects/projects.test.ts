@@ -110,7 +110,7 @@ it('a new loop starts as a draft with an empty drawing of its service', async ()
 
 it('an administrator changes bands and members; a designer does not', async () => {
   const { administrator, designer, outsider, projectId } = await makeOrganization(suite.db);
-  const rule = { stationKind: 'terminal', lowerPercent: -5, upperPercent: 15, source: 'Agreed on site' };
+  const rule = { stationKind: 'terminal', rank: 'all', lowerPercent: -5, upperPercent: 15, source: 'Agreed on site' };
   const change = (body: object) => call(changeProject, { method: 'PATCH', params: { projectId }, body });
   signInAs(designer);
   expect((await change({ tolerances: [rule] })).status).toBe(403);
@@ -129,7 +129,7 @@ it('a band that is none is refused and the old one stays', async () => {
   const { administrator, projectId } = await makeOrganization(suite.db);
   signInAs(administrator);
   for (const wrong of [{ lowerPercent: 5 }, { upperPercent: -1 }, { lowerPercent: -100 }, { source: ' ' }, { lowerPercent: null }]) {
-    const rule = { stationKind: 'terminal', lowerPercent: -5, upperPercent: 5, source: 'Agreed', ...wrong };
+    const rule = { stationKind: 'terminal', rank: 'all', lowerPercent: -5, upperPercent: 5, source: 'Agreed', ...wrong };
     expect((await call(changeProject, { method: 'PATCH', params: { projectId }, body: { tolerances: [rule] } })).status).toBe(400);
   }
   expect((await call(readProject, { params: { projectId } })).body.band).toEqual({ lowerPercent: 90, upperPercent: 110 });

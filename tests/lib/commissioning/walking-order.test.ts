@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest';
-import { byStorey, firstOf, neighbours } from '@/lib/commissioning/walking-order';
+import { byStorey, firstOf, inHandOrder, moved, neighbours } from '@/lib/commissioning/walking-order';
 
 const station = (walkingOrder: number, storey = 'Level 1') => ({ walkingOrder, storey });
 const walked = [station(3, 'Level 2'), station(1), station(2)];
@@ -20,6 +20,23 @@ describe('the walk along the stations', () => {
     expect(byStorey(walked)).toEqual([
       { storey: 'Level 1', stations: [station(1), station(2)] },
       { storey: 'Level 2', stations: [station(3, 'Level 2')] },
+    ]);
+  });
+});
+
+describe('an order set by hand', () => {
+  it('moves one station and leaves the others as they were', () => {
+    expect(moved(['a', 'b', 'c'], 0, 1)).toEqual(['b', 'a', 'c']);
+    expect(moved(['a', 'b', 'c'], 2, 0)).toEqual(['c', 'a', 'b']);
+  });
+
+  it('comes first, and stations that it does not know follow as they were', () => {
+    const stations = ['a', 'b', 'c'].map((id, at) => ({ id, walkingOrder: at + 1 }));
+    const order = new Map([['c', 0]]);
+    expect(inHandOrder(stations, order).map(({ id, walkingOrder }) => [id, walkingOrder])).toEqual([
+      ['c', 1],
+      ['a', 2],
+      ['b', 3],
     ]);
   });
 });

@@ -1,7 +1,7 @@
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import { beginGesture, createDrawingStore } from '@/components/drawing/store';
-import { shortcutFor, editShortcuts, toolShortcuts, viewShortcuts, actionIds } from '@/components/drawing/shortcuts';
+import { commandFor, commands, commandsFor, keyWords } from '@/components/drawing/commands';
 import { duplicatePieces } from '@/lib/network/duplicate-pieces';
 import { mirrorPieces, nudgePieces, rotatePieces } from '@/lib/network/move-pieces';
 import { removeFromDrawing } from '@/lib/network/remove-pieces';
@@ -77,22 +77,22 @@ describe('the history of a drawing', () => {
 
 describe('the keys', () => {
   const press = (key: string, held: Partial<Record<'ctrlKey' | 'metaKey' | 'shiftKey' | 'altKey', boolean>> = {}) =>
-    shortcutFor({ key, ctrlKey: false, metaKey: false, shiftKey: false, altKey: false, ...held });
+    commandFor({ key, ctrlKey: false, metaKey: false, shiftKey: false, altKey: false, ...held });
 
   it('tell undo from redo, find from fit and copy from the control valve', () => {
-    expect(press('z', { ctrlKey: true })).toEqual({ action: 'undo' });
-    expect(press('Z', { ctrlKey: true, shiftKey: true })).toEqual({ action: 'redo' });
-    expect(press('y', { metaKey: true })).toEqual({ action: 'redo' });
-    expect(press('f', { ctrlKey: true })).toEqual({ action: 'find' });
-    expect(press('f')).toEqual({ action: 'fit' });
-    expect(press('c', { ctrlKey: true })).toEqual({ action: 'copy' });
-    expect(press('c')).toEqual({ tool: 'controlValve' });
+    expect(press('z', { ctrlKey: true })).toBe('undo');
+    expect(press('Z', { ctrlKey: true, shiftKey: true })).toBe('redo');
+    expect(press('y', { metaKey: true })).toBe('redo');
+    expect(press('f', { ctrlKey: true })).toBe('find');
+    expect(press('f')).toBe('fit');
+    expect(press('c', { ctrlKey: true })).toBe('copy');
+    expect(press('c')).toBe('tool-controlValve');
   });
 
   it('take a sign whether or not the keyboard needs Shift for it', () => {
-    expect(press('?', { shiftKey: true })).toEqual({ action: 'shortcuts' });
-    expect(press('+', { shiftKey: true })).toEqual({ action: 'zoom-in' });
-    expect(press('+')).toEqual({ action: 'zoom-in' });
+    expect(press('?', { shiftKey: true })).toBe('shortcuts');
+    expect(press('+', { shiftKey: true })).toBe('zoom-in');
+    expect(press('+')).toBe('zoom-in');
   });
 
   it('leave to the browser what is not theirs', () => {
@@ -101,11 +101,27 @@ describe('the keys', () => {
     expect(press('5')).toBeNull();
   });
 
-  it('are one a thing, and every action has one', () => {
-    const all = [...editShortcuts, ...viewShortcuts, ...toolShortcuts].map(
-      ({ key, mod, shift }) => `${key} ${Boolean(mod)} ${Boolean(shift)}`,
-    );
+  it('tell a nudge from a longer move, a line-up and going to the next piece', () => {
+    expect(press('ArrowLeft')).toBe('nudge-left');
+    expect(press('ArrowLeft', { shiftKey: true })).toBe('shift-left');
+    expect(press('ArrowLeft', { ctrlKey: true, shiftKey: true })).toBe('align-left');
+    expect(press('ArrowLeft', { altKey: true })).toBe('go-left');
+    expect(press('ArrowLeft', { altKey: true, shiftKey: true })).toBe('add-left');
+  });
+
+  it('are one a thing, every command has one, and each is found by its own', () => {
+    const all = commands.flatMap(({ keys }) => keys.map(keyWords));
     expect(new Set(all).size).toBe(all.length);
-    expect(new Set([...editShortcuts, ...viewShortcuts].map(({ id }) => id))).toEqual(new Set(actionIds));
+    for (const { id, keys } of commands) {
+      expect(keys.length, id).toBeGreaterThan(0);
+      for (const { key, mod, shift, alt } of keys)
+        expect(press(key, { ctrlKey: mod ?? false, shiftKey: shift ?? false, altKey: alt ?? false })).toBe(id);
+    }
+  });
+
+  it('change nothing for those who only read', () => {
+    const readable = commandsFor(false).map(({ id }) => id);
+    expect(readable).toContain('zoom-selection');
+    for (const id of ['delete', 'rotate', 'paste', 'storey-remove', 'renumber', 'tool-pump']) expect(readable).not.toContain(id);
   });
 });

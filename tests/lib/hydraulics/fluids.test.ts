@@ -185,6 +185,23 @@ describe('glycol', () => {
   });
 });
 
+describe('more glycol', () => {
+  it('makes a mixture that freezes lower, flows thicker and carries less heat, at any temperature', () => {
+    const medium = fc.constantFrom('propylene-glycol' as const, 'ethylene-glycol' as const);
+    const number = (min: number, max: number) => fc.double({ min, max, noNaN: true });
+    fc.assert(
+      fc.property(medium, number(0.05, 0.55), number(0.005, 0.05), number(0, 60), (m, massFraction, more, temperatureC) => {
+        const thin = propertiesOf({ medium: m, massFraction, temperatureC });
+        const thick = propertiesOf({ medium: m, massFraction: massFraction + more, temperatureC });
+        expect(thick.freezingPointC!).toBeLessThan(thin.freezingPointC!);
+        expect(thick.viscosityMPaS).toBeGreaterThan(thin.viscosityMPaS);
+        expect(thick.specificHeatKJKgK).toBeLessThan(thin.specificHeatKJKgK);
+        expect(thick.densityKgM3).toBeGreaterThan(0.99 * thin.densityKgM3);
+      }),
+    );
+  });
+});
+
 describe('a custom fluid', () => {
   const brine = { medium: 'custom', densityKgM3: 1100, viscosityMPaS: 2.2, specificHeatKJKgK: 3.4 } as const;
 

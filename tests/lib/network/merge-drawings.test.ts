@@ -1,8 +1,8 @@
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import type { Drawing } from '@/lib/network/drawing';
-import { changesBetween, mergeDrawings, same, takeTheirs } from '@/lib/network/merge-drawings';
-import { drawing, ladder, pump, tee, unit } from '../../make/drawing';
+import { changesBetween, mergeByItself, mergeDrawings, same, takeTheirs } from '@/lib/network/merge-drawings';
+import { drawing, ladder, pipe, pump, tee, unit } from '../../make/drawing';
 
 const base = ladder([0.2, 0.3]);
 const change = (from: Drawing, id: string, fields: object): Drawing => ({
@@ -103,4 +103,30 @@ it('what changed from one revision to the next is told in words', () => {
   expect(
     changesBetween(base, { ...moved, equipment: [...moved.equipment, pump('P-2'), tee('T-9')] }).map(({ message }) => message),
   ).toEqual(['FC-1 changed: design flow', 'FC-2 moved', 'P-2 added', 'T-9 added', 'Pipe FC-2 to R-2 removed']);
+});
+
+describe('two saves of one draft', () => {
+  it('join by themselves where they do not touch', () => {
+    const mine = change(base, 'FC-1', { designFlowLs: 0.25 });
+    const theirs = { ...change(base, 'FC-2', { room: '2.14' }), pumpExcess: 'throttle' as const };
+    const joined = mergeByItself(base, mine, theirs);
+    expect(joined).toEqual({ ...change(mine, 'FC-2', { room: '2.14' }), pumpExcess: 'throttle' });
+    // The one who saves second saves the joined drawing; whoever goes on from the first save finds both.
+    expect(mergeByItself(theirs, joined!, theirs)).toEqual(joined);
+  });
+
+  it('are shown where both changed one piece', () => {
+    expect(mergeByItself(base, change(base, 'FC-1', { x: 10 }), change(base, 'FC-1', { x: 20 }))).toBeNull();
+  });
+
+  it('are shown where one drew a pipe to a piece that the other took away', () => {
+    const mine = { ...base, pipes: [...base.pipes, pipe('mine', 'S-1.n', 'R-2.s')] };
+    const theirs = {
+      ...base,
+      equipment: base.equipment.filter(({ id }) => id !== 'R-2'),
+      pipes: base.pipes.filter(({ from, to }) => from.equipmentId !== 'R-2' && to.equipmentId !== 'R-2'),
+    };
+    expect(mergeByItself(base, mine, theirs)).toBeNull();
+    expect(mergeByItself(base, base, theirs)).toEqual(theirs);
+  });
 });

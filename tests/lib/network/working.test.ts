@@ -8,7 +8,7 @@ import { drawingToDocument } from '@/lib/network/drawing-to-document';
 import { figuresOfDrawing } from '@/lib/network/drawing-figures';
 import { adoptSettings } from '@/lib/network/adopt-settings';
 import { genericValves } from '@/lib/network/valve-families';
-import { designFlowOfLoad, designPairWorking, digits, pipeWorking, valveWorking } from '@/lib/network/working';
+import { authorityWorking, designFlowOfLoad, designPairWorking, digits, pipeWorking, valveWorking } from '@/lib/network/working';
 import { ladder } from '../../make/drawing';
 
 const fluid = { medium: 'water', massFraction: 0, supplyC: 6, returnC: 12 } as const;
@@ -137,6 +137,19 @@ describe('the generic balancing valves', () => {
       'DN100',
       'DN125',
       'DN150',
+      'DN200',
+      'DN250',
+      'DN300',
+      'DN350',
+      'DN400',
     ]);
   });
+});
+
+it('authority opens as the share of the valve in the differential of its branch', () => {
+  // 0.2 L/s is 0.72 m³/h; through Kvs 2.5 at 999.8 kg/m³ that costs (0.72 / 2.5)² · 0.9998 · 100 = 8.2927 kPa, of 20.73 kPa a share of 0.4.
+  const working = authorityWorking(2.5, 0.2, 999.8, 0.4);
+  expect(working.inputs).toContainEqual({ name: 'Δp valve, fully open', value: '8.293 kPa' });
+  expect(working.inputs).toContainEqual({ name: 'Δp branch, out of the solved circuit', value: '20.73 kPa' });
+  expect(working.result).toBe('0.4');
 });

@@ -7,6 +7,7 @@ import { addReadings } from './readings';
 import type { ReportOnPaper } from './report-on-paper';
 import { addRevision } from './revision';
 import { addRounds } from './rounds';
+import { addSite } from './site';
 import { addTerminals } from './terminals';
 import { addValves } from './valves';
 
@@ -23,6 +24,7 @@ export async function buildWorkbook(report: ReportOnPaper): Promise<Buffer> {
   addPump(workbook, report);
   addReadings(workbook, report);
   addRounds(workbook, report);
+  addSite(workbook, report);
   addRevision(workbook, report);
   addInstruments(workbook, report);
   addCautions(workbook, report);

@@ -4,7 +4,7 @@ import { stripOfReport, summaryOf } from '@/lib/api/report-judgement';
 import type { Meaning, Signature } from '@/lib/api/reports';
 import type { ToleranceRule } from '@/lib/api/projects';
 import { cautionSentence } from '@/lib/commissioning/cautions';
-import { bandName, kindWords } from './measured-columns';
+import { bandName, kindWords, rankWords } from './measured-columns';
 import { referenceOf, type ReportOnPaper } from './report-on-paper';
 import { addSheet, formats, typeface, write, writeHeads, writeRows, type CellContent, type Column, type Formula } from './sheet-table';
 import { stripBox, stripPicture } from './strip-picture';
@@ -101,7 +101,12 @@ function writeSummary(sheet: Worksheet, row: number, { content }: ReportOnPaper)
 /** The bands get names, by which the formulas of the other sheets judge. */
 function writeBands(sheet: Worksheet, row: number, workbook: Workbook, tolerances: ToleranceRule[]): number {
   const columns: Column<ToleranceRule>[] = [
-    { key: 'kind', head: 'Tolerance of', width: 26, content: ({ stationKind }) => kindWords[stationKind] },
+    {
+      key: 'kind',
+      head: 'Tolerance of',
+      width: 26,
+      content: ({ stationKind, rank }) => `${kindWords[stationKind]}${rankWords[rank ?? 'all']}`,
+    },
     {
       key: 'lower',
       head: 'Lower',
@@ -122,9 +127,9 @@ function writeBands(sheet: Worksheet, row: number, workbook: Workbook, tolerance
   ];
   writeHeads(sheet, row, columns);
   writeRows(sheet, row + 1, columns, tolerances);
-  tolerances.forEach(({ stationKind }, i) => {
-    workbook.definedNames.add(`Cover!$B$${row + 1 + i}`, bandName(stationKind, 'lower'));
-    workbook.definedNames.add(`Cover!$C$${row + 1 + i}`, bandName(stationKind, 'upper'));
+  tolerances.forEach((rule, i) => {
+    workbook.definedNames.add(`Cover!$B$${row + 1 + i}`, bandName(rule, 'lower'));
+    workbook.definedNames.add(`Cover!$C$${row + 1 + i}`, bandName(rule, 'upper'));
   });
   return row + 1 + tolerances.length;
 }

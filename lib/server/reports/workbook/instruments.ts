@@ -3,8 +3,8 @@ import type { ReportInstrument } from '@/lib/api/reports';
 import { referenceOf, type ReportOnPaper } from './report-on-paper';
 import { addSheet, addTable, formats, type Column } from './sheet-table';
 
-const kindWords = { 'differential-pressure': 'differential pressure', flow: 'flow' } as const;
-const unitOf = { 'differential-pressure': 'kPa', flow: 'L/s' } as const;
+const kindWords = { 'differential-pressure': 'differential pressure', flow: 'flow', temperature: 'temperature' } as const;
+const unitOf = { 'differential-pressure': 'kPa', flow: 'L/s', temperature: '°C' } as const;
 
 /** The instruments that were read, with their accuracy and calibration. */
 export function addInstruments(workbook: Workbook, report: ReportOnPaper): void {

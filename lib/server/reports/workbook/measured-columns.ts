@@ -1,12 +1,21 @@
 import { bandFor, verdictOf } from '@/lib/api/report-judgement';
+import type { ToleranceRule } from '@/lib/api/projects';
 import type { ReportContent, ReportStation } from '@/lib/api/reports';
 import type { ConditionalFormattingRule, Worksheet } from 'exceljs';
 import { formats, inks, type Column, type Formula } from './sheet-table';
 
 /** Names of the cells on the cover that hold a band, as parts of one: −0.1 is 10 % below design. */
-export const bandName = (kind: ReportStation['kind'], end: 'lower' | 'upper'): string => `${kind}_${end}_band`;
+export const bandName = ({ stationKind, rank }: Pick<ToleranceRule, 'stationKind' | 'rank'>, end: 'lower' | 'upper'): string =>
+  (rank ?? 'all') === 'all' ? `${stationKind}_${end}_band` : `${stationKind}_${rank}_${end}_band`;
 
-export const methodWords = { 'valve-drop': 'valve drop', 'direct-flow': 'direct flow' } as const;
+export const methodWords = {
+  'valve-drop': 'valve drop',
+  'direct-flow': 'direct flow',
+  'coil-differential': 'coil differential',
+  'pump-differential': 'pump differential on its curve',
+  'heat-balance': 'heat balance',
+} as const;
+export const rankWords = { all: '', index: ', index unit', small: ', under 0.1 L/s', main: ', mains and risers' } as const;
 export const kindWords = { terminal: 'Terminal', branch: 'Branch or main', pump: 'Pump' } as const;
 
 /** Per cent of design and verdict as formulas, so that the reader sees where they come from and can follow a change. */
@@ -42,8 +51,9 @@ export function measuredColumns<Row>(content: ReportContent, stationOf: (row: Ro
 
 function verdictFormula(content: ReportContent, station: ReportStation, percent: string): Formula | string {
   const verdict = verdictOf(content, station);
-  if (!bandFor(content, station.kind)) return verdict ?? 'not measured';
-  const [lower, upper] = [bandName(station.kind, 'lower'), bandName(station.kind, 'upper')];
+  const band = bandFor(content, station);
+  if (!band) return verdict ?? 'not measured';
+  const [lower, upper] = [bandName(band, 'lower'), bandName(band, 'upper')];
   // Rounded, so that a flow on the band's very edge is not judged by the last bit of a division.
   const part = `ROUND(${percent},9)`;
   const judged = `IF(${part}<ROUND(1+${lower},9),"low",IF(${part}>ROUND(1+${upper},9),"high","within"))`;

@@ -18,6 +18,7 @@ export function addRounds(workbook: Workbook, report: ReportOnPaper): void {
       content: ({ id }) => readings.filter(({ roundId }) => roundId === id).length,
     },
     { key: 'by', head: 'Started by', width: 20, content: ({ startedBy }) => startedBy },
+    { key: 'reason', head: 'Started with checks open because', width: 40, content: ({ openChecksReason }) => openChecksReason ?? '' },
     { key: 'started', head: 'Started', unit: 'UTC', width: 16, format: formats.moment, content: ({ startedAt }) => new Date(startedAt) },
   ];
   addTable(addSheet(workbook, 'Rounds', { title: 'Rounds', reference: referenceOf(report) }), columns, rounds);

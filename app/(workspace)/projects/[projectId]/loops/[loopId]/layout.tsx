@@ -1,5 +1,6 @@
 import { notFound } from 'next/navigation';
 import type { ReactNode } from 'react';
+import { OpenDraftProvider } from '@/components/drawing/open-draft';
 import { LoopHeader } from '@/components/shell/loop-header';
 import { requireAccess } from '@/lib/server/auth/require-person';
 import { readLoop } from '@/lib/server/loops/read-loop';
@@ -18,7 +19,7 @@ export default async function LoopLayout({
   return (
     <div className="flex min-h-dvh flex-col has-data-own-header:[&>header]:hidden">
       <LoopHeader loop={loop} person={{ name: access.person.name, organizationName: access.person.organizationName }} />
-      {children}
+      <OpenDraftProvider key={loopId}>{children}</OpenDraftProvider>
     </div>
   );
 }

@@ -4,6 +4,7 @@ import { may } from '@/lib/api/permissions';
 import { requireAccess } from '@/lib/server/auth/require-person';
 import { readCommissioning } from '@/lib/server/commissioning/read-commissioning';
 import { readLoop } from '@/lib/server/loops/read-loop';
+import { readSite } from '@/lib/server/site/read-site';
 
 interface CommissioningLoaderProps {
   projectId: string;
@@ -16,14 +17,20 @@ interface CommissioningLoaderProps {
 export async function CommissioningLoader({ projectId, loopId, stationId }: CommissioningLoaderProps) {
   const access = await requireAccess('loop.see', { kind: 'loop', id: loopId });
   if (!access || access.projectId !== projectId) notFound();
-  const [loop, initial] = await Promise.all([readLoop(access, loopId), readCommissioning(access, loopId)]);
+  const [loop, initial, initialSite] = await Promise.all([
+    readLoop(access, loopId),
+    readCommissioning(access, loopId),
+    readSite(access.person.organizationId, loopId),
+  ]);
   if (stationId !== undefined && !initial.stations.some(({ id }) => id === stationId)) notFound();
   return (
     <CommissioningWorkspace
       loop={{ id: loop.id, name: loop.name, projectId, state: loop.state }}
       personId={access.person.id}
       mayRecord={may(access.roles, 'readings.record')}
+      mayRaise={may(access.roles, 'snag.raise')}
       initial={initial}
+      initialSite={initialSite}
     />
   );
 }

@@ -33,9 +33,20 @@ export default async function DrawingPage({ params }: { params: Promise<{ projec
           issued={revision && { number: revision.number, drawing: revision.drawing }}
         />
       ) : revision ? (
-        <DrawingViewer key={revision.id} drawing={revision.drawing} band={loop.band} revision={revision} />
+        <DrawingViewer
+          key={revision.id}
+          drawing={revision.drawing}
+          band={loop.band}
+          names={{ loop: loop.name, project: loop.project.name }}
+          revision={revision}
+        />
       ) : may(access.roles, 'draft.see') ? (
-        <DrawingViewer drawing={(await readDraft(organizationId, loopId)).drawing} band={loop.band} revision={null} />
+        <DrawingViewer
+          drawing={(await readDraft(organizationId, loopId)).drawing}
+          band={loop.band}
+          names={{ loop: loop.name, project: loop.project.name }}
+          revision={null}
+        />
       ) : (
         <NotIssued name={loop.name} />
       )}

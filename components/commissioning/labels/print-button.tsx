@@ -1,0 +1,9 @@
+'use client';
+
+import { Button } from '../../ui/button';
+
+export const PrintButton = () => (
+  <Button look="primary" onClick={() => window.print()}>
+    Print
+  </Button>
+);
