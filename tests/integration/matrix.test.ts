@@ -2,10 +2,12 @@ import { beforeAll, describe, expect, it } from 'vitest';
 import { may, permissions, roles, type Permission, type Role } from '@/lib/api/permissions';
 import { call } from '../make/call';
 import { withDatabase } from '../make/database';
+import { withFiles } from '../make/files';
 import { withMail } from '../make/mail';
 import { makeOrganization, type MadeOrganization } from '../make/organization';
 import { makeRound, type MadeRound } from '../make/round';
 import { signInAs } from '../make/session';
+import { makeFiles, type MadeFiles } from '../make/stored-files';
 
 /**
  * Every route handler × every role × another organisation × a person who is not on the project × signed out. A new
@@ -35,25 +37,30 @@ const guarded = declared.filter(({ handler }) => handler.permission !== 'public'
 
 const suite = withDatabase();
 withMail();
-let home: MadeOrganization & MadeRound;
-let away: MadeOrganization & MadeRound;
+withFiles();
+type MadePlace = MadeOrganization & MadeRound & MadeFiles;
+let home: MadePlace;
+let away: MadePlace;
 
 beforeAll(async () => {
   const make = async (name: string) => {
     const organization = await makeOrganization(suite.db, { name });
-    return { ...organization, ...(await makeRound(suite.db, organization)) };
+    const round = await makeRound(suite.db, organization);
+    return { ...organization, ...round, ...(await makeFiles({ ...organization, ...round })) };
   };
   home = await make('Home');
   away = await make('Away');
 });
 
-const paramsOf = (place: MadeOrganization & MadeRound): Record<string, string> => ({
+const paramsOf = (place: MadePlace): Record<string, string> => ({
   projectId: place.projectId,
   loopId: place.loopId,
   roundId: place.roundId,
   instrumentId: place.instrumentId,
   personId: place.outsider.id,
   stationId: place.stationId,
+  photoId: place.photoId,
+  certificateId: place.certificateId,
   number: '1',
 });
 

@@ -30,6 +30,8 @@ export class SmallCheckout {
     for (const file of ['package.json', 'package-lock.json', '.gitignore']) copyFileSync(join(root, file), this.path(file));
     this.write('db/demo-sign-ins.json', JSON.stringify([{ email: 'designer@example.test', password: 'open-sesame', who: 'the designer' }]));
     copyFileSync(join(root, 'tests/make/migrate-stand-in.ts'), this.path('db/migrate.ts'));
+    // What runs beside the pages is bundled for real; here there is nothing in it.
+    for (const worker of ['service-worker', 'procedure-worker']) this.write(`lib/workers/${worker}.ts`, 'export {};\n');
     this.linkPackages();
   }
 

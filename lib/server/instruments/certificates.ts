@@ -46,7 +46,8 @@ export async function addCertificate(access: Access, instrumentId: string, fileN
 
 /** Certificates of a meter, the newest first. */
 export async function listCertificates(organizationId: string, instrumentId: string): Promise<Certificate[]> {
-  if (!isUuid(instrumentId)) throw notFound();
+  const meter = isUuid(instrumentId) && (await db()('instruments').where({ organization_id: organizationId, id: instrumentId }).first('id'));
+  if (!meter) throw notFound();
   const rows = await db()('instrument_certificates as held')
     .join('people', (join) => join.on('people.organization_id', 'held.organization_id').on('people.id', 'held.uploaded_by'))
     .where({ 'held.organization_id': organizationId, 'held.instrument_id': instrumentId })

@@ -1,3 +1,4 @@
+import { useEffect } from 'react';
 import { createRoot } from 'react-dom/client';
 import ReactFlow, { ReactFlowProvider, useReactFlow, type Edge, type Node } from 'reactflow';
 import 'reactflow/dist/style.css';
@@ -25,7 +26,9 @@ const drawing = drawingOfTerminals(Number(new URLSearchParams(location.search).g
 
 function Handle() {
   const flow = useReactFlow();
-  window.view = { set: (x, y, zoom) => flow.setViewport({ x, y, zoom }), get: () => flow.getViewport() };
+  useEffect(() => {
+    window.view = { set: (x, y, zoom) => flow.setViewport({ x, y, zoom }), get: () => flow.getViewport() };
+  }, [flow]);
   return null;
 }
 
