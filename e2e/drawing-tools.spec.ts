@@ -142,6 +142,8 @@ test.describe('by mouse', () => {
     expect(tagsOf(await sheet.saved(({ equipment }) => equipment.length === 7)).slice(1, 4)).toEqual(['FC-2.01', 'FC-2.02', 'FC-2.03']);
     await page.keyboard.press('Control+x');
     await expect(sheet.nodes).toHaveCount(6);
+    // Saved as six, so that seven are not those of before.
+    await sheet.saved(({ equipment }) => equipment.length === 6);
     // Pasted where the menu was asked for, on another storey.
     const at = await sheet.screen(700, 540);
     await page.mouse.click(at.x, at.y, { button: 'right' });
@@ -179,7 +181,9 @@ test.describe('by mouse', () => {
     await expect(sheet.edges).toHaveCount(4);
     const twice = await sheet.saved(({ equipment }) => equipment.length === 9);
     expect(new Set(tagsOf(twice)).size).toBe(9);
+    expect(await order((names) => names.length === 4)).toEqual(['Level 2', 'Level 3', 'East wing', 'Plant room']);
     await page.keyboard.press('Control+z');
+    expect(await order((names) => names.length === 3)).toEqual(['Level 2', 'East wing', 'Plant room']);
 
     await page.keyboard.press('Shift+PageUp');
     expect(await order((names) => names.length === 4)).toEqual(['Level 3', 'Level 2', 'East wing', 'Plant room']);

@@ -6,6 +6,8 @@ import { signIn, type DemoPerson } from './make/sign-in';
 
 const loopPages = ['drawing', 'schedule', 'commissioning', 'report'];
 const officePages = ['/projects', '/instruments', '/activity', '/account'];
+/** For designers and administrators. */
+const cataloguePages = ['valves', 'valves/new', 'pumps', 'pumps/new', 'pipes', 'fittings'].map((it) => `/catalogue/${it}`);
 
 async function pathsFor(page: Page, who: DemoPerson): Promise<string[]> {
   await signIn(page, who);
@@ -14,7 +16,17 @@ async function pathsFor(page: Page, who: DemoPerson): Promise<string[]> {
   const project = loop.replace(/\/loops\/.*$/, '');
   await page.goto(`${loop}/commissioning`);
   const station = await page.locator('a[href*="/stations/"]').first().getAttribute('href');
-  return [...officePages, project, ...loopPages.map((it) => `${loop}/${it}`), station!, ...(who === 'owen' ? ['/people'] : [])];
+  const onSite = ['readiness', 'next', 'findings', 'rounds', 'snags', 'labels'].map((it) => `${loop}/commissioning/${it}`);
+  const drawn = who === 'tobin' ? [] : [...cataloguePages, `${loop}/schedule/import`];
+  return [
+    ...officePages,
+    project,
+    ...loopPages.map((it) => `${loop}/${it}`),
+    station!,
+    ...(who === 'tobin' ? [...onSite, '/aboard'] : []),
+    ...drawn,
+    ...(who === 'owen' ? ['/people'] : []),
+  ];
 }
 
 /**

@@ -95,23 +95,26 @@ export function CurveChart({ label, x, y, curves, height }: CurveChartProps) {
                   strokeWidth={1.5}
                 />
               ))}
-              {curve.label && labelled.has(curve) && (
-                <text
-                  x={left(curve.line.at(-1)!.x) + 7}
-                  y={top(curve.line.at(-1)!.y) + 4}
-                  fontSize={11}
-                  className="fill-ink font-sans"
-                  fontWeight={600}
-                  // A rim of paper keeps the lines of other curves out of the letters.
-                  stroke="var(--sheet)"
-                  strokeWidth={3}
-                  paintOrder="stroke"
-                >
-                  {curve.label}
-                </text>
-              )}
             </g>
           ))}
+          {curves
+            .filter((curve) => curve.label && labelled.has(curve))
+            .map(({ label, line }) => (
+              <text
+                key={label}
+                x={left(line.at(-1)!.x) + 7}
+                y={top(line.at(-1)!.y) + 4}
+                fontSize={11}
+                className="fill-ink font-sans"
+                fontWeight={600}
+                // A rim of paper, over all curves, keeps their lines out of the letters.
+                stroke="var(--sheet)"
+                strokeWidth={3}
+                paintOrder="stroke"
+              >
+                {label}
+              </text>
+            ))}
         </svg>
       )}
     </div>

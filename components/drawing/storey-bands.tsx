@@ -2,15 +2,21 @@
 
 import { useState, type KeyboardEvent, type PointerEvent } from 'react';
 import { useReactFlow, useViewport } from 'reactflow';
+import { classNames } from '@/components/ui/class-names';
 import { Figure } from '@/components/ui/figure';
 import type { Storey } from '@/lib/network/drawing';
 import { GRID, snap } from '@/lib/network/piece-geometry';
 import { resizeStorey } from '@/lib/network/storeys';
 import { LEAST_HEIGHT } from './actions/storeys';
-import { useDrawing, useEditor } from './editor-context';
+import { useCanvas, useDrawing, useEditor } from './editor-context';
 import { beginGesture } from './store';
+import { useCoarsePointer } from './use-media';
 
-const NAME_AT = 20;
+/** Px on the screen, at any zoom: how much of a band its name and half of the edges above and below it take. */
+const NAME_ROOM_PX = 48;
+const COARSE_NAME_ROOM_PX = 76;
+/** In a lower band the name only stands there, in a band lower than this not even that. */
+const WORDS_ROOM_PX = 32;
 
 /** The storeys behind the drawing: a line between two. */
 export function StoreyBands() {
@@ -39,46 +45,52 @@ export function StoreyNames() {
 
 function StoreyName({ storey }: { storey: Storey }) {
   const { canvasStore, canEdit } = useEditor();
+  // While something is placed or joined a press is meant for the sheet, and nothing at its edge may take it.
+  const isPressable = useCanvas(({ tool }) => tool === 'select') && canEdit;
   const { y, zoom } = useViewport();
-  const bottom = (storey.top + storey.height) * zoom + y;
-  if (storey.height * zoom <= 2 * NAME_AT) return null;
-  const words = (
-    <>
-      {storey.name} <Figure quantity="length" si={storey.elevationM} hasUnit className="ml-1 font-normal" />
-    </>
-  );
-  const look = 'text-quiet absolute left-1.5 rounded px-1.5 py-1 text-xs font-semibold';
-  if (!canEdit)
-    return (
-      <p className={look} style={{ top: bottom, translate: '0 -100%' }}>
-        {words}
-      </p>
-    );
+  const room = useCoarsePointer() ? COARSE_NAME_ROOM_PX : NAME_ROOM_PX;
+  const height = storey.height * zoom;
+  if (height < WORDS_ROOM_PX) return null;
+  const hasMenu = canEdit && height >= room;
+  const name = 'rounded px-1.5 font-semibold';
   return (
     <>
-      <BandEdge storey={storey} />
-      <button
-        type="button"
-        aria-haspopup="menu"
-        aria-label={`Storey ${storey.name}: menu`}
-        className={`${look} hover:bg-well hover:text-ink pointer-events-auto -translate-y-full pointer-coarse:min-h-11`}
-        style={{ top: bottom }}
-        onClick={(event) => {
-          const { left, top } = event.currentTarget.getBoundingClientRect();
-          canvasStore.setState({
-            storeyId: storey.id,
-            menu: { of: 'storey', screen: { x: left, y: top }, at: { x: 0, y: storey.top + storey.height / 2 } },
-          });
-        }}
+      {hasMenu && <BandEdge storey={storey} isPressable={isPressable} />}
+      <div
+        className="text-quiet absolute left-1.5 flex -translate-y-full items-center pb-3 text-xs pointer-coarse:pb-4"
+        style={{ top: (storey.top + storey.height) * zoom + y }}
       >
-        {words}
-      </button>
+        {hasMenu ? (
+          <button
+            type="button"
+            aria-haspopup="menu"
+            aria-label={`Storey ${storey.name}: menu`}
+            className={classNames(
+              name,
+              'hover:bg-well hover:text-ink min-h-6 min-w-6 pointer-coarse:min-h-11 pointer-coarse:min-w-11',
+              isPressable && 'pointer-events-auto',
+            )}
+            onClick={(event) => {
+              const { left, top } = event.currentTarget.getBoundingClientRect();
+              canvasStore.setState({
+                storeyId: storey.id,
+                menu: { of: 'storey', screen: { x: left, y: top }, at: { x: 0, y: storey.top + storey.height / 2 } },
+              });
+            }}
+          >
+            {storey.name}
+          </button>
+        ) : (
+          <p className={name}>{storey.name}</p>
+        )}
+        <Figure quantity="length" si={storey.elevationM} hasUnit />
+      </div>
     </>
   );
 }
 
 /** The upper edge of a band: dragged, or moved with the arrows, it makes the band higher or lower. */
-function BandEdge({ storey: { id, name, top, height } }: { storey: Storey }) {
+function BandEdge({ storey: { id, name, top, height }, isPressable }: { storey: Storey; isPressable: boolean }) {
   const { drawingStore } = useEditor();
   const view = useReactFlow();
   const { y, zoom } = useViewport();
@@ -119,7 +131,7 @@ function BandEdge({ storey: { id, name, top, height } }: { storey: Storey }) {
       aria-valuenow={height}
       aria-valuemin={LEAST_HEIGHT}
       tabIndex={0}
-      className={`band-edge nopan nodrag ${isHeld ? 'bg-brass/20' : ''}`}
+      className={classNames('band-edge nopan nodrag', isPressable && 'pointer-events-auto', isHeld && 'bg-brass/20')}
       style={{ top: top * zoom + y }}
       onPointerDown={drag}
       onKeyDown={press}

@@ -1,10 +1,13 @@
 'use client';
 
+import { useQuery } from '@tanstack/react-query';
 import Link from 'next/link';
 import { useEffect, useMemo, useState } from 'react';
 import { useStore } from 'zustand';
 import type { StripBand } from '@/lib/commissioning/flow-strip';
 import type { DraftBody, LoopDetail } from '@/lib/api/loops';
+import { offeredValves } from '@/lib/catalogue/chosen-entries';
+import { catalogueQuery } from '@/lib/client/catalogue';
 import { useSolution } from '@/lib/client/solutions';
 import { applyEdits } from '@/lib/network/schedule-edits';
 import { noFigures, scheduleFigures, scheduleRows } from '@/lib/network/schedule-rows';
@@ -46,14 +49,16 @@ export function ScheduleEditor({ loop, personId, loaded, bands, base }: Schedule
   // Of the drawing that was solved, not of the one under the hand: typing changes no figure until the answer comes.
   const figures = useMemo(() => (answer?.body.solved ? scheduleFigures(answer.drawing, answer.body.solved) : noFigures), [answer]);
   const schedule = useMemo(() => scheduleRows(drawing, figures), [drawing, figures]);
-  const context = useMemo(() => ({ valves: valveOfferOf(drawing) }), [drawing]);
+  const families = useQuery(catalogueQuery).data?.valveFamilies;
+  const catalogue = useMemo(() => offeredValves(families ?? []), [families]);
+  const context = useMemo(() => ({ valves: valveOfferOf(drawing, catalogue) }), [drawing, catalogue]);
   const drawingHref = `${base}/drawing`;
   const importHref = `${base}/schedule/import`;
 
   const history = drawingStore.temporal;
   const edit: Editing = {
     apply: (table, edits) => {
-      const edited = applyEdits(drawingStore.getState().drawing, table, edits, units);
+      const edited = applyEdits(drawingStore.getState().drawing, table, edits, units, catalogue);
       if (!edited.ok) return edited.faults;
       drawingStore.getState().change(() => edited.drawing);
       return [];

@@ -1,6 +1,6 @@
 'use client';
 
-import { useState } from 'react';
+import { useId, useState } from 'react';
 import type { RowOf, ScheduleContext } from '@/lib/network/schedule-column';
 import { unitOfColumn } from '@/lib/network/schedule-entry';
 import type { UnitChoice } from '@/lib/units/quantities';
@@ -24,6 +24,7 @@ export function SetRows<Row extends RowOf<unknown>>({ rows, view, units, context
   const settable = view.columns.filter(({ write, key }) => write && key !== 'tag');
   const [key, setKey] = useState<string | null>(null);
   const [text, setText] = useState('');
+  const [columnId, valueId] = [useId(), useId()];
   const column = settable.find((it) => it.key === key) ?? settable.at(0);
   const options =
     column?.kind === 'choice'
@@ -51,9 +52,10 @@ export function SetRows<Row extends RowOf<unknown>>({ rows, view, units, context
       </span>
       {column && (
         <>
-          <label className="ml-3 flex items-center gap-1.5">
-            Set
+          <span className="ml-3 flex items-center gap-1.5">
+            <label htmlFor={columnId}>Set</label>
             <select
+              id={columnId}
               className={classNames(inputClass, 'bg-sheet h-8 w-auto px-1.5 pointer-coarse:h-11')}
               value={column.key}
               onChange={(event) => {
@@ -67,11 +69,12 @@ export function SetRows<Row extends RowOf<unknown>>({ rows, view, units, context
                 </option>
               ))}
             </select>
-          </label>
-          <label className="flex items-center gap-1.5">
-            to
+          </span>
+          <span className="flex items-center gap-1.5">
+            <label htmlFor={valueId}>to</label>
             {column.kind === 'choice' ? (
               <select
+                id={valueId}
                 className={classNames(inputClass, 'bg-sheet h-8 w-auto max-w-56 px-1.5 pointer-coarse:h-11')}
                 value={text}
                 onChange={(event) => setText(event.target.value)}
@@ -87,6 +90,7 @@ export function SetRows<Row extends RowOf<unknown>>({ rows, view, units, context
               </select>
             ) : (
               <input
+                id={valueId}
                 className={classNames(inputClass, 'bg-sheet h-8 w-32 pointer-coarse:h-11', column.kind !== 'text' && 'figures text-right')}
                 value={text}
                 autoComplete="off"
@@ -94,7 +98,7 @@ export function SetRows<Row extends RowOf<unknown>>({ rows, view, units, context
               />
             )}
             <span className="text-quiet">{unitOfColumn(column, units)}</span>
-          </label>
+          </span>
           <Button type="submit" size="small" disabled={column.kind === 'choice' && text === ''}>
             Set all
           </Button>

@@ -2,16 +2,17 @@ import type { NetworkDocument } from '@/lib/hydraulics/types';
 import type { SiteEvent } from './proportional-log';
 import { documentAt, type LoopReading, type LoopSettings, type ReadingRound } from './readings';
 
-/** What was written down on site, by the time it was done, ms. */
+/** What was written down on site, by the time it was done, ms, and the pass of readings it belongs to. */
 export type SiteRecord =
   | {
       kind: 'reading';
       at: number;
+      pass: string;
       reading: LoopReading;
       /** Turns or speed that was noted with it; null where nothing was. */
       setting: number | null;
     }
-  | { kind: 'set'; at: number; link: string; before: number | null; after: number };
+  | { kind: 'set'; at: number; pass: string; link: string; before: number | null; after: number };
 
 export interface SiteHistory {
   /** The loop with its valves and pumps as they stood before the first record, as far as the records tell. */
@@ -23,12 +24,13 @@ export interface SiteHistory {
 }
 
 /**
- * Puts records in order and works out how the loop stood at each reading: a setting that was noted with a reading and is not the one last known
- * was set in between, even where nobody wrote that down. Records of links that the document does not have are left out.
+ * Puts records in order and works out how the loop stood at each reading. A setting that was noted with a reading and is not the one last known
+ * was set in between, even where nobody wrote that down: before the pass began where this is the valve's first record in it (all valves are set, then
+ * a new pass is read), just before the reading otherwise. Records of links that the document does not have are left out.
  */
 export function siteHistory(document: NetworkDocument, records: readonly SiteRecord[]): SiteHistory {
   const known = new Set(document.links.map((link) => link.id));
-  const ordered = records.filter((record) => known.has(linkOf(record))).sort((a, b) => a.at - b.at);
+  const ordered = withUnwritten(records.filter((record) => known.has(linkOf(record))).sort((a, b) => a.at - b.at));
   const first = firstSettings(document, ordered);
   const settings = { ...first };
   const events: SiteEvent[] = [];
@@ -47,8 +49,7 @@ export function siteHistory(document: NetworkDocument, records: readonly SiteRec
       set(record.link, record.after);
       continue;
     }
-    const { reading, setting } = record;
-    if (setting !== null && settings[reading.link] !== setting) set(reading.link, setting);
+    const { reading } = record;
     if (isChanged) {
       stands.push({ settings: { ...settings }, readings: [], ...(setAgain.length ? { setAgain } : {}) });
       isChanged = false;
@@ -58,6 +59,29 @@ export function siteHistory(document: NetworkDocument, records: readonly SiteRec
     events.push({ kind: 'reading', reading });
   }
   return { document: documentAt(document, first), events, stands, settings };
+}
+
+/** The records with the changes that readings tell of, each at the time it is taken to have been made. */
+function withUnwritten(ordered: SiteRecord[]): SiteRecord[] {
+  const passStart = new Map<string, number>();
+  for (const { pass, at } of ordered) if (!passStart.has(pass)) passStart.set(pass, at);
+  const last = new Map<string, { setting: number | null; pass: string }>();
+  const unwritten: SiteRecord[] = [];
+  for (const record of ordered) {
+    const link = linkOf(record);
+    const before = last.get(link);
+    const told = record.kind === 'set' ? record.after : (record.setting ?? before?.setting ?? null);
+    const isNews =
+      record.kind === 'reading' && record.setting !== null && before && before.setting !== null && before.setting !== record.setting;
+    if (isNews) {
+      const at = before.pass === record.pass ? record.at : passStart.get(record.pass)!;
+      unwritten.push({ kind: 'set', at, pass: record.pass, link, before: before.setting, after: record.setting! });
+    }
+    last.set(link, { setting: told, pass: record.pass });
+  }
+  // A change at the time of a reading was made before it.
+  const rank = (record: SiteRecord) => (unwritten.includes(record) ? 0 : 1);
+  return [...unwritten, ...ordered].sort((a, b) => a.at - b.at || rank(a) - rank(b));
 }
 
 /** Fewer readings than this part of the most that one stand has tell too little of it for the time that its solution takes. */

@@ -1,6 +1,5 @@
 import type { Plan, PlanInput } from '@/lib/balancing/plan';
-
-export const PLAN_WORKER_PATH = '/procedure-worker.js';
+import { PLAN_WORKER_PATH } from './shell-names';
 
 let worker: Worker | null = null;
 let lastId = 0;

@@ -1,5 +1,5 @@
 import { RequestError } from './http';
-import { ASSET_CACHE, SHELL_CACHE, SHELL_PATH } from './shell-names';
+import { ASSET_CACHE, PLAN_WORKER_PATH, SHELL_CACHE, SHELL_PATH } from './shell-names';
 
 /** Whether this browser can open Evenhead without a network: it needs HTTPS (or this machine) and a service worker. */
 export const canStartOffline = (): boolean => 'serviceWorker' in navigator && 'caches' in globalThis;
@@ -21,6 +21,8 @@ export async function storeShell(): Promise<void> {
     for (const inner of pathsInStyle(style, path)) needed.add(inner);
   }
   await Promise.all([...needed].map((path) => stored(assets, path)));
+  await assets.put(PLAN_WORKER_PATH, await fetched(PLAN_WORKER_PATH));
+  needed.add(PLAN_WORKER_PATH);
   await (await caches.open(SHELL_CACHE)).put(SHELL_PATH, page);
   const old = (await assets.keys()).filter(({ url }) => !needed.has(new URL(url).pathname));
   await Promise.all(old.map((request) => assets.delete(request)));

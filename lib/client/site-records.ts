@@ -17,7 +17,9 @@ const LEAST_DROP_KPA = 0.05;
 const LEAST_FLOW_LS = 0.001;
 
 type Body = Pick<CommissioningBody, 'stations' | 'readings' | 'rounds' | 'instruments' | 'revision' | 'densityKgM3'>;
-type ReadAt = Pick<RecordReading, 'stationId' | 'method' | 'settingTurns' | 'dropKpa' | 'flowLs' | 'instrumentId' | 'takenAt'>;
+type ReadAt = Pick<RecordReading, 'stationId' | 'method' | 'settingTurns' | 'dropKpa' | 'flowLs' | 'instrumentId' | 'takenAt'> & {
+  roundId: string;
+};
 
 /**
  * Everything that was read and set under the newest revision, as the planner takes it; `kept` is what this device has not sent yet. Entries
@@ -30,11 +32,11 @@ export function siteRecords(body: Body, changes: readonly SettingChange[], kept:
   const putRight = new Set(waiting.map((content) => (content.kind === 'reading' ? content.body.correctsReadingId : null)));
   const read: ReadAt[] = [
     ...body.readings.filter(({ id, roundId, isCorrected }) => !isCorrected && isCurrent.has(roundId) && !putRight.has(id)),
-    ...waiting.flatMap((content) => (content.kind === 'reading' ? [content.body] : [])),
+    ...waiting.flatMap((content) => (content.kind === 'reading' ? [{ ...content.body, roundId: content.roundId }] : [])),
   ];
-  const set: Pick<ChangeSetting, 'stationId' | 'before' | 'after' | 'changedAt'>[] = [
+  const set: (Pick<ChangeSetting, 'stationId' | 'before' | 'after' | 'changedAt'> & { roundId: string })[] = [
     ...changes.filter(({ roundId }) => isCurrent.has(roundId)),
-    ...waiting.flatMap((content) => (content.kind === 'setting' ? [content.body] : [])),
+    ...waiting.flatMap((content) => (content.kind === 'setting' ? [{ ...content.body, roundId: content.roundId }] : [])),
   ];
   const meterOf = new Map(body.instruments.map((instrument) => [instrument.id, instrument]));
   return [
@@ -43,15 +45,15 @@ export function siteRecords(body: Body, changes: readonly SettingChange[], kept:
       const record = station && recordOf(reading, station, meterOf.get(reading.instrumentId), body.densityKgM3);
       return record ? [record] : [];
     }),
-    ...set.flatMap(({ stationId, before, after, changedAt }): SiteRecord[] => {
+    ...set.flatMap(({ stationId, before, after, changedAt, roundId }): SiteRecord[] => {
       const station = stationOf.get(stationId);
-      return station ? [{ kind: 'set', at: Date.parse(changedAt), link: linkOfStation(station), before, after }] : [];
+      return station ? [{ kind: 'set', at: Date.parse(changedAt), pass: roundId, link: linkOfStation(station), before, after }] : [];
     }),
   ];
 }
 
 function recordOf(read: ReadAt, station: Station, meter: Instrument | undefined, densityKgM3: number | null): SiteRecord | null {
-  const { settingTurns, dropKpa, takenAt, instrumentId } = read;
+  const { settingTurns, dropKpa, takenAt, instrumentId, roundId: pass } = read;
   const link = linkOfStation(station);
   const isAcross = read.method === 'valve-drop' && dropKpa !== null && settingTurns !== null && densityKgM3 !== null;
   const found = isAcross ? flowFromDrop({ kvTable: station.kvTable, settingTurns, dropKpa, densityKgM3 }) : null;
@@ -66,6 +68,7 @@ function recordOf(read: ReadAt, station: Station, meter: Instrument | undefined,
     return {
       kind: 'reading',
       at,
+      pass,
       setting: settingTurns,
       reading: { ...common, quantity: 'dropKpa', value: dropKpa, absolute: Math.max(fixed, LEAST_DROP_KPA) },
     };
@@ -75,6 +78,7 @@ function recordOf(read: ReadAt, station: Station, meter: Instrument | undefined,
   return {
     kind: 'reading',
     at,
+    pass,
     setting: isAcross ? settingTurns : null,
     reading: { ...common, quantity: 'flowLs', value: flowLs, absolute: Math.max(fixedFlow, LEAST_FLOW_LS) },
   };

@@ -2,7 +2,7 @@ import type { UnitChoice } from '@/lib/units/quantities';
 import type { Drawing } from './drawing';
 import { isRefusal, type CellValue, type RowOf, type ScheduleColumn, type ScheduleContext, type ScheduleTable } from './schedule-column';
 import { readEntry } from './schedule-entry';
-import { valveOfferOf } from './schedule-valve-offer';
+import { valveOfferOf, type OfferedValve } from './schedule-valve-offer';
 
 /** One cell to be changed, by what was typed or by a stored value as another cell holds it. */
 export type CellEdit = { id: string; key: string } & ({ text: string } | { value: CellValue });
@@ -20,15 +20,17 @@ export type EditedDrawing = { ok: true; drawing: Drawing } | { ok: false; faults
 
 /**
  * The drawing with all the cells changed, or every fault and no change at all. The cells of a row are taken in the order of
- * the columns, since one decides what the next may hold (a series of pipes, its sizes).
+ * the columns, since one decides what the next may hold (a series of pipes, its sizes). `catalogue` are valves to choose from besides
+ * those of the drawing and the generic ones.
  */
 export function applyEdits<Row extends RowOf<unknown>>(
   drawing: Drawing,
   table: ScheduleTable<Row>,
   edits: readonly CellEdit[],
   units: UnitChoice,
+  catalogue: readonly OfferedValve[] = [],
 ): EditedDrawing {
-  const context: ScheduleContext = { valves: valveOfferOf(drawing) };
+  const context: ScheduleContext = { valves: valveOfferOf(drawing, catalogue) };
   const order = new Map(table.columns.map(({ key }, index) => [key, index]));
   const byRow = new Map<string, CellEdit[]>();
   for (const edit of edits) {

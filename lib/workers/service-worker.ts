@@ -1,6 +1,6 @@
 /// <reference lib="webworker" />
 import { CacheFirst, Serwist } from 'serwist';
-import { ASSET_CACHE, SHELL_CACHE, SHELL_PATH } from '@/lib/client/shell-names';
+import { ASSET_CACHE, PLAN_WORKER_PATH, SHELL_CACHE, SHELL_PATH } from '@/lib/client/shell-names';
 
 /** In a plant room a connection may be there in name only; nobody is made to wait longer for it. */
 const PATIENCE_MS = 6000;
@@ -19,9 +19,21 @@ const worker = new Serwist({
       handler: new CacheFirst({ cacheName: ASSET_CACHE, plugins: [{ cacheWillUpdate: async () => null }] }),
     },
     {
+      matcher: ({ url, sameOrigin }) => sameOrigin && url.pathname === PLAN_WORKER_PATH,
+      handler: async ({ request }) => {
+        try {
+          return await fetch(request);
+        } catch (error) {
+          const kept = await caches.match(PLAN_WORKER_PATH, { cacheName: ASSET_CACHE });
+          if (kept) return kept;
+          throw error;
+        }
+      },
+    },
+    {
       matcher: ({ request }) => request.mode === 'navigate',
       handler: async ({ request }) => {
-        const shell = await (await caches.open(SHELL_CACHE)).match(SHELL_PATH);
+        const shell = await caches.match(SHELL_PATH, { cacheName: SHELL_CACHE });
         if (!shell) return fetch(request);
         try {
           const answer = await Promise.race([fetch(request), tooLate()]);

@@ -96,7 +96,7 @@ function SettingsSheet({ commissioning, changed }: { commissioning: Commissionin
         </thead>
         <tbody>
           {rows.map(({ setting, station }) => (
-            <tr key={setting.link}>
+            <tr key={setting.link} className="[&>*]:align-middle">
               <RowName>
                 <PlaceLink href={`${base}/stations/${station.id}`}>{station.tag}</PlaceLink>
               </RowName>

@@ -33,7 +33,11 @@ export function ChartPage({ commissioning }: { commissioning: Commissioning }) {
             read.
           </p>
           {rounds.toReversed().map(({ round, standing }) => (
-            <Sheet key={round.id} title={nameOf(round)} action={<Counts terminals={terminals.length} standing={[...standing.values()]} />}>
+            <Sheet
+              key={round.id}
+              title={nameOf(round)}
+              action={<Counts terminals={terminals.length} standing={terminals.flatMap(({ id }) => standing.get(id) ?? [])} />}
+            >
               <FlowStrip
                 size="page"
                 band={body.band}

@@ -81,7 +81,7 @@ function FindingSheet({ commissioning, diagnosis }: { commissioning: Commissioni
       <ol className="list-decimal pl-6">
         {diagnosis.causes.map(({ cause, name, nextCheck }) => (
           <li key={cause} className="py-1">
-            <strong>{name}.</strong> {nextCheck}
+            <strong className="inline-block first-letter:uppercase">{name}.</strong> {nextCheck}
           </li>
         ))}
       </ol>

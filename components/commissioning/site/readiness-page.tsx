@@ -97,7 +97,7 @@ function CheckRow({ commissioning, check, answer }: { commissioning: Commissioni
         {mayRecord && (
           <div className="flex flex-wrap gap-2">
             {stands !== 'done' && (
-              <Button size="touch" look="primary" className="!text-base" onClick={() => void give('done')}>
+              <Button size="touch" className="!text-base" onClick={() => void give('done')}>
                 Done
               </Button>
             )}

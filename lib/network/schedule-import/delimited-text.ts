@@ -40,9 +40,9 @@ function delimiterOf(text: string): string {
 }
 
 export const tooManyRows = (count: number): string =>
-  `It has ${count > MAX_TABLE_ROWS + 1 ? count : `more than ${MAX_TABLE_ROWS}`} rows. A loop takes 5000 terminals: split the schedule into loops.`;
+  `It has ${count > MAX_TABLE_ROWS + 1 ? count : `more than ${MAX_TABLE_ROWS}`} rows, and at most ${MAX_TABLE_ROWS} are read. Split it into several files.`;
 
-export const tooManyColumns = `It has more than ${MAX_TABLE_COLUMNS} columns. Copy those of the terminals to a sheet of their own.`;
+export const tooManyColumns = `It has more than ${MAX_TABLE_COLUMNS} columns. Copy those that are needed to a sheet of their own.`;
 
 /**
  * The text of a file: UTF-8, UTF-16 with its mark, or else Windows-1252 (of which Latin-1 is a part), as older spreadsheets

@@ -6,15 +6,15 @@ const MOST_MERGED_CELLS = 200_000;
 /** Opening and closing tags of all parts: each costs the reader some hundred bytes. 5000 rows of 60 cells have 1.3 million. */
 const MOST_TAGS = 2_500_000;
 
-/** What a schedule can stand in. Pictures, comments, tables, checks of input, macros and links to elsewhere are never unpacked. */
+/** What rows can stand in. Pictures, comments, tables, checks of input, macros and links to elsewhere are never unpacked. */
 const neededParts =
   /^(\[Content_Types\]\.xml|_rels\/\.rels|xl\/(workbook|sharedStrings|styles)\.xml|xl\/_rels\/workbook\.xml\.rels|xl\/worksheets\/sheet\d+\.xml)$/;
 
-/** A workbook of the parts that a schedule can stand in, each measured before anything reads it. */
+/** A workbook of the parts that rows can stand in, each measured before anything reads it. */
 export function onlyNeeded(zip: Buffer): Buffer {
   const needed = zipEntries(zip).filter(({ name }) => neededParts.test(name));
   if (!needed.some(({ name }) => name === '[Content_Types].xml') || !needed.some(({ name }) => name === 'xl/workbook.xml'))
-    throw new UnreadableWorkbook('This is a packed file, but no workbook (.xlsx). Save the schedule as .xlsx or CSV.');
+    throw new UnreadableWorkbook('This is a packed file, but no workbook (.xlsx). Save the rows as .xlsx or CSV.');
   if (needed.reduce((sum, { bytes }) => sum + bytes, 0) > MOST_UNPACKED_BYTES) throw tooMuch();
   let left = MOST_UNPACKED_BYTES;
   let tags = 0;
@@ -25,7 +25,7 @@ export function onlyNeeded(zip: Buffer): Buffer {
       tags += tagsIn(content);
       if (tags > MOST_TAGS) throw tooMuch();
       if (entry.name.startsWith('xl/worksheets/')) refuseHugeMerges(content);
-      // A name for a whole sheet is spelt out cell by cell when it is read; no schedule needs it.
+      // A name for a whole sheet is spelt out cell by cell when it is read; no table of rows needs it.
       const kept = entry.name === 'xl/workbook.xml' ? withoutNames(content) : content;
       return { name: entry.name, crc: entry.crc, content: kept };
     }),

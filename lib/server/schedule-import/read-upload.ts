@@ -11,7 +11,7 @@ interface Upload {
 
 const unfit = (message: string) => new Problem('schedule-unfit', message);
 
-/** What stands in a schedule file, told by its content and held against its name. Nothing is kept. */
+/** What stands in a file of rows (a terminal schedule, the figures of a valve or pump), told by its content and held against its name. Nothing is kept. */
 export async function readUpload({ fileName, bytes, sheet }: Upload, signal: AbortSignal): Promise<UploadedSchedule> {
   if (bytes.length === 0) throw unfit('The file is empty.');
   const extension = /\.([a-z0-9]+)$/i.exec(fileName)?.[1]?.toLowerCase() ?? '';
@@ -27,7 +27,7 @@ export async function readUpload({ fileName, bytes, sheet }: Upload, signal: Abo
   const text = decodeText(bytes);
   if (text === null) throw unfit(`“${fileName}” is neither a workbook (.xlsx) nor text (.csv).`);
   if (!['csv', 'txt', 'tsv', ''].includes(extension))
-    throw unfit(`“${fileName}” is no schedule file. Bring a workbook (.xlsx) or text (.csv).`);
+    throw unfit(`“${fileName}” cannot be read as rows. Bring a workbook (.xlsx) or text (.csv).`);
   const read = readDelimitedText(text);
   if (!read.ok) throw unfit(read.message);
   return { table: read.table, sheet: null, sheets: [] };

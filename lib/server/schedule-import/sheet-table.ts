@@ -11,7 +11,7 @@ import {
 } from '@/lib/network/schedule-import/table';
 import { UnreadableWorkbook } from './zip';
 
-/** What stands in a sheet; throws `UnreadableWorkbook` where that is no schedule. */
+/** What stands in a sheet; throws `UnreadableWorkbook` where that is no table. */
 export function sheetTable(worksheet: ExcelJS.Worksheet): ScheduleTable {
   if (worksheet.actualRowCount > MAX_TABLE_ROWS) throw new UnreadableWorkbook(tooManyRows(worksheet.actualRowCount));
   const rows: TableCell[][] = [];
@@ -22,7 +22,7 @@ export function sheetTable(worksheet: ExcelJS.Worksheet): ScheduleTable {
     if (rows.length === 0) firstRow = number;
     const index = number - firstRow;
     if (index >= MAX_TABLE_ROWS)
-      throw new UnreadableWorkbook(`Row ${number} is far below the others. Copy the schedule to a sheet of its own.`);
+      throw new UnreadableWorkbook(`Row ${number} is far below the others. Copy the rows to a sheet of their own.`);
     while (rows.length <= index) rows.push([]);
     row.eachCell((cell, columnFrom1) => {
       const column = columnFrom1 - 1;

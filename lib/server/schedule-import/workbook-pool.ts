@@ -47,7 +47,7 @@ export async function readWorkbookOffThread(task: WorkbookTask, signal: AbortSig
 }
 
 const tooHard = (what: string) =>
-  new Problem('schedule-unfit', `The workbook ${what}. Copy the schedule alone to a new workbook, or save it as CSV.`);
+  new Problem('schedule-unfit', `The workbook ${what}. Copy the rows alone to a new workbook, or save it as CSV.`);
 
 /** Ends the thread; for tests and the end of the process. */
 export async function closeWorkbookPool(): Promise<void> {

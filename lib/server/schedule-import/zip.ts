@@ -29,7 +29,7 @@ export function zipEntries(zip: Buffer): Entry[] {
   const directoryBytes = zip.readUInt32LE(endAt + 12);
   let at = zip.readUInt32LE(endAt + 16);
   if (count > MOST_ENTRIES)
-    throw new UnreadableWorkbook('The workbook has far more parts than a schedule. Copy the schedule to a new workbook.');
+    throw new UnreadableWorkbook('The workbook has far more parts than a table of rows. Copy the rows to a new workbook.');
   if (at + directoryBytes !== endAt) throw damaged();
 
   const entries: Entry[] = [];
@@ -79,7 +79,7 @@ function inflated(packed: Buffer, mostBytes: number): Buffer {
 }
 
 export const tooMuch = () =>
-  new UnreadableWorkbook('The workbook unpacks to far more than a schedule of 5000 terminals. Copy the schedule to a new workbook.');
+  new UnreadableWorkbook('The workbook unpacks to far more than 5000 rows of a schedule. Copy the rows to a new workbook.');
 
 /** A zip file of these parts, unpacked: what a reader is given after every part was measured. */
 export function storedZip(parts: { name: string; crc: number; content: Buffer }[]): Buffer {

@@ -154,7 +154,7 @@ describe('a file that is no schedule is refused in a sentence, without an error 
     ['a picture named as text', 'a.csv', () => Buffer.from('\x89PNG\r\n\x1a\n\0\0\0\rIHDR', 'latin1'), 'neither a workbook'],
     ['text named as a workbook', 'a.xlsx', () => 'Tag,Flow\nA,1\n', '.csv'],
     ['a workbook named as text', 'a.csv', () => makeZip(parts), '.xlsx'],
-    ['text with another ending', 'a.exe', () => 'Tag,Flow\nA,1\n', 'no schedule file'],
+    ['text with another ending', 'a.exe', () => 'Tag,Flow\nA,1\n', 'cannot be read as rows'],
     ['an older workbook', 'a.xls', () => Buffer.from('d0cf11e0a1b11ae100000000', 'hex'), '.xls'],
     ['a workbook cut short', 'a.xlsx', () => makeZip(parts).subarray(0, 500), 'damaged'],
     ['a zip file of something else', 'a.xlsx', () => makeZip([{ name: 'letter.txt', content: 'hello' }]), 'no workbook'],
@@ -189,9 +189,9 @@ describe('a file that is no schedule is refused in a sentence, without an error 
       '6000 rows',
       'a.xlsx',
       () => makeZip(workbookParts(sheetOf(Array.from({ length: 6000 }, (_, at) => row(at + 1, '<v>1</v>')).join('')))),
-      '5000 terminals',
+      'at most 5200 are read',
     ],
-    ['6000 lines', 'a.csv', () => 'FC,1\n'.repeat(6000), '5000 terminals'],
+    ['6000 lines', 'a.csv', () => 'FC,1\n'.repeat(6000), 'at most 5200 are read'],
     ['a quotation mark left open', 'a.csv', () => 'Tag,Room\nA,"hall\nB,store\n', 'not closed'],
   ])('%s', async (_, fileName, make, sentence) => {
     const { status, body } = await upload(fileName, make());

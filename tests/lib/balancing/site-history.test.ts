@@ -16,13 +16,21 @@ const document: NetworkDocument = {
     { id: 'V2', kind: 'balancingValve', from: 'A', to: 'B', kvTable, setting: 3 },
   ],
 };
-const read = (at: number, link: string, setting: number | null): SiteRecord => ({
+const read = (at: number, link: string, setting: number | null, pass = 'first'): SiteRecord => ({
   kind: 'reading',
   at,
+  pass,
   setting,
   reading: { link, quantity: 'dropKpa', value: 5, meter: 'M' },
 });
-const set = (at: number, link: string, before: number | null, after: number): SiteRecord => ({ kind: 'set', at, link, before, after });
+const set = (at: number, link: string, before: number | null, after: number): SiteRecord => ({
+  kind: 'set',
+  at,
+  pass: 'first',
+  link,
+  before,
+  after,
+});
 const kinds = (records: SiteRecord[]) =>
   siteHistory(document, records).events.map((event) =>
     event.kind === 'set' ? `${event.link}=${event.setting}` : `read ${event.reading.link}`,
@@ -40,6 +48,16 @@ describe('the history of a loop on site', () => {
 
   it('sees a setting that nobody wrote down in the next reading', () => {
     expect(kinds([read(1, 'V1', 4), read(2, 'V1', 2.5)])).toEqual(['read V1', 'V1=2.5', 'read V1']);
+  });
+
+  it('takes valves that stand otherwise in a new pass to have been set before it began', () => {
+    const records = [read(1, 'V1', 4), read(2, 'V2', 3), read(11, 'V1', 2.5, 'second'), read(12, 'V2', 2, 'second')];
+    const { stands } = siteHistory(document, records);
+    expect(stands.map(({ settings, readings }) => [settings.V1, settings.V2, readings.length])).toEqual([
+      [4, 3, 2],
+      [2.5, 2, 2],
+    ]);
+    expect(kinds(records)).toEqual(['read V1', 'read V2', 'V1=2.5', 'V2=2', 'read V1', 'read V2']);
   });
 
   it('keeps readings together that were taken while nothing was changed', () => {

@@ -93,6 +93,33 @@ describe('choosing', () => {
     expect(again.ok && unit(again.drawing, 'FC-1').balancingValve).toMatchObject({ settingTurns: 1 });
   });
 
+  it('a valve of the catalogue, which renames none of the drawing: its new table under an old name is told apart by a number', () => {
+    const own = unit(drawn, 'FC-1').balancingValve!;
+    const plain = {
+      name: 'Own DN20',
+      kvTable: [
+        { setting: 1, kv: 1.2 },
+        { setting: 4, kv: 5.7 },
+      ],
+      stepTurns: 0.1,
+    };
+    const newer = { ...plain, name: own.name };
+    const catalogue = [plain, newer, { name: own.name, kvTable: own.kvTable.map((point) => ({ ...point })) }];
+    const offer = valveOfferOf(drawn, catalogue);
+    expect(offer.nameOf(own)).toBe(valveOfferOf(drawn).nameOf(own));
+    expect(offer.names.filter((name) => name.startsWith(own.name)).length).toBe(
+      valveOfferOf(drawn).names.filter((name) => name.startsWith(own.name)).length + 1,
+    );
+    const edits: CellEdit[] = [
+      { id: 'FC-1', key: 'valve', text: 'own dn20' },
+      { id: 'FC-2', key: 'valve', value: offer.nameOf({ ...own, kvTable: newer.kvTable }) },
+    ];
+    expect(applyEdits(drawn, terminalTable, edits, {}).ok).toBe(false);
+    const after = applyEdits(drawn, terminalTable, edits, {}, catalogue);
+    expect(after.ok && unit(after.drawing, 'FC-1').balancingValve).toMatchObject({ ...plain, settingTurns: null });
+    expect(after.ok && unit(after.drawing, 'FC-2').balancingValve).toMatchObject({ ...newer, settingTurns: null });
+  });
+
   it('no balancing valve at all, after which there is nothing to set', () => {
     const after = edited([{ id: 'FC-1', key: 'valve', text: 'none' }]);
     expect(unit(after, 'FC-1').balancingValve).toBeNull();
