@@ -50,7 +50,7 @@ test('what is drawn without a connection is kept and saved when it is back; undo
   await page.keyboard.press('Escape');
   await expect(page.locator('.react-flow__node.selected')).toHaveCount(0);
   await draw.panel.getByRole('tab', { name: /^Faults/ }).click();
-  await draw.panel.getByRole('button', { name: /dead leg/ }).click();
+  await draw.panel.getByRole('button', { name: /joins fewer than two pipes/ }).click();
   await expect(page.locator('.react-flow__node.selected')).toHaveCount(1);
 
   await page.getByRole('button', { name: /^Undo/ }).click();
