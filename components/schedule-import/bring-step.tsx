@@ -75,7 +75,7 @@ export function BringStep({ loopId, brought, onBring }: BringStepProps) {
           <FileDrop isPending={upload.isPending} onFile={(file) => upload.mutate({ file })} />
           <p className="text-quiet text-sm">
             No schedule at hand?{' '}
-            <a href={exampleHref} download={exampleScheduleName}>
+            <a href={exampleHref} download={exampleScheduleName} className="underline">
               Download an example
             </a>{' '}
             to try with.
