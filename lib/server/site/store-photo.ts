@@ -18,13 +18,12 @@ const accepted = ['jpeg', 'png', 'webp', 'heif', 'avif'];
 
 /**
  * Takes in a photo: what the bytes are decides, not what they are called. It is drawn anew as JPEG, which leaves out where and with what it
- * was taken, put into the bucket and only then written down; sent again it is stored once.
+ * was taken, and written down only if the bucket took it; sent again it is stored once.
  */
 export async function storePhoto(access: Access, loopId: string, input: PhotoInput, bytes: Buffer): Promise<Photo> {
   const { organizationId, name } = access.person;
   const picture = await drawnAnew(bytes);
   await refuseUnknownSubject(organizationId, loopId, input);
-  await putFile(photoKey(organizationId, input.id), picture.data, 'image/jpeg');
   return db().transaction(async (trx) => {
     const loop = await trx('loops').where({ organization_id: organizationId, id: loopId }).first('name');
     if (!loop) throw notFound();
@@ -42,7 +41,11 @@ export async function storePhoto(access: Access, loopId: string, input: PhotoInp
       },
       { width_px: picture.info.width, height_px: picture.info.height, bytes: picture.data.length },
     );
-    if (isNew) await recordActivity(trx, access, { verb: 'added a photo to', subject: loop.name, loopId });
+    if (isNew) {
+      // Only for a new one: under the id of another, nothing that is kept may be written over. Where the bucket refuses, nothing is written down.
+      await putFile(photoKey(organizationId, input.id), picture.data, 'image/jpeg');
+      await recordActivity(trx, access, { verb: 'added a photo to', subject: loop.name, loopId });
+    }
     return { ...input, takenBy: name, widthPx: picture.info.width, heightPx: picture.info.height };
   });
 }

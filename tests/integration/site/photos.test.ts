@@ -59,6 +59,21 @@ describe('a photo', () => {
     expect(await suite.db('photos').where({ organization_id: home.organizationId })).toHaveLength(1);
   });
 
+  it('is never written over by another under its id', async () => {
+    const [id, file] = [uuidv7(), await taken()];
+    await put(file, { id });
+    const kept = async () => {
+      const { response } = await call(getPhoto, { params: { loopId: home.loopId, photoId: id } });
+      return Buffer.from(await response.arrayBuffer()).toString('hex');
+    };
+    const before = await kept();
+    const other = await sharp({ create: { width: 50, height: 50, channels: 3, background: '#a00' } })
+      .png()
+      .toBuffer();
+    expect((await put(new Uint8Array(other), { id })).status).toBe(409);
+    expect(await kept()).toBe(before);
+  });
+
   it.each([
     ['a text that calls itself a photo', Buffer.from('<script>alert(1)</script>')],
     ['nothing', Buffer.alloc(0)],
